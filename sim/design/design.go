@@ -1,0 +1,225 @@
+package design
+
+import "linewitness/sim/line"
+
+// A File is a design file that was read without a problem.
+type File struct {
+	Name    string // as given to Load
+	Source  []byte
+	SHA256  string // of Source, lower-case hex
+	Nominal *Design
+	Cases   []Case // in the order of the file, the nominal design not among them
+}
+
+// A Case is a variant of the nominal design, already merged with it.
+type Case struct {
+	Name   string
+	Design *Design
+}
+
+// Pos is a place in the design file; lines and columns count from 1, columns
+// in characters. The zero Pos means "not in the file" (a default).
+type Pos struct{ Line, Column int }
+
+// A Value is a physical quantity: its size in SI units (amplitudes peak,
+// angles in radians, ratios as plain numbers) and the text it was read from.
+type Value struct {
+	SI   float64
+	Text string // as written, "300 V peak"
+	Pos  Pos
+}
+
+// Convention is the sign convention of the complex numbers in the file.
+type Convention int
+
+// The conventions. Inside the program all is Engineering.
+const (
+	Engineering Convention = iota // e^{+jwt}
+	Physics                       // e^{-iwt}; values are conjugated on reading
+)
+
+// A Design is one case of the design, in SI units, checked and complete.
+type Design struct {
+	Record       Record
+	Convention   Convention
+	Source       Source
+	Lines        []Line        // in file order
+	Sections     []Section     // in file order
+	Loads        []Part        // in file order
+	Elements     []Part        // in file order
+	Junctions    []string      // in the order in which sections, loads, elements and the source name them: source first
+	Requirements []Requirement // of the nominal design; the same in every case
+	Grid         Grid
+}
+
+// Record is the identity of the document.
+type Record struct {
+	Title, Number, Revision, Purpose         string
+	PreparedBy, CheckedBy, ApprovedBy, Notes string
+	Date                                     string
+}
+
+// Source is the source of the design. Either EMF or Available was given; the
+// other follows from |EMF|^2 = 8 R Available.
+type Source struct {
+	Pos       Pos
+	At        string
+	Frequency Value
+	EMF       Value  // V peak, always filled
+	Available *Value // W, if given instead of the EMF
+	Impedance Impedance
+	Start     Start
+	Stop      *Stop
+}
+
+// Impedance is a lumped impedance as given.
+type Impedance struct {
+	Pos  Pos
+	Text string // the value or parts as written, "28 ohm, 29.2 nH"
+	Kind ImpedanceKind
+	Z    complex128 // for Complex, ohm at the design frequency, engineering convention
+	R    float64    // for SeriesParts, ohm
+	L    float64    // H
+	C    float64    // F; 0 means no capacitor
+}
+
+// ImpedanceKind says which form an impedance was given in.
+type ImpedanceKind int
+
+// The forms of an impedance.
+const (
+	SeriesParts ImpedanceKind = iota
+	Complex
+	Short
+	Open
+	Matched // the characteristic impedance of the one section that ends there
+)
+
+// Start is how the source is switched on.
+type Start struct {
+	Pos   Pos
+	Ramp  bool
+	Rise  float64 // s, for a ramp
+	Phase float64 // rad
+	Worst bool
+	Text  string // "abrupt, worst phase", "raised-cosine rise over 3 periods, phase 30 deg"
+}
+
+// Stop ends the source.
+type Stop struct {
+	Pos      Pos
+	At, Fall float64 // s
+	Text     string
+}
+
+// Line is a kind of line.
+type Line struct {
+	Pos       Pos
+	Name      string
+	Text      string         // the data as given, in one line for the record
+	Nominal   *Nominal       // nil if r, l, g, c were given
+	Constants line.Constants // at the design frequency, always filled
+}
+
+// Nominal is the datasheet form of a line.
+type Nominal struct {
+	Z0              float64 // ohm
+	VelocityFactor  float64
+	LossAt          float64 // Hz; 0 means no loss given
+	Attenuation     float64 // Np/m at LossAt
+	DielectricShare float64 // 0..1
+}
+
+// Section is a piece of line.
+type Section struct {
+	Pos       Pos
+	Name      string
+	From, To  string
+	Line      string
+	Constants line.Constants
+	Length    Value // SI: metres, whatever unit it was given in
+}
+
+// Part is a load or an element. A part to the return conductor has At and an
+// empty To; a bridging element runs from At to To.
+type Part struct {
+	Pos       Pos
+	Name      string
+	At, To    string
+	Impedance Impedance
+}
+
+// Quantity names what a requirement limits.
+type Quantity string
+
+// The quantities a requirement can name.
+const (
+	VSWR            Quantity = "vswr"
+	ReturnLoss      Quantity = "return_loss"
+	Reflection      Quantity = "reflection"
+	InputImpedance  Quantity = "input_impedance"
+	SteadyVoltage   Quantity = "steady_voltage"
+	SteadyCurrent   Quantity = "steady_current"
+	PeakVoltage     Quantity = "peak_voltage"
+	PeakCurrent     Quantity = "peak_current"
+	Overshoot       Quantity = "overshoot"
+	SettleTime      Quantity = "settle_time"
+	LoadPower       Quantity = "load_power"
+	Efficiency      Quantity = "efficiency"
+	Loss            Quantity = "loss"
+	Phase           Quantity = "phase"
+	PhaseDifference Quantity = "phase_difference"
+	PowerSplit      Quantity = "power_split"
+	Agreement       Quantity = "agreement"
+)
+
+// Requirement is one requirement. What it is about is in the fields that its
+// quantity needs; the others are empty.
+type Requirement struct {
+	Pos        Pos
+	ID         string
+	Text       string // the wording of the requirement, optional
+	Document   string // where it comes from, optional (key "source")
+	Quantity   Quantity
+	Section    string
+	End        string // "from" or "to"
+	At         string // a junction
+	Load       string
+	Between    [2]string // loads or junctions
+	RelativeTo string    // a case name: judge the change from that case
+	Min, Max   *Limit
+	R, X       *Window  // for input_impedance: windows on its parts
+	Within     *Circle  // for input_impedance: a circle in the Z plane
+	Settled    float64  // for settle_time: the fraction that counts as settled, default 0.01
+	Reference  *Value   // for vswr, return_loss, reflection: a real reference other than the section's own
+	Cases      []string // the cases it is judged in, resolved; "nominal" is the nominal design
+}
+
+// Limit is a limit with the unit it was given in.
+type Limit struct {
+	SI   float64
+	Unit string // "V peak", "V rms", "W", "dBm", "dB", "%", "deg", "us", "1", "ohm" ...: how to print it
+	Text string // as written
+	Pos  Pos
+}
+
+// Window bounds one part of an impedance, ohm. Nil means no bound.
+type Window struct {
+	Min, Max *Limit
+}
+
+// Circle is |Z - Of| <= Radius, ohm.
+type Circle struct {
+	Of     complex128
+	Radius float64
+	Text   string
+	Pos    Pos
+}
+
+// Grid steers the time-domain run.
+type Grid struct {
+	CellsPerWavelength float64 // least number on any section; default 40
+	SettleTolerance    float64 // default 1e-4
+	Agreement          float64 // limit, default 0.005
+	MaxPeriods         int     // default 20000
+}

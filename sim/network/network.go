@@ -1,0 +1,128 @@
+package network
+
+import (
+	"math"
+
+	"linewitness/sim/line"
+)
+
+// Ground is the index of the return conductor, where the voltage is zero.
+const Ground = -1
+
+// A Network is one case of a design as both witnesses see it.
+type Network struct {
+	Frequency float64  // Hz
+	Junctions []string // names; a junction is known by its index
+	Sections  []Section
+	Branches  []Branch
+	Source    Source
+}
+
+// Omega is the angular frequency of the source, rad/s.
+func (n *Network) Omega() float64 { return 2 * math.Pi * n.Frequency }
+
+// Period is the period of the source, s.
+func (n *Network) Period() float64 { return 1 / n.Frequency }
+
+// A Section is a piece of uniform line between two junctions.
+type Section struct {
+	Name     string
+	From, To int     // junctions
+	Length   float64 // m
+	Line     line.Constants
+}
+
+// Delay is the one-way delay of the section, Length sqrt(LC), s. It is the
+// delay of a wave front: nothing arrives sooner.
+func (s Section) Delay() float64 { return s.Length * math.Sqrt(s.Line.L*s.Line.C) }
+
+// Series is a series combination of lumped parts. A zero is a part that is
+// not there: with R, L and C all zero the combination is an exact short.
+type Series struct {
+	R float64 // ohm
+	L float64 // H
+	C float64 // F
+}
+
+// Ideal reports whether the combination has no impedance at any frequency.
+func (s Series) Ideal() bool { return s.R == 0 && s.L == 0 && s.C == 0 }
+
+// Impedance is R + jwL + 1/(jwC), ohm, with the absent parts left out.
+func (s Series) Impedance(omega float64) complex128 {
+	x := omega * s.L
+	if s.C > 0 {
+		x -= 1 / (omega * s.C)
+	}
+	return complex(s.R, x)
+}
+
+// Kind says what a branch is for; the witnesses treat all kinds alike.
+type Kind int
+
+// The kinds of branch.
+const (
+	Load    Kind = iota // power into it is reported
+	Element             // a lumped part that is not a load
+)
+
+// A Branch is a lumped series combination from junction A to junction B, or
+// to the return conductor if B is Ground. An Open branch carries no current.
+type Branch struct {
+	Name string
+	Kind Kind
+	A, B int
+	Open bool
+	Series
+}
+
+// A Source is an EMF behind a series combination, from the return conductor
+// to the junction At. In time
+//
+//	e(t) = EMF r(t) cos(wt + phase)
+//
+// where r rises from 0 to 1 as Start says and falls to 0 as Stop says.
+type Source struct {
+	At  int
+	EMF float64 // V, peak
+	Series
+	Start Start
+	Stop  *Stop // nil: the source stays on
+}
+
+// Available is the available power |EMF|^2/(8 R), W, or +Inf if R is zero.
+func (s Source) Available() float64 { return s.EMF * s.EMF / (8 * s.R) }
+
+// Start is how the source is switched on at t = 0.
+type Start struct {
+	Rise  float64 // s, raised-cosine rise; 0 is an abrupt start
+	Phase float64 // rad
+	Worst bool    // every phase is possible; Phase is not used
+}
+
+// Stop is how the source is switched off.
+type Stop struct {
+	At   float64 // s
+	Fall float64 // s, raised-cosine fall; 0 is an abrupt stop
+}
+
+// Profile is r(t), the envelope of the source: 0 before t = 0, then
+// (1 - cos(pi t/Rise))/2 up to 1, and the same way down from Stop.At.
+// An abrupt start gives r(0) = 0: a source that jumps at t = 0 has not yet
+// jumped, so that the average of its first step is half its height.
+func (s Source) Profile(t float64) float64 {
+	if t <= 0 {
+		return 0
+	}
+	r := rise(t, s.Start.Rise)
+	if s.Stop != nil && t > s.Stop.At {
+		r *= 1 - rise(t-s.Stop.At, s.Stop.Fall)
+	}
+	return r
+}
+
+func rise(t, width float64) float64 {
+	if t >= width {
+		return 1
+	}
+	return (1 - math.Cos(math.Pi*t/width)) / 2
+}

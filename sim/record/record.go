@@ -1,0 +1,355 @@
+package record
+
+// Format is the version of the JSON form. It changes only when a reader of
+// the old form would misread the new one.
+const Format = 1
+
+// Verdict is the outcome of a case or of a whole design.
+type Verdict string
+
+// The verdicts, from best to worst.
+const (
+	Verified Verdict = "verified"
+	NotShown Verdict = "not shown"
+	Missed   Verdict = "requirement missed"
+	Disagree Verdict = "methods disagree"
+	Unsettle Verdict = "not settled"
+)
+
+// Rank orders verdicts: a larger rank is worse.
+func (v Verdict) Rank() int {
+	switch v {
+	case Verified:
+		return 0
+	case NotShown:
+		return 1
+	case Missed:
+		return 2
+	case Disagree:
+		return 3
+	default:
+		return 4
+	}
+}
+
+// A Record is one verified design.
+type Record struct {
+	Tool    Tool
+	Design  Design
+	Verdict Verdict
+	Cases   []Case // nominal first, then in the order of the file
+}
+
+// Tool says what program made the record.
+type Tool struct {
+	Version string // of linewitness
+	Go      string // toolchain and platform, "go1.26.8 linux/amd64"
+}
+
+// Design identifies the design and echoes what does not change from case to
+// case.
+type Design struct {
+	Title, Number, Revision, Purpose string
+	PreparedBy, CheckedBy            string
+	ApprovedBy, Notes, Date          string
+
+	File       string // base name of the design file
+	SHA256     string // of the design file, hex
+	Source     []byte // the design file itself, for the listing
+	Convention string // "engineering" or "physics"
+	Agreement  float64
+	Tolerance  float64 // settle tolerance
+	MaxPeriods int
+}
+
+// A Case is the nominal design or one of its variants, solved and judged.
+type Case struct {
+	Name         string
+	Verdict      Verdict
+	Model        Model
+	Phasor       Steady
+	FDTD         Steady
+	Settling     Settling
+	Stress       Stress
+	Agreement    Agreement
+	Grid         Grid
+	Requirements []Requirement
+	Warnings     []string
+
+	// What only the figures and the CSV files need.
+	Profiles  []Profile  // one a section, in the order of Model.Sections
+	Waveforms []Waveform // source first, then junctions, then loads
+	Spectrum  Spectrum
+}
+
+// Model is the network of a case as it was solved.
+type Model struct {
+	Frequency float64
+	Junctions []string
+	Sections  []ModelSection
+	Loads     []ModelPart
+	Elements  []ModelPart
+	Source    ModelSource
+}
+
+// ModelSection is a section in the equivalent forms of the echo table.
+type ModelSection struct {
+	Name, Line, From, To string
+	Given                string     // the length as the design file gives it
+	Length               float64    // m
+	Wavelengths          float64    // at the design frequency
+	Degrees              float64    // 360 Wavelengths
+	Delay                float64    // s
+	LossDB               float64    // one way, matched
+	Z0                   complex128 // characteristic impedance, ohm
+	VelocityFactor       float64    // phase velocity at the design frequency over c
+	R, L, G, C           float64    // per metre
+}
+
+// ModelPart is a load or an element as modelled.
+type ModelPart struct {
+	Name, At, To string     // To is empty for a part to the return conductor
+	Given        string     // as the design file gives it: "36.5 ohm + 1.2 uH", "short"
+	As           string     // what it was realised as: "series R-L", "exact short", ...
+	R, L, C      float64    // series parts, 0 where absent
+	Impedance    complex128 // at the design frequency; not used for open
+	Open, Short  bool
+}
+
+// ModelSource is the source as modelled.
+type ModelSource struct {
+	At        string
+	Given     string  // "300 V peak EMF", "250 W available"
+	EMF       float64 // V peak
+	R, L, C   float64
+	Impedance complex128
+	Available float64 // W; 0 for an ideal source, which has no such limit
+	Start     string  // "abrupt, worst phase", "raised-cosine rise over 3 periods, phase 30 deg"
+	Stop      string  // empty if the source stays on
+}
+
+// Steady is one witness's steady state.
+type Steady struct {
+	Source    SteadySource
+	Sections  []SteadySection
+	Loads     []SteadyLoad
+	Junctions []SteadyJunction
+}
+
+// SteadySource is the state at the terminals of the source.
+type SteadySource struct {
+	V, I      complex128
+	Impedance complex128 // that the source sees, V/I
+	Power     float64    // W, into the network
+	Available float64    // W, +Inf for an ideal source
+}
+
+// SteadySection is the state of one section.
+type SteadySection struct {
+	Name                   string
+	From, To               End
+	VoltageMax, VoltageMin Extreme
+	CurrentMax             Extreme
+	Loss                   float64 // W dissipated in the section
+}
+
+// End is the state at one end of a section; I is positive from From to To.
+type End struct {
+	V, I       complex128
+	Impedance  complex128 // V/I
+	Reflection complex128 // (Z - Z0)/(Z + Z0), Z0 the section's own
+	VSWR       float64    // (1+|Reflection|)/(1-|Reflection|), +Inf if that is not positive
+}
+
+// Extreme is a value and the place of it.
+type Extreme struct {
+	Value float64
+	At    float64 // m from the From end
+}
+
+// SteadyLoad is the state of a load.
+type SteadyLoad struct {
+	Name  string
+	V, I  complex128
+	Power float64
+}
+
+// SteadyJunction is the voltage of a junction.
+type SteadyJunction struct {
+	Name string
+	V    complex128
+}
+
+// Settling is how the settling run came to steady state.
+type Settling struct {
+	Settled    bool
+	Time       float64 // s, end of the settling run
+	Periods    int
+	Residual   float64 // estimated remaining error, relative to section maxima
+	LoopFactor float64 // amplitude kept per longest round trip, as measured
+	LongPath   float64 // s, longest one-way path
+	RoundTrip  float64 // s, 2 LongPath
+	Ramp       float64 // s, rise of the settling run
+	Mean       float64 // largest mean over the largest fundamental, last window
+	Harmonic   float64 // likewise the largest of the second and third harmonics
+	Curve      []SettlingPoint
+	Decay      string // for a run that did not settle: what was measured
+
+	// From the stress run, which starts as the design starts.
+	To1Percent float64 // s from switch-on until every junction stays within 1 % of its final phasor; NaN if not reached
+}
+
+// SettlingPoint is one comparison of two windows one round trip apart.
+type SettlingPoint struct {
+	Time     float64 // s, end of the later window
+	Change   float64 // largest change between the windows, relative to section maxima
+	Estimate float64 // estimated remaining error, Change rho/(1-rho); NaN before three windows
+}
+
+// Stress is what happened over all time, from the design's own start.
+type Stress struct {
+	Profile  string // as ModelSource.Start
+	Duration float64
+	Worst    bool // every start phase was considered
+	Voltage  Peak
+	Current  Peak
+	Sections []StressSection
+	Overshot float64 // largest |v| over the largest steady |V| of the network, minus 1
+}
+
+// Peak is the largest instantaneous value anywhere.
+type Peak struct {
+	Value   float64
+	Section string
+	At      float64 // m from the From end
+	Time    float64 // s
+	Phase   float64 // degrees: the start phase that gives it
+}
+
+// StressSection is the largest value along one section.
+type StressSection struct {
+	Name             string
+	Voltage, Current float64
+	VoltageAt        float64 // m
+	CurrentAt        float64
+	VoltageTime      float64 // s
+	CurrentTime      float64
+	SteadyVoltage    float64 // largest steady |V| along the section, for the overshoot
+}
+
+// Agreement compares the two witnesses at the grid's own points.
+type Agreement struct {
+	Voltage, Current float64 // largest |difference| over the section's largest, over all sections
+	RMS              float64
+	Expected         float64 // what the grid and the settling residual explain
+	Worst            WorstPlace
+	Limit            float64
+	Sections         []AgreementSection
+}
+
+// WorstPlace is where the agreement is worst.
+type WorstPlace struct {
+	Section  string
+	At       float64 // m
+	Quantity string  // "voltage" or "current"
+}
+
+// AgreementSection is the agreement on one section.
+type AgreementSection struct {
+	Name                     string
+	Voltage, Current         float64
+	ExpectedVoltage          float64
+	ExpectedCurrent          float64
+	VoltageAt, CurrentAt     float64
+	VoltageScale, CurrentMax float64
+}
+
+// Grid is the grid of the time-domain run.
+type Grid struct {
+	StepsPerPeriod int
+	Step           float64 // s
+	Sections       []GridSection
+	Updates        float64 // cell updates done, both runs
+}
+
+// GridSection is the grid on one section.
+type GridSection struct {
+	Name               string
+	Cells              int
+	Cell               float64 // m
+	Courant            float64
+	CellsPerWavelength float64
+	Points             int     // voltage points compared and drawn
+	PhaseErrorDegrees  float64 // predicted over the whole section
+}
+
+// RequirementVerdict is the outcome of one requirement in one case.
+type RequirementVerdict string
+
+// The requirement verdicts.
+const (
+	Met         RequirementVerdict = "met"
+	MissedReq   RequirementVerdict = "missed"
+	NotShownReq RequirementVerdict = "not shown"
+)
+
+// Requirement is one requirement judged in one case.
+type Requirement struct {
+	ID, Text, Source string
+	Quantity         string // as in the design file
+	Subject          string // what it is about, in words: "main, from end"
+	Unit             string // unit of the fields below: "V peak", "dB", "1", ...
+	Value            float64
+	Min, Max         *float64 // limits, in Unit
+	Limit            string   // in words: "at most 1.95 kV peak"
+	Margin           float64  // distance to the nearer limit, in Unit; negative outside
+	MarginDB         float64  // the same in dB where that has a meaning, else NaN
+	MarginPercent    float64  // of the limit; NaN where that has no meaning
+	Uncertainty      float64  // in Unit
+	Verdict          RequirementVerdict
+	Method           string // "phasor", "fdtd" (the worse witness), "fdtd only"
+	Note             string // why it is not shown, or empty
+}
+
+// Profile is what is drawn along one section.
+type Profile struct {
+	Section string
+	ZV, ZI  []float64    // m from the From end: voltage points and current points
+	VF, IF  []complex128 // fdtd
+	VP, IP  []complex128 // phasor, at the same points
+	EV, EI  []float64    // expected error at the same points, V and A
+	PeakZV  []float64    // running peak: places and values
+	PeakV   []float64
+	PeakZI  []float64
+	PeakI   []float64
+}
+
+// Waveform is one quantity against time in the stress run at the start phase
+// that gives the largest voltage.
+type Waveform struct {
+	Name     string // "source voltage", "mast_foot", ...
+	Where    string // junction or load
+	Quantity string // "voltage" or "current"
+	Unit     string // "V" or "A"
+	Start    float64
+	Step     float64 // s between samples
+	Samples  []float64
+	Tail     Tail
+}
+
+// Tail is the last periods of the waveform, with the phasor's own waveform.
+type Tail struct {
+	Start   float64 // s
+	Step    float64
+	Samples []float64
+	Phasor  []float64 // Re(P e^{jwt}) at the same times, at the same start phase; nil if the source has stopped
+}
+
+// Spectrum is the one-sided amplitude spectrum of a probe over the last whole
+// periods of the settling run.
+type Spectrum struct {
+	Where     string
+	Periods   int
+	Frequency []float64 // Hz
+	Amplitude []float64 // V peak (the mean at index 0)
+}
