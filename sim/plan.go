@@ -1,0 +1,52 @@
+package sim
+
+import (
+	"errors"
+	"fmt"
+
+	"linewitness/sim/design"
+	"linewitness/sim/record"
+)
+
+// The bounds on one case of a run, unless Options.NoBound is set.
+const (
+	MaxUpdates = 2e12    // cell updates
+	MaxBytes   = 8 << 30 // memory, bytes
+)
+
+// A Plan is the grid and the predicted cost of every case; making one solves
+// nothing in time.
+type Plan struct {
+	Cases []PlanCase
+}
+
+// PlanCase is the plan of one case.
+type PlanCase struct {
+	Name          string
+	Grid          record.Grid // Updates is the predicted number
+	Cells         int         // of all sections
+	LongPath      float64     // s, longest one-way path
+	LoopFactor    float64     // amplitude kept per longest round trip, predicted
+	SettlePeriods int         // predicted length of the settling run
+	StressPeriods int         // predicted length of the stress run
+	Seconds       float64     // predicted, on one core at the nominal rate
+	Bytes         float64     // predicted memory
+	ExpectedError float64     // predicted agreement error
+	Warnings      []string
+}
+
+// A BoundError is a run that is refused because of its predicted cost.
+type BoundError struct {
+	Case           string
+	Updates, Bytes float64
+}
+
+func (e *BoundError) Error() string {
+	return fmt.Sprintf("case %s would take %.2g cell updates and %.2g MiB, over the bound of %.2g updates or %d MiB",
+		e.Case, e.Updates, e.Bytes/(1<<20), float64(MaxUpdates), MaxBytes>>20)
+}
+
+// MakePlan plans every case of a design.
+func MakePlan(f *design.File) (*Plan, error) {
+	return nil, errors.New("sim: not built yet")
+}
