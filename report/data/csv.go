@@ -1,0 +1,98 @@
+package data
+
+import (
+	"bytes"
+	"encoding/csv"
+	"fmt"
+	"math"
+	"strconv"
+
+	"linewitness/sim/record"
+)
+
+// A CSVFile is one of the CSV files of a record.
+type CSVFile struct {
+	Name string // "waveforms", "envelopes" or "error"
+	Data []byte
+}
+
+// CSV returns the waveforms, the envelopes and the agreement error of a record,
+// each as one file for all cases: RFC 4180 (comma, CRLF), one header line, the
+// case in the first column, the unit at the end of a column's name. A field is
+// empty where a row has no such value.
+//
+// It fails if the samples of a profile or a waveform do not match in number.
+func CSV(r *record.Record) ([]CSVFile, error) {
+	var files []CSVFile
+	for _, f := range []struct {
+		name   string
+		header []string
+		rows   func(*table, *record.Case) error
+	}{
+		{"waveforms", waveformHeader, waveformRows},
+		{"envelopes", envelopeHeader, envelopeRows},
+		{"error", errorHeader, errorRows},
+	} {
+		t := newTable(f.header)
+		for i := range r.Cases {
+			if err := f.rows(t, &r.Cases[i]); err != nil {
+				return nil, fmt.Errorf("data: %s of case %q: %w", f.name, r.Cases[i].Name, err)
+			}
+		}
+		content, err := t.bytes()
+		if err != nil {
+			return nil, fmt.Errorf("data: %s: %w", f.name, err)
+		}
+		files = append(files, CSVFile{f.name, content})
+	}
+	return files, nil
+}
+
+// csvDigits is the number of significant digits of a CSV number.
+const csvDigits = 9
+
+// A table writes the rows of one CSV file.
+type table struct {
+	buf   bytes.Buffer
+	w     *csv.Writer
+	width int
+	row   []string
+}
+
+func newTable(header []string) *table {
+	t := &table{width: len(header)}
+	t.w = csv.NewWriter(&t.buf)
+	t.w.UseCRLF = true
+	t.text(header...)
+	t.end()
+	return t
+}
+
+// text appends text fields to the current row.
+func (t *table) text(fields ...string) { t.row = append(t.row, fields...) }
+
+// numbers appends number fields to the current row; what is not a number
+// leaves its field empty.
+func (t *table) numbers(xs ...float64) {
+	for _, x := range xs {
+		field := ""
+		if !math.IsNaN(x) && !math.IsInf(x, 0) {
+			field = strconv.FormatFloat(x+0, 'g', csvDigits, 64)
+		}
+		t.row = append(t.row, field)
+	}
+}
+
+// end ends the current row.
+func (t *table) end() {
+	if len(t.row) != t.width {
+		panic("data: a row that does not match its header")
+	}
+	_ = t.w.Write(t.row) // bytes reports the first error
+	t.row = t.row[:0]
+}
+
+func (t *table) bytes() ([]byte, error) {
+	t.w.Flush()
+	return t.buf.Bytes(), t.w.Error()
+}

@@ -1,0 +1,153 @@
+package data
+
+import (
+	"flag"
+	"math"
+	"os"
+	"path/filepath"
+	"testing"
+
+	"github.com/google/go-cmp/cmp"
+
+	"linewitness/sim/record"
+)
+
+var update = flag.Bool("update", false, "rewrite the golden files")
+
+// golden compares got with testdata/name.
+func golden(t *testing.T, name string, got []byte) {
+	t.Helper()
+	path := filepath.Join("testdata", name)
+	if *update {
+		if err := os.WriteFile(path, got, 0o666); err != nil {
+			t.Fatal(err)
+		}
+	}
+	want, err := os.ReadFile(path)
+	if err != nil {
+		t.Fatal(err)
+	}
+	if diff := cmp.Diff(string(want), string(got)); diff != "" {
+		t.Errorf("%s (-want +got; go test -update rewrites it):\n%s", path, diff)
+	}
+}
+
+// sample is a small record by hand: one quarter-wave section from an ideal
+// source into an open end in the nominal case, and a case that did not settle.
+// Its numbers are chosen to be recognised in the text, not to be physical.
+func sample() *record.Record {
+	limit, low := 1.5, 1.0
+	nominal := record.Case{
+		Name:    "nominal",
+		Verdict: record.Missed,
+		Model:   record.Model{Frequency: 100e6},
+		Phasor:  sampleSteady(1),
+		FDTD:    sampleSteady(1.0001),
+		Settling: record.Settling{
+			Settled: true, Time: 600e-9, Periods: 60, Residual: 2.5e-5, LoopFactor: 0.25,
+			RoundTrip: 5e-9, Mean: 1e-9, Harmonic: 2e-9, To1Percent: 31e-9,
+		},
+		Stress:    sampleStress(),
+		Agreement: sampleAgreement(),
+		Grid: record.Grid{
+			StepsPerPeriod: 40, Step: 0.25e-9, Updates: 24000,
+			Sections: []record.GridSection{{
+				Name: "main", Cells: 10, Cell: 0.05, Courant: 1, CellsPerWavelength: 40, Points: 11, PhaseErrorDegrees: 0,
+			}},
+		},
+		Requirements: []record.Requirement{
+			{
+				ID: "R1", Quantity: "vswr", Subject: "main, from end", Unit: "1", Value: 1.75, Max: &limit, Min: &low,
+				Limit: "from 1 to 1.5", Margin: -0.25, MarginDB: math.NaN(), MarginPercent: -16.7, Uncertainty: 1e-4,
+				Verdict: record.MissedReq, Method: "fdtd", Text: `"low" & < 1.5`, Source: "SPEC-7 4.2",
+			},
+			{
+				ID: "R2", Quantity: "input_impedance", Subject: "source", Unit: "ohm", Value: math.Inf(1),
+				Limit: "within 2 ohm of 50 ohm", Margin: math.Inf(-1), MarginDB: math.NaN(), MarginPercent: math.NaN(),
+				Uncertainty: 0.001, Verdict: record.MissedReq, Method: "phasor",
+			},
+		},
+		Warnings:  []string{"the source is ideal: it has no available power"},
+		Profiles:  []record.Profile{sampleProfile()},
+		Waveforms: sampleWaveforms(),
+	}
+	lost := record.Case{
+		Name: "ring, lossless", Verdict: record.Unsettle,
+		Settling: record.Settling{Periods: 20000, LoopFactor: 1, Residual: math.NaN(), To1Percent: math.NaN(), Decay: "no decay over 20000 periods"},
+	}
+	return &record.Record{
+		Tool: record.Tool{Version: "v0.0.0", Go: "go1.26.0 any/any"},
+		Design: record.Design{
+			Title: "Sample", Number: "X-1", Revision: "B", File: "sample.yaml", SHA256: "00ff", Convention: "engineering",
+			Agreement: 0.005, Tolerance: 1e-4, MaxPeriods: 20000,
+		},
+		Verdict: record.Unsettle,
+		Cases:   []record.Case{nominal, lost},
+	}
+}
+
+func sampleSteady(scale float64) record.Steady {
+	s := complex(scale, 0)
+	return record.Steady{
+		Source: record.SteadySource{V: 10 * s, I: 0.2i * s, Impedance: -50i, Power: 0, Available: math.Inf(1)},
+		Sections: []record.SteadySection{{
+			Name:       "main",
+			From:       record.End{V: 10 * s, I: 0.2i * s, Impedance: -50i, Reflection: -1i, VSWR: math.Inf(1)},
+			To:         record.End{V: (12 - 1.0/3*1i) * s, I: 0, Impedance: complex(math.Inf(1), math.NaN()), Reflection: 1, VSWR: math.Inf(1)},
+			VoltageMax: record.Extreme{Value: 12 * scale, At: 0.5},
+			VoltageMin: record.Extreme{Value: 10 * scale, At: 0},
+			CurrentMax: record.Extreme{Value: 0.2 * scale, At: 0},
+			Loss:       math.Copysign(0, -1),
+		}},
+		Loads:     []record.SteadyLoad{{Name: "end", V: 12 * s, I: 0, Power: 0}},
+		Junctions: []record.SteadyJunction{{Name: "source", V: 10 * s}, {Name: "far", V: 12 * s}},
+	}
+}
+
+func sampleStress() record.Stress {
+	return record.Stress{
+		Profile: "abrupt, worst phase", Duration: 900e-9, Worst: true, Overshot: 0.75,
+		Voltage: record.Peak{Value: 21, Section: "main", At: 0.5, Time: 7.5e-9, Phase: 30},
+		Current: record.Peak{Value: 0.4, Section: "main", At: 0.025, Time: 5e-9, Phase: 120},
+		Sections: []record.StressSection{{
+			Name: "main", Voltage: 21, VoltageAt: 0.5, VoltageTime: 7.5e-9,
+			Current: 0.4, CurrentAt: 0.025, CurrentTime: 5e-9, SteadyVoltage: 12,
+		}},
+	}
+}
+
+func sampleAgreement() record.Agreement {
+	return record.Agreement{
+		Voltage: 1e-4, Current: 2e-4, RMS: 5e-5, Expected: 3e-4, Limit: 0.005,
+		Worst: record.WorstPlace{Section: "main", At: 0.025, Quantity: "current"},
+		Sections: []record.AgreementSection{{
+			Name: "main", Voltage: 1e-4, Current: 2e-4, ExpectedVoltage: 3e-4, ExpectedCurrent: 3e-4,
+			VoltageAt: 0.5, CurrentAt: 0.025, VoltageScale: 12, CurrentMax: 0.2,
+		}},
+	}
+}
+
+// sampleProfile has voltage points at 0 and 0.5, and running peaks at 0.25
+// too, as a thinned section has them.
+func sampleProfile() record.Profile {
+	return record.Profile{
+		Section: "main",
+		ZV:      []float64{0, 0.5}, VF: []complex128{10i, 12.003}, VP: []complex128{10i, 12}, EV: []float64{0.003, 0.004},
+		ZI: []float64{0.25}, IF: []complex128{0}, IP: []complex128{-0.1}, EI: []float64{0.0001},
+		PeakZV: []float64{0, 0.25, 0.5}, PeakV: []float64{10.5, 15, 21},
+		PeakZI: []float64{0.25}, PeakI: []float64{0.4},
+	}
+}
+
+func sampleWaveforms() []record.Waveform {
+	return []record.Waveform{
+		{
+			Name: "source voltage", Where: "source", Quantity: "voltage", Unit: "V", Start: 0, Step: 2.5e-10, Samples: []float64{0, 10},
+			Tail: record.Tail{Start: 800e-9, Step: 2.5e-10, Samples: []float64{9.9}, Phasor: []float64{10}},
+		},
+		{
+			Name: "end current", Where: "end", Quantity: "current", Unit: "A", Start: 1e-9, Step: 2.5e-10, Samples: []float64{0.125},
+			Tail: record.Tail{Start: 800e-9, Step: 2.5e-10, Samples: []float64{0.1}},
+		},
+	}
+}

@@ -1,0 +1,89 @@
+package data
+
+import "linewitness/sim/record"
+
+func settlingObject(s record.Settling) object {
+	return object{
+		{"settled", s.Settled},
+		{"time_s", s.Time},
+		{"periods", s.Periods},
+		{"residual", s.Residual},
+		{"loop_factor", s.LoopFactor},
+		{"round_trip_s", s.RoundTrip},
+		{"mean", s.Mean},
+		{"harmonic", s.Harmonic},
+		{"to_1_percent_s", s.To1Percent},
+		{"decay", s.Decay},
+	}
+}
+
+func stressObject(s record.Stress) (object, error) {
+	var sections named
+	for _, x := range s.Sections {
+		sections.add(x.Name, object{
+			{"peak_voltage_v", x.Voltage},
+			{"at_m", x.VoltageAt},
+			{"time_s", x.VoltageTime},
+			{"peak_current_a", x.Current},
+			{"current_at_m", x.CurrentAt},
+			{"current_time_s", x.CurrentTime},
+			{"steady_voltage_v", x.SteadyVoltage},
+		})
+	}
+	all, err := sections.object("section")
+	if err != nil {
+		return nil, err
+	}
+	return object{
+		{"profile", s.Profile},
+		{"phase", phaseOf(s)},
+		{"duration_s", s.Duration},
+		{"peak_voltage", peakObject("value_v", s.Voltage)},
+		{"peak_current", peakObject("value_a", s.Current)},
+		{"overshoot", s.Overshot},
+		{"sections", all},
+	}, nil
+}
+
+// phaseOf is "worst" if every start phase was considered and "given" if only
+// the one that the design file names; the angle itself stands with each peak.
+func phaseOf(s record.Stress) string {
+	if s.Worst {
+		return "worst"
+	}
+	return "given"
+}
+
+func peakObject(key string, p record.Peak) object {
+	return object{
+		{key, p.Value},
+		{"section", p.Section},
+		{"at_m", p.At},
+		{"time_s", p.Time},
+		{"phase_deg", p.Phase},
+	}
+}
+
+func gridObject(g record.Grid) (object, error) {
+	var sections named
+	for _, x := range g.Sections {
+		sections.add(x.Name, object{
+			{"cells", x.Cells},
+			{"courant", x.Courant},
+			{"cells_per_wavelength", x.CellsPerWavelength},
+			{"cell_m", x.Cell},
+			{"points", x.Points},
+			{"phase_error_deg", x.PhaseErrorDegrees},
+		})
+	}
+	all, err := sections.object("section")
+	if err != nil {
+		return nil, err
+	}
+	return object{
+		{"steps_per_period", g.StepsPerPeriod},
+		{"step_s", g.Step},
+		{"cell_updates", g.Updates},
+		{"sections", all},
+	}, nil
+}
