@@ -1,0 +1,115 @@
+package format
+
+import (
+	"math"
+	"strings"
+)
+
+// SI returns a quantity in a unit that takes prefixes: SI(1375, "V") is
+// "1.375 kV".
+func SI(v float64, unit string) string {
+	if math.IsNaN(v) {
+		return Missing
+	}
+	if math.IsInf(v, 0) {
+		return Number(v) + Space + unit
+	}
+	p := PrefixFor(v)
+	return Number(v/p.Factor) + Space + p.Symbol + unit
+}
+
+// Quantity returns v in the unit that a requirement is stated in: "V peak",
+// "dB", "%", "deg", "1", ... Unknown units are printed as they are.
+func Quantity(v float64, unit string) string {
+	base, qualifier, _ := strings.Cut(Unit(unit), " ")
+	if qualifier != "" {
+		qualifier = Space + qualifier
+	}
+	switch {
+	case base == "" || base == "1":
+		return Number(v)
+	case math.IsNaN(v):
+		return Missing
+	case prefixed[base]:
+		return SI(v, base) + qualifier
+	case base == "dB":
+		return DB(v)
+	case base == "°":
+		return Angle(v)
+	}
+	return Number(v) + Space + base + qualifier
+}
+
+// Unit returns a unit as it is printed: "ohm" as Ω, "deg" as °.
+func Unit(unit string) string {
+	switch unit {
+	case "ohm":
+		return "Ω"
+	case "deg":
+		return "°"
+	case "rad":
+		return "rad"
+	}
+	return unit
+}
+
+// VSWR returns a standing wave ratio, which may be infinite.
+func VSWR(v float64) string { return Number(v) }
+
+// DB returns a level or a loss with two decimals, small ones with three
+// significant digits.
+func DB(v float64) string {
+	if math.IsNaN(v) {
+		return Missing
+	}
+	if a := math.Abs(v); a > 0 && a < 0.095 {
+		return Digits(v, 3) + Space + "dB"
+	}
+	return Fixed(v, 2) + Space + "dB"
+}
+
+// Percent returns a fraction as a percentage with three significant digits.
+func Percent(fraction float64) string {
+	if math.IsNaN(fraction) {
+		return Missing
+	}
+	return Digits(100*fraction, 3) + Space + "%"
+}
+
+// Share returns a fraction as a percentage for running text: whole from 10 %
+// on, two digits below.
+func Share(fraction float64) string {
+	if a := math.Abs(fraction); a >= 0.0995 && !math.IsInf(fraction, 0) {
+		return Fixed(100*fraction, 0) + Space + "%"
+	}
+	if math.IsNaN(fraction) {
+		return Missing
+	}
+	return Digits(100*fraction, 2) + Space + "%"
+}
+
+// Angle returns an angle in degrees with two decimals.
+func Angle(deg float64) string {
+	if math.IsNaN(deg) {
+		return Missing
+	}
+	return Fixed(deg, 2) + "°"
+}
+
+// metresPerFoot is exact (international yard and pound agreement, 1959).
+const metresPerFoot = 0.3048
+
+// Feet returns a length in metres as feet.
+func Feet(m float64) string { return Number(m/metresPerFoot) + Space + "ft" }
+
+// Wavelengths returns an electrical length, with the letter lambda as unit.
+func Wavelengths(v float64) string { return Number(v) + Space + "λ" }
+
+// Electrical returns an electrical length in degrees, four significant
+// digits.
+func Electrical(deg float64) string {
+	if math.Abs(deg) >= 1000 && !math.IsInf(deg, 0) {
+		return Count(int64(math.Round(deg))) + "°"
+	}
+	return Number(deg) + "°"
+}
