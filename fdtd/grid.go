@@ -1,0 +1,139 @@
+package fdtd
+
+import (
+	"errors"
+	"fmt"
+	"math"
+	"math/cmplx"
+
+	"linewitness/sim/line"
+	"linewitness/sim/network"
+)
+
+// A Grid is the division of a network into steps and cells.
+type Grid struct {
+	StepsPerPeriod int       // N: the period is N steps exactly
+	Step           float64   // dt, s
+	Cells          []int     // n of each section
+	Courant        []float64 // S = v dt n/l of each section, at most 1
+}
+
+// ErrShortSection says that a section would need more steps per period than
+// maxSteps to hold a single cell.
+var ErrShortSection = errors.New("fdtd: section too short for the time step")
+
+// maxSteps bounds the steps per period.
+const maxSteps = 1 << 20
+
+// unity is how near to 1 a Courant number is taken as 1. A section cut for
+// S = 1 misses it by rounding only; its length is then off by no more.
+const unity = 1e-9
+
+// NewGrid makes the best grid with at least cells cells per wavelength on
+// every section, and at least one cell. With N0 the least number of steps that
+// does so, it takes the N in [N0, 1.25 N0] with the smallest error of
+// propagation and of characteristic impedance, added up over the sections.
+func NewGrid(net *network.Network, cells float64) (Grid, error) {
+	lo, err := leastSteps(net, cells)
+	if err != nil {
+		return Grid{}, err
+	}
+	best, score := Grid{}, math.Inf(1)
+	for n := lo; n <= lo+lo/4; n++ {
+		g := fixedGrid(net, n)
+		if s := g.score(net); s < score {
+			best, score = g, s
+		}
+	}
+	return best, nil
+}
+
+// leastSteps is the least N from which on every section has a cell, and cells
+// of them per wavelength: m cells fit into a section of l wavelengths as soon
+// as N >= m/l.
+func leastSteps(net *network.Network, cells float64) (int, error) {
+	need := cells
+	for _, s := range net.Sections {
+		l := s.Delay() / net.Period()
+		m := math.Max(1, math.Ceil(cells*shortening(s.Line, net.Omega())*l*(1-unity)))
+		if m/l > maxSteps {
+			return 0, fmt.Errorf("%w: %s (%.3g m) would need %.3g steps per period; make it longer or leave it out",
+				ErrShortSection, s.Name, s.Length, m/l)
+		}
+		need = math.Max(need, m/l*(1-unity))
+	}
+	return int(math.Ceil(need)), nil
+}
+
+// shortening is how much shorter the wave on a lossy line is than that of its
+// wave front, beta/(w sqrt(LC)) >= 1; a decay as fast counts likewise.
+func shortening(c line.Constants, omega float64) float64 {
+	g := cmplx.Sqrt(complex(c.R, omega*c.L)) * cmplx.Sqrt(complex(c.G, omega*c.C))
+	return math.Max(1, cmplx.Abs(g)/(omega*math.Sqrt(c.L*c.C)))
+}
+
+// fixedGrid is the grid with n steps per period, whether good or not.
+func fixedGrid(net *network.Network, n int) Grid {
+	g := Grid{StepsPerPeriod: n, Step: net.Period() / float64(n)}
+	for _, s := range net.Sections {
+		full := s.Delay() / g.Step // cells at S = 1
+		cells := math.Max(1, math.Floor(full*(1+unity)))
+		courant := cells / full
+		if courant > 1-unity && courant < 1+unity {
+			courant = 1
+		}
+		g.Cells = append(g.Cells, int(cells))
+		g.Courant = append(g.Courant, courant)
+	}
+	return g
+}
+
+// CellsPerWavelength is how many cells of section k make one wavelength.
+func (g Grid) CellsPerWavelength(net *network.Network, k int) float64 {
+	s := net.Sections[k]
+	return float64(g.StepsPerPeriod) * g.Courant[k] / shortening(s.Line, net.Omega())
+}
+
+// Refine halves the step and every cell, times times over; every Courant
+// number stays what it was.
+func (g Grid) Refine(times int) Grid {
+	f := 1 << times
+	out := Grid{
+		StepsPerPeriod: g.StepsPerPeriod * f,
+		Step:           g.Step / float64(f),
+		Courant:        append([]float64(nil), g.Courant...),
+	}
+	for _, n := range g.Cells {
+		out.Cells = append(out.Cells, n*f)
+	}
+	return out
+}
+
+// TotalCells is the number of cells of all sections.
+func (g Grid) TotalCells() int {
+	t := 0
+	for _, n := range g.Cells {
+		t += n
+	}
+	return t
+}
+
+// Updates is the number of cell updates of a number of periods, one lane.
+func (g Grid) Updates(periods int) float64 {
+	return float64(periods) * float64(g.StepsPerPeriod) * float64(g.TotalCells())
+}
+
+// score adds up what the grid does to the waves of each section: the error of
+// the propagation over its length, in radians or nepers, and the relative
+// error of its characteristic impedance.
+func (g Grid) score(net *network.Network) float64 {
+	sum := 0.0
+	for k, s := range net.Sections {
+		n := g.Numerical(net, k)
+		gl := cmplx.Sqrt(complex(s.Line.R, net.Omega()*s.Line.L)) *
+			cmplx.Sqrt(complex(s.Line.G, net.Omega()*s.Line.C)) * complex(s.Length, 0)
+		zc := complex(s.Line.R, net.Omega()*s.Line.L) * complex(s.Length, 0) / gl
+		sum += cmplx.Abs(n.Exponent-gl) + cmplx.Abs(n.EndImpedance/zc-1)
+	}
+	return sum
+}

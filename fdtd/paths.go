@@ -1,0 +1,95 @@
+package fdtd
+
+import (
+	"math"
+	"sort"
+
+	"linewitness/sim/network"
+)
+
+// LongestPath is the longest one-way delay between two places of a network
+// that can reflect, s: the diameter of the tree of its sections, and the delay
+// of every section that closes a loop on top of it. A wave can go round a
+// loop, so that sum is safe rather than sharp for rings.
+func LongestPath(net *network.Network) float64 {
+	t := newTree(net)
+	far, _ := t.farthest(net.Source.At)
+	_, d := t.farthest(far)
+	return d + t.closing
+}
+
+// A tree spans the junctions of a network, longest sections first so that
+// what closes a loop is short. Bridging branches join without delay.
+type tree struct {
+	next    [][]edge
+	closing float64 // delay of the sections that close loops
+}
+
+type edge struct {
+	to    int
+	delay float64
+}
+
+func newTree(net *network.Network) *tree {
+	t := &tree{next: make([][]edge, len(net.Junctions))}
+	parent := make([]int, len(net.Junctions))
+	for j := range parent {
+		parent[j] = j
+	}
+	var root func(int) int
+	root = func(j int) int {
+		if parent[j] != j {
+			parent[j] = root(parent[j])
+		}
+		return parent[j]
+	}
+	join := func(a, b int, d float64) bool {
+		if root(a) == root(b) {
+			return false
+		}
+		parent[root(a)] = root(b)
+		t.next[a] = append(t.next[a], edge{b, d})
+		t.next[b] = append(t.next[b], edge{a, d})
+		return true
+	}
+	order := make([]int, len(net.Sections))
+	for k := range order {
+		order[k] = k
+	}
+	sort.SliceStable(order, func(i, j int) bool {
+		return net.Sections[order[i]].Delay() > net.Sections[order[j]].Delay()
+	})
+	for _, k := range order {
+		s := net.Sections[k]
+		if !join(s.From, s.To, s.Delay()) {
+			t.closing += s.Delay()
+		}
+	}
+	for _, b := range net.Branches {
+		if b.B != network.Ground && !b.Open {
+			join(b.A, b.B, 0)
+		}
+	}
+	return t
+}
+
+// farthest is the junction farthest from start and its delay.
+func (t *tree) farthest(start int) (int, float64) {
+	at, best := start, 0.0
+	var walk func(j, from int, d float64)
+	walk = func(j, from int, d float64) {
+		if d > best {
+			at, best = j, d
+		}
+		for _, e := range t.next[j] {
+			if e.to != from {
+				walk(e.to, j, d+e.delay)
+			}
+		}
+	}
+	walk(start, -1, 0)
+	return at, best
+}
+
+// periods is a time in whole periods, rounded up.
+func periods(t, period float64) int { return int(math.Ceil(t/period - 1e-9)) }

@@ -1,0 +1,29 @@
+package fdtd
+
+// Settings steer a run. Zero fields take the defaults.
+type Settings struct {
+	Tolerance  float64 // remaining error allowed in steady state, default 1e-4
+	MaxPeriods int     // cap on a run, default 20000
+	MaxPoints  int     // recorded points a section, default 4096
+	// Progress, if not nil, is called after every period with the number of
+	// cell updates done since the last call.
+	Progress func(updates float64)
+}
+
+// RampPeriods is the raised-cosine rise of the settling run. A whole number:
+// the integral of such a rise times cos(wt) is then zero, so that not even an
+// inductor across an ideal source keeps an offset.
+const RampPeriods = 10
+
+func (s Settings) withDefaults() Settings {
+	if s.Tolerance == 0 {
+		s.Tolerance = 1e-4
+	}
+	if s.MaxPeriods == 0 {
+		s.MaxPeriods = 20000
+	}
+	if s.MaxPoints == 0 {
+		s.MaxPoints = 4096
+	}
+	return s
+}

@@ -1,0 +1,196 @@
+package fdtd
+
+import (
+	"context"
+	"math"
+
+	"linewitness/sim/network"
+)
+
+// Stress is what a stress run found.
+type Stress struct {
+	Grid      Grid
+	Worst     bool    // the peaks are the largest over all start phases
+	Duration  float64 // s
+	Complete  bool    // it ran until the network was at rest in its steady state (or dead, after a stop)
+	Sections  []Peaks
+	Junctions []Peak // largest |v| of each junction
+	Voltage   Peak   // largest |v| anywhere on a section
+	Current   Peak   // largest |i|
+	// SettleTime is the time from switch-on after which the voltage phasor of
+	// every junction, taken over the period that follows, stays within a
+	// fraction of its final value; NaN if that was not reached.
+	SettleTime func(fraction float64) float64
+	Traces     Traces
+	Updates    float64
+}
+
+// Peaks are the running peaks of one section: the largest |v| and |i| that
+// each place saw.
+type Peaks struct {
+	ZV, V   []float64 // m and V, evenly thinned; the largest of what was thinned out is kept
+	ZI, I   []float64
+	Voltage Peak
+	Current Peak
+}
+
+// A Peak is a largest absolute value and when and where it was.
+type Peak struct {
+	Value   float64
+	Section int     // -1 at a junction
+	At      float64 // m
+	Time    float64 // s
+	Phase   float64 // rad, the start phase that gives it as a positive peak
+}
+
+// StressRun runs a network from its own start, and through its own stop, and
+// keeps the largest |v| and |i| of every place.
+//
+// If every start phase is possible (network.Start.Worst) the run carries two
+// lanes with the EMF r cos(wt) and r sin(wt). A start at phase p gives
+// v = vc cos p - vs sin p, so the largest |v| over all p is hypot(vc, vs) at
+// each place and time: no phase is left out and none is scanned.
+//
+// The run ends when the waveform at every junction has kept to that of the
+// steady state, final, for a longest round trip, within restTolerance of the
+// largest - or, after a stop, when it has kept to zero - and at
+// MaxPeriods at the latest.
+func StressRun(ctx context.Context, net *network.Network, final *Steady, set Settings) (*Stress, error) {
+	m, err := newModel(net, final.Grid)
+	if err != nil {
+		return nil, err
+	}
+	s := &stresser{m: m, final: final, worst: net.Source.Start.Worst}
+	phases := []float64{net.Source.Start.Phase}
+	if s.worst {
+		phases = []float64{0, -math.Pi / 2} // cos and sin
+	}
+	var drives []*drive
+	for _, p := range phases {
+		drives = append(drives, newDrive(net.Source, final.Grid, p))
+	}
+	s.run = m.newRun(ctx, set.withDefaults(), drives...)
+	s.prepare(phases)
+	if err := s.stress(); err != nil {
+		return nil, err
+	}
+	return s.result(), nil
+}
+
+// restTolerance is the part of the largest steady amplitude within which a
+// waveform counts as at rest in a stress run. Peaks come long before.
+const restTolerance = 1e-3
+
+type stresser struct {
+	m      *model
+	run    *run
+	final  *Steady
+	worst  bool
+	peaks  []sectionPeaks
+	nodes  []held // junctions
+	follow *follower
+	traces *tracer
+	done   bool
+}
+
+func (s *stresser) prepare(phases []float64) {
+	for k := range s.m.net.Sections {
+		s.peaks = append(s.peaks, newSectionPeaks(s.m.grid.Cells[k]))
+	}
+	s.nodes = make([]held, len(s.m.net.Junctions))
+	s.follow = newFollower(s.m, s.final, phases)
+	s.traces = newTracer(s.m, len(phases))
+}
+
+// stress runs period by period until the network is at rest.
+func (s *stresser) stress() error {
+	trip := max(1, periods(2*LongestPath(s.m.net), s.m.net.Period()))
+	stop := -1
+	if st := s.m.net.Source.Stop; st != nil {
+		stop = periods(st.At+st.Fall, s.m.net.Period())
+	}
+	start := periods(s.m.net.Source.Start.Rise, s.m.net.Period())
+	quiet := 0
+	for p := 1; p <= s.run.set.MaxPeriods; p++ {
+		s.follow.reserve()
+		s.traces.reserve()
+		if err := s.run.period(func(int) { s.look() }); err != nil {
+			return err
+		}
+		rest := s.follow.rest(stop >= 0 && p > stop)
+		quiet++
+		if rest > restTolerance {
+			quiet = 0
+		}
+		if quiet >= trip+1 && p >= max(start, stop)+trip+1 {
+			s.done = true
+			break
+		}
+	}
+	return nil
+}
+
+// look takes in the state after one step.
+func (s *stresser) look() {
+	a := s.run.lanes[0]
+	b := a
+	if s.worst {
+		b = s.run.lanes[1]
+	}
+	n := s.run.n
+	for k := range s.peaks {
+		p := &s.peaks[k]
+		if s.worst {
+			p.v.pair(a.v[k], b.v[k], n)
+			p.w.pair(a.w[k], b.w[k], n)
+		} else {
+			p.v.single(a.v[k], n)
+			p.w.single(a.w[k], n)
+		}
+	}
+	for j := range s.nodes {
+		if s.worst {
+			s.nodes[j].see(a.j[j], b.j[j], j, n)
+		} else {
+			s.nodes[j].see(a.j[j], 0, j, n)
+		}
+	}
+	s.follow.look(s.run.lanes)
+	s.traces.look(s.run.lanes, n)
+}
+
+func (s *stresser) result() *Stress {
+	net, g := s.m.net, s.m.grid
+	out := &Stress{
+		Grid: g, Worst: s.worst, Complete: s.done,
+		Duration:   float64(s.run.n) * g.Step,
+		Traces:     s.traces.traces(),
+		Updates:    s.run.updates,
+		SettleTime: s.follow.settleTime,
+	}
+	for k, p := range s.peaks {
+		dx := net.Sections[k].Length / float64(g.Cells[k])
+		q := Peaks{
+			Voltage: p.v.best.peak(k, dx, 0, g.Step, 0, 1),
+			Current: p.w.best.peak(k, dx, 0.5, g.Step, 0.5, 1/s.m.z[k]),
+		}
+		q.ZV, q.V = p.v.envelope(dx, 0, 1)
+		q.ZI, q.I = p.w.envelope(dx, 0.5, 1/s.m.z[k])
+		out.Sections = append(out.Sections, q)
+		if q.Voltage.Value > out.Voltage.Value {
+			out.Voltage = q.Voltage
+		}
+		if q.Current.Value > out.Current.Value {
+			out.Current = q.Current
+		}
+	}
+	for j := range s.nodes {
+		late := 0.0
+		if !s.m.junction.stores[j] {
+			late = 0.5
+		}
+		q := s.nodes[j].peak(-1, 0, 0, g.Step, late, 1)
+		out.Junctions = append(out.Junctions, q)
+	}
+	return out
+}

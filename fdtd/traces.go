@@ -1,0 +1,158 @@
+package fdtd
+
+import (
+	"math"
+	"slices"
+)
+
+// Traces are the waveforms of a stress run at all junctions and branches.
+type Traces struct {
+	Step  float64 // s; sample i of a voltage is at (First + i) Step
+	First int     // 1
+	// Whole is from switch-on on, Full false if the run was longer than it.
+	Junctions []Trace
+	Branches  []Trace // averages over a step: sample i is at (First + i - 1/2) Step
+	Source    Trace   // likewise, the current out of the source
+	Full      bool
+	TailEnd   int // step of the last sample of every tail: the end of the run, or the stop
+}
+
+// A Trace is one quantity in each lane: A the only or the cosine lane, B the
+// sine lane or nil.
+type Trace struct {
+	A, B        []float64
+	Tail, TailB []float64 // the last periods, at most TailPeriods of them
+	Early       float64   // steps by which a sample lies before its step
+}
+
+// At gives the waveform for a start phase p: A cos p - B sin p.
+func (t Trace) At(p float64) (whole, tail []float64) {
+	return mix(t.A, t.B, p), mix(t.Tail, t.TailB, p)
+}
+
+func mix(a, b []float64, p float64) []float64 {
+	if b == nil {
+		return a
+	}
+	sin, cos := math.Sincos(p)
+	out := make([]float64, len(a))
+	for i := range a {
+		out[i] = a[i]*cos - b[i]*sin
+	}
+	return out
+}
+
+// TailPeriods is how many last periods a trace keeps whatever its length.
+const TailPeriods = 3
+
+// traceSamples bounds the samples of all traces of a run: 16 MiB.
+const traceSamples = 2 << 20
+
+// A tracer keeps junction voltages and companion currents, sample by sample
+// up to a bound and the last periods in a ring.
+type tracer struct {
+	m     *model
+	width int
+	limit int
+	whole []float64 // [step][lane][width]
+	ring  []float64
+	rows  int // of the ring
+	step  int
+	lanes int
+	stop  int       // step at which the ring is frozen, or 0
+	row   []float64 // scratch
+}
+
+func newTracer(m *model, lanes int) *tracer {
+	t := &tracer{m: m, lanes: lanes, width: len(m.net.Junctions) + len(m.junction.branches)}
+	t.rows = TailPeriods * m.grid.StepsPerPeriod
+	t.limit = max(t.rows, traceSamples/(t.width*lanes))
+	t.ring = make([]float64, t.rows*t.width*lanes)
+	t.row = make([]float64, t.width*lanes)
+	if s := m.net.Source.Stop; s != nil {
+		t.stop = int(s.At / m.grid.Step)
+	}
+	return t
+}
+
+// reserve makes room for one more period, so that look does not allocate.
+func (t *tracer) reserve() {
+	if t.step < t.limit {
+		t.whole = slices.Grow(t.whole, t.m.grid.StepsPerPeriod*len(t.row))
+	}
+}
+
+// look takes in the state after step n.
+func (t *tracer) look(lanes []*lane, n int) {
+	t.step = n
+	for i, l := range lanes {
+		at := t.row[i*t.width:]
+		copy(at, l.j)
+		copy(at[len(l.j):], l.avg)
+	}
+	if t.stop == 0 || n <= t.stop { // the tail is that before the stop
+		copy(t.ring[(n-1)%t.rows*len(t.row):], t.row)
+	}
+	if n <= t.limit {
+		t.whole = append(t.whole, t.row...)
+	}
+}
+
+func (t *tracer) traces() Traces {
+	out := Traces{Step: t.m.grid.Step, First: 1, Full: t.step <= t.limit, TailEnd: t.tailEnd()}
+	nj := len(t.m.net.Junctions)
+	for j := range nj {
+		early := 0.0
+		if !t.m.junction.stores[j] {
+			early = 0.5
+		}
+		out.Junctions = append(out.Junctions, t.column(j, 1, early))
+	}
+	for _, at := range t.m.branch {
+		if at < 0 {
+			out.Branches = append(out.Branches, t.column(-1, 1, 0.5))
+			continue
+		}
+		out.Branches = append(out.Branches, t.column(nj+at, 1, 0.5))
+	}
+	out.Source = t.column(nj+t.m.source, -1, 0.5)
+	return out
+}
+
+// tailEnd is the step of the last sample in the ring.
+func (t *tracer) tailEnd() int {
+	if t.stop > 0 {
+		return min(t.step, t.stop)
+	}
+	return t.step
+}
+
+// column takes one quantity out of the record; column -1 is always zero.
+func (t *tracer) column(c int, sign, early float64) Trace {
+	steps := min(t.step, t.limit)
+	out := Trace{Early: early}
+	pick := func(from []float64, row, lane int) float64 {
+		if c < 0 {
+			return 0
+		}
+		return sign * from[(row*t.lanes+lane)*t.width+c]
+	}
+	end := t.tailEnd()
+	tail := min(t.rows, end)
+	for lane := range t.lanes {
+		whole := make([]float64, steps)
+		for i := range whole {
+			whole[i] = pick(t.whole, i, lane)
+		}
+		last := make([]float64, tail)
+		for i := range last {
+			last[i] = pick(t.ring, (end-tail+i)%t.rows, lane)
+		}
+		if lane == 0 {
+			out.A, out.Tail = whole, last
+		} else {
+			out.B, out.TailB = whole, last
+		}
+	}
+	return out
+}
