@@ -2,12 +2,16 @@ package format
 
 import "math"
 
+// maxTickDecimals bounds the labels of an axis; axes are scaled by a prefix,
+// so that no step needs more.
+const maxTickDecimals = 6
+
 // Tick returns the label of a tick at v on an axis whose ticks are step
 // apart: as many decimals as the step needs and no more.
 func Tick(v, step float64) string {
 	decimals := 0
-	if step > 0 {
-		decimals = max(0, -int(math.Floor(math.Log10(step)+1e-9)))
+	for s := step; decimals < maxTickDecimals && math.Abs(s-math.Round(s)) > 1e-6; s *= 10 {
+		decimals++
 	}
 	if v != 0 && math.Abs(v) < step/1e6 {
 		v = 0 // the rest of a sum of steps

@@ -15,7 +15,10 @@ func Complex(z complex128, unit string) string {
 		return Missing
 	}
 	size := math.Max(math.Abs(real(z)), math.Abs(imag(z)))
-	p := PrefixFor(size)
+	p := Prefix{Factor: 1}
+	if prefixed[unit] {
+		p = PrefixFor(size)
+	}
 	decimals := decimalsFor(size / p.Factor)
 	re, im := real(z)/p.Factor, imag(z)/p.Factor
 	operator := "+"

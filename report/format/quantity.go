@@ -5,14 +5,14 @@ import (
 	"strings"
 )
 
-// SI returns a quantity in a unit that takes prefixes: SI(1375, "V") is
-// "1.375 kV".
+// SI returns a quantity, with an engineering prefix if its unit takes one:
+// SI(1375, "V") is "1.375 kV".
 func SI(v float64, unit string) string {
 	if math.IsNaN(v) {
 		return Missing
 	}
-	if math.IsInf(v, 0) {
-		return Number(v) + Space + unit
+	if !prefixed[unit] {
+		return strings.TrimSuffix(Number(v)+Space+unit, Space)
 	}
 	p := PrefixFor(v)
 	return Number(v/p.Factor) + Space + p.Symbol + unit
@@ -30,14 +30,12 @@ func Quantity(v float64, unit string) string {
 		return Number(v)
 	case math.IsNaN(v):
 		return Missing
-	case prefixed[base]:
-		return SI(v, base) + qualifier
 	case base == "dB":
 		return DB(v)
 	case base == "°":
 		return Angle(v)
 	}
-	return Number(v) + Space + base + qualifier
+	return SI(v, base) + qualifier
 }
 
 // Unit returns a unit as it is printed: "ohm" as Ω, "deg" as °.
@@ -47,8 +45,6 @@ func Unit(unit string) string {
 		return "Ω"
 	case "deg":
 		return "°"
-	case "rad":
-		return "rad"
 	}
 	return unit
 }
