@@ -54,6 +54,17 @@ func (f *Fonts) register(fc *face) {
 	})
 }
 
+// Use makes fc the current font of the document, for what gofpdf itself
+// encodes as the current font is: the outline.
+func (f *Fonts) Use(fc font.Face) error {
+	known, err := f.face(fc)
+	if err != nil {
+		return err
+	}
+	f.pdf.SetFont(known.family, known.style, fc.Font.Size.Points())
+	return f.pdf.Error()
+}
+
 // Style returns the family and style under which a gonum font is known to the
 // document.
 func Style(f font.Font) (family, style string) {

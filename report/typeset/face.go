@@ -56,11 +56,12 @@ var cache = sync.OnceValue(func() *font.Cache {
 // Font returns the gonum font of f at a size in points.
 func (f Face) Font(size float64) font.Font { return font.From(fonts[f], vg.Points(size)) }
 
-func (f Face) at(size float64) font.Face { return cache().Lookup(fonts[f], vg.Points(size)) }
+// Face returns the gonum face of f at a size in points.
+func (f Face) Face(size float64) font.Face { return cache().Lookup(fonts[f], vg.Points(size)) }
 
 // Has reports whether f has a glyph for r that the document can hold.
 func (f Face) Has(r rune) bool {
 	var buf sfnt.Buffer
-	g, err := f.at(1).Face.GlyphIndex(&buf, r)
+	g, err := f.Face(1).Face.GlyphIndex(&buf, r)
 	return err == nil && g != 0 && r <= 0xFFFF
 }

@@ -78,7 +78,7 @@ func TestFit(t *testing.T) {
 		width float64
 		want  string
 	}{
-		{"mast", 100, "mast"}, {"a_rather_long_name", 40, "a_rathe…"}, {"wide", 0, ""}, {"Wide", 12, "…"},
+		{"mast", 100, "mast"}, {"a_rather_long_name", 40, "a_rath…"}, {"wide", 0, ""}, {"Wide", 12, "…"},
 	} {
 		got := body.Fit(c.in, c.width)
 		if got != c.want || body.Width(got) > c.width {

@@ -1,0 +1,73 @@
+package figure
+
+import (
+	"gonum.org/v1/plot/vg"
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/ink"
+	"linewitness/report/typeset"
+)
+
+// An Entry is a line style and what it stands for.
+type Entry struct {
+	Style draw.LineStyle
+	Band  bool
+	Text  string
+}
+
+// KeyHeight is the height of a line of a key.
+const KeyHeight = 11.0
+
+const (
+	keySample = 22.0
+	keyGap    = 14.0
+)
+
+// rows breaks a key into lines.
+func rows(entries []Entry, width float64) [][]Entry {
+	var out [][]Entry
+	x := width + 1
+	for _, e := range entries {
+		w := keySample + 4 + textStyle.Width(e.Text) + keyGap
+		if x+w-keyGap > width {
+			out = append(out, nil)
+			x = 0
+		}
+		out[len(out)-1] = append(out[len(out)-1], e)
+		x += w
+	}
+	return out
+}
+
+// KeyRoom returns the height that a key takes in the given width.
+func KeyRoom(entries []Entry, width float64) float64 {
+	return float64(len(rows(entries, width))) * KeyHeight
+}
+
+// Key draws a key from the upper left corner of c.
+func Key(c draw.Canvas, entries []Entry) {
+	y := c.Max.Y.Points() - 8
+	for _, row := range rows(entries, c.Size().X.Points()) {
+		x := c.Min.X.Points()
+		for _, e := range row {
+			sample(c, e, x, y+2.4)
+			x += keySample + 4
+			x += textStyle.Draw(c, x, y, e.Text, typeset.Left) + keyGap
+		}
+		y -= KeyHeight
+	}
+}
+
+func sample(c draw.Canvas, e Entry, x, y float64) {
+	if e.Band {
+		box := vg.Rectangle{
+			Min: vg.Point{X: vg.Points(x), Y: vg.Points(y - 3)},
+			Max: vg.Point{X: vg.Points(x + keySample), Y: vg.Points(y + 3)},
+		}
+		c.SetColor(ink.Band)
+		c.Fill(box.Path())
+		c.SetLineStyle(e.Style)
+		c.Stroke(box.Path())
+		return
+	}
+	c.StrokeLine2(e.Style, vg.Points(x), vg.Points(y), vg.Points(x+keySample), vg.Points(y))
+}

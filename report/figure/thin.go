@@ -1,0 +1,89 @@
+package figure
+
+import (
+	"math"
+
+	"linewitness/report/ink"
+)
+
+// Thinned is a curve reduced to its extremes in windows along x.
+type Thinned struct{ X, Lo, Hi []float64 }
+
+// columns is the number of windows across a panel: closer than this two
+// points of a curve do not show apart.
+const columns = 360
+
+// crowded is the number of samples in a window from which on a curve is drawn
+// as a band.
+const crowded = 6
+
+// Extremes returns the smallest and largest finite y in each of n windows of
+// equal width between the first and the last x, which must ascend. Windows
+// without a finite point are left out.
+func Extremes(xs, ys []float64, n int) Thinned {
+	var t Thinned
+	count := min(len(xs), len(ys))
+	if count == 0 || n < 1 {
+		return t
+	}
+	x0, width := xs[0], (xs[count-1]-xs[0])/float64(n)
+	window := -1
+	for i := range count {
+		if !finite(xs[i], ys[i]) {
+			continue
+		}
+		w := 0
+		if width > 0 {
+			w = min(int((xs[i]-x0)/width), n-1)
+		}
+		if w != window {
+			window = w
+			t.X = append(t.X, x0+(float64(w)+0.5)*width)
+			t.Lo, t.Hi = append(t.Lo, ys[i]), append(t.Hi, ys[i])
+			continue
+		}
+		last := len(t.X) - 1
+		t.Lo[last] = math.Min(t.Lo[last], ys[i])
+		t.Hi[last] = math.Max(t.Hi[last], ys[i])
+	}
+	return t.stretch(x0, xs[count-1])
+}
+
+// stretch moves the outer windows to the ends of the curve, so that a band
+// reaches from edge to edge.
+func (t Thinned) stretch(first, last float64) Thinned {
+	if n := len(t.X); n > 1 {
+		t.X[0], t.X[n-1] = first, last
+	}
+	return t
+}
+
+// Crowded reports whether n samples are too many to draw as a line.
+func Crowded(n int) bool { return n > columns*crowded }
+
+// Times returns n equally spaced abscissas.
+func Times(start, step float64, n int) []float64 {
+	ts := make([]float64, n)
+	for i := range ts {
+		ts[i] = start + float64(i)*step
+	}
+	return ts
+}
+
+// Trace draws samples as a line, or as a band if they are crowded.
+func (pn *Panel) Trace(xs, ys []float64) {
+	if Crowded(len(ys)) {
+		pn.Band(Extremes(xs, ys, columns), ink.TraceLine)
+		return
+	}
+	pn.Line(xs, ys, ink.TraceLine)
+}
+
+// Every returns every k-th point so that about n are left.
+func Every(xs, ys []float64, n int) (x, y []float64) {
+	step := max(1, min(len(xs), len(ys))/max(n, 1))
+	for i := step / 2; i < min(len(xs), len(ys)); i += step {
+		x, y = append(x, xs[i]), append(y, ys[i])
+	}
+	return x, y
+}

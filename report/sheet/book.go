@@ -1,0 +1,151 @@
+package sheet
+
+import (
+	"bytes"
+	"io"
+	"time"
+
+	"github.com/jung-kurt/gofpdf"
+	"gonum.org/v1/plot/vg"
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/canvas"
+	"linewitness/report/typeset"
+)
+
+// Meta is what a document says about itself.
+type Meta struct {
+	Title, Subject, Author, Creator string
+	Date                            time.Time // of creation and modification, printed nowhere
+	Header                          string    // at the head of every page
+	Number, Revision                string    // at the foot of every page
+}
+
+// A Book is a document being laid out.
+type Book struct {
+	pdf   *gofpdf.Fpdf
+	fonts *canvas.Fonts
+	cv    *canvas.Canvas // of the page in work
+	paper Paper
+	meta  Meta
+	y     float64 // upper edge of the free room on the page
+	gap   float64 // room to leave before the next block on the page
+	err   error
+
+	// Overfull counts the pieces of text that are wider than the room given
+	// to them. It stays 0; tests look at it.
+	Overfull int
+}
+
+// New returns a book with one empty page.
+func New(meta Meta, paper Paper) *Book {
+	pdf := gofpdf.NewCustom(&gofpdf.InitType{
+		OrientationStr: "P", UnitStr: "pt",
+		Size: gofpdf.SizeType{Wd: paper.Width, Ht: paper.Height},
+	})
+	pdf.SetAutoPageBreak(false, 0)
+	pdf.SetMargins(0, 0, 0)
+	pdf.SetCatalogSort(true) // else the order of objects is random
+	pdf.SetCreationDate(meta.Date.UTC())
+	pdf.SetModificationDate(meta.Date.UTC())
+	pdf.SetTitle(meta.Title, true)
+	pdf.SetSubject(meta.Subject, true)
+	pdf.SetAuthor(meta.Author, true)
+	pdf.SetCreator(meta.Creator, true)
+	b := &Book{pdf: pdf, fonts: canvas.NewFonts(pdf), paper: paper, meta: meta}
+	// The outline is encoded as the current font is.
+	b.fail(b.fonts.Use(typeset.Sans.Face(10)))
+	b.NewPage()
+	return b
+}
+
+// NewPage ends the page in work and begins another.
+func (b *Book) NewPage() {
+	b.endPage()
+	b.pdf.AddPage()
+	b.cv = canvas.New(b.pdf, b.fonts, 0, 0, b.paper.Width, b.paper.Height)
+	b.y, b.gap = b.paper.Height-marginTop, 0
+}
+
+func (b *Book) endPage() {
+	if b.cv != nil {
+		b.fail(b.cv.Close())
+		b.cv = nil
+	}
+}
+
+// Width returns the width of the text area.
+func (b *Book) Width() float64 { return b.paper.Width - marginLeft - marginRight }
+
+// Body returns the height of the text area.
+func (b *Book) Body() float64 { return b.paper.Height - marginTop - marginBottom }
+
+// Room returns the height that is left on the page in work.
+func (b *Book) Room() float64 { return b.y - b.gap - marginBottom }
+
+// Fresh reports whether nothing is on the page yet.
+func (b *Book) Fresh() bool { return b.y == b.paper.Height-marginTop }
+
+// Need begins a new page unless the page in work has room for a block of
+// height h.
+func (b *Book) Need(h float64) {
+	if b.Room() < h && !b.Fresh() {
+		b.NewPage()
+	}
+}
+
+// Space asks for room above the next block, unless it comes first on its page.
+func (b *Book) Space(h float64) {
+	if !b.Fresh() {
+		b.gap = max(b.gap, h)
+	}
+}
+
+// Block takes a block of height h over the full width, on a new page if need
+// be, and lets paint draw on it.
+func (b *Book) Block(h float64, paint func(draw.Canvas)) {
+	b.Need(h)
+	b.y -= b.gap
+	b.gap = 0
+	paint(draw.Canvas{Canvas: b.cv, Rectangle: vg.Rectangle{
+		Min: vg.Point{X: vg.Points(marginLeft), Y: vg.Points(b.y - h)},
+		Max: vg.Point{X: vg.Points(b.paper.Width - marginRight), Y: vg.Points(b.y)},
+	}})
+	b.y -= h
+}
+
+// Fail records an error, to be returned by Write.
+func (b *Book) Fail(err error) { b.fail(err) }
+
+func (b *Book) fail(err error) {
+	if b.err == nil && err != nil {
+		b.err = err
+	}
+}
+
+// Pages returns the number of pages so far.
+func (b *Book) Pages() int { return b.pdf.PageCount() }
+
+// Write draws the headers and footers and writes the document to w. The book
+// cannot be used after it.
+func (b *Book) Write(w io.Writer) error {
+	b.endPage()
+	total := b.pdf.PageCount()
+	for page := 1; page <= total; page++ {
+		b.pdf.SetPage(page)
+		b.running(page, total)
+	}
+	b.fail(b.fonts.Close())
+	if b.err != nil {
+		return b.err
+	}
+	var buf bytes.Buffer
+	if err := b.pdf.Output(&buf); err != nil {
+		return err
+	}
+	file, err := mapToUnicode(buf.Bytes())
+	if err != nil {
+		return err
+	}
+	_, err = w.Write(file)
+	return err
+}

@@ -1,0 +1,84 @@
+package sheet
+
+import "strings"
+
+// fit returns the widths of the columns. Each gets its natural width if all
+// find room, and what is left over goes to the columns that grow. Otherwise
+// the columns shrink in proportion to what wrapping can save, and if that is
+// not enough, to less than their longest word.
+func (l *layout) fit(width float64) []float64 {
+	natural, least := l.natural()
+	spare := width - sum(natural)
+	if spare >= 0 {
+		return l.grow(natural, spare)
+	}
+	saving := sum(natural) - sum(least)
+	if saving >= -spare {
+		for i := range natural {
+			natural[i] += spare * (natural[i] - least[i]) / saving
+		}
+		return natural
+	}
+	scale := width / sum(least)
+	for i := range least {
+		least[i] *= scale
+	}
+	return least
+}
+
+// natural returns the width of each column without any wrapping, and with
+// wrapping at every space.
+func (l *layout) natural() (natural, least []float64) {
+	for i, col := range l.t.Columns {
+		head := l.headStyle()
+		w := widestWord(col.Head, head.Width)
+		n := w // heads wrap before anything else does
+		for _, row := range l.t.Rows {
+			if i >= len(row) || row[i].Span {
+				continue
+			}
+			var mark float64
+			if row[i].Mark != NoMark {
+				mark = markRoom
+			}
+			st := l.style(i, row[i])
+			n = max(n, st.Width(row[i].Text)+mark)
+			w = max(w, widestWord(row[i].Text, st.Width)+mark)
+		}
+		natural = append(natural, n+2*cellPad+0.1)
+		least = append(least, w+2*cellPad+0.1)
+	}
+	return natural, least
+}
+
+// grow shares out the spare width.
+func (l *layout) grow(widths []float64, spare float64) []float64 {
+	var shares float64
+	for _, c := range l.t.Columns {
+		shares += c.Grow
+	}
+	for i, c := range l.t.Columns {
+		if shares > 0 {
+			widths[i] += spare * c.Grow / shares
+		} else {
+			widths[i] += spare / float64(len(widths))
+		}
+	}
+	return widths
+}
+
+func widestWord(s string, width func(string) float64) float64 {
+	var w float64
+	for _, word := range strings.Split(s, " ") {
+		w = max(w, width(word))
+	}
+	return w
+}
+
+func sum(vs []float64) float64 {
+	var s float64
+	for _, v := range vs {
+		s += v
+	}
+	return s
+}

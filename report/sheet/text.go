@@ -1,0 +1,156 @@
+package sheet
+
+import (
+	"strings"
+
+	"gonum.org/v1/plot/vg"
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/ink"
+	"linewitness/report/typeset"
+)
+
+// The styles of running text.
+var (
+	TitleStyle   = typeset.Style{Face: typeset.Bold, Size: 17, Color: ink.Accent}
+	HeadStyle    = typeset.Style{Face: typeset.Bold, Size: 12, Color: ink.Accent}
+	SubheadStyle = typeset.Style{Face: typeset.Bold, Size: 9.5, Color: ink.Accent}
+	BodyStyle    = typeset.Style{Face: typeset.Sans, Size: 8.5, Color: ink.Text}
+	CaptionStyle = typeset.Style{Face: typeset.Sans, Size: 7.5, Color: ink.Text}
+	NoteStyle    = typeset.Style{Face: typeset.Sans, Size: 7.5, Color: ink.Soft}
+	ListingStyle = typeset.Style{Face: typeset.Mono, Size: 7, Color: ink.Text}
+)
+
+const (
+	leading  = 1.28 // distance of baselines over font size
+	ascender = 0.80 // from the upper edge of a line to its baseline, likewise
+)
+
+// leadingOf returns the distance of the baselines of a style.
+func leadingOf(st typeset.Style) float64 { return st.Size * leading }
+
+// Heading writes a heading of the first level, with an entry in the outline,
+// on a page that has room for it and for keep more below it.
+func (b *Book) Heading(s string, keep float64) {
+	b.Space(16)
+	b.outline(s, 0, leadingOf(HeadStyle)+9+keep)
+	b.lines(HeadStyle, s)
+	b.Block(3, func(c draw.Canvas) {
+		rule(c, c.Min.X.Points(), c.Max.X.Points(), c.Min.Y.Points()+1, 0.8)
+	})
+	b.Space(6)
+}
+
+// Subheading is a heading of the second level.
+func (b *Book) Subheading(s string, keep float64) {
+	b.Space(11)
+	b.outline(s, 1, leadingOf(SubheadStyle)+4+keep)
+	b.lines(SubheadStyle, s)
+	b.Space(4)
+}
+
+// outline makes room for a heading and enters it in the outline.
+func (b *Book) outline(s string, level int, room float64) {
+	b.Need(room)
+	b.pdf.Bookmark(s, level, b.paper.Height-b.y)
+}
+
+// Paragraph writes a paragraph of running text.
+func (b *Book) Paragraph(s string) {
+	b.Space(4)
+	b.lines(BodyStyle, s)
+	b.Space(4)
+}
+
+// Note writes a paragraph in the smaller secondary style.
+func (b *Book) Note(s string) {
+	b.Space(3)
+	b.lines(NoteStyle, s)
+	b.Space(4)
+}
+
+// Item writes a paragraph with a bullet.
+func (b *Book) Item(s string) {
+	const indent = 10
+	b.Space(2.5)
+	b.hanging(BodyStyle, "•", indent, s)
+}
+
+// Term writes a paragraph with a bold term before it.
+func (b *Book) Term(term, s string) {
+	const indent = 118
+	b.Space(3)
+	b.hanging(BodyStyle, term, indent, s)
+}
+
+func (b *Book) hanging(st typeset.Style, lead string, indent float64, s string) {
+	first := true
+	for _, line := range st.Wrap(s, b.Width()-indent) {
+		b.Block(leadingOf(st), func(c draw.Canvas) {
+			x, y := c.Min.X.Points(), c.Max.Y.Points()-st.Size*ascender
+			if first {
+				face := st.In(typeset.Bold)
+				face.Draw(c, x, y, face.Fit(lead, indent-4), typeset.Left)
+				first = false
+			}
+			b.Draw(c, st, x+indent, y, b.Width()-indent, line)
+		})
+	}
+}
+
+// Caption writes the finding under a figure: a bold label and its text.
+func (b *Book) Caption(label, s string) {
+	b.labelled(CaptionStyle, label, s)
+	b.Space(9)
+}
+
+// CaptionHeight returns the height that Caption takes.
+func (b *Book) CaptionHeight(label, s string) float64 {
+	_, lines := labelLines(CaptionStyle, label, s, b.Width())
+	return float64(len(lines)) * leadingOf(CaptionStyle)
+}
+
+// labelGap is the room between a bold label and its text.
+const labelGap = 5
+
+// labelLines breaks a text whose first line begins after a bold label.
+func labelLines(st typeset.Style, label, s string, width float64) (indent float64, lines []string) {
+	indent = st.In(typeset.Bold).Width(label) + labelGap
+	lines = st.Wrap(s, width-indent)
+	if len(lines) == 1 {
+		return indent, lines
+	}
+	rest := strings.TrimPrefix(s[len(lines[0]):], " ")
+	return indent, append(lines[:1:1], st.Wrap(rest, width)...)
+}
+
+func (b *Book) labelled(st typeset.Style, label, s string) {
+	indent, lines := labelLines(st, label, s, b.Width())
+	for i, line := range lines {
+		b.Block(leadingOf(st), func(c draw.Canvas) {
+			x, y := c.Min.X.Points(), c.Max.Y.Points()-st.Size*ascender
+			room := b.Width()
+			if i == 0 {
+				st.In(typeset.Bold).Of(ink.Accent).Draw(c, x, y, label, typeset.Left)
+				x, room = x+indent, room-indent
+			}
+			b.Draw(c, st, x, y, room, line)
+		})
+	}
+}
+
+// lines writes wrapped text.
+func (b *Book) lines(st typeset.Style, s string) {
+	for _, line := range st.Wrap(s, b.Width()) {
+		b.Block(leadingOf(st), func(c draw.Canvas) {
+			b.Draw(c, st, c.Min.X.Points(), c.Max.Y.Points()-st.Size*ascender, b.Width(), line)
+		})
+	}
+}
+
+// Draw sets a line of text in a room and counts it if it is too wide for it.
+func (b *Book) Draw(c vg.Canvas, st typeset.Style, x, y, room float64, s string) {
+	const slack = 0.05 // rounding of the sum of advances, points
+	if st.Draw(c, x, y, s, typeset.Left) > room+slack {
+		b.Overfull++
+	}
+}
