@@ -122,13 +122,7 @@ type Line struct {
 }
 
 // Nominal is the datasheet form of a line.
-type Nominal struct {
-	Z0              float64 // ohm
-	VelocityFactor  float64
-	LossAt          float64 // Hz; 0 means no loss given
-	Attenuation     float64 // Np/m at LossAt
-	DielectricShare float64 // 0..1
-}
+type Nominal = line.Nominal
 
 // Section is a piece of line.
 type Section struct {
@@ -195,7 +189,11 @@ type Requirement struct {
 	Cases      []string // the cases it is judged in, resolved; "nominal" is the nominal design
 }
 
-// Limit is a limit with the unit it was given in.
+// Limit is a limit with the unit it was given in. SI is in SI units: peak
+// amplitudes, phases in radians, ratios as plain numbers (5 % is 0.05, a
+// reflection of -20 dB is 0.1, 30 dBm is 1 W). Where the quantity itself is a
+// level in dB (return loss, loss, power split, anything relative to another
+// case but a phase) SI is that number of dB.
 type Limit struct {
 	SI   float64
 	Unit string // "V peak", "V rms", "W", "dBm", "dB", "%", "deg", "us", "1", "ohm" ...: how to print it

@@ -1,0 +1,173 @@
+package design
+
+import (
+	"math"
+	"math/cmplx"
+	"strings"
+)
+
+// String is the word for the convention in a design file.
+func (c Convention) String() string {
+	return [...]string{"engineering", "physics"}[c]
+}
+
+// letter is the imaginary unit of the convention.
+func (c Convention) letter() string { return [...]string{"j", "i"}[c] }
+
+func (c Convention) other() Convention { return 1 - c }
+
+// sign is what an imaginary part or a phase of the file is multiplied by to
+// come to the engineering convention. With e^{-iwt} in place of e^{+jwt} every
+// phasor and every impedance is the complex conjugate.
+func (c Convention) sign() float64 {
+	if c == Physics {
+		return -1
+	}
+	return 1
+}
+
+// parseComplex reads an impedance in one of its three written forms and
+// returns it in the engineering convention:
+//
+//	36.5 - j61.1 ohm    36.5-61.1j ohm    71.2 ohm at -59.1 deg
+//
+// Either part may be missing. Under the physics convention the letter is i.
+func parseComplex(text string, c Convention) (complex128, *fault) {
+	if size, at, polar := strings.Cut(text, " at "); polar {
+		return parsePolar(strings.TrimSpace(size), strings.TrimSpace(at), c)
+	}
+	s := complexScanner{rest: text}
+	re, im, f := s.parts()
+	if f != nil {
+		return 0, f
+	}
+	if s.letter != "" && s.letter != c.letter() {
+		return 0, wrongLetter(text, s, c)
+	}
+	u, f := resistance.unit(strings.Join(strings.Fields(s.rest), " "), text)
+	if f != nil {
+		return 0, f
+	}
+	r, f := inRange(re.float(u.exp), re, text)
+	if f != nil {
+		return 0, f
+	}
+	x, f := inRange(im.float(u.exp), im, text)
+	return complex(r, c.sign()*x+0), f
+}
+
+func parsePolar(size, at string, c Convention) (complex128, *fault) {
+	q, f := parseQuantity(size, resistance)
+	if f != nil {
+		return 0, f
+	}
+	phase, f := parseQuantity(at, angle)
+	if f != nil {
+		return 0, f
+	}
+	if q.value < 0 {
+		return 0, newFault(say("turn the angle by 180 deg instead"), "the size %q of an impedance is negative", size)
+	}
+	return rect(q.value, c.sign()*phase.value), nil
+}
+
+// rect is cmplx.Rect, exact on the axes: a quarter turn has no real part, not
+// one of 6e-17 of its size.
+func rect(size, phase float64) complex128 {
+	quarters := phase / (math.Pi / 2)
+	if quarters == math.Trunc(quarters) {
+		return complex(size, 0) * [...]complex128{1, 1i, -1, -1i}[((int(math.Mod(quarters, 4))%4)+4)%4]
+	}
+	return cmplx.Rect(size, phase)
+}
+
+// wrongLetter says what a value written with the other convention's letter
+// would have meant.
+func wrongLetter(text string, s complexScanner, c Convention) *fault {
+	swap := strings.NewReplacer("+", "-", "-", "+")
+	meant := strings.Replace(text, s.letter, c.letter(), 1)
+	if before, after, ok := strings.Cut(meant, c.letter()); ok && strings.ContainsAny(before, "+-") {
+		i := strings.LastIndexAny(before, "+-")
+		meant = before[:i] + swap.Replace(before[i:i+1]) + before[i+1:] + c.letter() + after
+	} else if ok {
+		meant = "-" + meant
+	}
+	return newFault(
+		say("write %s if the %s convention was meant, else put %s for %s", meant, c.other(), c.letter(), s.letter),
+		"%q is written with %s, the %s convention, where it would mean %s; this file has the %s convention and %s",
+		text, s.letter, c.other().String(), meant, c.String(), c.letter())
+}
+
+// complexScanner takes a complex number from the start of a text.
+type complexScanner struct {
+	rest   string
+	letter string // the imaginary unit it met
+}
+
+// zero is the part that is not there.
+var zero = number{mantissa: "0"}
+
+// parts scans a real part, an imaginary part or both.
+func (s *complexScanner) parts() (re, im number, f *fault) {
+	text := s.rest
+	first, imaginary, f := s.term()
+	switch {
+	case f != nil:
+		return zero, zero, f
+	case imaginary:
+		re, im = zero, first
+	default:
+		re, im = first, zero
+	}
+	s.skipBlanks()
+	if !strings.HasPrefix(s.rest, "+") && !strings.HasPrefix(s.rest, "-") {
+		return re, im, nil
+	}
+	second, again, f := s.term()
+	switch {
+	case f != nil:
+		return zero, zero, f
+	case imaginary || !again:
+		return zero, zero, newFault(say("write the real part, then the imaginary part: 36.5 - j61.1 ohm, 36.5-61.1j ohm or 71.2 ohm at -59.1 deg"), "%q is not a complex number", text)
+	}
+	return re, second, nil
+}
+
+// term scans [sign] [letter] number [letter].
+func (s *complexScanner) term() (n number, imaginary bool, f *fault) {
+	text, sign := s.rest, ""
+	if strings.HasPrefix(text, "+") || strings.HasPrefix(text, "-") {
+		sign, s.rest = text[:1], text[1:]
+	}
+	s.skipBlanks()
+	imaginary = s.takeLetter()
+	if strings.HasPrefix(s.rest, "+") || strings.HasPrefix(s.rest, "-") {
+		return zero, false, newFault(say("one sign is enough"), "%q has two signs in a row", text)
+	}
+	n, s.rest, f = scanNumber(s.rest)
+	if f != nil {
+		return zero, false, f
+	}
+	if !imaginary {
+		s.skipBlanks()
+		imaginary = s.takeLetter()
+	}
+	n.mantissa = sign + n.mantissa
+	return n, imaginary, nil
+}
+
+// takeLetter takes an i or j that is not the first letter of a unit.
+func (s *complexScanner) takeLetter() bool {
+	for _, c := range []string{"i", "j"} {
+		if rest, ok := strings.CutPrefix(s.rest, c); ok && !startsLower(rest) {
+			s.letter, s.rest = c, rest
+			s.skipBlanks()
+			return true
+		}
+	}
+	return false
+}
+
+func startsLower(s string) bool { return s != "" && s[0] >= 'a' && s[0] <= 'z' }
+
+func (s *complexScanner) skipBlanks() { s.rest = strings.TrimLeft(s.rest, " \t") }
