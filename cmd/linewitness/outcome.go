@@ -1,0 +1,85 @@
+package main
+
+import (
+	"fmt"
+	"io"
+	"strings"
+
+	"linewitness/sim/record"
+)
+
+// writeOutcome writes the short form of a record: the verdict, and for each
+// case the agreement, the settling and the requirements.
+func writeOutcome(w io.Writer, r *record.Record) {
+	fmt.Fprintf(w, "%s: %s\n", heading(r.Design), r.Verdict)
+	for i := range r.Cases {
+		c := &r.Cases[i]
+		fmt.Fprintf(w, "\n%s: %s\n", c.Name, c.Verdict)
+		writeTable(w, [][]string{
+			{"agreement", agreementText(c.Agreement)},
+			{"settling", settlingText(c.Settling)},
+		})
+		writeTable(w, requirementRows(c.Requirements))
+		for _, warning := range c.Warnings {
+			fmt.Fprintf(w, "  warning: %s\n", warning)
+		}
+	}
+}
+
+// heading names a design by what its file says of it, in the order in which a
+// document is cited.
+func heading(d record.Design) string {
+	var parts []string
+	if d.Number != "" {
+		parts = append(parts, d.Number)
+	}
+	if d.Revision != "" {
+		parts = append(parts, "revision "+d.Revision)
+	}
+	id := strings.Join(parts, " ")
+	title := d.Title
+	if title == "" {
+		title = d.File
+	}
+	if id == "" {
+		return title
+	}
+	return title + " (" + id + ")"
+}
+
+func agreementText(a record.Agreement) string {
+	return fmt.Sprintf("%s found, %s expected, limit %s",
+		percent(max(a.Voltage, a.Current)), percent(a.Expected), percent(a.Limit))
+}
+
+func settlingText(s record.Settling) string {
+	if !s.Settled {
+		return "no steady state: " + s.Decay
+	}
+	return fmt.Sprintf("%s, %s, remaining error %s, loop factor %s",
+		inSI(s.Time, "s"), counted(s.Periods, "period"), percent(s.Residual), plainNumber(s.LoopFactor))
+}
+
+// requirementRows are the rows of the table of requirements, header first;
+// there are none without requirements.
+func requirementRows(rs []record.Requirement) [][]string {
+	if len(rs) == 0 {
+		return nil
+	}
+	rows := [][]string{{"id", "quantity", "value", "limit", "margin", "uncertainty", "verdict"}}
+	for _, r := range rs {
+		quantity := r.Quantity
+		if r.Subject != "" {
+			quantity += " " + r.Subject
+		}
+		verdict := string(r.Verdict)
+		if r.Note != "" {
+			verdict += ": " + r.Note
+		}
+		rows = append(rows, []string{
+			r.ID, quantity, inUnit(r.Value, r.Unit), r.Limit,
+			inUnit(r.Margin, r.Unit), inUnit(r.Uncertainty, r.Unit), verdict,
+		})
+	}
+	return rows
+}

@@ -1,0 +1,69 @@
+package main
+
+import (
+	"context"
+	"errors"
+	"io"
+	"os"
+	"path/filepath"
+	"strings"
+
+	"linewitness/sim/design"
+)
+
+// maxSource is one byte more than design.Load accepts: enough for it to see
+// that a file is too long, and no more of a file without end.
+const maxSource = 1<<20 + 1
+
+// standardInput is the argument that stands for it.
+const standardInput = "-"
+
+// load reads and checks a design file. It says on stderr what is wrong with
+// the design itself.
+func (a *app) load(ctx context.Context, path string) (*design.File, error) {
+	source, err := await(ctx, func() ([]byte, error) { return a.read(path) })
+	if errors.Is(err, context.Canceled) {
+		return nil, err
+	}
+	if err != nil {
+		return nil, fileError(err.Error(), "")
+	}
+	f, err := design.Load(displayName(path), source)
+	var problems design.Diagnostics
+	if errors.As(err, &problems) {
+		problems.Render(a.stderr, colourful(a.stderr))
+		return nil, errStatus(statusUsage)
+	}
+	return f, err
+}
+
+func (a *app) read(path string) ([]byte, error) {
+	if path == standardInput {
+		return io.ReadAll(io.LimitReader(a.stdin, maxSource))
+	}
+	f, err := os.Open(path)
+	if err != nil {
+		return nil, err
+	}
+	defer f.Close()
+	return io.ReadAll(io.LimitReader(f, maxSource))
+}
+
+func displayName(path string) string {
+	if path == standardInput {
+		return "stdin"
+	}
+	return path
+}
+
+// outputBase is the name of the output files of a design without extension.
+func outputBase(path string) string {
+	if path == standardInput {
+		return "design"
+	}
+	name := filepath.Base(path)
+	if base := strings.TrimSuffix(name, filepath.Ext(name)); base != "" {
+		return base
+	}
+	return name
+}

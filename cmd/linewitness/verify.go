@@ -1,0 +1,240 @@
+package main
+
+import (
+	"context"
+	"errors"
+	"fmt"
+	"os"
+	"path/filepath"
+	"strings"
+
+	"github.com/spf13/cobra"
+
+	"linewitness/report/data"
+	"linewitness/sim"
+	"linewitness/sim/design"
+	"linewitness/sim/record"
+)
+
+const verifyHelp = `linewitness verify solves every case of a design by two methods, compares them, judges
+the requirements, prints a short table and writes the record.
+
+  linewitness verify DESIGN...
+
+  -o, --output DIR       directory of the files, made if missing    (default .)
+      --formats LIST     pdf, json, csv with commas, or none         (default pdf,json)
+      --paper SIZE       a4 or letter                                (default a4)
+      --json             print the JSON on standard output instead of the table
+      --no-bound         let a run pass the bounds on work and memory
+  -h, --help             this text
+
+A DESIGN of - is standard input. The files are named after the design file:
+feeder.yaml gives feeder.pdf, feeder.json, feeder.waveforms.csv, feeder.envelopes.csv
+and feeder.error.csv, each written whole or not at all. With --json and several
+designs, one JSON document follows the other.
+
+The exit status is that of "linewitness --help".
+
+Example:
+  linewitness verify -o records --formats pdf,csv feeder.yaml
+`
+
+// verifyOptions are the options of the verb.
+type verifyOptions struct {
+	dir     string
+	formats choices
+	paper   choice
+	json    bool
+	noBound bool
+}
+
+func (a *app) verifyCommand() *cobra.Command {
+	opt := &verifyOptions{
+		formats: choices{[]string{formatPDF, formatJSON}, []string{formatPDF, formatJSON, formatCSV}},
+		paper:   choice{"a4", []string{"a4", "letter"}},
+	}
+	cmd := &cobra.Command{
+		Use:               "verify DESIGN...",
+		Short:             "solve, compare, judge, write the record",
+		Long:              verifyHelp,
+		Args:              atLeastOne("a design file"),
+		ValidArgsFunction: designFiles,
+		RunE: func(cmd *cobra.Command, args []string) error {
+			return a.verifyAll(cmd.Context(), args, opt)
+		},
+	}
+	flags := cmd.Flags()
+	flags.StringVarP(&opt.dir, "output", "o", ".", "directory of the files")
+	flags.Var(&opt.formats, "formats", "formats of the record")
+	flags.Var(&opt.paper, "paper", "paper size of the PDF")
+	flags.BoolVar(&opt.json, "json", false, "print the JSON instead of the table")
+	flags.BoolVar(&opt.noBound, "no-bound", false, "let a run pass the bounds")
+	// The errors are of names that are no options; the tests complete each.
+	_ = cmd.RegisterFlagCompletionFunc("formats", oneOf(formatPDF, formatJSON, formatCSV, "pdf,json,csv", noChoice))
+	_ = cmd.RegisterFlagCompletionFunc("paper", oneOf(opt.paper.of...))
+	_ = cmd.MarkFlagDirname("output")
+	return cmd
+}
+
+// A job is one design on its way through verify.
+type job struct {
+	path, stem string // of the design file; of its output files, without suffix
+	file       *design.File
+}
+
+// verifyAll goes through the designs in order. Only an interruption or a
+// wrong command line stops it; all else counts in the status.
+func (a *app) verifyAll(ctx context.Context, paths []string, opt *verifyOptions) error {
+	jobs, err := opt.jobs(paths)
+	if err != nil {
+		return err
+	}
+	status := statusVerified
+	for i := range jobs {
+		jobs[i].file, err = a.load(ctx, jobs[i].path)
+		if errors.Is(err, context.Canceled) {
+			return err
+		}
+		status = max(status, a.explain(err))
+	}
+	if err := opt.makeDir(jobs); err != nil {
+		return err
+	}
+	first := true
+	for _, j := range jobs {
+		if j.file == nil {
+			continue
+		}
+		if !first {
+			fmt.Fprintln(a.stdout)
+		}
+		first = false
+		s, err := a.verifyOne(ctx, j, opt)
+		if errors.Is(err, context.Canceled) {
+			return err
+		}
+		status = max(status, s, a.explain(err))
+	}
+	return errStatus(status)
+}
+
+// verifyOne verifies one design and returns the status of its verdict.
+func (a *app) verifyOne(ctx context.Context, j job, opt *verifyOptions) (int, error) {
+	bar := startBar(a.stderr, outputBase(j.path))
+	defer bar.stop()
+	r, err := await(ctx, func() (*record.Record, error) {
+		return a.verify(ctx, j.file, sim.Options{Progress: bar.progress(), NoBound: opt.noBound, Version: version()})
+	})
+	if err != nil {
+		return statusVerified, verifyError(j.file.Name, err)
+	}
+	files, err := a.products(ctx, r, j.stem, &opt.formats, opt.paper.value)
+	if errors.Is(err, context.Canceled) {
+		return statusVerified, err
+	}
+	if err != nil {
+		return statusVerified, fileError(j.file.Name+": "+err.Error(), "")
+	}
+	bar.stop()
+	status := statusOf(r.Verdict)
+	if err := a.tell(r, opt.json); err != nil {
+		return status, err
+	}
+	if err := writeProducts(ctx, files); err != nil {
+		return status, err
+	}
+	if !opt.json && len(files) > 0 {
+		fmt.Fprintln(a.stdout)
+		for _, f := range files {
+			fmt.Fprintln(a.stdout, "wrote", f.path)
+		}
+	}
+	return status, nil
+}
+
+// verifyError says which design could not be verified.
+func verifyError(name string, err error) error {
+	var bound *sim.BoundError
+	switch {
+	case errors.Is(err, context.Canceled):
+		return err
+	case errors.As(err, &bound):
+		return usageError(name+": "+err.Error(), `"linewitness plan" shows what it takes; --no-bound runs it all the same`)
+	}
+	return usageError(name+": "+err.Error(), "")
+}
+
+// tell prints the result.
+func (a *app) tell(r *record.Record, asJSON bool) error {
+	if !asJSON {
+		writeOutcome(a.stdout, r)
+		return nil
+	}
+	text, err := data.JSON(r)
+	if err != nil {
+		return fileError(err.Error(), "")
+	}
+	a.stdout.Write(text)
+	return nil
+}
+
+// jobs names the output files of the designs and refuses names that would
+// make one file overwrite another, or a design.
+func (opt *verifyOptions) jobs(paths []string) ([]job, error) {
+	jobs := make([]job, len(paths))
+	seen := map[string]string{}
+	for i, path := range paths {
+		base := outputBase(path)
+		// Some file systems take Feeder.pdf and feeder.pdf for the same file.
+		key := strings.ToLower(base)
+		if other, ok := seen[key]; ok {
+			return nil, usageError(
+				fmt.Sprintf("verify: %s and %s would both write %s", displayName(other), displayName(path), base+suffixes[formatPDF][0]),
+				"run them one after the other with different directories: -o DIR")
+		}
+		seen[key] = path
+		jobs[i] = job{path: path, stem: filepath.Join(opt.dir, base)}
+	}
+	for _, j := range jobs {
+		if err := opt.spare(j, paths); err != nil {
+			return nil, err
+		}
+	}
+	return jobs, nil
+}
+
+// spare refuses to write the files of a job over a design file.
+func (opt *verifyOptions) spare(j job, designs []string) error {
+	for _, format := range opt.formats.values {
+		for _, suffix := range suffixes[format] {
+			out, err := os.Stat(j.stem + suffix)
+			if err != nil {
+				continue
+			}
+			for _, d := range designs {
+				if in, err := os.Stat(d); err == nil && os.SameFile(in, out) {
+					return usageError(fmt.Sprintf("verify: %s would overwrite the design file %s", j.stem+suffix, d),
+						"write the files to another directory with -o DIR, or rename the design")
+				}
+			}
+		}
+	}
+	return nil
+}
+
+// makeDir makes the output directory before the work starts, so that a wrong
+// one is known at once.
+func (opt *verifyOptions) makeDir(jobs []job) error {
+	if len(opt.formats.values) == 0 {
+		return nil
+	}
+	for _, j := range jobs {
+		if j.file != nil {
+			if err := os.MkdirAll(opt.dir, 0o777); err != nil {
+				return fileError(err.Error(), "")
+			}
+			return nil
+		}
+	}
+	return nil
+}
