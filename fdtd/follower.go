@@ -20,7 +20,7 @@ type follower struct {
 	miss   []float64      // squared departure from the final waveform, this period
 	dead   []float64      // squared waveform, this period
 	top    float64        // largest final amplitude
-	errors []float64      // after each step from N on: largest relative phasor error over junctions and lanes
+	errors []descent      // of each junction: its largest relative phasor error over the lanes
 }
 
 func newFollower(m *model, final *Steady, phases []float64) *follower {
@@ -44,6 +44,7 @@ func newFollower(m *model, final *Steady, phases []float64) *follower {
 		}
 		f.early = append(f.early, e)
 	}
+	f.errors = make([]descent, len(final.Junctions))
 	all := len(phases) * len(final.Junctions)
 	f.sum, f.miss, f.dead = make([]complex128, all), make([]float64, all), make([]float64, all)
 	for range all {
@@ -53,30 +54,40 @@ func newFollower(m *model, final *Steady, phases []float64) *follower {
 }
 
 // reserve makes room for one more period, so that look does not allocate.
-func (f *follower) reserve() { f.errors = slices.Grow(f.errors, f.n) }
+func (f *follower) reserve() {
+	for j := range f.errors {
+		f.errors[j] = slices.Grow(f.errors[j], f.n)
+	}
+}
 
 // look takes in the junction voltages after a step.
 func (f *follower) look(lanes []*lane) {
 	f.step++
 	at := f.step % f.n
-	worst := 0.0
-	for i, l := range lanes {
-		for j, v := range l.j {
-			k := i*len(l.j) + j
-			old := f.ring[k][at]
-			f.ring[k][at] = v
-			f.sum[k] += complex(v-old, 0) * f.turn[at]
-			end := f.final[i][j]
-			// e^{jwt} is the conjugate of turn.
-			d := v - real(end)*real(f.turn[at]) - imag(end)*imag(f.turn[at])
-			f.miss[k] += d * d
-			f.dead[k] += v * v
-			worst = math.Max(worst, f.error(k, j, end))
+	for j := range f.errors {
+		worst := 0.0
+		for i, l := range lanes {
+			worst = math.Max(worst, f.take(l.j[j], i, j, at))
+		}
+		if f.step >= f.n {
+			f.errors[j] = f.errors[j].push(f.step-f.n+1, worst)
 		}
 	}
-	if f.step >= f.n {
-		f.errors = append(f.errors, worst)
-	}
+}
+
+// take moves the sliding period of junction j in lane i on to v and returns
+// its error.
+func (f *follower) take(v float64, i, j, at int) float64 {
+	k := i*len(f.errors) + j
+	old := f.ring[k][at]
+	f.ring[k][at] = v
+	f.sum[k] += complex(v-old, 0) * f.turn[at]
+	end := f.final[i][j]
+	// e^{jwt} is the conjugate of turn.
+	d := v - real(end)*real(f.turn[at]) - imag(end)*imag(f.turn[at])
+	f.miss[k] += d * d
+	f.dead[k] += v * v
+	return f.error(k, j, end)
 }
 
 // error is the departure of the sliding phasor of slot k from its end value,
@@ -113,15 +124,49 @@ func (f *follower) rest(dead bool) float64 {
 	return math.Sqrt(2*worst/float64(f.n)) / f.top
 }
 
-// settleTime is the start of the first period from which on every junction
-// phasor stays within a fraction of its final value, s; NaN if there is none.
-func (f *follower) settleTime(fraction float64) float64 {
-	last := len(f.errors)
-	for last > 0 && f.errors[last-1] <= fraction {
-		last--
+// settleTime is the start of the first period from which on the phasor of
+// junction j, or of every junction if j is -1, stays within a fraction of its
+// final value, s; NaN if there is none.
+func (f *follower) settleTime(j int, fraction float64) float64 {
+	last := 0
+	for i, e := range f.errors {
+		if j == -1 || j == i {
+			last = max(last, e.last(fraction))
+		}
 	}
-	if last == len(f.errors) {
+	if f.step < f.n || last >= f.step-f.n+1 {
 		return math.NaN()
 	}
 	return float64(last) * f.dt
+}
+
+// A descent keeps, of a sequence of errors, the last step at which it was
+// above any given level, to within descentStep of the level: a list of steps
+// with ever smaller errors.
+type descent []struct {
+	step  int
+	error float64
+}
+
+const descentStep = 1e-3
+
+func (d descent) push(step int, e float64) descent {
+	n := len(d)
+	for n > 0 && d[n-1].error <= e*(1+descentStep) {
+		n--
+	}
+	return append(d[:n], struct {
+		step  int
+		error float64
+	}{step, e})
+}
+
+// last is the last step at which the error was above level, 0 if none.
+func (d descent) last(level float64) int {
+	for i := len(d) - 1; i >= 0; i-- {
+		if d[i].error > level {
+			return d[i].step
+		}
+	}
+	return 0
 }

@@ -68,8 +68,7 @@ func leastSteps(net *network.Network, cells float64) (int, error) {
 // shortening is how much shorter the wave on a lossy line is than that of its
 // wave front, beta/(w sqrt(LC)) >= 1; a decay as fast counts likewise.
 func shortening(c line.Constants, omega float64) float64 {
-	g := cmplx.Sqrt(complex(c.R, omega*c.L)) * cmplx.Sqrt(complex(c.G, omega*c.C))
-	return math.Max(1, cmplx.Abs(g)/(omega*math.Sqrt(c.L*c.C)))
+	return math.Max(1, cmplx.Abs(c.Propagation(omega))*c.FrontVelocity()/omega)
 }
 
 // fixedGrid is the grid with n steps per period, whether good or not.
@@ -130,10 +129,8 @@ func (g Grid) score(net *network.Network) float64 {
 	sum := 0.0
 	for k, s := range net.Sections {
 		n := g.Numerical(net, k)
-		gl := cmplx.Sqrt(complex(s.Line.R, net.Omega()*s.Line.L)) *
-			cmplx.Sqrt(complex(s.Line.G, net.Omega()*s.Line.C)) * complex(s.Length, 0)
-		zc := complex(s.Line.R, net.Omega()*s.Line.L) * complex(s.Length, 0) / gl
-		sum += cmplx.Abs(n.Exponent-gl) + cmplx.Abs(n.EndImpedance/zc-1)
+		exact := s.Line.Propagation(net.Omega()) * complex(s.Length, 0)
+		sum += cmplx.Abs(n.Exponent-exact) + cmplx.Abs(n.EndImpedance/s.Line.Impedance(net.Omega())-1)
 	}
 	return sum
 }

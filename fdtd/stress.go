@@ -17,10 +17,13 @@ type Stress struct {
 	Junctions []Peak // largest |v| of each junction
 	Voltage   Peak   // largest |v| anywhere on a section
 	Current   Peak   // largest |i|
+	Branches  []Peak // largest |i| of each branch, 0 for an open one
+	Source    Peak   // largest |i| out of the source
 	// SettleTime is the time from switch-on after which the voltage phasor of
-	// every junction, taken over the period that follows, stays within a
-	// fraction of its final value; NaN if that was not reached.
-	SettleTime func(fraction float64) float64
+	// a junction, or of every junction for -1, taken over the period that
+	// follows, stays within a fraction of its final value; NaN if that was not
+	// reached.
+	SettleTime func(junction int, fraction float64) float64
 	Traces     Traces
 	Updates    float64
 }
@@ -32,6 +35,8 @@ type Peaks struct {
 	ZI, I   []float64
 	Voltage Peak
 	Current Peak
+	// The largest |i| in the first and in the last cell.
+	FromCurrent, ToCurrent float64
 }
 
 // A Peak is a largest absolute value and when and where it was.
@@ -88,6 +93,7 @@ type stresser struct {
 	worst  bool
 	peaks  []sectionPeaks
 	nodes  []held // junctions
+	parts  []held // companions
 	follow *follower
 	traces *tracer
 	done   bool
@@ -98,6 +104,7 @@ func (s *stresser) prepare(phases []float64) {
 		s.peaks = append(s.peaks, newSectionPeaks(s.m.grid.Cells[k]))
 	}
 	s.nodes = make([]held, len(s.m.net.Junctions))
+	s.parts = make([]held, len(s.m.junction.branches))
 	s.follow = newFollower(s.m, s.final, phases)
 	s.traces = newTracer(s.m, len(phases))
 }
@@ -148,15 +155,23 @@ func (s *stresser) look() {
 			p.w.single(a.w[k], n)
 		}
 	}
-	for j := range s.nodes {
-		if s.worst {
-			s.nodes[j].see(a.j[j], b.j[j], j, n)
-		} else {
-			s.nodes[j].see(a.j[j], 0, j, n)
-		}
-	}
+	s.lumped(a, b, n)
 	s.follow.look(s.run.lanes)
 	s.traces.look(s.run.lanes, n)
+}
+
+// lumped takes in the junction voltages and the branch currents.
+func (s *stresser) lumped(a, b *lane, n int) {
+	second := 0.0
+	if s.worst {
+		second = 1
+	}
+	for j := range s.nodes {
+		s.nodes[j].see(a.j[j], second*b.j[j], j, n)
+	}
+	for k := range s.parts {
+		s.parts[k].see(a.avg[k], second*b.avg[k], k, n)
+	}
 }
 
 func (s *stresser) result() *Stress {
@@ -176,6 +191,8 @@ func (s *stresser) result() *Stress {
 		}
 		q.ZV, q.V = p.v.envelope(dx, 0, 1)
 		q.ZI, q.I = p.w.envelope(dx, 0.5, 1/s.m.z[k])
+		q.FromCurrent = math.Sqrt(p.w.square[0]) / s.m.z[k]
+		q.ToCurrent = math.Sqrt(p.w.square[len(p.w.square)-1]) / s.m.z[k]
 		out.Sections = append(out.Sections, q)
 		if q.Voltage.Value > out.Voltage.Value {
 			out.Voltage = q.Voltage
@@ -192,5 +209,13 @@ func (s *stresser) result() *Stress {
 		q := s.nodes[j].peak(-1, 0, 0, g.Step, late, 1)
 		out.Junctions = append(out.Junctions, q)
 	}
+	for _, at := range s.m.branch {
+		q := Peak{Section: -1}
+		if at >= 0 {
+			q = s.parts[at].peak(-1, 0, 0, g.Step, 0.5, 1)
+		}
+		out.Branches = append(out.Branches, q)
+	}
+	out.Source = s.parts[s.m.source].peak(-1, 0, 0, g.Step, 0.5, 1)
 	return out
 }

@@ -1,7 +1,6 @@
 package sim
 
 import (
-	"errors"
 	"fmt"
 
 	"linewitness/sim/design"
@@ -14,8 +13,8 @@ const (
 	MaxBytes   = 8 << 30 // memory, bytes
 )
 
-// A Plan is the grid and the predicted cost of every case; making one solves
-// nothing in time.
+// A Plan is the grid and the predicted cost of every case; making one takes
+// no step in time.
 type Plan struct {
 	Cases []PlanCase
 }
@@ -26,12 +25,12 @@ type PlanCase struct {
 	Grid          record.Grid // Updates is the predicted number
 	Cells         int         // of all sections
 	LongPath      float64     // s, longest one-way path
-	LoopFactor    float64     // amplitude kept per longest round trip, predicted
+	LoopFactor    float64     // amplitude kept per longest round trip, predicted; NaN if it was not
 	SettlePeriods int         // predicted length of the settling run
 	StressPeriods int         // predicted length of the stress run
 	Seconds       float64     // predicted, on one core at the nominal rate
 	Bytes         float64     // predicted memory
-	ExpectedError float64     // predicted agreement error
+	ExpectedError float64     // predicted agreement error of the grid
 	Warnings      []string
 }
 
@@ -46,7 +45,24 @@ func (e *BoundError) Error() string {
 		e.Case, e.Updates, e.Bytes/(1<<20), float64(MaxUpdates), MaxBytes>>20)
 }
 
-// MakePlan plans every case of a design.
+// Bound is the error with which Verify refuses a case that passes the bounds, or nil.
+func (c *PlanCase) Bound() error {
+	if c.Grid.Updates > MaxUpdates || c.Bytes > MaxBytes {
+		return &BoundError{Case: c.Name, Updates: c.Grid.Updates, Bytes: c.Bytes}
+	}
+	return nil
+}
+
+// MakePlan plans every case of a design. It does not refuse a costly one; see
+// PlanCase and the bounds.
 func MakePlan(f *design.File) (*Plan, error) {
-	return nil, errors.New("sim: not built yet")
+	all, err := planAll(f)
+	if err != nil {
+		return nil, err
+	}
+	out := &Plan{}
+	for _, p := range all {
+		out.Cases = append(out.Cases, p.plan)
+	}
+	return out, nil
 }

@@ -2,7 +2,11 @@ package sim
 
 import (
 	"context"
-	"errors"
+	"runtime"
+	"sync"
+	"time"
+
+	"golang.org/x/sync/errgroup"
 
 	"linewitness/sim/design"
 	"linewitness/sim/record"
@@ -25,5 +29,113 @@ type Options struct {
 // A run that the bounds refuse gives a *BoundError. An error from ctx is
 // returned as it is, within 100 ms of its cancellation.
 func Verify(ctx context.Context, f *design.File, opt Options) (*record.Record, error) {
-	return nil, errors.New("sim: not built yet")
+	all, err := planAll(f)
+	if err != nil {
+		return nil, err
+	}
+	if !opt.NoBound {
+		for _, p := range all {
+			if err := p.plan.Bound(); err != nil {
+				return nil, err
+			}
+		}
+	}
+	cases, err := solveAll(ctx, all, opt.Progress)
+	if err != nil {
+		if cause := ctx.Err(); cause != nil {
+			err = cause
+		}
+		return nil, err
+	}
+	return newRecord(f, cases, opt.Version), nil
+}
+
+// solveAll solves the cases side by side, as many as there are processors.
+func solveAll(ctx context.Context, all []*planned, progress func(float64)) ([]*solved, error) {
+	total := 0.0
+	for _, p := range all {
+		total += p.plan.Grid.Updates
+	}
+	m := &meter{total: total, tell: progress}
+	out := make([]*solved, len(all))
+	g, ctx := errgroup.WithContext(ctx)
+	g.SetLimit(runtime.GOMAXPROCS(0))
+	for i, p := range all {
+		g.Go(func() error {
+			var err error
+			out[i], err = p.solve(ctx, m.add)
+			return err
+		})
+	}
+	if err := g.Wait(); err != nil {
+		return nil, err
+	}
+	m.finish()
+	return out, nil
+}
+
+// newRecord judges the solved cases and writes the record.
+func newRecord(f *design.File, cases []*solved, version string) *record.Record {
+	byName := map[string]*solved{}
+	for _, c := range cases {
+		byName[c.name] = c
+	}
+	r := f.Nominal.Record
+	out := &record.Record{
+		Tool: record.Tool{Version: version, Go: runtime.Version() + " " + runtime.GOOS + "/" + runtime.GOARCH},
+		Design: record.Design{
+			Title: r.Title, Number: r.Number, Revision: r.Revision, Purpose: r.Purpose,
+			PreparedBy: r.PreparedBy, CheckedBy: r.CheckedBy, ApprovedBy: r.ApprovedBy,
+			Notes: r.Notes, Date: r.Date,
+			File: f.Name, SHA256: f.SHA256, Source: f.Source,
+			Convention: conventionName(f.Nominal.Convention),
+			Agreement:  f.Nominal.Grid.Agreement,
+			Tolerance:  f.Nominal.Grid.SettleTolerance, MaxPeriods: f.Nominal.Grid.MaxPeriods,
+		},
+		Verdict: record.Verified,
+	}
+	for _, c := range cases {
+		rc := c.caseRecord(judge(c, byName))
+		if rc.Verdict.Rank() > out.Verdict.Rank() {
+			out.Verdict = rc.Verdict
+		}
+		out.Cases = append(out.Cases, rc)
+	}
+	return out
+}
+
+func conventionName(c design.Convention) string {
+	if c == design.Physics {
+		return "physics"
+	}
+	return "engineering"
+}
+
+// A meter adds up the work of several goroutines and tells of it.
+type meter struct {
+	mu    sync.Mutex
+	total float64
+	done  float64
+	last  time.Time
+	tell  func(float64)
+}
+
+// tellEvery is the least time between two reports of progress.
+const tellEvery = 100 * time.Millisecond
+
+func (m *meter) add(updates float64) {
+	m.mu.Lock()
+	defer m.mu.Unlock()
+	m.done += updates
+	if m.tell == nil || time.Since(m.last) < tellEvery {
+		return
+	}
+	m.last = time.Now()
+	m.tell(min(0.99, m.done/m.total))
+}
+
+func (m *meter) finish() {
+	if m.tell != nil {
+		m.tell(1)
+	}
 }

@@ -224,6 +224,8 @@ type Peak struct {
 	At      float64 // m from the From end
 	Time    float64 // s
 	Phase   float64 // degrees: the start phase that gives it
+
+	Uncertainty float64 // change from a grid about half as fine, and what samples may miss
 }
 
 // StressSection is the largest value along one section.
@@ -235,6 +237,8 @@ type StressSection struct {
 	VoltageTime      float64 // s
 	CurrentTime      float64
 	SteadyVoltage    float64 // largest steady |V| along the section, for the overshoot
+
+	VoltageUncertainty, CurrentUncertainty float64 // as of Peak
 }
 
 // Agreement compares the two witnesses at the grid's own points.

@@ -1,0 +1,331 @@
+package sim
+
+import (
+	"fmt"
+	"math"
+	"math/cmplx"
+
+	"linewitness/fdtd"
+	"linewitness/sim/line"
+	"linewitness/sim/network"
+	"linewitness/sim/record"
+)
+
+// caseRecord writes down a solved case.
+func (s *solved) caseRecord(reqs []record.Requirement) record.Case {
+	c := record.Case{
+		Name:         s.name,
+		Model:        s.model(),
+		Phasor:       s.steadyRecord(s.exact),
+		FDTD:         s.steadyRecord(s.found),
+		Settling:     s.settlingRecord(),
+		Stress:       s.stressRecord(),
+		Agreement:    s.agreementRecord(),
+		Grid:         gridRecord(s.net, s.steady.Grid),
+		Requirements: reqs,
+		Profiles:     s.profiles(),
+		Waveforms:    s.waveforms(),
+		Spectrum: record.Spectrum{
+			Where:     s.net.Junctions[s.net.Source.At],
+			Periods:   s.steady.Spectrum.Periods,
+			Frequency: s.steady.Spectrum.Frequency,
+			Amplitude: s.steady.Spectrum.Amplitude,
+		},
+	}
+	c.Grid.Updates = s.steady.Updates + s.stress.Updates
+	if s.coarse != nil {
+		c.Grid.Updates += s.coarse.Updates
+	}
+	for k := range c.Grid.Sections {
+		c.Grid.Sections[k].Points = len(s.steady.Sections[k].ZV)
+	}
+	c.Verdict = s.verdict(reqs)
+	c.Warnings = s.warnings()
+	return c
+}
+
+// verdict is the worst of settling, agreement and requirements.
+func (s *solved) verdict(reqs []record.Requirement) record.Verdict {
+	switch {
+	case !s.steady.Settling.Settled:
+		return record.Unsettle
+	case s.compared.Found() > s.design.Grid.Agreement || !s.compared.Explained():
+		return record.Disagree
+	}
+	v := record.Verified
+	for _, r := range reqs {
+		switch {
+		case r.Verdict == record.MissedReq:
+			return record.Missed
+		case r.Verdict == record.NotShownReq:
+			v = record.NotShown
+		}
+	}
+	return v
+}
+
+func (s *solved) steadyRecord(st *state) record.Steady {
+	src := s.net.Source
+	v := st.junctions[src.At]
+	out := record.Steady{Source: record.SteadySource{
+		V: v, I: st.source, Impedance: v / st.source,
+		Power: st.sourcePower(), Available: src.Available(),
+	}}
+	for k, sec := range s.net.Sections {
+		z0 := sec.Line.Impedance(s.net.Omega())
+		out.Sections = append(out.Sections, record.SteadySection{
+			Name: sec.Name,
+			From: st.end(k, 0, z0), To: st.end(k, 1, z0),
+			VoltageMax: record.Extreme{Value: st.voltage[k].largest.value, At: st.voltage[k].largest.at},
+			VoltageMin: record.Extreme{Value: st.voltage[k].smallest.value, At: st.voltage[k].smallest.at},
+			CurrentMax: record.Extreme{Value: st.current[k].largest.value, At: st.current[k].largest.at},
+			Loss:       st.sectionLoss(k),
+		})
+	}
+	for b, br := range s.net.Branches {
+		if br.Kind == network.Load {
+			out.Loads = append(out.Loads, record.SteadyLoad{
+				Name: br.Name, V: st.branchVoltage(b), I: st.branches[b], Power: st.branchPower(b),
+			})
+		}
+	}
+	for j, name := range s.net.Junctions {
+		out.Junctions = append(out.Junctions, record.SteadyJunction{Name: name, V: st.junctions[j]})
+	}
+	return out
+}
+
+func (s *state) end(k, e int, z0 complex128) record.End {
+	t := s.ends[k][e]
+	g := reflectionAt(s, k, e, z0)
+	return record.End{V: t.v, I: t.i, Impedance: t.v / t.i, Reflection: g, VSWR: vswrOf(g)}
+}
+
+func (s *solved) settlingRecord() record.Settling {
+	f := s.steady.Settling
+	out := record.Settling{
+		Settled: f.Settled, Time: f.Time, Periods: f.Periods,
+		Residual: f.Residual, LoopFactor: f.LoopFactor,
+		LongPath: f.LongPath, RoundTrip: 2 * f.LongPath,
+		Ramp: fdtd.RampPeriods * s.net.Period(),
+		Mean: f.Mean, Harmonic: f.Harmonic,
+		To1Percent: s.stress.SettleTime(-1, 0.01),
+	}
+	for _, c := range f.Curve {
+		out.Curve = append(out.Curve, record.SettlingPoint{Time: c.Time, Change: c.Change, Estimate: c.Estimate})
+	}
+	if !f.Settled {
+		out.Decay = decayText(f)
+	}
+	return out
+}
+
+// decayText says what an unsettled run measured.
+func decayText(f fdtd.Settling) string {
+	last := f.Curve[len(f.Curve)-1]
+	if f.LoopFactor <= 0 || f.LoopFactor >= 1 {
+		return fmt.Sprintf("after %d periods the phasors still change by %.2g of their largest every %.3g us, and the change does not fall",
+			f.Periods, last.Change, last.Gap*1e6)
+	}
+	return fmt.Sprintf("after %d periods the phasors still change by %.2g of their largest every %.3g us; each longest round trip (%.3g us) keeps %.4g of the amplitude",
+		f.Periods, last.Change, last.Gap*1e6, 2*f.LongPath*1e6, f.LoopFactor)
+}
+
+func (s *solved) stressRecord() record.Stress {
+	st := s.stress
+	out := record.Stress{
+		Profile: s.design.Source.Start.Text, Duration: st.Duration, Worst: st.Worst,
+		Voltage: s.peakRecord(st.Voltage), Current: s.peakRecord(st.Current),
+	}
+	out.Voltage.Uncertainty = s.stressed(func(t *fdtd.Stress) float64 { return t.Voltage.Value }).spread
+	out.Current.Uncertainty = s.stressed(func(t *fdtd.Stress) float64 { return t.Current.Value }).spread
+	steady := 0.0
+	for k, p := range st.Sections {
+		top := s.exact.voltage[k].largest.value
+		steady = math.Max(steady, top)
+		out.Sections = append(out.Sections, record.StressSection{
+			Name:    s.net.Sections[k].Name,
+			Voltage: p.Voltage.Value, VoltageAt: p.Voltage.At, VoltageTime: p.Voltage.Time,
+			Current: p.Current.Value, CurrentAt: p.Current.At, CurrentTime: p.Current.Time,
+			SteadyVoltage:      top,
+			VoltageUncertainty: s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Voltage.Value }).spread,
+			CurrentUncertainty: s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Current.Value }).spread,
+		})
+	}
+	out.Overshot = st.Voltage.Value/steady - 1
+	return out
+}
+
+func (s *solved) peakRecord(p fdtd.Peak) record.Peak {
+	phase := p.Phase
+	if !s.stress.Worst {
+		phase = s.net.Source.Start.Phase
+	}
+	name := ""
+	if p.Section >= 0 {
+		name = s.net.Sections[p.Section].Name
+	}
+	return record.Peak{Value: p.Value, Section: name, At: p.At, Time: p.Time, Phase: phase * 180 / pi}
+}
+
+func (s *solved) agreementRecord() record.Agreement {
+	a := &s.compared
+	out := record.Agreement{
+		Voltage: a.Voltage, Current: a.Current, RMS: a.RMS, Expected: a.Expected,
+		Limit: s.design.Grid.Agreement,
+		Worst: record.WorstPlace{Section: s.net.Sections[a.Worst.Section].Name, At: a.Worst.At, Quantity: "voltage"},
+	}
+	if a.Worst.Current {
+		out.Worst.Quantity = "current"
+	}
+	for k, sec := range a.Sections {
+		out.Sections = append(out.Sections, record.AgreementSection{
+			Name:    s.net.Sections[k].Name,
+			Voltage: sec.Voltage.Found, ExpectedVoltage: sec.Voltage.Expected,
+			VoltageAt: sec.Voltage.At, VoltageScale: sec.Voltage.Scale,
+			Current: sec.Current.Found, ExpectedCurrent: sec.Current.Expected,
+			CurrentAt: sec.Current.At, CurrentMax: sec.Current.Scale,
+		})
+	}
+	return out
+}
+
+func gridRecord(net *network.Network, g fdtd.Grid) record.Grid {
+	out := record.Grid{StepsPerPeriod: g.StepsPerPeriod, Step: g.Step}
+	for k, s := range net.Sections {
+		exact := s.Line.Propagation(net.Omega()) * complex(s.Length, 0)
+		out.Sections = append(out.Sections, record.GridSection{
+			Name: s.Name, Cells: g.Cells[k], Cell: s.Length / float64(g.Cells[k]),
+			Courant: g.Courant[k], CellsPerWavelength: g.CellsPerWavelength(net, k),
+			PhaseErrorDegrees: imag(g.Numerical(net, k).Exponent-exact) * 180 / pi,
+		})
+	}
+	return out
+}
+
+func (s *solved) profiles() []record.Profile {
+	var out []record.Profile
+	for k, w := range s.steady.Sections {
+		c, p := s.compared.Sections[k], s.stress.Sections[k]
+		out = append(out, record.Profile{
+			Section: s.net.Sections[k].Name,
+			ZV:      w.ZV, ZI: w.ZI, VF: w.V, IF: w.I,
+			VP: c.Voltage.Exact, IP: c.Current.Exact,
+			EV: c.Voltage.Allowed, EI: c.Current.Allowed,
+			PeakZV: p.ZV, PeakV: p.V, PeakZI: p.ZI, PeakI: p.I,
+		})
+	}
+	return out
+}
+
+// phase is the start phase that the waveforms are shown at: the design's own,
+// or that of the largest voltage.
+func (s *solved) phase() float64 {
+	if s.stress.Worst {
+		return s.stress.Voltage.Phase
+	}
+	return s.net.Source.Start.Phase
+}
+
+func (s *solved) waveforms() []record.Waveform {
+	t, src := s.stress.Traces, s.net.Source
+	name := s.net.Junctions[src.At]
+	out := []record.Waveform{
+		s.waveform(t.Junctions[src.At], s.found.junctions[src.At], "source voltage", name, "V"),
+		s.waveform(t.Source, s.found.source, "source current", name, "A"),
+	}
+	for j, n := range s.net.Junctions {
+		if j != src.At {
+			out = append(out, s.waveform(t.Junctions[j], s.exact.junctions[j], n+" voltage", n, "V"))
+		}
+	}
+	for b, br := range s.net.Branches {
+		if br.Kind == network.Load && !br.Open {
+			out = append(out, s.waveform(t.Branches[b], s.exact.branches[b], br.Name+" current", br.Name, "A"))
+		}
+	}
+	out[0].Tail.Phasor = s.tailPhasor(t.Junctions[src.At], s.exact.junctions[src.At])
+	out[1].Tail.Phasor = s.tailPhasor(t.Source, s.exact.source)
+	return out
+}
+
+func (s *solved) waveform(t fdtd.Trace, p complex128, name, where, unit string) record.Waveform {
+	dt := s.stress.Traces.Step
+	// At mixes the lanes; a fixed start phase is in its one lane already.
+	whole, tail := t.At(s.phase())
+	if !s.stress.Worst {
+		whole, tail = t.A, t.Tail
+	}
+	quantity := "voltage"
+	if unit == "A" {
+		quantity = "current"
+	}
+	return record.Waveform{
+		Name: name, Where: where, Quantity: quantity, Unit: unit,
+		Start: (float64(s.stress.Traces.First) - t.Early) * dt, Step: dt, Samples: whole,
+		Tail: record.Tail{
+			Start: s.tailStart(t), Step: dt, Samples: tail, Phasor: s.tailPhasor(t, p),
+		},
+	}
+}
+
+func (s *solved) tailStart(t fdtd.Trace) float64 {
+	return (float64(s.stress.Traces.TailEnd-len(t.Tail)+1) - t.Early) * s.stress.Traces.Step
+}
+
+// tailPhasor is Re(p e^{j(wt + phase)}) at the samples of the tail.
+func (s *solved) tailPhasor(t fdtd.Trace, p complex128) []float64 {
+	out := make([]float64, len(t.Tail))
+	start := s.tailStart(t)
+	for i := range out {
+		at := start + float64(i)*s.stress.Traces.Step
+		out[i] = real(p * cmplx.Rect(1, s.net.Omega()*at+s.phase()))
+	}
+	return out
+}
+
+// model echoes the network in every equivalent form.
+func (s *solved) model() record.Model {
+	d, net := s.design, s.net
+	out := record.Model{Frequency: net.Frequency, Junctions: net.Junctions}
+	for k, sec := range net.Sections {
+		g := sec.Line.Propagation(net.Omega())
+		w := imag(g) * sec.Length / (2 * pi)
+		out.Sections = append(out.Sections, record.ModelSection{
+			Name: sec.Name, Line: d.Sections[k].Line, From: d.Sections[k].From, To: d.Sections[k].To,
+			Given: d.Sections[k].Length.Text, Length: sec.Length,
+			Wavelengths: w, Degrees: 360 * w, Delay: sec.Delay(),
+			LossDB: real(g) * sec.Length * line.NeperDB,
+			Z0:     sec.Line.Impedance(net.Omega()), VelocityFactor: net.Omega() / imag(g) / line.C0,
+			R: sec.Line.R, L: sec.Line.L, G: sec.Line.G, C: sec.Line.C,
+		})
+	}
+	for b, br := range net.Branches {
+		if b < len(d.Loads) {
+			out.Loads = append(out.Loads, part(net, br, d.Loads[b]))
+		} else {
+			out.Elements = append(out.Elements, part(net, br, d.Elements[b-len(d.Loads)]))
+		}
+	}
+	out.Source = s.modelSource()
+	return out
+}
+
+func (s *solved) modelSource() record.ModelSource {
+	d, src := s.design.Source, s.net.Source
+	out := record.ModelSource{
+		At: d.At, Given: d.EMF.Text, EMF: src.EMF,
+		R: src.R, L: src.L, C: src.C, Impedance: src.Impedance(s.net.Omega()),
+		Start: d.Start.Text,
+	}
+	if d.Available != nil {
+		out.Given = d.Available.Text + " available"
+	}
+	if a := src.Available(); !math.IsInf(a, 1) {
+		out.Available = a
+	}
+	if d.Stop != nil {
+		out.Stop = d.Stop.Text
+	}
+	return out
+}

@@ -1,0 +1,299 @@
+package sim
+
+import (
+	"fmt"
+	"math"
+	"math/cmplx"
+	"slices"
+	"strings"
+
+	"linewitness/fdtd"
+	"linewitness/sim/design"
+	"linewitness/sim/record"
+)
+
+// A judgement is one limit of a requirement to be judged in one case, in SI
+// units.
+type judgement struct {
+	req      design.Requirement
+	subject  string
+	min, max *design.Limit
+	values   []witnessed
+	spread   float64 // uncertainty, SI
+	unit     string  // of limits given without one
+	note     string
+}
+
+// witnessed is a value and the witness who gave it.
+type witnessed struct {
+	value  float64
+	method string
+}
+
+// The names of the methods in a record.
+const (
+	byPhasor = "phasor"
+	byFDTD   = "fdtd"
+	fdtdOnly = "fdtd only"
+	byBoth   = "both"
+)
+
+// judge judges the requirements of a design in one case; all holds every
+// solved case by name.
+func judge(c *solved, all map[string]*solved) []record.Requirement {
+	var out []record.Requirement
+	b := newBudget(c.net, &c.compared)
+	for _, r := range c.design.Requirements {
+		if !slices.Contains(r.Cases, c.name) {
+			continue
+		}
+		for _, j := range c.judgements(r, b, all) {
+			out = append(out, j.record())
+		}
+	}
+	return out
+}
+
+// judgements is one judgement for most requirements, and one for each window
+// of an impedance.
+func (c *solved) judgements(r design.Requirement, b *budget, all map[string]*solved) []judgement {
+	one := judgement{req: r, subject: subject(r), min: r.Min, max: r.Max}
+	switch r.Quantity {
+	case design.InputImpedance:
+		return c.impedance(one, b)
+	case design.PeakVoltage, design.PeakCurrent:
+		p := c.peak(r)
+		one.values = []witnessed{{p.value, fdtdOnly}}
+		one.spread = p.spread
+		one.note = c.stressNote()
+	case design.Overshoot:
+		c.overshoot(&one)
+	case design.SettleTime:
+		c.settleTime(&one)
+	case design.Agreement:
+		one.values = []witnessed{{c.compared.Found(), byBoth}}
+	default:
+		c.steadyValues(&one, b, all)
+	}
+	return []judgement{one}
+}
+
+// steadyValues fills a judgement of the steady state, or of its change from
+// another case.
+func (c *solved) steadyValues(j *judgement, b *budget, all map[string]*solved) {
+	q := finder{c.net}.steady(j.req)
+	j.values = []witnessed{{q(c.exact), byPhasor}, {q(c.found), byFDTD}}
+	j.spread = c.spreadOf(j.req, q, b)
+	if j.req.RelativeTo != "" {
+		ref := all[j.req.RelativeTo]
+		p := finder{ref.net}.steady(j.req)
+		exact, found := p(ref.exact), p(ref.found)
+		j.values[0].value = relative(j.req, j.values[0].value, exact)
+		j.values[1].value = relative(j.req, j.values[1].value, found)
+		refSpread := ref.spreadOf(j.req, p, newBudget(ref.net, &ref.compared))
+		j.spread = relativeSpread(j.req, q(c.exact), j.spread) + relativeSpread(j.req, exact, refSpread)
+	}
+	if angular(j.req.Quantity) {
+		centre := j.centre()
+		for i := range j.values {
+			j.values[i].value = centre + math.Remainder(j.values[i].value-centre, 2*pi)
+		}
+	}
+}
+
+// spreadOf is the uncertainty of a quantity, the larger of the two
+// witnesses'. An angle is followed from its own value, so that it does not
+// jump by a turn.
+func (c *solved) spreadOf(r design.Requirement, q quantity, b *budget) float64 {
+	worst := 0.0
+	for _, s := range []*state{c.exact, c.found} {
+		f := q
+		if angular(r.Quantity) {
+			base := q(s)
+			f = func(s *state) float64 { return base + math.Remainder(q(s)-base, 2*pi) }
+		}
+		worst = math.Max(worst, b.spread(s, f))
+	}
+	return worst
+}
+
+func angular(q design.Quantity) bool {
+	return q == design.Phase || q == design.PhaseDifference
+}
+
+// relative is a value's change from its reference: an angle's difference, a
+// power's or a voltage's ratio in dB.
+func relative(r design.Requirement, v, ref float64) float64 {
+	switch r.Quantity {
+	case design.Phase:
+		return math.Remainder(v-ref, 2*pi)
+	case design.LoadPower:
+		return 10 * math.Log10(v/ref)
+	default:
+		return 20 * math.Log10(v/ref)
+	}
+}
+
+// relativeSpread is what an uncertainty of v makes of the change.
+func relativeSpread(r design.Requirement, v, spread float64) float64 {
+	switch r.Quantity {
+	case design.Phase:
+		return spread
+	case design.LoadPower:
+		return 10 / math.Ln10 * spread / v
+	default:
+		return 20 / math.Ln10 * spread / v
+	}
+}
+
+// centre is the middle of the window of an angle, so that a value just
+// outside it is not a turn away; 0 with one limit only.
+func (j *judgement) centre() float64 {
+	if j.min != nil && j.max != nil {
+		return (j.min.SI + j.max.SI) / 2
+	}
+	return 0
+}
+
+// impedance makes a judgement of each window on an input impedance.
+func (c *solved) impedance(one judgement, b *budget) []judgement {
+	f := finder{c.net}
+	var out []judgement
+	add := func(what string, min, max *design.Limit, part func(complex128) float64) {
+		q := func(s *state) float64 { return part(f.impedance(s, one.req)) }
+		j := one
+		j.subject += ", " + what
+		j.min, j.max, j.unit = min, max, "ohm"
+		j.values = []witnessed{{q(c.exact), byPhasor}, {q(c.found), byFDTD}}
+		j.spread = c.spreadOf(one.req, q, b)
+		out = append(out, j)
+	}
+	if w := one.req.R; w != nil {
+		add("resistance", w.Min, w.Max, func(z complex128) float64 { return real(z) })
+	}
+	if w := one.req.X; w != nil {
+		add("reactance", w.Min, w.Max, func(z complex128) float64 { return imag(z) })
+	}
+	if w := one.req.Within; w != nil {
+		limit := &design.Limit{SI: w.Radius, Unit: "ohm", Text: w.Text}
+		add("distance from centre", nil, limit, func(z complex128) float64 { return cmplx.Abs(z - w.Of) })
+	}
+	return out
+}
+
+// A stressed value is a peak with its uncertainty.
+type stressed struct{ value, spread float64 }
+
+// peak is the largest voltage or current along a section, at a junction, or
+// anywhere.
+func (c *solved) peak(r design.Requirement) stressed {
+	f := finder{c.net}
+	pick := func(s *fdtd.Stress) float64 {
+		v := r.Quantity == design.PeakVoltage
+		switch {
+		case r.Section != "" && v:
+			return s.Sections[f.section(r.Section)].Voltage.Value
+		case r.Section != "":
+			return s.Sections[f.section(r.Section)].Current.Value
+		case r.At != "" && v:
+			return s.Junctions[f.junction(r.At)].Value
+		case r.At != "":
+			return peakCurrentAt(c, s, f.junction(r.At))
+		case v:
+			return largestVoltage(s)
+		}
+		top := s.Current.Value
+		for j := range c.net.Junctions {
+			top = math.Max(top, peakCurrentAt(c, s, j))
+		}
+		return top
+	}
+	return c.stressed(pick)
+}
+
+func largestVoltage(s *fdtd.Stress) float64 {
+	top := s.Voltage.Value
+	for _, p := range s.Junctions {
+		top = math.Max(top, p.Value)
+	}
+	return top
+}
+
+// peakCurrentAt is the largest current of anything that ends at junction j.
+func peakCurrentAt(c *solved, s *fdtd.Stress, j int) float64 {
+	top := 0.0
+	if c.net.Source.At == j {
+		top = s.Source.Value
+	}
+	for b, br := range c.net.Branches {
+		if br.A == j || br.B == j {
+			top = math.Max(top, s.Branches[b].Value)
+		}
+	}
+	for k, sec := range c.net.Sections {
+		if sec.From == j {
+			top = math.Max(top, s.Sections[k].FromCurrent)
+		}
+		if sec.To == j {
+			top = math.Max(top, s.Sections[k].ToCurrent)
+		}
+	}
+	return top
+}
+
+func (c *solved) overshoot(j *judgement) {
+	r := j.req
+	f := finder{c.net}
+	r.Quantity = design.SteadyVoltage
+	steady := f.steady(r)(c.exact)
+	r.Quantity = design.PeakVoltage
+	p := c.peak(r)
+	j.values = []witnessed{{p.value/steady - 1, fdtdOnly}}
+	j.spread = p.spread / steady
+	j.note = c.stressNote()
+}
+
+func (c *solved) settleTime(j *judgement) {
+	at := -1
+	if j.req.At != "" {
+		at = finder{c.net}.junction(j.req.At)
+	}
+	s := c.stressed(func(s *fdtd.Stress) float64 { return s.SettleTime(at, j.req.Settled) })
+	j.values = []witnessed{{s.value, fdtdOnly}}
+	j.spread = s.spread
+	if math.IsNaN(s.value) {
+		j.note = fmt.Sprintf("not within %.3g %% when the run ended after %.3g us", j.req.Settled*100, c.stress.Duration*1e6)
+	}
+}
+
+// subject says in words what a requirement is about.
+func subject(r design.Requirement) string {
+	var parts []string
+	add := func(s string) { parts = append(parts, s) }
+	switch {
+	case r.Section != "" && r.End != "":
+		add(fmt.Sprintf("%s, %s end", r.Section, r.End))
+	case r.Section != "":
+		add("along " + r.Section)
+	case r.At != "":
+		add("at " + r.At)
+	case r.Load != "":
+		add(r.Load)
+	case r.Between[0] != "":
+		add(r.Between[0] + " to " + r.Between[1])
+	case r.Quantity == design.Efficiency:
+		add("all loads")
+	default:
+		add("whole network")
+	}
+	if r.Quantity == design.SettleTime {
+		add(fmt.Sprintf("to %.3g %%", r.Settled*100))
+	}
+	if r.Reference != nil {
+		add("reference " + r.Reference.Text)
+	}
+	if r.RelativeTo != "" {
+		add("change from " + r.RelativeTo)
+	}
+	return strings.Join(parts, ", ")
+}

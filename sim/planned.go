@@ -1,0 +1,138 @@
+package sim
+
+import (
+	"fmt"
+	"math"
+
+	"linewitness/fdtd"
+	"linewitness/phasor"
+	"linewitness/sim/design"
+	"linewitness/sim/network"
+)
+
+// A planned case is ready to be solved.
+type planned struct {
+	name   string
+	design *design.Design
+	net    *network.Network
+	grid   *gridding
+	coarse *fdtd.Grid // for the second stress run, nil if none is coarser
+	plan   PlanCase
+}
+
+// planAll plans the nominal design and every case.
+func planAll(f *design.File) ([]*planned, error) {
+	all := []*planned{}
+	for _, c := range append([]design.Case{{Name: Nominal, Design: f.Nominal}}, f.Cases...) {
+		p, err := newPlanned(c.Name, c.Design)
+		if err != nil {
+			return nil, fmt.Errorf("case %s: %w", c.Name, err)
+		}
+		all = append(all, p)
+	}
+	return all, nil
+}
+
+// Nominal is the name of the design as it stands, beside its cases.
+const Nominal = "nominal"
+
+func newPlanned(name string, d *design.Design) (*planned, error) {
+	p := &planned{name: name, design: d, net: Network(d)}
+	var err error
+	if p.grid, err = chooseGrid(p.net, d.Grid.CellsPerWavelength, d.Grid.Agreement); err != nil {
+		return nil, err
+	}
+	p.coarse = coarser(p.net, p.grid.grid)
+	p.predict()
+	return p, nil
+}
+
+// coarser is a grid with about half the steps, or nil if short sections do not
+// allow one clearly coarser.
+func coarser(net *network.Network, g fdtd.Grid) *fdtd.Grid {
+	c, err := fdtd.NewGrid(net, float64(g.StepsPerPeriod)/2)
+	if err != nil || 4*c.StepsPerPeriod > 3*g.StepsPerPeriod {
+		return nil
+	}
+	return &c
+}
+
+// predict fills the plan: how long the runs will be and what they will cost.
+func (p *planned) predict() {
+	g, path := p.grid.grid, fdtd.LongestPath(p.net)
+	rate := phasor.Decay(p.net)
+	p.plan = PlanCase{
+		Name:          p.name,
+		Grid:          gridRecord(p.net, g),
+		Cells:         g.TotalCells(),
+		LongPath:      path,
+		LoopFactor:    math.Exp(-rate * 2 * path),
+		ExpectedError: p.grid.error,
+	}
+	limit := p.design.Grid.MaxPeriods
+	p.plan.SettlePeriods = min(limit, p.settlePeriods(rate, path))
+	p.plan.StressPeriods = min(limit, p.stressPeriods(rate, path))
+	if p.plan.SettlePeriods == limit {
+		p.plan.Warnings = append(p.plan.Warnings, fmt.Sprintf(
+			"the settling run is predicted to reach its cap of %d periods: it may end as not settled", limit))
+	}
+	lanes := 1.0
+	if p.net.Source.Start.Worst {
+		lanes = 2
+	}
+	settle := g.Updates(p.plan.SettlePeriods)
+	stress := g.Updates(p.plan.StressPeriods) * lanes
+	if p.coarse != nil {
+		stress += p.coarse.Updates(p.plan.StressPeriods) * lanes
+	}
+	p.plan.Grid.Updates = settle + stress
+	p.plan.Seconds = settle/settleRate + stress/stressRate
+	p.plan.Bytes = p.bytes(lanes)
+}
+
+// settlePeriods predicts the settling run: the rule of fdtd.Settle with
+// changes that fall as e^{-rate t} after the ramp.
+func (p *planned) settlePeriods(rate, path float64) int {
+	t := p.net.Period()
+	tol := p.design.Grid.SettleTolerance
+	trip := math.Max(1, math.Ceil(2*path/t-1e-9))
+	least := math.Max(fdtd.RampPeriods+trip+1, 4*trip)
+	decay := math.Log(1/tol) / rate / t
+	if math.IsNaN(decay) { // not predicted
+		decay = 20 * trip
+	}
+	n := math.Max(least, fdtd.RampPeriods+decay)
+	return clampInt(trip * (math.Ceil(n/trip) + 1))
+}
+
+// stressPeriods predicts the stress run: to rest within a thousandth, and a
+// round trip to see that it stays.
+func (p *planned) stressPeriods(rate, path float64) int {
+	t, src := p.net.Period(), p.net.Source
+	decay := math.Log(1e3) / rate
+	if math.IsNaN(decay) {
+		decay = 20 * 2 * path
+	}
+	end := src.Start.Rise
+	if src.Stop != nil {
+		end = src.Stop.At + src.Stop.Fall
+	}
+	return clampInt(math.Ceil((end+path+decay+2*path)/t) + 2)
+}
+
+func clampInt(v float64) int {
+	if !(v < math.MaxInt32) {
+		return math.MaxInt32
+	}
+	return int(v)
+}
+
+// bytes predicts the memory of a case: the state and the running peaks of
+// every cell, one recorded period, and the traces.
+func (p *planned) bytes(lanes float64) float64 {
+	g := p.grid.grid
+	cells := float64(g.TotalCells())
+	points := math.Min(2*cells, 2*4096*float64(len(g.Cells)))
+	recorder := math.Min(points*float64(g.StepsPerPeriod), 8<<20) * 8
+	return cells*(16+16*lanes+16) + points*16*8 + recorder + 3*16<<20
+}

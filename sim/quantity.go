@@ -1,0 +1,237 @@
+package sim
+
+import (
+	"math"
+	"math/cmplx"
+
+	"linewitness/sim/design"
+	"linewitness/sim/network"
+)
+
+// A quantity is a steady-state quantity in SI units (dB for ratios that are
+// stated so, radians for angles) as a function of a witness's state.
+type quantity func(*state) float64
+
+// total is the reflection above which rounding cannot tell from a total one.
+const total = 1 - 1e-12
+
+// vswrOf is (1+|g|)/(1-|g|), +Inf for a total reflection.
+func vswrOf(g complex128) float64 {
+	a := cmplx.Abs(g)
+	if a >= total {
+		return math.Inf(1)
+	}
+	return (1 + a) / (1 - a)
+}
+
+// reflectionAt is (Z - Z0)/(Z + Z0) of the impedance seen along section k at
+// an end, written (V - Z0 I)/(V + Z0 I) so that an open end has one too. At
+// the To end that is the impedance of what follows.
+func reflectionAt(s *state, k, end int, z0 complex128) complex128 {
+	t := s.ends[k][end]
+	return (t.v - z0*t.i) / (t.v + z0*t.i)
+}
+
+// finder finds the parts of a network by name. A name that leads nowhere is a
+// mistake of package design.
+type finder struct{ net *network.Network }
+
+func (f finder) section(name string) int {
+	for k, s := range f.net.Sections {
+		if s.Name == name {
+			return k
+		}
+	}
+	panic("sim: requirement names a section that the case does not have")
+}
+
+func (f finder) junction(name string) int {
+	for j, n := range f.net.Junctions {
+		if n == name {
+			return j
+		}
+	}
+	panic("sim: requirement names a junction that the case does not have")
+}
+
+func (f finder) load(name string) int {
+	for b, br := range f.net.Branches {
+		if br.Kind == network.Load && br.Name == name {
+			return b
+		}
+	}
+	panic("sim: requirement names a load that the case does not have")
+}
+
+// voltage finds the phasor of a junction, or of a load across it, by name.
+func (f finder) voltage(name string) func(*state) complex128 {
+	for b, br := range f.net.Branches {
+		if br.Kind == network.Load && br.Name == name {
+			return func(s *state) complex128 { return s.branchVoltage(b) }
+		}
+	}
+	j := f.junction(name)
+	return func(s *state) complex128 { return s.junctions[j] }
+}
+
+// steady gives the quantity that a requirement limits, or nil if it is not
+// one of the steady state.
+func (f finder) steady(r design.Requirement) quantity {
+	switch r.Quantity {
+	case design.VSWR:
+		return func(s *state) float64 { return vswrOf(f.reflection(s, r)) }
+	case design.Reflection:
+		return func(s *state) float64 { return cmplx.Abs(f.reflection(s, r)) }
+	case design.ReturnLoss:
+		return func(s *state) float64 { return -20 * math.Log10(cmplx.Abs(f.reflection(s, r))) }
+	case design.SteadyVoltage:
+		return f.steadyVoltage(r)
+	case design.SteadyCurrent:
+		return f.steadyCurrent(r)
+	case design.LoadPower:
+		b := f.load(r.Load)
+		return func(s *state) float64 { return s.branchPower(b) }
+	case design.Efficiency:
+		return f.efficiency(r)
+	case design.Loss:
+		return f.loss(r)
+	case design.Phase:
+		name := r.At
+		if r.Load != "" {
+			name = r.Load
+		}
+		v := f.voltage(name)
+		return func(s *state) float64 { return cmplx.Phase(v(s)) }
+	case design.PhaseDifference:
+		a, b := f.voltage(r.Between[0]), f.voltage(r.Between[1])
+		return func(s *state) float64 { return cmplx.Phase(a(s) * cmplx.Conj(b(s))) }
+	case design.PowerSplit:
+		a, b := f.load(r.Between[0]), f.load(r.Between[1])
+		return func(s *state) float64 { return 10 * math.Log10(s.branchPower(a)/s.branchPower(b)) }
+	}
+	return nil
+}
+
+// endOf is 0 for the From end and 1 for the To end.
+func endOf(name string) int {
+	if name == "to" {
+		return 1
+	}
+	return 0
+}
+
+func (f finder) reflection(s *state, r design.Requirement) complex128 {
+	k := f.section(r.Section)
+	z0 := f.net.Sections[k].Line.Impedance(f.net.Omega())
+	if r.Reference != nil {
+		z0 = complex(r.Reference.SI, 0)
+	}
+	return reflectionAt(s, k, endOf(r.End), z0)
+}
+
+// impedance is V/I at the end of a section, ohm.
+func (f finder) impedance(s *state, r design.Requirement) complex128 {
+	t := s.ends[f.section(r.Section)][endOf(r.End)]
+	return t.v / t.i
+}
+
+func (f finder) steadyVoltage(r design.Requirement) quantity {
+	switch {
+	case r.Section != "":
+		k := f.section(r.Section)
+		return func(s *state) float64 { return s.voltage[k].largest.value }
+	case r.At != "":
+		j := f.junction(r.At)
+		return func(s *state) float64 { return cmplx.Abs(s.junctions[j]) }
+	}
+	return func(s *state) float64 {
+		top := 0.0
+		for _, e := range s.voltage {
+			top = math.Max(top, e.largest.value)
+		}
+		for _, v := range s.junctions {
+			top = math.Max(top, cmplx.Abs(v))
+		}
+		return top
+	}
+}
+
+func (f finder) steadyCurrent(r design.Requirement) quantity {
+	switch {
+	case r.Section != "":
+		k := f.section(r.Section)
+		return func(s *state) float64 { return s.current[k].largest.value }
+	case r.At != "":
+		j := f.junction(r.At)
+		return func(s *state) float64 { return s.largestCurrentAt(j) }
+	}
+	return func(s *state) float64 {
+		top := 0.0
+		for _, e := range s.current {
+			top = math.Max(top, e.largest.value)
+		}
+		for j := range s.junctions {
+			top = math.Max(top, s.largestCurrentAt(j))
+		}
+		return top
+	}
+}
+
+// largestCurrentAt is the largest current of anything that ends at junction j.
+func (s *state) largestCurrentAt(j int) float64 {
+	top := 0.0
+	if s.net.Source.At == j {
+		top = cmplx.Abs(s.source)
+	}
+	for b, br := range s.net.Branches {
+		if br.A == j || br.B == j {
+			top = math.Max(top, cmplx.Abs(s.branches[b]))
+		}
+	}
+	for k, sec := range s.net.Sections {
+		for end, at := range []int{sec.From, sec.To} {
+			if at == j {
+				top = math.Max(top, cmplx.Abs(s.ends[k][end].i))
+			}
+		}
+	}
+	return top
+}
+
+// efficiency is the power into a load, or into all loads, over the power
+// that the source delivers.
+func (f finder) efficiency(r design.Requirement) quantity {
+	return func(s *state) float64 {
+		p := 0.0
+		for b, br := range f.net.Branches {
+			if br.Kind == network.Load && (r.Load == "" || br.Name == r.Load) {
+				p += s.branchPower(b)
+			}
+		}
+		return p / s.sourcePower()
+	}
+}
+
+// loss in dB is, of a section, the power that enters it over the power that
+// leaves it; of a load, the available power (for an ideal source the
+// delivered power) over the power into the load.
+func (f finder) loss(r design.Requirement) quantity {
+	if r.Section != "" {
+		k := f.section(r.Section)
+		return func(s *state) float64 {
+			in, out := power(s.ends[k][0].v, s.ends[k][0].i), power(s.ends[k][1].v, s.ends[k][1].i)
+			if in < 0 { // the power flows from To to From
+				in, out = -out, -in
+			}
+			return 10 * math.Log10(in/out)
+		}
+	}
+	b := f.load(r.Load)
+	return func(s *state) float64 {
+		p := f.net.Source.Available()
+		if math.IsInf(p, 1) {
+			p = s.sourcePower()
+		}
+		return 10 * math.Log10(p/s.branchPower(b))
+	}
+}

@@ -1,0 +1,98 @@
+package sim
+
+import (
+	"context"
+	"math"
+
+	"linewitness/fdtd"
+	"linewitness/phasor"
+	"linewitness/sim/agree"
+	"linewitness/sim/design"
+	"linewitness/sim/network"
+)
+
+// A solved case has both witnesses' answers and their comparison, not yet
+// judged.
+type solved struct {
+	name     string
+	design   *design.Design
+	net      *network.Network
+	grid     *gridding
+	phasor   *phasor.Solution
+	steady   *fdtd.Steady
+	stress   *fdtd.Stress
+	coarse   *fdtd.Stress // the stress run again on a coarser grid, nil if there is none
+	compared agree.Result
+	exact    *state // of the phasor witness
+	found    *state // of the time-domain witness
+}
+
+// solve runs both witnesses on a planned case.
+func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, error) {
+	set := fdtd.Settings{
+		Tolerance:  p.design.Grid.SettleTolerance,
+		MaxPeriods: p.design.Grid.MaxPeriods,
+		Progress:   progress,
+	}
+	s := &solved{name: p.name, design: p.design, net: p.net, grid: p.grid, phasor: p.grid.exact}
+	var err error
+	if s.steady, err = fdtd.Settle(ctx, p.net, p.grid.grid, set); err != nil {
+		return nil, err
+	}
+	if s.stress, err = fdtd.StressRun(ctx, p.net, s.steady, set); err != nil {
+		return nil, err
+	}
+	if p.coarse != nil {
+		again := *s.steady
+		again.Grid = *p.coarse
+		if s.coarse, err = fdtd.StressRun(ctx, p.net, &again, set); err != nil {
+			return nil, err
+		}
+	}
+	s.compare()
+	return s, nil
+}
+
+func (s *solved) compare() {
+	var samples []agree.Samples
+	for _, w := range s.steady.Sections {
+		samples = append(samples, agree.Samples{ZV: w.ZV, V: w.V, ZI: w.ZI, I: w.I})
+	}
+	g, residual := s.grid, s.steady.Settling.Residual
+	s.compared = agree.Compare(samples, g.exact, g.discrete, g.waves, residual)
+	s.exact = phasorState(s.net, s.phasor)
+	s.found = fdtdState(s.net, s.steady)
+}
+
+// stressed takes a value from the stress runs, with its uncertainty: the
+// change from the coarser grid, and what the largest sample may miss of the
+// true crest. With two lanes (every start phase) nothing is missed between
+// samples but in the envelope, which is far smoother.
+func (s *solved) stressed(pick func(*fdtd.Stress) float64) stressed {
+	v := pick(s.stress)
+	out := stressed{value: v}
+	if s.coarse != nil {
+		out.spread = math.Abs(v - pick(s.coarse))
+	}
+	if !s.stress.Worst {
+		out.spread += v * (1 - math.Cos(pi/float64(s.stress.Grid.StepsPerPeriod)))
+	}
+	return out
+}
+
+// stressNote says what is to be known of the peaks of this case.
+func (s *solved) stressNote() string {
+	switch {
+	case !s.stress.Complete:
+		return "the run ended before the network was at rest"
+	case s.coarse == nil:
+		return "one grid only: no uncertainty of the peak but that between samples"
+	}
+	return ""
+}
+
+// cost of the runs, for the plan and the progress.
+const (
+	settleRate = 6e8 // cell updates per second of a settling run, one core
+	stressRate = 2e8 // likewise of a stress run, each lane counted
+)

@@ -1,0 +1,135 @@
+package sim
+
+import (
+	"math"
+	"math/cmplx"
+
+	"linewitness/fdtd"
+	"linewitness/phasor"
+	"linewitness/sim/network"
+)
+
+const pi = math.Pi
+
+// A state is one witness's steady state in the one form in which quantities
+// are taken from it: the terminal phasors, and the extremes along sections.
+type state struct {
+	net       *network.Network
+	junctions []complex128
+	branches  []complex128
+	source    complex128
+	ends      []endPair
+	voltage   []extremes // of each section
+	current   []extremes
+}
+
+// endPair is a section's two ends, the From end first.
+type endPair [2]terminal
+
+type terminal struct{ v, i complex128 }
+
+type extremes struct{ largest, smallest extreme }
+
+type extreme struct{ value, at float64 }
+
+// phasorState takes the closed form.
+func phasorState(net *network.Network, s *phasor.Solution) *state {
+	out := &state{net: net, source: s.Source()}
+	for j := range net.Junctions {
+		out.junctions = append(out.junctions, s.Junction(j))
+	}
+	for b := range net.Branches {
+		out.branches = append(out.branches, s.Branch(b))
+	}
+	for k, sec := range net.Sections {
+		out.ends = append(out.ends, endPair{
+			{s.Voltage(k, 0), s.Current(k, 0)},
+			{s.Voltage(k, sec.Length), s.Current(k, sec.Length)},
+		})
+		out.voltage = append(out.voltage, closedExtremes(s.VoltageExtremes(k)))
+		out.current = append(out.current, closedExtremes(s.CurrentExtremes(k)))
+	}
+	return out
+}
+
+func closedExtremes(largest, smallest phasor.Extreme) extremes {
+	return extremes{extreme(extreme{largest.Value, largest.At}), extreme{smallest.Value, smallest.At}}
+}
+
+// fdtdState takes the time-domain steady state.
+func fdtdState(net *network.Network, s *fdtd.Steady) *state {
+	out := &state{net: net, junctions: s.Junctions, branches: s.Branches, source: s.Source}
+	for _, w := range s.Sections {
+		out.ends = append(out.ends, endPair{{w.VFrom, w.IFrom}, {w.VTo, w.ITo}})
+		out.voltage = append(out.voltage, gridExtremes(w.ZV, w.V))
+		// The ends carry the current of the half cells too.
+		k := len(out.ends) - 1
+		z := append(append([]float64{0}, w.ZI...), net.Sections[k].Length)
+		i := append(append([]complex128{w.IFrom}, w.I...), w.ITo)
+		out.current = append(out.current, gridExtremes(z, i))
+	}
+	return out
+}
+
+// gridExtremes finds the extremes of |p| between the points of a grid. The
+// square of a standing wave is a sinusoid of twice the wavenumber, so a
+// parabola through three points of the square misses it in the fourth order.
+func gridExtremes(z []float64, p []complex128) extremes {
+	sq := make([]float64, len(p))
+	for i, v := range p {
+		sq[i] = real(v)*real(v) + imag(v)*imag(v)
+	}
+	hi, lo := 0, 0
+	for i := range sq {
+		if sq[i] > sq[hi] {
+			hi = i
+		}
+		if sq[i] < sq[lo] {
+			lo = i
+		}
+	}
+	return extremes{vertex(z, sq, hi), vertex(z, sq, lo)}
+}
+
+// vertex is the extreme of the parabola through point i and its neighbours.
+func vertex(z, sq []float64, i int) extreme {
+	root := func(v float64) float64 { return math.Sqrt(math.Max(0, v)) }
+	if i == 0 || i == len(sq)-1 {
+		return extreme{root(sq[i]), z[i]}
+	}
+	x0, x1 := z[i-1]-z[i], z[i+1]-z[i]
+	d0, d1 := (sq[i-1]-sq[i])/x0, (sq[i+1]-sq[i])/x1
+	a := (d1 - d0) / (x1 - x0)
+	b := d0 - a*x0
+	if a == 0 {
+		return extreme{root(sq[i]), z[i]}
+	}
+	x := math.Max(x0, math.Min(x1, -b/(2*a)))
+	return extreme{root(sq[i] + b*x + a*x*x), z[i] + x}
+}
+
+// branchVoltage is VA - VB of a branch.
+func (s *state) branchVoltage(b int) complex128 {
+	br := s.net.Branches[b]
+	v := s.junctions[br.A]
+	if br.B != network.Ground {
+		v -= s.junctions[br.B]
+	}
+	return v
+}
+
+// power is Re(V I*)/2, W, for peak phasors.
+func power(v, i complex128) float64 { return real(v*cmplx.Conj(i)) / 2 }
+
+func (s *state) branchPower(b int) float64 { return power(s.branchVoltage(b), s.branches[b]) }
+
+// sourcePower is the power that the source delivers, W.
+func (s *state) sourcePower() float64 {
+	return power(s.junctions[s.net.Source.At], s.source)
+}
+
+// sectionLoss is the power that goes into a section and does not come out, W.
+func (s *state) sectionLoss(k int) float64 {
+	e := s.ends[k]
+	return power(e[0].v, e[0].i) - power(e[1].v, e[1].i)
+}

@@ -1,0 +1,73 @@
+package sim
+
+import (
+	"fmt"
+	"math"
+
+	"linewitness/sim/design"
+)
+
+// warnings are what a reader of the record must know to trust the numbers no
+// further than they go.
+func (s *solved) warnings() []string {
+	var out []string
+	say := func(format string, args ...any) { out = append(out, fmt.Sprintf(format, args...)) }
+	if !s.steady.Settling.Settled {
+		say("steady state was not reached: %s", decayText(s.steady.Settling))
+	}
+	if !s.compared.Explained() {
+		say("the methods differ by more than the grid and the settling residual explain")
+	}
+	if s.abrupt() {
+		say("the source switches without a rise time: peaks are those of an ideal step on this grid, and need not converge with it; give the real rise of the source")
+	}
+	if !s.stress.Complete {
+		say("the stress run ended after %.3g us before the network was at rest; a later peak is not excluded", s.stress.Duration*1e6)
+	}
+	if s.coarse == nil {
+		say("the stress peaks come from one grid: a section is too short for a coarser one")
+	} else if v, c := largestVoltage(s.stress), largestVoltage(s.coarse); math.Abs(v-c) > peakChange*v {
+		say("the largest voltage changed by %.2g %% from a grid half as fine (%.4g V to %.4g V)", 100*math.Abs(v-c)/v, c, v)
+	}
+	if !s.stress.Traces.Full {
+		say("the waveforms are kept to %.3g us only", float64(len(s.stress.Traces.Source.A))*s.stress.Grid.Step*1e6)
+	}
+	s.thinned(say)
+	s.realised(say)
+	return out
+}
+
+// peakChange is the change of the largest voltage from grid to grid that a
+// reader is told of: "two grids agreeing to 1 %".
+const peakChange = 0.01
+
+func (s *solved) abrupt() bool {
+	src := s.net.Source
+	return src.Start.Rise == 0 || src.Stop != nil && src.Stop.Fall == 0
+}
+
+func (s *solved) thinned(say func(string, ...any)) {
+	for k, w := range s.steady.Sections {
+		if n := s.steady.Grid.Cells[k]; len(w.ZI) < n {
+			say("section %s is compared at %d of its %d cells, evenly spread", s.net.Sections[k].Name, len(w.ZI), n)
+		}
+	}
+}
+
+// realised says which complex impedances the time-domain run replaced.
+func (s *solved) realised(say func(string, ...any)) {
+	parts := append(append([]design.Part(nil), s.design.Loads...), s.design.Elements...)
+	for b, p := range parts {
+		z := s.net.Branches[b]
+		if k := p.Impedance.Kind; (k == design.Complex || k == design.Matched) && (z.L > 0 || z.C > 0) {
+			say("%s is realised in time as a %s that has its impedance at the design frequency; transients see it so", p.Name, realisedAs(z))
+		}
+	}
+	src := s.net.Source
+	if s.design.Source.Impedance.Kind == design.Complex && (src.L > 0 || src.C > 0) {
+		say("the source impedance is realised in time as a series combination that has its value at the design frequency")
+	}
+	if s.design.Convention == design.Physics {
+		say("complex values were given for e^(-iwt) and conjugated on reading")
+	}
+}
