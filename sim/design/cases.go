@@ -70,7 +70,7 @@ func (w *walker) checkPatch(name string, value *node) {
 		reason, known := whyNot[p.key.text]
 		switch {
 		case known:
-			w.problem(p.key.pos, say("%s", reason), "case %q cannot change %q", name, p.key.text)
+			w.problem(p.key.pos, say("%s", rawText(reason)), "case %q cannot change %q", name, p.key.text)
 		case !caseTable.has(p.key.text):
 			w.problem(p.key.pos, didYouMean(p.key.text, caseTable.names()), "unknown key %q in case %q", p.key.text, name)
 		}

@@ -3,6 +3,7 @@ package design
 import (
 	"regexp"
 	"slices"
+	"strings"
 )
 
 // longestName is how long a name may be, so that labels fit in drawings.
@@ -41,7 +42,7 @@ func (w *walker) items(file *fields, key, kind string) []item {
 	var items []item
 	for _, p := range n.pairs {
 		what := kind + ` "` + p.key.text + `"`
-		w.checkName(p.key, "a "+kind)
+		w.checkName(p.key, withArticle(kind))
 		if p.value.kind == null {
 			w.problem(p.key.pos, say("give it a value or delete the line"), "%s has no value", what)
 			continue
@@ -104,6 +105,14 @@ func (f *fields) pair(key string) (names [2]string, nodes [2]*node, ok bool) {
 		return names, nodes, false
 	}
 	return names, nodes, true
+}
+
+// withArticle puts a or an before a noun.
+func withArticle(noun string) string {
+	if strings.ContainsAny(noun[:1], "aeio") {
+		return "an " + noun
+	}
+	return "a " + noun
 }
 
 func contains(names []string, name string) bool { return slices.Contains(names, name) }

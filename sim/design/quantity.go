@@ -35,9 +35,9 @@ func parseQuantity(text string, d *dimension) (quantity, *fault) {
 // unit looks a unit up by its name; text is what to quote if it is not there.
 func (d *dimension) unit(name, text string) (unit, *fault) {
 	u, ok := d.units[plainUnit.Replace(name)]
-	accepted := say("accepted units: %s", d.accepts)
+	accepted := say("accepted units: %s", rawText(d.accepts))
 	if _, bare := d.units[""]; bare {
-		accepted = say("accepted: %s", d.accepts)
+		accepted = say("accepted: %s", rawText(d.accepts))
 	}
 	switch {
 	case ok && u.of == unclear:
@@ -45,7 +45,7 @@ func (d *dimension) unit(name, text string) (unit, *fault) {
 	case ok:
 		return u, nil
 	case name == "":
-		return u, newFault(say("accepted units: %s; for example %s", d.accepts, d.example), "%q has no unit; a %s needs one", text, d.name)
+		return u, newFault(say("accepted units: %s; for example %s", rawText(d.accepts), d.example), "%q has no unit; %s needs one", text, withArticle(d.name))
 	}
 	for known := range d.units {
 		if strings.EqualFold(known, plainUnit.Replace(name)) {

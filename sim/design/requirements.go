@@ -113,7 +113,7 @@ func (w *walker) walkLimits(d *demand, kind judged) {
 		return
 	}
 	if reason := kind.impossible(l); reason != "" {
-		w.problem(f.at[f.firstOf([]string{"max", "min"})].value.pos, noHint, "%s cannot be judged: %s", f.what, rawText(reason))
+		w.problem(f.at[f.firstOf([]string{"max", "min"})].value.pos, noHint, "%s asks for the impossible: %s", f.what, rawText(reason))
 	}
 }
 

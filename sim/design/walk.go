@@ -1,9 +1,6 @@
 package design
 
-import (
-	"fmt"
-	"strings"
-)
+import "strings"
 
 // A walker turns nodes into one Design. It walks the nominal design and then
 // every case, merged with it.
@@ -50,7 +47,7 @@ func (w *walker) fault(n *node, what string, f *fault) {
 	w.problem(n.pos, f.hint, "%s: %s", what, rawText(f.message))
 }
 
-// rawText marks a text that is not to be shortened again.
+// rawText marks a text that is not from the file and is not to be shortened.
 type rawText string
 
 // fields are the values of one mapping by key.
@@ -149,13 +146,14 @@ func (f *fields) firstOf(keys []string) string {
 func (c choice) String() string {
 	var forms []string
 	for _, f := range c.forms {
-		keys := f.keys
-		if len(f.need) > 0 {
-			keys = f.need
-			forms = append(forms, `"`+strings.Join(keys, `" and "`)+`"`)
-			continue
+		switch {
+		case len(f.need) > 0:
+			forms = append(forms, `"`+strings.Join(f.need, `" and "`)+`"`)
+		case len(f.keys) > 1:
+			forms = append(forms, `at least one of "`+strings.Join(f.keys, `", "`)+`"`)
+		default:
+			forms = append(forms, `"`+f.keys[0]+`"`)
 		}
-		forms = append(forms, `"`+strings.Join(keys, `", "`)+`"`)
 	}
 	return strings.Join(forms, " or ")
 }
@@ -271,7 +269,7 @@ func example(t *table, key string) hint {
 	if e == "" {
 		return noHint
 	}
-	return say("for example %s", fmt.Sprintf("%s: %s", key, e))
+	return say("for example %s: %s", key, rawText(e))
 }
 
 var examples = map[string]string{
