@@ -4,6 +4,7 @@ import (
 	"context"
 	"math"
 	"math/cmplx"
+	"slices"
 
 	"linewitness/sim/network"
 )
@@ -36,8 +37,9 @@ type Comparison struct {
 //
 //   - the window begins no earlier than the ramp and twice the longest path;
 //   - the remaining error of every phasor is within the tolerance. With rho
-//     the larger of the last two ratios of successive changes, it is
-//     change rho/(1-rho), the tail of a geometric series. The windows compared
+//     the larger of the last two ratios of successive changes (or, where they
+//     rise and fall, the ratio of their envelope), it is change rho/(1-rho),
+//     the tail of a geometric series. The windows compared
 //     are at least a longest round trip apart, since before an echo is back
 //     nothing changes;
 //   - the mean and the second and third harmonics are within the tolerance:
@@ -137,10 +139,14 @@ func (w *watch) see(p int, prev, now *window) bool {
 		w.at = p
 		return false
 	}
-	c := Comparison{Time: w.Time, Gap: float64(p-w.at) * w.period, Change: change(prev, now)}
+	c := Comparison{Time: w.Time, Gap: float64(p-w.at) * w.period, Change: change(prev, now), Estimate: math.Inf(1)}
+	// While the ramp rises the changes are those of the ramp, and how they
+	// fall says nothing of how the network decays.
+	if w.at > RampPeriods {
+		w.changes = append(w.changes, c.Change)
+		c.Estimate = w.estimate()
+	}
 	w.at = p
-	w.changes = append(w.changes, c.Change)
-	c.Estimate = w.estimate()
 	w.Residual = c.Estimate
 	w.Curve = append(w.Curve, c)
 	if p-1 >= w.earliest && c.Estimate <= w.tolerance && now.mean <= w.tolerance && now.harmonic <= w.tolerance {
@@ -163,21 +169,34 @@ func (w *watch) estimate() float64 {
 	if last <= rounding {
 		return last
 	}
-	if n < 2 {
+	if n < 3 {
 		return math.Inf(1)
 	}
-	rho := last / w.changes[n-2]
-	if n > 2 {
-		rho = math.Max(rho, w.changes[n-2]/w.changes[n-3])
+	rho := math.Max(last/w.changes[n-2], w.changes[n-2]/w.changes[n-3])
+	if rho >= 1 {
+		last, rho = w.envelope()
 	}
 	if rho >= 1 {
 		return math.Inf(1)
 	}
 	w.LoopFactor = math.Pow(rho, float64(w.trip)/float64(w.gap))
-	if n < 3 {
-		return math.Inf(1)
-	}
 	return last * rho / (1 - rho)
+}
+
+// envelopeWindows is how many changes each half of an envelope takes in.
+const envelopeWindows = 4
+
+// envelope is the largest of the last changes, and the factor per window by
+// which such largest changes fall: two modes that beat make the changes rise
+// and fall while the envelope decays.
+func (w *watch) envelope() (top, rho float64) {
+	n := len(w.changes)
+	if n < 2*envelopeWindows {
+		return w.changes[n-1], 1
+	}
+	top = slices.Max(w.changes[n-envelopeWindows:])
+	before := slices.Max(w.changes[n-2*envelopeWindows : n-envelopeWindows])
+	return top, math.Pow(top/before, 1.0/envelopeWindows)
 }
 
 // change is the largest change of a phasor between two windows, relative to
