@@ -20,10 +20,33 @@ func writeOutcome(w io.Writer, r *record.Record) {
 			{"settling", settlingText(c.Settling)},
 		})
 		writeTable(w, requirementRows(c.Requirements))
-		for _, warning := range c.Warnings {
-			fmt.Fprintf(w, "  warning: %s\n", warning)
+	}
+	if ws := warnings(r.Cases); len(ws) > 0 {
+		fmt.Fprintf(w, "\n%s\n", strings.Join(ws, "\n"))
+	}
+}
+
+// warnings are the warnings of all cases, each once, with the cases that have
+// it unless all do.
+func warnings(cases []record.Case) []string {
+	var texts []string
+	having := map[string][]string{}
+	for _, c := range cases {
+		for _, text := range c.Warnings {
+			if having[text] == nil {
+				texts = append(texts, text)
+			}
+			having[text] = append(having[text], c.Name)
 		}
 	}
+	out := make([]string, len(texts))
+	for i, text := range texts {
+		out[i] = "warning: " + text
+		if len(having[text]) < len(cases) {
+			out[i] = "warning in " + strings.Join(having[text], ", ") + ": " + text
+		}
+	}
+	return out
 }
 
 // heading names a design by what its file says of it, in the order in which a
@@ -78,8 +101,17 @@ func requirementRows(rs []record.Requirement) [][]string {
 		}
 		rows = append(rows, []string{
 			r.ID, quantity, inUnit(r.Value, r.Unit), r.Limit,
-			inUnit(r.Margin, r.Unit), inUnit(r.Uncertainty, r.Unit), verdict,
+			inUnit(r.Margin, differenceUnit(r.Unit)), inUnit(r.Uncertainty, differenceUnit(r.Unit)), verdict,
 		})
 	}
 	return rows
+}
+
+// differenceUnit is the unit of the difference of two values: two levels in
+// dBm differ by so many dB.
+func differenceUnit(unit string) string {
+	if strings.HasPrefix(unit, "dB") {
+		return "dB"
+	}
+	return unit
 }

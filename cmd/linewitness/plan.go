@@ -69,7 +69,7 @@ func writePlanCase(w io.Writer, c *sim.PlanCase) {
 		{"memory", fmt.Sprintf("%.1f MiB", c.Bytes/(1<<20))},
 		{"agreement", percent(c.ExpectedError) + " expected"},
 	})
-	if c.Grid.Updates > sim.MaxUpdates || c.Bytes > sim.MaxBytes {
+	if c.Bound() != nil {
 		fmt.Fprintln(w, "  over the bound: verify refuses this case without --no-bound")
 	}
 	for _, warning := range c.Warnings {

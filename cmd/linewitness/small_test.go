@@ -156,11 +156,14 @@ nominal: requirement missed
   id    quantity             value          limit              margin        uncertainty   verdict
   R1    vswr main, from end  1.750          at most 1.5        -0.2500       0.001000      missed
   R2.1  peak_voltage main    1.900 kV peak  at most 2 kV peak  100.0 V peak  5.000 V peak  met
-  warning: mind the gap
+  R3    load_power aerial    3.353 dBm      at least 3 dBm     0.35 dB       0.0100 dB     met
 
 lossless: not settled
   agreement  0 % found, 0 % expected, limit 0.500 %
   settling   no steady state: decay of 0 % a round trip
+
+warning: an ideal step
+warning in nominal: mind the gap
 `
 	if got := b.String(); got != want {
 		t.Errorf("got\n%s\nwant\n%s", got, want)
@@ -196,13 +199,18 @@ func sampleRecord() *record.Record {
 						ID: "R2.1", Quantity: "peak_voltage", Subject: "main", Unit: "V peak", Value: 1900, Max: &volts,
 						Limit: "at most 2 kV peak", Margin: 100, Uncertainty: 5, Verdict: record.Met,
 					},
+					{
+						ID: "R3", Quantity: "load_power", Subject: "aerial", Unit: "dBm", Value: 3.353, Min: &volts,
+						Limit: "at least 3 dBm", Margin: 0.353, Uncertainty: 0.01, Verdict: record.Met,
+					},
 				},
-				Warnings: []string{"mind the gap"},
+				Warnings: []string{"an ideal step", "mind the gap"},
 			},
 			{
 				Name: "lossless", Verdict: record.Unsettle,
 				Agreement: record.Agreement{Limit: 0.005},
 				Settling:  record.Settling{Decay: "decay of 0 % a round trip"},
+				Warnings:  []string{"an ideal step"},
 			},
 		},
 	}

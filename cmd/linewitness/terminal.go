@@ -44,7 +44,7 @@ func startBar(w io.Writer, label string) *bar {
 	pool := mpb.New(mpb.WithOutput(w), mpb.WithWidth(barWidth), mpb.WithRefreshRate(barRefresh))
 	return &bar{pool, pool.AddBar(barSteps,
 		mpb.BarRemoveOnComplete(),
-		mpb.PrependDecorators(decor.Name(label+" ")),
+		mpb.PrependDecorators(decor.Name(label)),
 		mpb.AppendDecorators(
 			decor.Percentage(decor.WCSyncSpace),
 			decor.Name(" "),
