@@ -34,3 +34,17 @@ var prefixed = map[string]bool{
 	"V": true, "A": true, "W": true, "s": true, "m": true, "Hz": true, "Ω": true,
 	"S": true, "H": true, "F": true, "Ω/m": true, "S/m": true, "H/m": true, "F/m": true,
 }
+
+// Factor returns the factor of an engineering prefix by its symbol, "" for
+// none.
+func Factor(symbol string) (factor float64, ok bool) {
+	if symbol == "u" {
+		symbol = "µ"
+	}
+	for _, p := range prefixes {
+		if p.Symbol == symbol {
+			return p.Factor, true
+		}
+	}
+	return 0, false
+}

@@ -52,6 +52,7 @@ var (
 	FrameLine  = style(Soft, 0.5)
 	GridLine   = style(Grid, 0.4)
 	HatchLine  = style(Limit, 0.25)
+	BandEdge   = style(Phasor, 0.9)
 )
 
 func style(c color.Color, width float64, dashes ...float64) draw.LineStyle {

@@ -1,6 +1,7 @@
 package sheet
 
 import (
+	"image/color"
 	"strings"
 
 	"gonum.org/v1/plot/vg"
@@ -153,4 +154,30 @@ func (b *Book) Draw(c vg.Canvas, st typeset.Style, x, y, room float64, s string)
 	if st.Draw(c, x, y, s, typeset.Left) > room+slack {
 		b.Overfull++
 	}
+}
+
+// Verdict writes a paragraph that begins with a mark and a word.
+func (b *Book) Verdict(m Mark, clr color.Color, word, s string) {
+	const indent = 14
+	st := BodyStyle
+	lead := st.In(typeset.Bold).At(10).Of(clr)
+	first := indent + lead.Width(word) + labelGap
+	lines := st.Wrap(s, b.Width()-first)
+	if len(lines) > 1 {
+		rest := strings.TrimPrefix(s[len(lines[0]):], " ")
+		lines = append(lines[:1:1], st.Wrap(rest, b.Width()-indent)...)
+	}
+	for i, line := range lines {
+		b.Block(leadingOf(st), func(c draw.Canvas) {
+			x, y := c.Min.X.Points(), c.Max.Y.Points()-st.Size*ascender
+			at := x + indent
+			if i == 0 {
+				m.Draw(c, x+5, y+3, 10)
+				lead.Draw(c, at, y, word, typeset.Left)
+				at = x + first
+			}
+			b.Draw(c, st, at, y, b.Width()-(at-x), line)
+		})
+	}
+	b.Space(6)
 }

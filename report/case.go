@@ -1,0 +1,233 @@
+package report
+
+import (
+	"math"
+	"math/cmplx"
+
+	"linewitness/report/format"
+	"linewitness/report/sheet"
+	"linewitness/sim/record"
+)
+
+// solved writes the pages of one case.
+func (d *document) solved(c *record.Case) {
+	d.b.NewPage()
+	d.b.Heading("Case "+c.Name, 120)
+	d.verdictLine(c)
+	d.differences(c)
+	if !c.Settling.Settled {
+		d.unsettled(c)
+	}
+	d.keyFigures(c)
+	d.sections(c)
+	d.loads(c)
+	d.waveforms(c)
+	d.envelopes(c)
+	d.convergence(c)
+	d.grid(c)
+	d.warnings(c)
+}
+
+// verdictLine says the verdict of the case in a line.
+func (d *document) verdictLine(c *record.Case) {
+	a := c.Agreement
+	s := "Requirements: " + count(c.Requirements).String() + ". The two solutions differ by " + format.Percent(largest(a)) +
+		" at most; " + format.Percent(a.Expected) + " was expected and the limit is " + format.Percent(a.Limit) + "."
+	if a.Worst.Section != "" {
+		s += " The largest difference is in the " + a.Worst.Quantity + " of " + a.Worst.Section + " at " + format.SI(a.Worst.At, "m") + "."
+	}
+	d.b.Verdict(markOf(c.Verdict), colorOf(c.Verdict), capital(string(c.Verdict))+".", s)
+}
+
+// unsettled says what is known of a case that reached no steady state.
+func (d *document) unsettled(c *record.Case) {
+	s := c.Settling
+	d.b.Subheading("No steady state was reached", 60)
+	d.b.Paragraph("The time-domain solution was stopped after " + format.Plural(int64(s.Periods), "period") + " (" + format.SI(s.Time, "s") +
+		") without having shown that it is steady. Steady values of the time domain in this case are what was last measured, not a result; nothing that rests on them is shown.")
+	if s.Decay != "" {
+		d.b.Paragraph("Measured: " + s.Decay + ".")
+	}
+	d.b.Paragraph("The amplitude kept over the longest round trip (" + format.SI(s.RoundTrip, "s") + ") is " + format.Number(s.LoopFactor) +
+		", the estimated remaining error " + format.Percent(s.Residual) + " against a tolerance of " + format.Percent(d.r.Design.Tolerance) + ".")
+}
+
+// figureRow is one key figure by both witnesses.
+type figureRow struct {
+	name         string
+	phasor, fdtd string
+	difference   float64 // relative
+}
+
+// keyFigures writes the key figures by both witnesses.
+func (d *document) keyFigures(c *record.Case) {
+	t := sheet.Table{Columns: []sheet.Column{
+		left("Steady state"), right("Phasor"), right("Time domain"), right("Difference, relative"),
+	}}
+	for _, r := range keyRows(c) {
+		t.Rows = append(t.Rows, []sheet.Cell{
+			{Text: r.name}, {Text: r.phasor}, {Text: r.fdtd}, {Text: format.Percent(r.difference)},
+		})
+	}
+	d.b.Subheading("Key figures", 60)
+	d.b.Table(t)
+	d.b.Fields(d.transientFields(c))
+}
+
+func keyRows(c *record.Case) []figureRow {
+	p, f := c.Phasor, c.FDTD
+	rows := []figureRow{
+		complexRow("Impedance that the source sees", p.Source.Impedance, f.Source.Impedance, format.Complex, "Ω"),
+		complexRow("Voltage at the source", p.Source.V, f.Source.V, format.Polar, "V"),
+		complexRow("Current from the source", p.Source.I, f.Source.I, format.Polar, "A"),
+		realRow("Power from the source", p.Source.Power, f.Source.Power, "W"),
+	}
+	pl, fl := loadPower(p), loadPower(f)
+	rows = append(rows, realRow("Power into all loads", pl, fl, "W"),
+		plainRow("Efficiency, loads over source", pl/p.Source.Power, fl/f.Source.Power, format.Percent))
+	pv, pi := tops(p)
+	fv, fi := tops(f)
+	return append(rows, realRow("Largest voltage on any section", pv, fv, "V"), realRow("Largest current on any section", pi, fi, "A"))
+}
+
+func complexRow(name string, p, f complex128, print func(complex128, string) string, unit string) figureRow {
+	return figureRow{name, print(p, unit), print(f, unit), cmplx.Abs(f-p) / cmplx.Abs(p)}
+}
+
+func realRow(name string, p, f float64, unit string) figureRow {
+	return plainRow(name, p, f, func(v float64) string { return format.SI(v, unit) })
+}
+
+func plainRow(name string, p, f float64, print func(float64) string) figureRow {
+	return figureRow{name, print(p), print(f), math.Abs(f-p) / math.Abs(p)}
+}
+
+func loadPower(s record.Steady) (w float64) {
+	for _, l := range s.Loads {
+		w += l.Power
+	}
+	return w
+}
+
+// tops returns the largest voltage and current on any section.
+func tops(s record.Steady) (v, i float64) {
+	for _, e := range s.Sections {
+		v, i = max(v, e.VoltageMax.Value), max(i, e.CurrentMax.Value)
+	}
+	return v, i
+}
+
+// transientFields are the key figures of the two time-domain runs.
+func (d *document) transientFields(c *record.Case) []sheet.Field {
+	s, x := c.Settling, c.Stress
+	start := "start: " + x.Profile
+	if x.Worst {
+		start += " (every phase was considered)"
+	}
+	return []sheet.Field{
+		{Label: "Peak voltage", Value: peak(x.Voltage, "V"), Wide: true},
+		{Label: "Peak current", Value: peak(x.Current, "A"), Wide: true},
+		{Label: "Over the steady value", Value: "largest instantaneous voltage " + format.Percent(x.Overshot) + " over the largest steady one; " + start, Wide: true},
+		{Label: "Settling", Value: settled(s, d.r.Design.Tolerance), Wide: true},
+	}
+}
+
+func peak(p record.Peak, unit string) string {
+	s := format.SI(p.Value, unit)
+	if p.Section == "" {
+		return s
+	}
+	return s + " on " + p.Section + ", " + format.SI(p.At, "m") + " from its From end, " + format.SI(p.Time, "s") +
+		" after switch-on at a start phase of " + format.Angle(p.Phase)
+}
+
+func settled(s record.Settling, tolerance float64) string {
+	out := "within 1 % of the final state at every junction after " + format.SI(s.To1Percent, "s")
+	if math.IsNaN(s.To1Percent) {
+		out = "the final state was not reached within 1 % at every junction"
+	}
+	if s.Settled {
+		out += "; steady within " + format.Percent(tolerance) + " after " + format.Plural(int64(s.Periods), "period") + " of the settling run"
+	}
+	return out
+}
+
+// sections writes the state along the sections.
+func (d *document) sections(c *record.Case) {
+	t := sheet.Table{Columns: []sheet.Column{
+		left("Section"), right("Impedance at From"), right("VSWR, From"), right("VSWR, To"), right("Largest |V|"), right("at"),
+		right("Smallest |V|"), right("Largest |I|"), right("at"), right("Loss"), right("Peak V, all time"), right("Peak I, all time"),
+	}, Size: 7}
+	for i, s := range c.Phasor.Sections {
+		var x record.StressSection
+		if i < len(c.Stress.Sections) {
+			x = c.Stress.Sections[i]
+		}
+		t.Rows = append(t.Rows, []sheet.Cell{
+			{Text: s.Name, Bold: true}, {Text: format.Complex(s.From.Impedance, "Ω")}, {Text: format.VSWR(s.From.VSWR)}, {Text: format.VSWR(s.To.VSWR)},
+			{Text: format.SI(s.VoltageMax.Value, "V")}, {Text: format.SI(s.VoltageMax.At, "m")}, {Text: format.SI(s.VoltageMin.Value, "V")},
+			{Text: format.SI(s.CurrentMax.Value, "A")}, {Text: format.SI(s.CurrentMax.At, "m")}, {Text: format.SI(s.Loss, "W")},
+			{Text: format.SI(x.Voltage, "V")}, {Text: format.SI(x.Current, "A")},
+		})
+	}
+	if len(t.Rows) == 0 {
+		return
+	}
+	d.b.Subheading("Sections: steady state (phasor) and peaks (time domain)", 60)
+	d.b.Table(t)
+}
+
+// loads writes the loads and the junctions.
+func (d *document) loads(c *record.Case) {
+	d.b.Subheading("Loads and junctions: steady state (phasor)", 60)
+	t := sheet.Table{Columns: []sheet.Column{
+		left("Load or junction"), right("Voltage, peak"), right("Voltage, rms"), right("Current, peak"), right("Power"),
+	}}
+	for _, l := range c.Phasor.Loads {
+		t.Rows = append(t.Rows, []sheet.Cell{
+			{Text: l.Name + " (load)", Bold: true}, {Text: format.Polar(l.V, "V")}, {Text: format.SI(cmplx.Abs(l.V)/math.Sqrt2, "V")},
+			{Text: format.Polar(l.I, "A")}, {Text: format.SI(l.Power, "W")},
+		})
+	}
+	for _, j := range c.Phasor.Junctions {
+		t.Rows = append(t.Rows, []sheet.Cell{
+			{Text: j.Name}, {Text: format.Polar(j.V, "V")}, {Text: format.SI(cmplx.Abs(j.V)/math.Sqrt2, "V")},
+			{Text: format.Missing}, {Text: format.Missing},
+		})
+	}
+	d.b.Table(t)
+}
+
+// warnings lists what the run noticed.
+func (d *document) warnings(c *record.Case) {
+	d.b.Subheading("Warnings", 30)
+	if len(c.Warnings) == 0 {
+		d.b.Paragraph("The run of this case raised no warning.")
+		return
+	}
+	for _, w := range c.Warnings {
+		d.b.Item(w)
+	}
+}
+
+// grid writes the table of the grid.
+func (d *document) grid(c *record.Case) {
+	g := c.Grid
+	if len(g.Sections) == 0 {
+		return
+	}
+	t := sheet.Table{Columns: []sheet.Column{
+		left("Section"), right("Cells"), right("Cell"), right("Courant number"), right("Cells per wavelength"),
+		right("Points compared"), right("Phase error, predicted"),
+	}}
+	for _, s := range g.Sections {
+		t.Rows = append(t.Rows, []sheet.Cell{
+			{Text: s.Name, Bold: true}, {Text: format.Count(int64(s.Cells))}, {Text: format.SI(s.Cell, "m")}, {Text: format.Fixed(s.Courant, 5)},
+			{Text: format.Number(s.CellsPerWavelength)}, {Text: format.Count(int64(s.Points))}, {Text: format.Digits(s.PhaseErrorDegrees, 3) + "°"},
+		})
+	}
+	d.b.Subheading("Grid of the time domain", 60)
+	d.b.Table(t)
+	d.b.Note(format.Plural(int64(g.StepsPerPeriod), "step") + " a period, each " + format.SI(g.Step, "s") + "; " +
+		format.Digits(g.Updates, 3) + " cell updates in both runs.")
+}

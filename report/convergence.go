@@ -1,0 +1,170 @@
+package report
+
+import (
+	"math"
+	"slices"
+
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/figure"
+	"linewitness/report/format"
+	"linewitness/report/ink"
+	"linewitness/sim/record"
+)
+
+// convergenceHeight is the height of the settling and spectrum panels.
+const convergenceHeight = 112.0
+
+// convergence draws the settling curve and the spectrum side by side.
+func (d *document) convergence(c *record.Case) {
+	var panels []*figure.Panel
+	finding := ""
+	if p := settlingPanel(c.Settling, d.r.Design.Tolerance); p != nil {
+		panels, finding = append(panels, p), settlingFinding(c.Settling, d.r.Design.Tolerance)
+	}
+	if p := spectrumPanel(c); p != nil {
+		panels, finding = append(panels, p), finding+" "+spectrumFinding(c)
+	}
+	if len(panels) == 0 {
+		return
+	}
+	label := d.figure()
+	entries := []figure.Entry{
+		{Style: ink.FDTDLine, Text: "change between windows one round trip apart"}, {Style: ink.PhasorLine, Text: "estimated remaining error"},
+		{Style: ink.MarkLine, Text: "multiples of the longest round trip"}, {Style: ink.LimitLine, Text: "tolerance"},
+	}
+	d.b.Subheading("Steady state and spectrum", convergenceHeight+2*figure.KeyHeight+30)
+	d.key(entries)
+	d.b.Need(convergenceHeight + d.b.CaptionHeight(label, finding))
+	d.b.Block(convergenceHeight, func(cv draw.Canvas) {
+		for i, p := range panels {
+			p.Draw(column(cv, i, len(panels)))
+		}
+	})
+	d.b.Caption(label, trimmed(finding))
+}
+
+// settlingPanel returns nil if no window was compared.
+func settlingPanel(s record.Settling, tolerance float64) *figure.Panel {
+	var ts, change, estimate []float64
+	for _, p := range s.Curve {
+		ts, change, estimate = append(ts, p.Time), append(change, p.Change), append(estimate, p.Estimate)
+	}
+	top := largestOf(change)
+	if top <= 0 {
+		return nil
+	}
+	hi := math.Pow(10, math.Ceil(math.Log10(max(top, largestOf(estimate), tolerance)*1.2)))
+	lo := math.Pow(10, math.Floor(math.Log10(max(min(smallestOf(change), tolerance)/1.5, hi*1e-12))))
+	last := max(s.Time, ts[len(ts)-1])
+	p := figure.New("Settling run", "relative to the section's largest value",
+		figure.Axis{Label: "time", Unit: "s", Max: last}, figure.Axis{Min: lo, Max: hi, Log: true})
+	p.Upright(roundTrips(s.RoundTrip, last), ink.MarkLine, "")
+	p.Level(tolerance, ink.LimitLine, "tolerance")
+	p.Line(ts, estimate, ink.PhasorLine)
+	p.Line(ts, change, ink.FDTDLine)
+	p.Dots(ts, change, ink.FDTDLine)
+	return p
+}
+
+// smallestOf returns the smallest value above zero, 1 if there is none.
+func smallestOf(ys []float64) float64 {
+	least := math.Inf(1)
+	for _, y := range ys {
+		if y > 0 && y < least {
+			least = y
+		}
+	}
+	if math.IsInf(least, 1) {
+		return 1
+	}
+	return least
+}
+
+// roundTrips returns multiples of the round trip up to last: each one, or
+// every second, fifth, tenth, ... if they would stand too close.
+func roundTrips(trip, last float64) []float64 {
+	const most = 16
+	if trip <= 0 || math.IsInf(last, 0) || math.IsNaN(last) {
+		return nil
+	}
+	every := roundTripsApart(last/trip, most)
+	var out []float64
+	for k := 1.0; k*every*trip < last; k++ {
+		out = append(out, k*every*trip)
+	}
+	return out
+}
+
+// roundTripsApart returns the smallest of 1, 2, 5, 10, ... that leaves at most
+// most marks of n.
+func roundTripsApart(n, most float64) float64 {
+	for power := 1.0; ; power *= 10 {
+		for _, m := range []float64{1, 2, 5} {
+			if n/(m*power) <= most {
+				return m * power
+			}
+		}
+	}
+}
+
+func settlingFinding(s record.Settling, tolerance float64) string {
+	last := s.Curve[len(s.Curve)-1]
+	text := "Left: after " + format.SI(s.Time, "s") + " (" + format.Plural(int64(s.Periods), "period") + ") the change over a round trip of " +
+		format.SI(s.RoundTrip, "s") + " is " + format.Percent(last.Change)
+	if s.Settled {
+		text += " and the estimated remaining error " + format.Percent(s.Residual) + ", inside the tolerance of " + format.Percent(tolerance) + "."
+	} else {
+		text += "; the tolerance of " + format.Percent(tolerance) + " was not reached."
+	}
+	if every := roundTripsApart(s.Time/s.RoundTrip, 16); every > 1 && s.RoundTrip > 0 {
+		text += " The upright lines are " + format.Count(int64(every)) + " round trips apart."
+	}
+	return text
+}
+
+// spectrumPanel returns nil if there is no spectrum. Amplitudes are relative
+// to the largest.
+func spectrumPanel(c *record.Case) *figure.Panel {
+	s := c.Spectrum
+	top := largestOf(s.Amplitude)
+	if len(s.Frequency) == 0 || top <= 0 {
+		return nil
+	}
+	const floor = 1e-8
+	p := figure.New("Spectrum at "+s.Where, "relative to the largest line",
+		figure.Axis{Label: "frequency", Unit: "Hz", Max: s.Frequency[len(s.Frequency)-1] * 1.02}, figure.Axis{Min: floor, Max: 2, Log: true})
+	xs, ys := s.Frequency, s.Amplitude
+	if len(ys) > spectrumLines {
+		t := figure.Extremes(xs, ys, spectrumLines)
+		xs, ys = t.X, t.Hi
+	}
+	for i := range min(len(xs), len(ys)) {
+		if ys[i] > floor*top {
+			p.Line([]float64{xs[i], xs[i]}, []float64{floor, ys[i] / top}, ink.TraceLine)
+		}
+	}
+	if i := largestAt(s.Amplitude); i >= 0 {
+		p.Spot(s.Frequency[i], 1, format.SI(s.Frequency[i], "Hz"))
+	}
+	return p
+}
+
+// spectrumLines is how many lines a panel shows apart.
+const spectrumLines = 200
+
+func spectrumFinding(c *record.Case) string {
+	s := c.Spectrum
+	k := largestAt(s.Amplitude)
+	rest := slices.Clone(s.Amplitude)
+	for i := range rest {
+		if i == k {
+			rest[i] = 0
+		}
+	}
+	next := largestAt(rest)
+	text := "Right: the last " + format.Plural(int64(s.Periods), "period") + " at " + s.Where + " hold " + format.SI(s.Amplitude[k], "V") + " at " + format.SI(s.Frequency[k], "Hz")
+	if next >= 0 && rest[next] > 0 {
+		text += "; the next largest line, at " + format.SI(s.Frequency[next], "Hz") + ", is " + format.DB(20*math.Log10(rest[next]/s.Amplitude[k])) + " to it"
+	}
+	return text + "."
+}

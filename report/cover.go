@@ -1,0 +1,221 @@
+package report
+
+import (
+	"strings"
+
+	"gonum.org/v1/plot/vg"
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/format"
+	"linewitness/report/ink"
+	"linewitness/report/sheet"
+	"linewitness/report/typeset"
+	"linewitness/sim/record"
+)
+
+// cover writes the first page: identity, verdict, cases, requirements.
+func (d *document) cover() {
+	d.b.Overline("Design verification record, transmission-line network")
+	d.b.Title(orElse(d.r.Design.Title, d.r.Design.File))
+	d.identity()
+	d.banner()
+	if d.r.Design.Purpose != "" {
+		d.b.Paragraph(d.r.Design.Purpose)
+	}
+	if d.r.Design.Notes != "" {
+		d.b.Note("Notes: " + d.r.Design.Notes)
+	}
+	d.cases()
+	d.requirements()
+	d.signatures()
+}
+
+// field is a label and its value.
+type field struct{ label, value string }
+
+// identity writes what identifies the document, in two columns.
+func (d *document) identity() {
+	g := d.r.Design
+	d.b.Fields([]sheet.Field{
+		{Label: "Document number", Value: orElse(g.Number, "none")},
+		{Label: "Revision", Value: orElse(g.Revision, "none")},
+		{Label: "Date", Value: orElse(g.Date, "not stated")},
+		{Label: "Design file", Value: g.File},
+		{Label: "SHA-256 of the design file", Value: g.SHA256, Face: typeset.Mono, Wide: true},
+		{Label: "Made by", Value: "linewitness " + strings.TrimSpace(d.r.Tool.Version+" ("+d.r.Tool.Go+")"), Wide: true},
+	})
+}
+
+// banner draws the verdict: word, shape and colour.
+func (d *document) banner() {
+	v := d.r.Verdict
+	word := typeset.Style{Face: typeset.Bold, Size: 15, Color: colorOf(v)}
+	lines := sheet.First(sheet.BodyStyle.Wrap(d.reason(), d.b.Width()-bannerIndent-10), bannerLines)
+	height := 32 + float64(len(lines))*bannerLeading
+	d.b.Space(8)
+	d.b.Block(height, func(c draw.Canvas) {
+		frame(c, v)
+		x, y := c.Min.X.Points(), c.Max.Y.Points()
+		markOf(v).Draw(c, x+22, y-height/2, 24)
+		word.Draw(c, x+bannerIndent, y-19, capital(string(v)), typeset.Left)
+		for i, line := range lines {
+			d.b.Draw(c, sheet.BodyStyle, x+bannerIndent, y-32-float64(i)*bannerLeading, d.b.Width()-bannerIndent-10, line)
+		}
+	})
+	d.b.Space(8)
+}
+
+const (
+	bannerIndent  = 46.0
+	bannerLeading = 10.8
+	bannerLines   = 12 // the table has what a longer text would say
+)
+
+// frame draws the box of the banner: thin for what holds, heavy with a filled
+// edge for what does not.
+func frame(c draw.Canvas, v record.Verdict) {
+	edge := 1.0
+	if v != record.Verified && v != record.NotShown {
+		edge = 2.2
+		bar := c.Rectangle
+		bar.Max.X = bar.Min.X + 5
+		c.SetColor(colorOf(v))
+		c.Fill(bar.Path())
+	}
+	c.SetLineStyle(draw.LineStyle{Color: colorOf(v), Width: vg.Points(edge)})
+	c.Stroke(c.Rectangle.Path())
+}
+
+func capital(s string) string {
+	if s == "" {
+		return s
+	}
+	return strings.ToUpper(s[:1]) + s[1:]
+}
+
+// cases writes the summary of the cases.
+func (d *document) cases() {
+	t := sheet.Table{Columns: []sheet.Column{
+		{Head: "Case", Grow: 2}, {Head: "Verdict", Grow: 2}, {Head: "Requirements", Grow: 2},
+		{Head: "Solutions differ by", Align: typeset.Right, Grow: 1},
+		{Head: "Settled to 1 % after", Align: typeset.Right, Grow: 1},
+		{Head: "Peak voltage", Align: typeset.Right, Grow: 1},
+		{Head: "Peak current", Align: typeset.Right, Grow: 1},
+	}}
+	for _, c := range d.r.Cases {
+		t.Rows = append(t.Rows, []sheet.Cell{
+			{Text: c.Name, Bold: true}, {Text: string(c.Verdict), Mark: markOf(c.Verdict)},
+			{Text: count(c.Requirements).String()},
+			{Text: format.Percent(largest(c.Agreement))},
+			{Text: format.SI(c.Settling.To1Percent, "s")},
+			{Text: format.SI(c.Stress.Voltage.Value, "V")},
+			{Text: format.SI(c.Stress.Current.Value, "A")},
+		})
+	}
+	d.b.Subheading("Cases", 60)
+	d.b.Table(t)
+}
+
+// requirements writes the compliance table.
+func (d *document) requirements() {
+	rows := d.requirementRows()
+	d.b.Subheading("Requirements", 60)
+	if len(rows) == 0 {
+		d.b.Paragraph("The design file states no requirement. The verdict then says only that the two solutions agree.")
+		return
+	}
+	d.b.Table(sheet.Table{Columns: []sheet.Column{
+		{Head: "Id"}, {Head: "Case"}, {Head: "Quantity, subject", Grow: 1}, {Head: "Limit"},
+		{Head: "Value", Align: typeset.Right}, {Head: "Uncertainty ±", Align: typeset.Right},
+		{Head: "Margin", Align: typeset.Right}, {Head: "Margin, relative", Align: typeset.Right}, {Head: "Verdict"},
+	}, Rows: rows})
+	d.requirementTexts()
+	d.b.Note("Values are the worse of the two solutions; voltages and currents are peak. Met: value and uncertainty are inside the limit. " +
+		"Missed: outside. Not shown: the uncertainty straddles the limit, or there is no settled value.")
+}
+
+func (d *document) requirementRows() [][]sheet.Cell {
+	var rows [][]sheet.Cell
+	for _, c := range d.r.Cases {
+		for _, q := range c.Requirements {
+			rows = append(rows, []sheet.Cell{
+				{Text: q.ID, Bold: true}, {Text: c.Name}, {Text: quantityOf(q)}, {Text: q.Limit},
+				{Text: format.Quantity(q.Value, q.Unit)}, {Text: format.Quantity(q.Uncertainty, q.Unit)},
+				{Text: format.Quantity(q.Margin, q.Unit)}, {Text: relative(q)},
+				{Text: string(q.Verdict), Mark: markOfRequirement(q.Verdict), Bold: q.Verdict != record.Met},
+			})
+		}
+	}
+	return rows
+}
+
+// quantityOf names a requirement's quantity and subject in words.
+func quantityOf(q record.Requirement) string {
+	s := words(q.Quantity)
+	if q.Subject != "" {
+		s += ", " + q.Subject
+	}
+	return s
+}
+
+// words spells a name of the design file: "peak_voltage" is "peak voltage",
+// and the names that are abbreviations take capitals.
+func words(name string) string {
+	if name == "vswr" {
+		return "VSWR"
+	}
+	return strings.ReplaceAll(name, "_", " ")
+}
+
+// relative returns the margin in dB, or else in percent.
+func relative(q record.Requirement) string {
+	if q.MarginDB == q.MarginDB { // not NaN
+		return format.DB(q.MarginDB)
+	}
+	return format.Percent(q.MarginPercent / 100)
+}
+
+// requirementTexts writes texts, sources and notes, once for each id.
+func (d *document) requirementTexts() {
+	seen := map[string]bool{}
+	for _, c := range d.r.Cases {
+		for _, q := range c.Requirements {
+			s := strings.TrimSpace(q.Text + " " + bracket(q.Source))
+			if !seen[q.ID] && s != "" {
+				d.b.Note(q.ID + ": " + s)
+			}
+			seen[q.ID] = true
+			if q.Note != "" {
+				d.b.Note(q.ID + " in case " + c.Name + ": " + q.Note + ".")
+			}
+		}
+	}
+}
+
+func bracket(s string) string {
+	if s == "" {
+		return ""
+	}
+	return "[" + s + "]"
+}
+
+// signatures draws the block to sign.
+func (d *document) signatures() {
+	const height = 46.0
+	g := d.r.Design
+	d.b.Space(10)
+	d.b.Block(height, func(c draw.Canvas) {
+		third := c.Size().X / 3
+		for i, f := range []field{{"Prepared", g.PreparedBy}, {"Checked", g.CheckedBy}, {"Approved", g.ApprovedBy}} {
+			box := c.Rectangle
+			box.Min.X += third * vg.Length(i)
+			box.Max.X = box.Min.X + third
+			c.SetLineStyle(draw.LineStyle{Color: ink.Hair, Width: 0.5})
+			c.Stroke(box.Path())
+			x, y, room := box.Min.X.Points()+5, box.Max.Y.Points(), third.Points()-10
+			d.b.Draw(c, sheet.NoteStyle, x, y-10, room, f.label)
+			d.b.Draw(c, sheet.BodyStyle, x, y-21, room, sheet.BodyStyle.Fit(f.value, room))
+			d.b.Draw(c, sheet.NoteStyle, x, y-40, room, "signature, date")
+		}
+	})
+	d.b.Space(8)
+}

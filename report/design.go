@@ -1,0 +1,179 @@
+package report
+
+import (
+	"math"
+
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/drawing"
+	"linewitness/report/format"
+	"linewitness/report/sheet"
+	"linewitness/report/typeset"
+	"linewitness/sim/record"
+)
+
+// design writes the network of the nominal case as it was modelled.
+func (d *document) design() {
+	c := d.nominal()
+	if c == nil {
+		return
+	}
+	d.b.NewPage()
+	d.b.Heading("The design as modelled", 120)
+	d.network(c.Model)
+	d.lengths(c.Model)
+	d.constants(c.Model)
+	d.parts("Loads", c.Model.Loads)
+	d.parts("Elements", c.Model.Elements)
+	d.source(c.Model)
+	d.conventions()
+}
+
+// network draws the network, band under band.
+func (d *document) network(m record.Model) {
+	first := d.b.Room() - 24 // the caption stays on the page of the last band
+	l := drawing.Lay(m, int(min(first, d.b.Body()-24)/drawing.RowHeight))
+	for _, band := range l.Bands {
+		d.b.Block(float64(band.Rows)*drawing.RowHeight, func(c draw.Canvas) { l.Draw(c, band) })
+		d.b.Space(3)
+	}
+	d.b.Space(2)
+	d.b.Caption(d.figure(), networkFinding(m))
+}
+
+// networkFinding says what the drawing shows, from the model.
+func networkFinding(m record.Model) string {
+	var length, longest float64
+	name := ""
+	for _, s := range m.Sections {
+		length += s.Length
+		if s.Wavelengths > longest {
+			longest, name = s.Wavelengths, s.Name
+		}
+	}
+	s := "The network at " + format.SI(m.Frequency, "Hz") + ": " +
+		format.Plural(int64(len(m.Sections)), "section") + " of " + format.SI(length, "m") + " in all, " +
+		format.Plural(int64(len(m.Junctions)), "junction") + ", " + format.Plural(int64(len(m.Loads)), "load") + "."
+	if name != "" {
+		s += " The longest section is " + name + ", " + format.Wavelengths(longest) + "."
+	}
+	return s + " Thick lines are sections, not to scale; thin ones have no length. Loads end on the return conductor."
+}
+
+func right(head string) sheet.Column { return sheet.Column{Head: head, Align: typeset.Right, Grow: 1} }
+func left(head string) sheet.Column  { return sheet.Column{Head: head, Grow: 1} }
+
+// lengths writes the table of the sections' lengths in equivalent forms.
+func (d *document) lengths(m record.Model) {
+	t := sheet.Table{Columns: []sheet.Column{
+		left("Section"), left("From, to"), left("Line"), right("As given"), right("Length"), right("Length"),
+		right("Wave-lengths"), right("Electrical"), right("Delay"), right("Loss, one way"),
+	}}
+	for _, s := range m.Sections {
+		t.Rows = append(t.Rows, []sheet.Cell{
+			{Text: s.Name, Bold: true}, {Text: s.From + ", " + s.To}, {Text: s.Line}, {Text: s.Given},
+			{Text: format.SI(s.Length, "m")}, {Text: format.Feet(s.Length)}, {Text: format.Wavelengths(s.Wavelengths)},
+			{Text: format.Electrical(s.Degrees)}, {Text: format.SI(s.Delay, "s")}, {Text: format.DB(s.LossDB)},
+		})
+	}
+	d.b.Subheading("Sections: lengths", 70)
+	d.b.Table(t)
+}
+
+// constants writes the table of the lines' constants.
+func (d *document) constants(m record.Model) {
+	t := sheet.Table{Columns: []sheet.Column{
+		left("Section"), right("Z₀"), right("Velocity over c"), right("R′"), right("L′"), right("G′"), right("C′"),
+	}}
+	for _, s := range m.Sections {
+		t.Rows = append(t.Rows, []sheet.Cell{
+			{Text: s.Name, Bold: true}, {Text: format.Complex(s.Z0, "Ω")}, {Text: format.Number(s.VelocityFactor)},
+			{Text: format.SI(s.R, "Ω/m")}, {Text: format.SI(s.L, "H/m")}, {Text: format.SI(s.G, "S/m")}, {Text: format.SI(s.C, "F/m")},
+		})
+	}
+	d.b.Subheading("Sections: constants at the design frequency", 70)
+	d.b.Table(t)
+}
+
+// parts writes the loads or the elements.
+func (d *document) parts(title string, parts []record.ModelPart) {
+	if len(parts) == 0 {
+		return
+	}
+	t := sheet.Table{Columns: []sheet.Column{
+		left("Name"), left("At"), left("As given"), left("Realised as"),
+		right("R"), right("L"), right("C"), right("Impedance"),
+	}}
+	for _, p := range parts {
+		at := p.At
+		if p.To != "" {
+			at += ", " + p.To
+		}
+		t.Rows = append(t.Rows, []sheet.Cell{
+			{Text: p.Name, Bold: true}, {Text: at}, {Text: p.Given}, {Text: p.As},
+			{Text: absent(p.R, "Ω")}, {Text: absent(p.L, "H")}, {Text: absent(p.C, "F")}, {Text: impedance(p)},
+		})
+	}
+	d.b.Subheading(title, 60)
+	d.b.Table(t)
+}
+
+// absent prints a part that is not there as a dash.
+func absent(v float64, unit string) string {
+	if v == 0 {
+		v = math.NaN()
+	}
+	return format.SI(v, unit)
+}
+
+func impedance(p record.ModelPart) string {
+	switch {
+	case p.Open:
+		return format.Infinite
+	case p.Short:
+		return "0" + format.Space + "Ω"
+	}
+	return format.Complex(p.Impedance, "Ω")
+}
+
+// source writes the source.
+func (d *document) source(m record.Model) {
+	s := m.Source
+	d.b.Subheading("Source", 50)
+	d.b.Fields([]sheet.Field{
+		{Label: "At junction", Value: s.At}, {Label: "Frequency", Value: format.SI(m.Frequency, "Hz")},
+		{Label: "As given", Value: s.Given}, {Label: "EMF", Value: format.SI(s.EMF, "V") + " peak, " + format.SI(s.EMF/math.Sqrt2, "V") + " rms"},
+		{Label: "Impedance", Value: format.Complex(s.Impedance, "Ω")}, {Label: "Available power", Value: available(s.Available)},
+		{Label: "Start", Value: s.Start}, {Label: "Stop", Value: orElse(s.Stop, "stays on")},
+	})
+}
+
+// available prints the available power; an ideal source has no such limit.
+func available(w float64) string {
+	if w == 0 || math.IsInf(w, 0) {
+		return "no limit (ideal source)"
+	}
+	return format.SI(w, "W")
+}
+
+// conventions writes what the numbers mean.
+func (d *document) conventions() {
+	d.b.Subheading("Conventions", 70)
+	given := "The design file gives complex numbers with j, for e" + sup("+jωt") + "."
+	if d.r.Design.Convention == "physics" {
+		given = "The design file gives complex numbers with i, for e" + sup("−iωt") + "; they were conjugated on reading."
+	}
+	for _, s := range []string{
+		given + " This document uses j and e" + sup("+jωt") + " throughout.",
+		"Amplitudes are peak values unless rms is said. Phases are in degrees, relative to the EMF of the source as a cosine.",
+		"Current along a section is positive from its From end to its To end, and the distance z is measured from the From end. An impedance at an end is V/I there.",
+		"The reflection coefficient is taken against the section's own Z₀: Γ = (Z − Z₀)/(Z + Z₀). VSWR = (1 + |Γ|)/(1 − |Γ|), infinite if |Γ| is 1 or more.",
+		"Voltage and current levels are 20 log₁₀ of a ratio, powers 10 log₁₀. One way loss is that of the matched section.",
+		"A dash (–) stands for what does not apply.",
+	} {
+		d.b.Item(s)
+	}
+}
+
+// sup and sub mark up superscripts and subscripts.
+func sup(s string) string { return string(format.Sup) + s + string(format.End) }
+func sub(s string) string { return string(format.Sub) + s + string(format.End) }

@@ -1,0 +1,198 @@
+package drawing
+
+import (
+	"gonum.org/v1/plot/vg"
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/format"
+	"linewitness/report/ink"
+	"linewitness/report/typeset"
+	"linewitness/sim/record"
+)
+
+const mm = 72 / 25.4
+
+// The measures of the drawing, in points.
+const (
+	leadWidth = 31 * mm // the column of the source
+	tailWidth = 7 * mm  // room at the right for the mark of a continued band
+	maxCell   = 44 * mm
+	wireDrop  = 7.6 * mm // from the upper edge of a row to its wire
+	lanePitch = 1.6 * mm
+	textGap   = 1.5 * mm // between a label and what is beside it
+)
+
+// RowHeight is the height of a row of a band.
+const RowHeight = 12 * mm
+
+var (
+	nameStyle  = typeset.Style{Face: typeset.Bold, Size: 6.8, Color: ink.Text}
+	valueStyle = typeset.Style{Face: typeset.Sans, Size: 6.5, Color: ink.Text}
+	nodeStyle  = typeset.Style{Face: typeset.Italic, Size: 6.8, Color: ink.Accent}
+	lineStyle  = draw.LineStyle{Color: ink.Accent, Width: 2.2}
+	wireStyle  = draw.LineStyle{Color: ink.Text, Width: 0.6}
+)
+
+// pen draws one band.
+type pen struct {
+	c      draw.Canvas
+	band   *Band
+	x0, y0 float64 // of column 0 and of the wire of row 0
+	cell   float64 // width of a column
+	labels []vg.Rectangle
+}
+
+// Draw draws a band on c, which is at least Rows times RowHeight high, and
+// returns the rectangles of its labels.
+func (l *Layout) Draw(c draw.Canvas, b *Band) []vg.Rectangle {
+	room := c.Size().X.Points() - leadWidth - tailWidth
+	p := &pen{
+		c: c, band: b,
+		x0:   c.Min.X.Points() + leadWidth,
+		y0:   c.Max.Y.Points() - wireDrop,
+		cell: min(room/float64(l.Columns), maxCell),
+	}
+	p.lead()
+	for _, w := range b.wires {
+		p.wire(w)
+	}
+	for _, n := range b.nodes {
+		p.node(n)
+	}
+	return p.labels
+}
+
+func (p *pen) x(col int) float64 { return p.x0 + float64(col)*p.cell }
+func (p *pen) y(row int) float64 { return p.y0 - float64(row)*RowHeight }
+
+// line draws a line through points given as x, y pairs.
+func (p *pen) line(st draw.LineStyle, xy ...float64) {
+	var path vg.Path
+	for i := 0; i < len(xy); i += 2 {
+		at := vg.Point{X: vg.Points(xy[i]), Y: vg.Points(xy[i+1])}
+		if i == 0 {
+			path.Move(at)
+		} else {
+			path.Line(at)
+		}
+	}
+	p.c.SetLineStyle(st)
+	p.c.Stroke(path)
+}
+
+// label writes a text into a room and notes its rectangle.
+func (p *pen) label(st typeset.Style, x, y, room float64, s string) {
+	s = st.Fit(s, room)
+	if s == "" {
+		return
+	}
+	w := st.Draw(p.c, x, y, s, typeset.Left)
+	p.labels = append(p.labels, vg.Rectangle{
+		Min: vg.Point{X: vg.Points(x), Y: vg.Points(y - 0.2*st.Size)},
+		Max: vg.Point{X: vg.Points(x + w), Y: vg.Points(y + 0.75*st.Size)},
+	})
+}
+
+// wire draws what runs through a row.
+func (p *pen) wire(w *wire) {
+	x, y := p.x(w.from.col), p.y(w.row)
+	if w.row > w.from.row { // down from the junction to its own row
+		p.line(wireStyle, x, p.y(w.from.row), x, y)
+	}
+	right := p.x(w.to)
+	switch {
+	case w.part != nil:
+		p.part(w.part, x, y)
+	case w.child != nil:
+		p.edge(w.via, x, right, y)
+	case w.way.known:
+		right -= float64(w.way.lane) * lanePitch
+		p.edge(w.via, x, right, y)
+		p.up(w.way, right, y)
+	default:
+		right -= p.cell * 0.3
+		p.edge(w.via, x, right, y)
+		p.arrow(right, y, w.close)
+	}
+}
+
+// up draws the way of an edge that closes a loop into its far junction.
+func (p *pen) up(w way, x, y float64) {
+	top := p.y(w.end.row)
+	if w.lane == 0 {
+		p.line(wireStyle, x, y, x, top)
+		return
+	}
+	slant := float64(w.lane) * lanePitch
+	p.line(wireStyle, x, y, x, top-slant, p.x(w.end.col), top)
+}
+
+// arrow ends an edge with the name of the junction that it leads to.
+func (p *pen) arrow(x, y float64, name string) {
+	p.line(wireStyle, x, y, x+6, y)
+	p.line(wireStyle, x+3, y+2, x+6, y, x+3, y-2)
+	p.label(nodeStyle, x+8, y-2.2, p.cell*0.3-8-textGap, name)
+}
+
+// edge draws a section as a thick line, an element as its symbol, with its
+// name and its length or value above.
+func (p *pen) edge(e *edge, x, right, y float64) {
+	room := right - x - 2*textGap - lanes*lanePitch
+	if e.section != nil {
+		p.line(lineStyle, x, y, right, y)
+		p.label(nameStyle, x+textGap, y+2.9*mm, room, e.section.Name)
+		p.label(valueStyle, x+textGap, y+0.8*mm, room, format.SI(e.section.Length, "m"))
+		return
+	}
+	middle := (x + right) / 2
+	p.line(wireStyle, x, y, middle-symbolHalf, y)
+	p.line(wireStyle, middle+symbolHalf, y, right, y)
+	p.symbol(e.part, middle, y)
+	p.value(e.part, x, y, room)
+}
+
+// value writes the name and the value of a part above its symbol.
+func (p *pen) value(part *record.ModelPart, x, y, room float64) {
+	p.label(nameStyle, x+textGap, y+4.3*mm, room, part.Name)
+	p.label(valueStyle, x+textGap, y+2.1*mm, room, typeset.Clean(part.Given))
+}
+
+// part draws a load or an element to the return conductor.
+func (p *pen) part(part *record.ModelPart, x, y float64) {
+	p.value(part, x, y, p.cell-2*textGap-lanes*lanePitch)
+	middle := x + p.cell*0.45
+	end := middle + symbolHalf + 3*mm
+	switch {
+	case part.Open:
+		p.line(wireStyle, x, y, middle, y)
+		p.ring(middle+1.4, y, 1.4)
+		return
+	case part.Short:
+		p.line(wireStyle, x, y, end, y)
+	default:
+		p.line(wireStyle, x, y, middle-symbolHalf, y)
+		p.line(wireStyle, middle+symbolHalf, y, end, y)
+		p.symbol(part, middle, y)
+	}
+	p.ground(end, y, 1)
+}
+
+// node draws a junction and its name, below the wire.
+func (p *pen) node(n *node) {
+	x, y := p.x(n.col), p.y(n.row)
+	if n.end {
+		p.ring(x, y, 1.7)
+	} else {
+		p.dot(x, y, 1.7)
+	}
+	room := p.cell - 2*textGap - lanes*lanePitch
+	if n.on > 0 {
+		p.flag(x, y, n)
+	}
+	if n.col == 0 && p.band.Index > 0 {
+		return // the lead has the name already
+	}
+	if p.x(n.col)+room > p.c.Max.X.Points() {
+		room = p.c.Max.X.Points() - x - textGap
+	}
+	p.label(nodeStyle, x+textGap, y-2.9*mm, room, n.name)
+}

@@ -1,0 +1,178 @@
+package report
+
+import (
+	"math"
+	"math/cmplx"
+
+	"gonum.org/v1/plot/vg"
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/figure"
+	"linewitness/report/format"
+	"linewitness/report/ink"
+	"linewitness/sim/record"
+)
+
+// manyWavelengths is the length from which on the lobes of an envelope are too
+// narrow to read; the section is then drawn as a band with zooms of its ends.
+const manyWavelengths = 12
+
+// zoomWavelengths is the length of a zoom.
+const zoomWavelengths = 2
+
+// manySections is how many short sections get a row of their own.
+const manySections = 6
+
+// The heights of an envelope and of the error strip below it.
+const (
+	envelopeHeight = 88.0
+	stripHeight    = 52.0
+)
+
+// track is one quantity along one section.
+type track struct {
+	section     string
+	symbol      string // "|V|"
+	unit        string
+	wavelengths float64
+	length      float64
+	z           []float64
+	fdtd        []float64 // magnitudes
+	phasor      []float64
+	found       []float64 // error over the section's largest value
+	expected    []float64
+	peakZ, peak []float64
+	limits      []limit
+	agreed      float64 // limit of the agreement
+}
+
+// tracks returns voltage and current along the k-th section, or nil where the
+// record has no profile.
+func tracks(c *record.Case, k int) []*track {
+	p := c.Profiles[k]
+	var m record.ModelSection
+	for _, s := range c.Model.Sections {
+		if s.Name == p.Section {
+			m = s
+		}
+	}
+	v := &track{symbol: "|V|", unit: "V", z: p.ZV, peakZ: p.PeakZV, peak: p.PeakV, limits: limitsOf(c, p.Section, "voltage")}
+	v.compare(p.VF, p.VP, p.EV)
+	i := &track{symbol: "|I|", unit: "A", z: p.ZI, peakZ: p.PeakZI, peak: p.PeakI, limits: limitsOf(c, p.Section, "current")}
+	i.compare(p.IF, p.IP, p.EI)
+	var out []*track
+	for _, t := range []*track{v, i} {
+		t.section, t.wavelengths, t.length, t.agreed = p.Section, m.Wavelengths, m.Length, c.Agreement.Limit
+		if len(t.z) > 0 {
+			out = append(out, t)
+		}
+	}
+	return out
+}
+
+// compare fills the magnitudes and the errors.
+func (t *track) compare(fdtd, phasor []complex128, expected []float64) {
+	t.fdtd, t.phasor = magnitudes(fdtd), magnitudes(phasor)
+	scale := largestOf(t.phasor)
+	for i := range min(len(fdtd), len(phasor)) {
+		t.found = append(t.found, cmplx.Abs(fdtd[i]-phasor[i])/scale)
+	}
+	for _, e := range expected {
+		t.expected = append(t.expected, e/scale)
+	}
+}
+
+func magnitudes(zs []complex128) []float64 {
+	out := make([]float64, len(zs))
+	for i, z := range zs {
+		out[i] = cmplx.Abs(z)
+	}
+	return out
+}
+
+// largestOf returns the largest finite value, 0 if there is none.
+func largestOf(ys []float64) float64 {
+	if i := largestAt(ys); i >= 0 {
+		return math.Abs(ys[i])
+	}
+	return 0
+}
+
+// envelopes draws |V| and |I| along every section, with the error below.
+func (d *document) envelopes(c *record.Case) {
+	if len(c.Profiles) == 0 {
+		return
+	}
+	entries := []figure.Entry{
+		{Style: ink.PhasorLine, Text: "phasor; expected error"}, {Style: ink.FDTDLine, Text: "time domain; found error"},
+		{Style: ink.PeakLine, Text: "peak over all time"}, {Style: ink.LimitLine, Text: "limit, hatched beyond"},
+	}
+	d.b.Subheading("Along the sections: envelopes and agreement", envelopeHeight+stripHeight+50)
+	d.b.Note("Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end.")
+	d.key(entries)
+	var short [][]*track
+	for k := range c.Profiles {
+		ts := tracks(c, k)
+		switch {
+		case len(ts) == 0:
+		case ts[0].wavelengths > manyWavelengths:
+			d.longSection(ts)
+		default:
+			short = append(short, ts)
+		}
+	}
+	d.shortSections(short)
+}
+
+// shortSections draws one section a row, or two if they are many.
+func (d *document) shortSections(sections [][]*track) {
+	each := 1
+	if len(sections) > manySections {
+		each = 2
+	}
+	for i := 0; i < len(sections); i += each {
+		var row []*track
+		finding := ""
+		for _, ts := range sections[i:min(i+each, len(sections))] {
+			row = append(row, ts...)
+			finding += envelopeFinding(ts) + " "
+		}
+		d.envelopeRow(row, 2*each, trimmed(finding))
+	}
+}
+
+// envelopeRow draws tracks side by side, in columns of equal width.
+func (d *document) envelopeRow(row []*track, columns int, finding string) {
+	const height = envelopeHeight + stripHeight
+	label := d.figure()
+	d.b.Need(height + d.b.CaptionHeight(label, finding))
+	d.b.Block(height, func(c draw.Canvas) {
+		for i, t := range row {
+			t.draw(column(c, i, columns), span{0, t.length})
+		}
+	})
+	d.b.Caption(label, finding)
+}
+
+// column crops the i-th of n columns of equal width.
+func column(c draw.Canvas, i, n int) draw.Canvas {
+	w := c.Size().X / vg.Length(n)
+	return draw.Crop(c, w*vg.Length(i), w*vg.Length(i+1)-c.Size().X, 0, 0)
+}
+
+// longSection draws the whole length as bands and zooms of both ends.
+func (d *document) longSection(ts []*track) {
+	const height = 2 * (envelopeHeight + stripHeight)
+	label, finding := d.figure(), envelopeFinding(ts)+" Upper row: extremes over each half wavelength; lower row: the outer "+format.Plural(zoomWavelengths, "wavelength")+" at each end."
+	d.b.Need(height + d.b.CaptionHeight(label, finding))
+	d.b.Block(height, func(c draw.Canvas) {
+		upper := draw.Crop(c, 0, 0, c.Size().Y/2, 0)
+		lower := draw.Crop(c, 0, 0, 0, -c.Size().Y/2)
+		for i, t := range ts {
+			t.drawBand(column(upper, i, len(ts)))
+			part := zoomWavelengths * t.length / t.wavelengths
+			t.draw(column(lower, 2*i, 2*len(ts)), span{0, part})
+			t.draw(column(lower, 2*i+1, 2*len(ts)), span{t.length - part, t.length})
+		}
+	})
+	d.b.Caption(label, finding)
+}

@@ -1,0 +1,88 @@
+package report
+
+import (
+	"linewitness/report/format"
+)
+
+// method writes how the numbers were got.
+func (d *document) method() {
+	d.b.NewPage()
+	d.b.Heading("Method", 80)
+	d.b.Paragraph("Two solutions that share no code are compared: one in the time domain, one in closed form for the steady state. A number in this record was given by both, or is said to come from the time domain alone (peaks, settling), where the closed form has nothing to say.")
+	d.b.Subheading("The line", 60)
+	d.b.Paragraph("Each section is a uniform line with constants R′, L′, G′, C′ per metre that do not change with frequency:")
+	d.b.Equation("∂v/∂z = −R′ i − L′ ∂i/∂t,   ∂i/∂z = −G′ v − C′ ∂v/∂t")
+	d.b.Paragraph("A line given by its characteristic impedance, velocity factor and attenuation has, with the velocity v, the attenuation a in nepers per metre at the design frequency and the dielectric's share s of it,")
+	d.b.Equation("L′ = Z₀/v,   C′ = 1/(Z₀ v),   R′ = 2 a Z₀ (1 − s),   G′ = 2 a s/Z₀")
+	d.b.Subheading("Closed form (phasor)", 60)
+	d.b.Paragraph("On a section of length ℓ the voltage is a sum of two waves, written so that no exponential exceeds 1:")
+	d.b.Equation("V(z) = P e" + sup("−γz") + " + M e" + sup("−γ(ℓ−z)") + ",   Z₀ I(z) = P e" + sup("−γz") + " − M e" + sup("−γ(ℓ−z)") +
+		",   γ = √((R′ + jωL′)(G′ + jωC′)),   Z₀ = √((R′ + jωL′)/(G′ + jωC′))")
+	d.b.Paragraph("Continuity of voltage at both ends of every section and Kirchhoff's current law at every junction give one linear system for P and M of all sections and the junction voltages.")
+	d.methodTime()
+	d.methodComparison()
+}
+
+// methodTime writes the time-domain part.
+func (d *document) methodTime() {
+	d.b.Subheading("Time domain (fdtd)", 60)
+	d.b.Paragraph("Voltage and current are stepped in turn on a grid, currents half a cell and half a step from the voltages, with the losses averaged over the step:")
+	d.b.Equation("(C′/Δt + G′/2) v" + sup("n+1") + " = (C′/Δt − G′/2) v" + sup("n") + " − Δi/Δz,   (L′/Δt + R′/2) i" + sup("n+½") + " = (L′/Δt − R′/2) i" + sup("n−½") + " − Δv/Δz")
+	d.b.Paragraph("The step is a whole fraction of the period. Each section's Courant number S = v Δt/Δz is at most 1 and as near to 1 as its length allows, for the error of the grid over a section of electrical length ℓ/λ with N steps a period is")
+	d.b.Equation("Δφ ≈ 60° (π/N)" + sup("2") + " (1 − S" + sup("2") + ") ℓ/λ")
+	d.b.Paragraph("A junction owns the half cells of the sections that meet in it; lumped parts use the trapezoidal rule. Two runs are made. The settling run starts with a smooth rise of the source and gives the steady state. The stress run starts (and stops) as the source does in service and gives the peaks. " +
+		"It carries the source as a cosine and as a sine at once: the largest value over all start phases at a place and a time is √(v" + sub("cos") + sup("2") + " + v" + sub("sin") + sup("2") + ").")
+	d.b.Paragraph("Steady state is shown, not assumed: windows one longest round trip apart are compared at every recorded point; with the measured factor ρ from window to window the remaining error is")
+	d.b.Equation("error ≈ change · ρ/(1 − ρ)")
+	d.b.Paragraph("and must be below the tolerance of " + format.Percent(d.r.Design.Tolerance) + " twice in a row, as must the mean and the second and third harmonics. A run that has not got there after " +
+		format.Plural(int64(d.r.Design.MaxPeriods), "period") + " is reported as not settled. Phasors are the fundamental of a Fourier transform over whole periods.")
+}
+
+// methodComparison writes how the two are compared and judged.
+func (d *document) methodComparison() {
+	d.b.Subheading("Comparison and verdict", 60)
+	d.b.Paragraph("At every point of the grid (evenly thinned on long sections) the two phasors are compared, voltage and current:")
+	d.b.Equation("agreement = max |V" + sub("fdtd") + "(z) − V" + sub("phasor") + "(z)|/max |V" + sub("phasor") + "|,   likewise for I")
+	d.b.Paragraph("The largest value of the section is the scale because at a null of the envelope any error is large in proportion. The limit is " + format.Percent(d.r.Design.Agreement) +
+		". Beside the error found stands the error expected from the grid and from the settling residual; an error found far above the expected one is a disagreement even inside the limit.")
+	d.b.Paragraph("A requirement is judged on the worse of the two solutions, with their difference as its uncertainty: met if value and uncertainty are inside the limit, missed if both are outside, not shown otherwise.")
+}
+
+// limits writes where the model ends.
+func (d *document) limits() {
+	d.b.Heading("Limits of validity", 60)
+	for _, s := range []string{
+		"The agreement of the two solutions does not check the input. A wrong length, velocity factor or load gives two solutions that agree on the wrong design. The tables of the design as modelled repeat every value in equivalent forms; compare them with drawings, data sheets and measurements.",
+		"The lines are uniform and carry one mode; connectors, bends, supports and changes of cross-section are in the model only where the design file puts a section or an element for them.",
+		"The constants R′, L′, G′, C′ hold at the design frequency. Steady values at that frequency are exact to the agreement; transients contain other frequencies, for which real lines have other losses.",
+		"The peak of an abrupt start is that of an ideal step of the source. A real source rises in a finite time and may peak lower.",
+	} {
+		d.b.Item(s)
+	}
+	d.b.Subheading("What this record does not cover", 60)
+	for _, s := range []string{
+		"dispersion by the skin effect in the time domain;",
+		"temperature rise, of conductors, dielectrics or parts;",
+		"corona, multipactor and flashover: the record gives voltages, not whether a gap withstands them;",
+		"loads and parts that are nonlinear or change with time, such as arcs while they burn, plasma, or a protective gap;",
+		"coupling between lines, radiation, and currents on the outside of cables;",
+		"modes other than the transmission-line mode;",
+		"the control loops of a transmitter: level control, fold-back and trip circuits.",
+	} {
+		d.b.Item(s)
+	}
+}
+
+// cautions writes what a reader must know before touching the plant.
+func (d *document) cautions() {
+	d.b.Heading("Cautions", 60)
+	for _, c := range []struct{ term, text string }{
+		{"RF burns", "Contact with a conductor at radio frequency burns deeply, often without a warning shock, and at levels far below those in this record. Switch off, isolate, lock out and earth before touching any conductor, the outer one included."},
+		{"High voltage", "Standing waves and switching put voltages on lines, open ends and stubs that exceed the source's own; this record shows where. Long lines keep a charge after they are disconnected: discharge and earth them."},
+		{"Exposure", "People near lines, aerials and open ends may be exposed beyond what is permitted. Observe the limits of IEEE Std C95.1, of the ICNIRP guidelines and of local law, whichever is strictest; this record does not compute exposure."},
+		{"Breakdown, heating", "A rating that is exceeded even once can start an arc that the source then feeds. Ratings fall with altitude, humidity, dirt, age and temperature; keep the margins that the maker and the applicable code ask for."},
+		{"Responsibility", "This record is calculation. It does not replace measurement on the finished plant, the local electrical and radio codes, or the judgement of a licensed practitioner; where they differ from it, they prevail."},
+	} {
+		d.b.Term(c.term, c.text)
+	}
+}

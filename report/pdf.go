@@ -1,0 +1,122 @@
+package report
+
+import (
+	"errors"
+	"fmt"
+	"io"
+	"time"
+
+	"linewitness/report/canvas"
+	"linewitness/report/sheet"
+	"linewitness/sim/record"
+)
+
+// Options steer WritePDF. The zero value is the default.
+type Options struct {
+	Paper string // "a4" (the default) or "letter"
+}
+
+// WritePDF writes the record as a PDF document.
+//
+// It returns an error for an unknown paper, for a text with a character that
+// the document's fonts do not have, and for a failing w.
+func WritePDF(w io.Writer, r *record.Record, opt Options) error {
+	d, err := build(r, opt)
+	if err != nil {
+		return err
+	}
+	return explain(d.b.Write(w))
+}
+
+// build lays out the whole document.
+func build(r *record.Record, opt Options) (*document, error) {
+	paper, err := opt.paper()
+	if err != nil {
+		return nil, err
+	}
+	d := &document{r: cleaned(r)}
+	d.b = sheet.New(meta(d.r), paper)
+	d.cover()
+	d.design()
+	for i := range d.r.Cases {
+		d.solved(&d.r.Cases[i])
+	}
+	d.method()
+	d.limits()
+	d.cautions()
+	d.listing()
+	return d, nil
+}
+
+func (o Options) paper() (sheet.Paper, error) {
+	switch o.Paper {
+	case "", "a4":
+		return sheet.A4, nil
+	case "letter":
+		return sheet.Letter, nil
+	}
+	return sheet.Paper{}, fmt.Errorf("report: unknown paper %q; known are a4 and letter", o.Paper)
+}
+
+// document is a record being laid out.
+type document struct {
+	r       *record.Record
+	b       *sheet.Book
+	figures int
+}
+
+// figure returns the label of the next figure.
+func (d *document) figure() string {
+	d.figures++
+	return fmt.Sprintf("Figure %d", d.figures)
+}
+
+// nominal returns the first case, or nil if there is none.
+func (d *document) nominal() *record.Case {
+	if len(d.r.Cases) == 0 {
+		return nil
+	}
+	return &d.r.Cases[0]
+}
+
+func meta(r *record.Record) sheet.Meta {
+	return sheet.Meta{
+		Title: orElse(r.Design.Title, r.Design.File), Subject: r.Design.Purpose, Author: r.Design.PreparedBy,
+		Creator: "linewitness " + r.Tool.Version, Date: date(r.Design.Date),
+		Header: orElse(r.Design.Title, r.Design.File),
+		Number: r.Design.Number, Revision: r.Design.Revision,
+	}
+}
+
+// undated stands in the properties of a document whose record has no date
+// that can be read; any constant would do, for it must not be the clock.
+var undated = time.Date(2000, time.January, 1, 0, 0, 0, 0, time.UTC)
+
+func date(s string) time.Time {
+	for _, layout := range []string{time.DateOnly, time.RFC3339, "2 January 2006", "January 2, 2006"} {
+		if t, err := time.Parse(layout, s); err == nil {
+			return t.UTC()
+		}
+	}
+	return undated
+}
+
+// explain says how to mend a record that cannot be printed.
+func explain(err error) error {
+	var glyph *canvas.GlyphError
+	if errors.As(err, &glyph) {
+		return fmt.Errorf("report: the document's fonts have no sign for %q (%U), in %q; write it with Latin, Greek or Cyrillic letters in the design file",
+			glyph.Rune, glyph.Rune, glyph.Text)
+	}
+	if err != nil {
+		return fmt.Errorf("report: %w", err)
+	}
+	return nil
+}
+
+func orElse(s, instead string) string {
+	if s == "" {
+		return instead
+	}
+	return s
+}

@@ -1,0 +1,17 @@
+package report
+
+import (
+	"bytes"
+	"os"
+	"testing"
+
+	"linewitness/report/internal/reporttest"
+)
+
+func TestScratch(t *testing.T) {
+	var b bytes.Buffer
+	if err := WritePDF(&b, reporttest.Feeder(), Options{}); err != nil {
+		t.Fatal(err)
+	}
+	os.WriteFile("/tmp/feeder.pdf", b.Bytes(), 0o644)
+}

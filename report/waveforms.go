@@ -1,0 +1,164 @@
+package report
+
+import (
+	"math"
+	"slices"
+
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/figure"
+	"linewitness/report/format"
+	"linewitness/report/ink"
+	"linewitness/sim/record"
+)
+
+// waveforms draws the stress run: the whole turn-on at the left, the last
+// periods with the phasor's own waveform at the right.
+func (d *document) waveforms(c *record.Case) {
+	list := distinct(c.Waveforms)
+	if len(list) == 0 {
+		return
+	}
+	height := 74.0
+	if len(list) > crowdedWaveforms {
+		height = 58
+	}
+	key := []figure.Entry{
+		{Style: ink.PhasorLine, Text: "phasor: its amplitude (left), its waveform (right)"},
+		{Style: ink.FDTDLine, Text: "time domain (right)"}, {Style: ink.TraceLine, Band: true, Text: "time domain, between its extremes where dense"},
+	}
+	d.b.Subheading("Waveforms", figure.KeyHeight+height+40)
+	if c.Stress.Profile != "" {
+		d.b.Note("Source as it starts in service: " + c.Stress.Profile + ". Shown for the start phase that gives the largest voltage, " + format.Angle(c.Stress.Voltage.Phase) + ".")
+	}
+	d.key(key)
+	for i := range list {
+		d.waveform(&list[i], height)
+	}
+}
+
+// crowdedWaveforms is how many waveforms get rows of full height.
+const crowdedWaveforms = 12
+
+// distinct leaves out what repeats an earlier waveform sample by sample, as
+// the voltage of the source's junction repeats that of the source, and what
+// has no sample.
+func distinct(ws []record.Waveform) []record.Waveform {
+	var out []record.Waveform
+	for _, w := range ws {
+		same := func(o record.Waveform) bool {
+			return o.Unit == w.Unit && o.Step == w.Step && o.Start == w.Start && slices.Equal(o.Samples, w.Samples)
+		}
+		i := slices.IndexFunc(out, same)
+		switch {
+		case len(w.Samples) == 0:
+		case i < 0:
+			out = append(out, w)
+		case out[i].Name != w.Name:
+			out[i].Name += " = " + w.Name
+		}
+	}
+	return out
+}
+
+// key draws a key over the full width.
+func (d *document) key(entries []figure.Entry) {
+	d.b.Block(figure.KeyRoom(entries, d.b.Width()), func(c draw.Canvas) { figure.Key(c, entries) })
+}
+
+// waveform draws one row.
+func (d *document) waveform(w *record.Waveform, height float64) {
+	ts := figure.Times(w.Start, w.Step, len(w.Samples))
+	at := largestAt(w.Samples)
+	label, finding := d.figure(), waveformFinding(w, ts, at)
+	d.b.Need(height + d.b.CaptionHeight(label, finding))
+	d.b.Block(height, func(c draw.Canvas) {
+		split := c.Size().X * 0.62
+		turnOn(w, ts, at).Draw(draw.Crop(c, 0, split-c.Size().X, 0, 0))
+		lastPeriods(w).Draw(draw.Crop(c, split, 0, 0, 0))
+	})
+	d.b.Caption(label, finding)
+}
+
+// largestAt returns the index of the largest finite magnitude, or -1.
+func largestAt(ys []float64) int {
+	at, most := -1, -1.0
+	for i, y := range ys {
+		if a := math.Abs(y); a > most && !math.IsInf(a, 0) {
+			at, most = i, a
+		}
+	}
+	return at
+}
+
+// symmetric returns the range of a quantity that swings about zero.
+func symmetric(series ...[]float64) (lo, hi float64) {
+	const air = 1.12 // over the largest value
+	for _, ys := range series {
+		if i := largestAt(ys); i >= 0 {
+			hi = max(hi, math.Abs(ys[i])*air)
+		}
+	}
+	return -hi, hi
+}
+
+func turnOn(w *record.Waveform, ts []float64, at int) *figure.Panel {
+	lo, hi := symmetric(w.Samples, w.Tail.Phasor)
+	p := figure.New(w.Name, "turn-on", figure.Axis{Label: "time from switch-on", Unit: "s", Min: ts[0], Max: ts[len(ts)-1]},
+		figure.Axis{Unit: w.Unit, Min: lo, Max: hi})
+	if i := largestAt(w.Tail.Phasor); i >= 0 {
+		level := math.Abs(w.Tail.Phasor[i])
+		p.Level(level, ink.PhasorLine, "")
+		p.Level(-level, ink.PhasorLine, "")
+	}
+	p.Trace(ts, w.Samples)
+	if at >= 0 {
+		p.Spot(ts[at], w.Samples[at], format.SI(w.Samples[at], w.Unit))
+	}
+	return p
+}
+
+func lastPeriods(w *record.Waveform) *figure.Panel {
+	t := w.Tail
+	lo, hi := symmetric(t.Samples, t.Phasor)
+	ts := figure.Times(t.Start, t.Step, len(t.Samples))
+	axis := figure.Axis{Label: "time from switch-on", Unit: "s", Min: t.Start, Max: t.Start + t.Step*float64(len(t.Samples)-1)}
+	p := figure.New("", "last periods", axis, figure.Axis{Unit: w.Unit, Min: lo, Max: hi})
+	p.Line(ts, t.Phasor, ink.PhasorLine)
+	p.Line(ts, t.Samples, ink.FDTDLine)
+	return p
+}
+
+// waveformFinding says what a row shows: the largest value, and how near the
+// last periods come to the phasor's waveform.
+func waveformFinding(w *record.Waveform, ts []float64, at int) string {
+	if at < 0 {
+		return w.Name + ": no finite value."
+	}
+	most := math.Abs(w.Samples[at])
+	s := w.Name + ": largest " + format.SI(most, w.Unit) + " at " + format.SI(ts[at], "s")
+	i := largestAt(w.Tail.Phasor)
+	if i < 0 {
+		return s + "; the source has stopped, so there is no steady waveform to compare with."
+	}
+	amplitude := math.Abs(w.Tail.Phasor[i])
+	if amplitude > 0 && most > 0 {
+		s += ", " + format.Number(most/amplitude) + " times the steady amplitude"
+	}
+	return s + "; over the last periods it differs from the phasor's waveform by at most " + format.SI(deviation(w.Tail), w.Unit) + relativeTo(deviation(w.Tail), amplitude) + "."
+}
+
+func deviation(t record.Tail) (most float64) {
+	for i := range min(len(t.Samples), len(t.Phasor)) {
+		if e := math.Abs(t.Samples[i] - t.Phasor[i]); e > most {
+			most = e
+		}
+	}
+	return most
+}
+
+func relativeTo(v, whole float64) string {
+	if whole <= 0 {
+		return ""
+	}
+	return " (" + format.Percent(v/whole) + ")"
+}
