@@ -84,14 +84,14 @@ func rect(size, phase float64) complex128 {
 // wrongLetter says what a value written with the other convention's letter
 // would have meant.
 func wrongLetter(text string, s complexScanner, c Convention) *fault {
-	swap := strings.NewReplacer("+", "-", "-", "+")
-	meant := strings.Replace(text, s.letter, c.letter(), 1)
-	if before, after, ok := strings.Cut(meant, c.letter()); ok && strings.ContainsAny(before, "+-") {
-		i := strings.LastIndexAny(before, "+-")
-		meant = before[:i] + swap.Replace(before[i:i+1]) + before[i+1:] + c.letter() + after
-	} else if ok {
-		meant = "-" + meant
+	flipped, term := "-", text[s.imaginary:]
+	switch {
+	case strings.HasPrefix(term, "-"):
+		flipped, term = "+", term[1:]
+	case strings.HasPrefix(term, "+"):
+		term = term[1:]
 	}
+	meant := text[:s.imaginary] + flipped + strings.Replace(term, s.letter, c.letter(), 1)
 	return newFault(
 		say("write %s if the %s convention was meant, else put %s for %s", meant, c.other(), c.letter(), s.letter),
 		"%q is written with %s, the %s convention, where it would mean %s; this file has the %s convention and %s",
@@ -100,8 +100,9 @@ func wrongLetter(text string, s complexScanner, c Convention) *fault {
 
 // complexScanner takes a complex number from the start of a text.
 type complexScanner struct {
-	rest   string
-	letter string // the imaginary unit it met
+	rest      string
+	letter    string // the imaginary unit it met
+	imaginary int    // where the imaginary part begins in the text
 }
 
 // zero is the part that is not there.
@@ -122,6 +123,9 @@ func (s *complexScanner) parts() (re, im number, f *fault) {
 	s.skipBlanks()
 	if !strings.HasPrefix(s.rest, "+") && !strings.HasPrefix(s.rest, "-") {
 		return re, im, nil
+	}
+	if !imaginary {
+		s.imaginary = len(text) - len(s.rest)
 	}
 	second, again, f := s.term()
 	switch {

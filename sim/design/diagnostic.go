@@ -95,32 +95,40 @@ const snippetBefore, snippetAfter = 80, 60
 // both, so that they line up at any tab width; a wide character counts two
 // columns; a control character must not reach the terminal and is replaced.
 func snippet(source string, column int) (line, indent string) {
-	chars := []rune(strings.ToValidUTF8(source, "\ufffd"))
-	at := min(max(column-1, 0), len(chars))
-	from, to := max(0, at-snippetBefore), min(len(chars), at+snippetAfter)
+	from, to := column-1-snippetBefore, column-1+snippetAfter
 	var l, in strings.Builder
 	if from > 0 {
 		l.WriteString("...")
 		in.WriteString("   ")
 	}
-	for i := from; i < to; i++ {
-		c := chars[i]
-		if c != '\t' && unicode.IsControl(c) {
-			c = '\ufffd'
-		}
-		l.WriteRune(c)
+	i := 0
+	for _, c := range source {
 		switch {
-		case i >= at:
-		case c == '\t':
-			in.WriteRune('\t')
-		default:
-			in.WriteString(strings.Repeat(" ", displayWidth(c)))
+		case i == to:
+			l.WriteString("...")
+			return l.String(), in.String()
+		case i >= from:
+			writeChar(&l, &in, c, i < column-1)
 		}
-	}
-	if to < len(chars) {
-		l.WriteString("...")
+		i++
 	}
 	return l.String(), in.String()
+}
+
+// writeChar writes a character of a snippet and, if it stands before the
+// caret, the blanks below it.
+func writeChar(l, in *strings.Builder, c rune, before bool) {
+	if c != '\t' && unicode.IsControl(c) {
+		c = unicode.ReplacementChar
+	}
+	l.WriteRune(c)
+	switch {
+	case !before:
+	case c == '\t':
+		in.WriteRune('\t')
+	default:
+		in.WriteString(strings.Repeat(" ", displayWidth(c)))
+	}
 }
 
 // displayWidth is the number of terminal columns a character takes: 0 for

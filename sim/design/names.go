@@ -1,7 +1,6 @@
 package design
 
 import (
-	"regexp"
 	"slices"
 	"strings"
 )
@@ -9,10 +8,28 @@ import (
 // longestName is how long a name may be, so that labels fit in drawings.
 const longestName = 40
 
-var (
-	namePattern = regexp.MustCompile(`^[A-Za-z][A-Za-z0-9_-]{0,39}$`)
-	idPattern   = regexp.MustCompile(`^[A-Za-z0-9][A-Za-z0-9_./-]{0,39}$`)
-)
+// isName reports a name: a letter, then letters, digits, _ and -.
+func isName(s string) bool {
+	return s != "" && isLetter(s[0]) && isMadeOf(s, "_-")
+}
+
+// isID reports an id of a requirement, which may begin with a digit and may
+// be divided as documents number their clauses: 4.2/1.
+func isID(s string) bool {
+	return s != "" && (isLetter(s[0]) || isDigit(s[0])) && isMadeOf(s, "_-./")
+}
+
+func isMadeOf(s, more string) bool {
+	for i := range len(s) {
+		if !isLetter(s[i]) && !isDigit(s[i]) && strings.IndexByte(more, s[i]) < 0 {
+			return false
+		}
+	}
+	return len(s) <= longestName
+}
+
+func isLetter(c byte) bool { return c >= 'a' && c <= 'z' || c >= 'A' && c <= 'Z' }
+func isDigit(c byte) bool  { return c >= '0' && c <= '9' }
 
 // The most entries of each mapping. A case is solved with dense matrices, so
 // a design near these bounds is far beyond what can be run; the bounds keep
@@ -21,7 +38,7 @@ var most = map[string]int{"lines": 500, "sections": 500, "loads": 500, "elements
 
 // checkName tells of a name that breaks the rules of names.
 func (w *walker) checkName(n *node, what string) bool {
-	if namePattern.MatchString(n.text) {
+	if isName(n.text) {
 		return true
 	}
 	w.problem(n.pos, say("a name begins with a letter and goes on with letters, digits, _ and -, at most %d in all", longestName),

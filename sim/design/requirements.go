@@ -80,7 +80,7 @@ func (f *fields) id() string {
 	if n == nil {
 		return ""
 	}
-	if !idPattern.MatchString(n.text) {
+	if !isID(n.text) {
 		f.w.problem(n.pos, say("an id is made of letters, digits, _, -, . and /, at most %d in all", longestName), "%q is not an id for a requirement", n.text)
 	}
 	return n.text

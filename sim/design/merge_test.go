@@ -1,0 +1,87 @@
+package design
+
+import (
+	"strings"
+	"testing"
+)
+
+// TestMergePatch runs the test cases of RFC 7396, appendix A.
+func TestMergePatch(t *testing.T) {
+	for _, tt := range []struct{ original, patch, want string }{
+		{`{"a":"b"}`, `{"a":"c"}`, `{"a":"c"}`},
+		{`{"a":"b"}`, `{"b":"c"}`, `{"a":"b","b":"c"}`},
+		{`{"a":"b"}`, `{"a":null}`, `{}`},
+		{`{"a":"b","b":"c"}`, `{"a":null}`, `{"b":"c"}`},
+		{`{"a":["b"]}`, `{"a":"c"}`, `{"a":"c"}`},
+		{`{"a":"c"}`, `{"a":["b"]}`, `{"a":["b"]}`},
+		{`{"a":{"b":"c"}}`, `{"a":{"b":"d","c":null}}`, `{"a":{"b":"d"}}`},
+		{`{"a":[{"b":"c"}]}`, `{"a":[1]}`, `{"a":["1"]}`},
+		{`["a","b"]`, `["c","d"]`, `["c","d"]`},
+		{`{"a":"b"}`, `["c"]`, `["c"]`},
+		{`{"a":"foo"}`, `null`, `null`},
+		{`{"a":"foo"}`, `"bar"`, `"bar"`},
+		{`{"e":null}`, `{"a":1}`, `{"e":null,"a":"1"}`},
+		{`[1,2]`, `{"a":"b","c":null}`, `{"a":"b"}`},
+		{`{}`, `{"a":{"bb":{"ccc":null}}}`, `{"a":{"bb":{}}}`},
+	} {
+		p := &problems{}
+		original, patch := parse([]byte(tt.original), p), parse([]byte(tt.patch), p)
+		if len(p.list) > 0 {
+			t.Fatalf("%s, %s: %v", tt.original, tt.patch, p.list)
+		}
+		before := written(original)
+		if got := written(merge(original, patch, nil, "")); got != tt.want {
+			t.Errorf("%s with %s gives %s, want %s", tt.original, tt.patch, got, tt.want)
+		}
+		if after := written(original); after != before {
+			t.Errorf("merging changed the original: %s to %s", before, after)
+		}
+	}
+}
+
+// written is a node as JSON in which every value is a text.
+func written(n *node) string {
+	var parts []string
+	switch n.kind {
+	case null:
+		return "null"
+	case mapping:
+		for _, p := range n.pairs {
+			parts = append(parts, `"`+p.key.text+`":`+written(p.value))
+		}
+		return "{" + strings.Join(parts, ",") + "}"
+	case list:
+		for _, i := range n.items {
+			parts = append(parts, written(i))
+		}
+		return "[" + strings.Join(parts, ",") + "]"
+	default:
+		return `"` + n.text + `"`
+	}
+}
+
+// A patch that gives one form drops the inherited other form; see merge.
+func TestPatchDropsOtherForm(t *testing.T) {
+	const design = `{source: {emf: 1, start: {profile: ramp, rise: 3}}, lines: {c: {z0: 1, velocity_factor: 2, loss: 3}},
+		loads: {a: {at: m, r: 1, l: 2}, b: {at: m, impedance: 5}}, elements: {e: {at: m, c: 1}}}`
+	for _, tt := range []struct{ patch, key, want string }{
+		{`{loads: {a: {impedance: short}}}`, "loads", `"a":{"at":"m","impedance":"short"}`},
+		{`{loads: {a: {l: 3}}}`, "loads", `"a":{"at":"m","r":"1","l":"3"}`},
+		{`{loads: {a: {impedance: null, l: 3}}}`, "loads", `"a":{"at":"m","r":"1","l":"3"}`},
+		{`{loads: {b: {c: 3}}}`, "loads", `"b":{"at":"m","c":"3"}`},
+		{`{loads: {b: {impedance: 6, c: 3}}}`, "loads", `"b":{"at":"m","impedance":"6","c":"3"}`}, // refused later
+		{`{elements: {e: {between: [m, n]}}}`, "elements", `"e":{"c":"1","between":["m","n"]}`},
+		{`{source: {available_power: 2}}`, "source", `{"start":{"profile":"ramp","rise":"3"},"available_power":"2"}`},
+		{`{source: {start: {profile: abrupt}}}`, "source", `"start":{"profile":"abrupt"}`},
+		{`{source: {start: {rise: 4}}}`, "source", `"start":{"profile":"ramp","rise":"4"}`},
+		{`{lines: {c: {l: 1, c: 2}}}`, "lines", `"c":{"l":"1","c":"2"}`},
+		{`{lines: {c: {loss: null}}}`, "lines", `"c":{"z0":"1","velocity_factor":"2"}`},
+	} {
+		p := &problems{}
+		patch := &patch{node: parse([]byte(tt.patch), p)}
+		got := written(patch.apply(parse([]byte(design), p)).get(tt.key))
+		if len(p.list) > 0 || !strings.Contains(got, tt.want) {
+			t.Errorf("%s gives %s, want %s in it (%v)", tt.patch, got, tt.want, p.list)
+		}
+	}
+}
