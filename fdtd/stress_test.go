@@ -1,0 +1,171 @@
+package fdtd
+
+import (
+	"context"
+	"math"
+	"math/cmplx"
+	"testing"
+
+	"linewitness/sim/network"
+)
+
+// matchedLine is a line of 50 ohm, matched at both ends, at Courant number 1.
+func matchedLine(length float64) *network.Network {
+	return &network.Network{
+		Frequency: testFrequency, Junctions: []string{"a", "b"},
+		Sections: []network.Section{{Name: "line", From: 0, To: 1, Length: length, Line: air(50)}},
+		Branches: []network.Branch{{Name: "load", A: 1, B: network.Ground, Series: network.Series{R: 50}}},
+		Source:   network.Source{EMF: 2000, Series: network.Series{R: 50}},
+	}
+}
+
+func stressed(t testing.TB, net *network.Network, g Grid) *Stress {
+	t.Helper()
+	st, err := Settle(context.Background(), net, g, Settings{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	s, err := StressRun(context.Background(), net, st, Settings{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	return s
+}
+
+// TestNoFalseOvershoot: an averaged source that had already jumped at t = 0
+// would launch one sample of exactly twice the wave, and a perfectly matched
+// line would seem to overshoot by 100 %. Abrupt cosine, matched: the peak is
+// half the EMF.
+func TestNoFalseOvershoot(t *testing.T) {
+	net := matchedLine(1.5 * wavelength)
+	s := stressed(t, net, fixedGrid(net, 40))
+	for name, p := range map[string]float64{"voltage": s.Voltage.Value, "current x 50 ohm": s.Current.Value * 50} {
+		if math.Abs(p-1000) > 1e-9*1000 { // rounding
+			t.Errorf("peak %s %.6f V, want 1000", name, p)
+		}
+	}
+}
+
+// TestWorstPhase: the largest |v| over all start phases from the two lanes is
+// the largest over a scan of single runs.
+func TestWorstPhase(t *testing.T) {
+	net := lossyCascade()
+	g := fixedGrid(net, 40)
+	net.Source.Start.Worst = true
+	both := stressed(t, net, g)
+	net.Source.Start.Worst = false
+	scan := 0.0
+	const phases = 24
+	for i := range phases {
+		net.Source.Start.Phase = 2 * math.Pi * float64(i) / phases
+		scan = math.Max(scan, stressed(t, net, g).Voltage.Value)
+	}
+	// A scan of n phases, two of which are opposite, misses by at most
+	// 1 - cos(pi/n).
+	if miss := 1 - scan/both.Voltage.Value; miss < -1e-12 || miss > 1-math.Cos(math.Pi/phases) {
+		t.Errorf("scan gives %.6f V, the pair %.6f V", scan, both.Voltage.Value)
+	}
+	net.Source.Start.Phase = both.Voltage.Phase
+	if one := stressed(t, net, g).Voltage; math.Abs(one.Value/both.Voltage.Value-1) > 1e-12 || one.Time != both.Voltage.Time || one.At != both.Voltage.At {
+		t.Errorf("at the worst phase: %+v, the pair: %+v", one, both.Voltage)
+	}
+}
+
+// TestFullReflectionDoubles: an open end doubles the wave, and a step onto it
+// through a matched source stays below that (common practice).
+func TestFullReflectionDoubles(t *testing.T) {
+	net := matchedLine(2 * wavelength)
+	net.Branches = nil
+	s := stressed(t, net, fixedGrid(net, 40))
+	if v := s.Junctions[1].Value; math.Abs(v-2000) > 2000*1e-9 {
+		t.Errorf("open end peaks at %.6f V, want 2000", v)
+	}
+}
+
+// TestBurst: after a stop the network comes to rest at zero, and the run waits
+// for the echoes.
+func TestBurst(t *testing.T) {
+	net := matchedLine(3 * wavelength)
+	net.Branches[0].R = 200
+	net.Source.R = 20
+	net.Source.Start.Rise = 2 / testFrequency
+	net.Source.Stop = &network.Stop{At: 30 / testFrequency, Fall: 1 / testFrequency}
+	g := fixedGrid(net, 40)
+	s := stressed(t, net, g)
+	if !s.Complete {
+		t.Fatal("the run did not come to rest")
+	}
+	a := s.Traces.Junctions[1].A
+	last := a[len(a)-g.StepsPerPeriod:]
+	for _, v := range last {
+		if math.Abs(v) > restTolerance*s.Voltage.Value*2 {
+			t.Fatalf("still %.3g V at the end", v)
+		}
+	}
+	if end := float64(s.Traces.TailEnd) * g.Step; math.Abs(end-net.Source.Stop.At) > g.Step {
+		t.Errorf("the tail ends at %.4g s, want at the stop", end)
+	}
+}
+
+// TestSettleTime: on a line with a matched source the load voltage is there
+// after one delay: the first period that begins then is a steady one.
+func TestSettleTime(t *testing.T) {
+	net := matchedLine(4 * wavelength)
+	net.Branches[0].R = 150
+	g := fixedGrid(net, 40)
+	s := stressed(t, net, g)
+	if at := s.SettleTime(1, 0.01); math.Abs(at*testFrequency-4) > 0.1 { // the jump of the start lasts two steps
+		t.Errorf("load settled after %.3f periods, want 4", at*testFrequency)
+	}
+	if at := s.SettleTime(0, 0.01); math.Abs(at*testFrequency-8) > 0.1 {
+		t.Errorf("source settled after %.3f periods, want 8", at*testFrequency)
+	}
+	if at := s.SettleTime(-1, 0.01); at != s.SettleTime(0, 0.01) {
+		t.Errorf("the network settled after %.3g s", at)
+	}
+}
+
+func TestDescent(t *testing.T) {
+	var d descent
+	for i, e := range []float64{0.5, 1, 0.3, 0.6, 0.1, 0.2, 0.05} {
+		d = d.push(i+1, e)
+	}
+	for _, tt := range []struct {
+		level float64
+		want  int
+	}{{2, 0}, {0.9, 2}, {0.55, 4}, {0.25, 4}, {0.15, 6}, {0.04, 7}} {
+		if got := d.last(tt.level); got != tt.want {
+			t.Errorf("last above %g: %d, want %d", tt.level, got, tt.want)
+		}
+	}
+}
+
+// TestTracesAgreeWithPhasor: the tail of the stress run is the phasor's own
+// waveform, which ties times, phases and half steps together.
+func TestTracesAgreeWithPhasor(t *testing.T) {
+	net := lossyCascade()
+	net.Source.Start = network.Start{Rise: 3 / testFrequency, Phase: 0.7}
+	g := fixedGrid(net, 60)
+	st, err := Settle(context.Background(), net, g, Settings{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	s, err := StressRun(context.Background(), net, st, Settings{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	check := func(what string, tr Trace, p complex128) {
+		start := float64(s.Traces.TailEnd-len(tr.Tail)+1) - tr.Early
+		for i, v := range tr.Tail {
+			at := (start + float64(i)) * g.Step
+			want := real(p * cmplx.Rect(1, net.Omega()*at+0.7))
+			// An average over a step is cos x of the value in its middle.
+			if d := math.Abs(v - want); d > (restTolerance+1e-3+1.4e-3)*cmplx.Abs(p) {
+				t.Fatalf("%s at sample %d: %.6g, want %.6g", what, i, v, want)
+			}
+		}
+	}
+	check("load voltage", s.Traces.Junctions[2], st.Junctions[2])
+	check("load current", s.Traces.Branches[0], st.Branches[0])
+	check("source current", s.Traces.Source, st.Source)
+}
