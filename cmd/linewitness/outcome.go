@@ -101,7 +101,7 @@ func requirementRows(rs []record.Requirement) [][]string {
 		}
 		rows = append(rows, []string{
 			r.ID, quantity, inUnit(r.Value, r.Unit), r.Limit,
-			inUnit(r.Margin, differenceUnit(r.Unit)), inUnit(r.Uncertainty, differenceUnit(r.Unit)), verdict,
+			inUnit(r.Margin, differenceUnit(r.Unit)), spread(r.Uncertainty, differenceUnit(r.Unit)), verdict,
 		})
 	}
 	return rows

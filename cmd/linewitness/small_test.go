@@ -153,10 +153,10 @@ func TestWriteOutcome(t *testing.T) {
 nominal: requirement missed
   agreement  0.0200 % found, 0.0300 % expected, limit 0.500 %
   settling   600.0 ns, 60 periods, remaining error 0.00250 %, loop factor 0.2500
-  id    quantity             value          limit              margin        uncertainty   verdict
-  R1    vswr main, from end  1.750          at most 1.5        -0.2500       0.001000      missed
-  R2.1  peak_voltage main    1.900 kV peak  at most 2 kV peak  100.0 V peak  5.000 V peak  met
-  R3    load_power aerial    3.353 dBm      at least 3 dBm     0.35 dB       0.0100 dB     met
+  id    quantity             value          limit              margin        uncertainty  verdict
+  R1    vswr main, from end  1.750          at most 1.5        -0.2500       0.0010       missed
+  R2.1  peak_voltage main    1.900 kV peak  at most 2 kV peak  100.0 V peak  5.0 V        met
+  R3    load_power aerial    3.353 dBm      at least 3 dBm     0.35 dB       0.010 dB     met
 
 lossless: not settled
   agreement  0 % found, 0 % expected, limit 0.500 %

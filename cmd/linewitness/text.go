@@ -22,6 +22,9 @@ var typeable = strings.NewReplacer(
 // inUnit is a value in the unit of a requirement.
 func inUnit(v float64, unit string) string { return typeable.Replace(format.Quantity(v, unit)) }
 
+// spread is an uncertainty in the unit of a requirement.
+func spread(v float64, unit string) string { return typeable.Replace(format.Uncertainty(v, unit)) }
+
 // inSI is a value in an SI unit, with an engineering prefix.
 func inSI(v float64, unit string) string { return typeable.Replace(format.SI(v, unit)) }
 

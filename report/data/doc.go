@@ -6,7 +6,8 @@
 // Amplitudes are peak, units are SI, and a key or a column ends in its unit
 // where it has one (at_m, time_s, power_w, phase_deg). Phases are relative to
 // the EMF of the source under e^{+jwt}. The fields of a requirement alone are
-// in the unit that the design file gave its limit in, and "unit" names it.
+// in the unit that the design file gave its limit in, and "unit" names it; the
+// difference of two levels in dBm is in dB.
 //
 // JSON numbers have 12 significant digits and CSV numbers 9: more than either
 // witness is good for, and few enough that the last bits of an arithmetic
