@@ -9,9 +9,13 @@ import (
 	"linewitness/sim/record"
 )
 
+// caseRoom is the part of a page that a chapter needs to begin on it.
+const caseRoom = 0.5
+
 // solved writes the pages of one case.
 func (d *document) solved(c *record.Case) {
-	d.b.NewPage()
+	d.b.Need(d.b.Body() * caseRoom)
+	d.b.Space(22)
 	d.b.Heading("Case "+c.Name, 120)
 	d.verdictLine(c)
 	d.differences(c)
@@ -134,11 +138,14 @@ func (d *document) transientFields(c *record.Case) []sheet.Field {
 
 func peak(p record.Peak, unit string) string {
 	s := format.SI(p.Value, unit)
+	if p.Uncertainty > 0 {
+		s += format.Space + "±" + format.Space + format.Uncertainty(p.Uncertainty, unit)
+	}
 	if p.Section == "" {
 		return s
 	}
 	return s + " on " + p.Section + ", " + format.SI(p.At, "m") + " from its From end, " + format.SI(p.Time, "s") +
-		" after switch-on at a start phase of " + format.Angle(p.Phase)
+		" after switch-on, start phase " + format.Angle(p.Phase)
 }
 
 func settled(s record.Settling, tolerance float64) string {
@@ -154,6 +161,7 @@ func settled(s record.Settling, tolerance float64) string {
 
 // sections writes the state along the sections.
 func (d *document) sections(c *record.Case) {
+	near := noise(c)
 	t := sheet.Table{Columns: []sheet.Column{
 		left("Section"), right("Impedance at From"), right("VSWR, From"), right("VSWR, To"), right("Largest |V|"), right("at"),
 		right("Smallest |V|"), right("Largest |I|"), right("at"), right("Loss"), right("Peak V, all time"), right("Peak I, all time"),
@@ -165,7 +173,7 @@ func (d *document) sections(c *record.Case) {
 		}
 		t.Rows = append(t.Rows, []sheet.Cell{
 			{Text: s.Name, Bold: true}, {Text: format.Complex(s.From.Impedance, "Ω")}, {Text: format.VSWR(s.From.VSWR)}, {Text: format.VSWR(s.To.VSWR)},
-			{Text: format.SI(s.VoltageMax.Value, "V")}, {Text: format.SI(s.VoltageMax.At, "m")}, {Text: format.SI(s.VoltageMin.Value, "V")},
+			{Text: format.SI(s.VoltageMax.Value, "V")}, {Text: format.SI(s.VoltageMax.At, "m")}, {Text: format.SI(real(near.voltage(complex(s.VoltageMin.Value, 0))), "V")},
 			{Text: format.SI(s.CurrentMax.Value, "A")}, {Text: format.SI(s.CurrentMax.At, "m")}, {Text: format.SI(s.Loss, "W")},
 			{Text: format.SI(x.Voltage, "V")}, {Text: format.SI(x.Current, "A")},
 		})
@@ -179,24 +187,27 @@ func (d *document) sections(c *record.Case) {
 
 // loads writes the loads and the junctions.
 func (d *document) loads(c *record.Case) {
+	near := noise(c)
 	d.b.Subheading("Loads and junctions: steady state (phasor)", 60)
 	t := sheet.Table{Columns: []sheet.Column{
 		left("Load or junction"), right("Voltage, peak"), right("Voltage, rms"), right("Current, peak"), right("Power"),
 	}}
 	for _, l := range c.Phasor.Loads {
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: l.Name + " (load)", Bold: true}, {Text: format.Polar(l.V, "V")}, {Text: format.SI(cmplx.Abs(l.V)/math.Sqrt2, "V")},
-			{Text: format.Polar(l.I, "A")}, {Text: format.SI(l.Power, "W")},
+			{Text: l.Name + " (load)", Bold: true}, {Text: format.Polar(near.voltage(l.V), "V")}, {Text: rms(near.voltage(l.V))},
+			{Text: format.Polar(near.current(l.I), "A")}, {Text: format.SI(near.power(l.Power), "W")},
 		})
 	}
 	for _, j := range c.Phasor.Junctions {
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: j.Name}, {Text: format.Polar(j.V, "V")}, {Text: format.SI(cmplx.Abs(j.V)/math.Sqrt2, "V")},
+			{Text: j.Name}, {Text: format.Polar(near.voltage(j.V), "V")}, {Text: rms(near.voltage(j.V))},
 			{Text: format.Missing}, {Text: format.Missing},
 		})
 	}
 	d.b.Table(t)
 }
+
+func rms(v complex128) string { return format.SI(cmplx.Abs(v)/math.Sqrt2, "V") }
 
 // warnings lists what the run noticed.
 func (d *document) warnings(c *record.Case) {

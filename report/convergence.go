@@ -29,7 +29,7 @@ func (d *document) convergence(c *record.Case) {
 	}
 	label := d.figure()
 	entries := []figure.Entry{
-		{Style: ink.FDTDLine, Text: "change between windows one round trip apart"}, {Style: ink.PhasorLine, Text: "estimated remaining error"},
+		{Style: ink.FDTDLine, Text: "change over a round trip"}, {Style: ink.PhasorLine, Text: "estimated error left"},
 		{Style: ink.MarkLine, Text: "multiples of the longest round trip"}, {Style: ink.LimitLine, Text: "tolerance"},
 	}
 	d.b.Subheading("Steady state and spectrum", convergenceHeight+2*figure.KeyHeight+30)
@@ -54,7 +54,7 @@ func settlingPanel(s record.Settling, tolerance float64) *figure.Panel {
 		return nil
 	}
 	hi := math.Pow(10, math.Ceil(math.Log10(max(top, largestOf(estimate), tolerance)*1.2)))
-	lo := math.Pow(10, math.Floor(math.Log10(max(min(smallestOf(change), tolerance)/1.5, hi*1e-12))))
+	lo := math.Pow(10, math.Floor(math.Log10(max(min(smallestOf(change), tolerance)/1.5, tolerance*1e-4, hi*1e-12))))
 	last := max(s.Time, ts[len(ts)-1])
 	p := figure.New("Settling run", "relative to the section's largest value",
 		figure.Axis{Label: "time", Unit: "s", Max: last}, figure.Axis{Min: lo, Max: hi, Log: true})
@@ -131,9 +131,13 @@ func spectrumPanel(c *record.Case) *figure.Panel {
 		return nil
 	}
 	const floor = 1e-8
+	last := s.Frequency[len(s.Frequency)-1]
+	if c.Model.Frequency > 0 {
+		last = min(last, harmonics*c.Model.Frequency)
+	}
 	p := figure.New("Spectrum at "+s.Where, "relative to the largest line",
-		figure.Axis{Label: "frequency", Unit: "Hz", Max: s.Frequency[len(s.Frequency)-1] * 1.02}, figure.Axis{Min: floor, Max: 2, Log: true})
-	xs, ys := s.Frequency, s.Amplitude
+		figure.Axis{Label: "frequency", Unit: "Hz", Max: last}, figure.Axis{Min: floor, Max: 2, Log: true})
+	xs, ys := span{0, last}.in(s.Frequency, s.Amplitude)
 	if len(ys) > spectrumLines {
 		t := figure.Extremes(xs, ys, spectrumLines)
 		xs, ys = t.X, t.Hi
@@ -148,6 +152,9 @@ func spectrumPanel(c *record.Case) *figure.Panel {
 	}
 	return p
 }
+
+// harmonics is how far the spectrum is drawn, in units of the frequency.
+const harmonics = 8.2
 
 // spectrumLines is how many lines a panel shows apart.
 const spectrumLines = 200

@@ -1,6 +1,7 @@
 package report
 
 import (
+	"path"
 	"strings"
 
 	"gonum.org/v1/plot/vg"
@@ -15,7 +16,7 @@ import (
 // cover writes the first page: identity, verdict, cases, requirements.
 func (d *document) cover() {
 	d.b.Overline("Design verification record, transmission-line network")
-	d.b.Title(orElse(d.r.Design.Title, d.r.Design.File))
+	d.b.Title(title(d.r))
 	d.identity()
 	d.banner()
 	if d.r.Design.Purpose != "" {
@@ -39,7 +40,7 @@ func (d *document) identity() {
 		{Label: "Document number", Value: orElse(g.Number, "none")},
 		{Label: "Revision", Value: orElse(g.Revision, "none")},
 		{Label: "Date", Value: orElse(g.Date, "not stated")},
-		{Label: "Design file", Value: g.File},
+		{Label: "Design file", Value: path.Base(g.File)},
 		{Label: "SHA-256 of the design file", Value: g.SHA256, Face: typeset.Mono, Wide: true},
 		{Label: "Made by", Value: "linewitness " + strings.TrimSpace(d.r.Tool.Version+" ("+d.r.Tool.Go+")"), Wide: true},
 	})
@@ -123,7 +124,7 @@ func (d *document) requirements() {
 		d.b.Paragraph("The design file states no requirement. The verdict then says only that the two solutions agree.")
 		return
 	}
-	d.b.Table(sheet.Table{Columns: []sheet.Column{
+	d.b.Table(sheet.Table{Size: 7, Columns: []sheet.Column{
 		{Head: "Id"}, {Head: "Case"}, {Head: "Quantity, subject", Grow: 1}, {Head: "Limit"},
 		{Head: "Value", Align: typeset.Right}, {Head: "Uncertainty ±", Align: typeset.Right},
 		{Head: "Margin", Align: typeset.Right}, {Head: "Margin, relative", Align: typeset.Right}, {Head: "Verdict"},
@@ -139,8 +140,8 @@ func (d *document) requirementRows() [][]sheet.Cell {
 		for _, q := range c.Requirements {
 			rows = append(rows, []sheet.Cell{
 				{Text: q.ID, Bold: true}, {Text: c.Name}, {Text: quantityOf(q)}, {Text: q.Limit},
-				{Text: format.Quantity(q.Value, q.Unit)}, {Text: format.Quantity(q.Uncertainty, q.Unit)},
-				{Text: format.Quantity(q.Margin, q.Unit)}, {Text: relative(q)},
+				{Text: format.Quantity(q.Value, q.Unit)}, {Text: format.Uncertainty(q.Uncertainty, q.Unit)},
+				{Text: format.Bare(q.Margin, q.Unit)}, {Text: relative(q)},
 				{Text: string(q.Verdict), Mark: markOfRequirement(q.Verdict), Bold: q.Verdict != record.Met},
 			})
 		}
@@ -174,19 +175,25 @@ func relative(q record.Requirement) string {
 	return format.Percent(q.MarginPercent / 100)
 }
 
-// requirementTexts writes texts, sources and notes, once for each id.
+// requirementTexts writes texts and sources, once for each id, and notes.
 func (d *document) requirementTexts() {
 	seen := map[string]bool{}
+	var texts, notes []string
 	for _, c := range d.r.Cases {
 		for _, q := range c.Requirements {
-			s := strings.TrimSpace(q.Text + " " + bracket(q.Source))
+			s := strings.TrimSpace(strings.TrimSuffix(q.Text, ".") + " " + bracket(q.Source))
 			if !seen[q.ID] && s != "" {
-				d.b.Note(q.ID + ": " + s)
+				texts = append(texts, q.ID+": "+s+".")
 			}
 			seen[q.ID] = true
 			if q.Note != "" {
-				d.b.Note(q.ID + " in case " + c.Name + ": " + q.Note + ".")
+				notes = append(notes, q.ID+" in case "+c.Name+": "+strings.TrimSuffix(q.Note, ".")+".")
 			}
+		}
+	}
+	for _, list := range [][]string{texts, notes} {
+		if len(list) > 0 {
+			d.b.Note(strings.Join(list, " "))
 		}
 	}
 }

@@ -17,7 +17,8 @@ func (d *document) design() {
 	if c == nil {
 		return
 	}
-	d.b.NewPage()
+	d.b.Need(d.b.Body() * caseRoom)
+	d.b.Space(22)
 	d.b.Heading("The design as modelled", 120)
 	d.network(c.Model)
 	d.lengths(c.Model)
@@ -66,7 +67,7 @@ func left(head string) sheet.Column  { return sheet.Column{Head: head, Grow: 1} 
 func (d *document) lengths(m record.Model) {
 	t := sheet.Table{Columns: []sheet.Column{
 		left("Section"), left("From, to"), left("Line"), right("As given"), right("Length"), right("Length"),
-		right("Wave-lengths"), right("Electrical"), right("Delay"), right("Loss, one way"),
+		right("Wavelengths"), right("Electrical"), right("Delay"), right("Loss, one way"),
 	}}
 	for _, s := range m.Sections {
 		t.Rows = append(t.Rows, []sheet.Cell{
@@ -82,7 +83,7 @@ func (d *document) lengths(m record.Model) {
 // constants writes the table of the lines' constants.
 func (d *document) constants(m record.Model) {
 	t := sheet.Table{Columns: []sheet.Column{
-		left("Section"), right("Z₀"), right("Velocity over c"), right("R′"), right("L′"), right("G′"), right("C′"),
+		left("Section"), right(z0), right("Velocity over c"), right("R′"), right("L′"), right("G′"), right("C′"),
 	}}
 	for _, s := range m.Sections {
 		t.Rows = append(t.Rows, []sheet.Cell{
@@ -166,13 +167,16 @@ func (d *document) conventions() {
 		given + " This document uses j and e" + sup("+jωt") + " throughout.",
 		"Amplitudes are peak values unless rms is said. Phases are in degrees, relative to the EMF of the source as a cosine.",
 		"Current along a section is positive from its From end to its To end, and the distance z is measured from the From end. An impedance at an end is V/I there.",
-		"The reflection coefficient is taken against the section's own Z₀: Γ = (Z − Z₀)/(Z + Z₀). VSWR = (1 + |Γ|)/(1 − |Γ|), infinite if |Γ| is 1 or more.",
-		"Voltage and current levels are 20 log₁₀ of a ratio, powers 10 log₁₀. One way loss is that of the matched section.",
+		"The reflection coefficient is taken against the section's own " + z0 + ": Γ = (Z − " + z0 + ")/(Z + " + z0 + "). VSWR = (1 + |Γ|)/(1 − |Γ|), infinite if |Γ| is 1 or more.",
+		"Voltage and current levels are 20 log" + sub("10") + " of a ratio, powers 10 log" + sub("10") + ". One way loss is that of the matched section.",
 		"A dash (–) stands for what does not apply.",
 	} {
 		d.b.Item(s)
 	}
 }
+
+// z0 is the sign of a characteristic impedance.
+var z0 = "Z" + sub("0")
 
 // sup and sub mark up superscripts and subscripts.
 func sup(s string) string { return string(format.Sup) + s + string(format.End) }

@@ -53,8 +53,8 @@ type term struct{ name, words string }
 func sectionTerms(m record.Model) []term {
 	var out []term
 	for _, s := range m.Sections {
-		out = append(out, term{s.Name, fmt.Sprintf("%s to %s, %s (%s), line %s, Z₀ %s, R′ %s",
-			s.From, s.To, s.Given, format.Wavelengths(s.Wavelengths), s.Line, format.Complex(s.Z0, "Ω"), format.SI(s.R, "Ω/m"))})
+		out = append(out, term{s.Name, fmt.Sprintf("%s to %s, %s (%s), line %s, %s %s, R′ %s",
+			s.From, s.To, s.Given, format.Wavelengths(s.Wavelengths), s.Line, z0, format.Complex(s.Z0, "Ω"), format.SI(s.R, "Ω/m"))})
 	}
 	return out
 }

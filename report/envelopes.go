@@ -20,7 +20,7 @@ const manyWavelengths = 12
 const zoomWavelengths = 2
 
 // manySections is how many short sections get a row of their own.
-const manySections = 6
+const manySections = 3
 
 // The heights of an envelope and of the error strip below it.
 const (

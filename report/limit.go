@@ -55,7 +55,7 @@ func unitOf(quantity string) string {
 // the section, or no part of the network at all.
 func concerns(m record.Model, q record.Requirement, section string) bool {
 	subject, _, _ := strings.Cut(q.Subject, ",")
-	subject = strings.TrimSpace(strings.TrimPrefix(subject, "section "))
+	subject = strings.TrimPrefix(strings.TrimPrefix(subject, "along "), "section ")
 	if subject == section {
 		return true
 	}
@@ -64,7 +64,7 @@ func concerns(m record.Model, q record.Requirement, section string) bool {
 			return false
 		}
 	}
-	subject = strings.TrimPrefix(strings.TrimPrefix(subject, "junction "), "load ")
+	subject = strings.TrimPrefix(subject, "at ")
 	for _, j := range m.Junctions {
 		if j == subject {
 			return false

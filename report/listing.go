@@ -2,6 +2,7 @@ package report
 
 import (
 	"bytes"
+	"path"
 	"strconv"
 	"strings"
 
@@ -12,7 +13,7 @@ import (
 func (d *document) listing() {
 	g := d.r.Design
 	d.b.Heading("The design file", 60)
-	d.b.Note("File " + g.File + ", SHA-256 " + g.SHA256 + ". Solved by linewitness " + d.r.Tool.Version + " (" + d.r.Tool.Go +
+	d.b.Note("File " + path.Base(g.File) + ", SHA-256 " + g.SHA256 + ". Solved by linewitness " + d.r.Tool.Version + " (" + d.r.Tool.Go +
 		"). What the font cannot print is given by its number, <U+…>; a line that is too long goes on without a number.")
 	if len(g.Source) == 0 {
 		d.b.Paragraph("The record does not hold the text of the file.")

@@ -6,18 +6,19 @@ import (
 
 // method writes how the numbers were got.
 func (d *document) method() {
-	d.b.NewPage()
+	d.b.Need(d.b.Body() * caseRoom)
+	d.b.Space(22)
 	d.b.Heading("Method", 80)
 	d.b.Paragraph("Two solutions that share no code are compared: one in the time domain, one in closed form for the steady state. A number in this record was given by both, or is said to come from the time domain alone (peaks, settling), where the closed form has nothing to say.")
 	d.b.Subheading("The line", 60)
 	d.b.Paragraph("Each section is a uniform line with constants R′, L′, G′, C′ per metre that do not change with frequency:")
 	d.b.Equation("∂v/∂z = −R′ i − L′ ∂i/∂t,   ∂i/∂z = −G′ v − C′ ∂v/∂t")
 	d.b.Paragraph("A line given by its characteristic impedance, velocity factor and attenuation has, with the velocity v, the attenuation a in nepers per metre at the design frequency and the dielectric's share s of it,")
-	d.b.Equation("L′ = Z₀/v,   C′ = 1/(Z₀ v),   R′ = 2 a Z₀ (1 − s),   G′ = 2 a s/Z₀")
+	d.b.Equation("L′ = " + z0 + "/v,   C′ = 1/(" + z0 + " v),   R′ = 2 a " + z0 + " (1 − s),   G′ = 2 a s/" + z0)
 	d.b.Subheading("Closed form (phasor)", 60)
 	d.b.Paragraph("On a section of length ℓ the voltage is a sum of two waves, written so that no exponential exceeds 1:")
-	d.b.Equation("V(z) = P e" + sup("−γz") + " + M e" + sup("−γ(ℓ−z)") + ",   Z₀ I(z) = P e" + sup("−γz") + " − M e" + sup("−γ(ℓ−z)") +
-		",   γ = √((R′ + jωL′)(G′ + jωC′)),   Z₀ = √((R′ + jωL′)/(G′ + jωC′))")
+	d.b.Equation("V(z) = P e" + sup("−γz") + " + M e" + sup("−γ(ℓ−z)") + ",   " + z0 + " I(z) = P e" + sup("−γz") + " − M e" + sup("−γ(ℓ−z)") +
+		",   γ = √((R′ + jωL′)(G′ + jωC′)),   " + z0 + " = √((R′ + jωL′)/(G′ + jωC′))")
 	d.b.Paragraph("Continuity of voltage at both ends of every section and Kirchhoff's current law at every junction give one linear system for P and M of all sections and the junction voltages.")
 	d.methodTime()
 	d.methodComparison()

@@ -4,6 +4,7 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"path"
 	"time"
 
 	"linewitness/report/canvas"
@@ -81,12 +82,15 @@ func (d *document) nominal() *record.Case {
 
 func meta(r *record.Record) sheet.Meta {
 	return sheet.Meta{
-		Title: orElse(r.Design.Title, r.Design.File), Subject: r.Design.Purpose, Author: r.Design.PreparedBy,
+		Title: title(r), Subject: r.Design.Purpose, Author: r.Design.PreparedBy,
 		Creator: "linewitness " + r.Tool.Version, Date: date(r.Design.Date),
-		Header: orElse(r.Design.Title, r.Design.File),
+		Header: title(r),
 		Number: r.Design.Number, Revision: r.Design.Revision,
 	}
 }
+
+// title returns the title of the document, or the name of the design file.
+func title(r *record.Record) string { return orElse(r.Design.Title, path.Base(r.Design.File)) }
 
 // undated stands in the properties of a document whose record has no date
 // that can be read; any constant would do, for it must not be the clock.

@@ -129,14 +129,14 @@ func (t *track) finding() string {
 	if i < 0 {
 		return t.symbol + " has no finite value"
 	}
-	s := t.symbol + " is largest at " + format.SI(t.z[i], "m") + ", " + format.SI(t.phasor[i], t.unit)
+	s := t.symbol + " up to " + format.SI(t.phasor[i], t.unit) + " at " + format.SI(t.z[i], "m")
 	if k := largestAt(t.peak); k >= 0 {
-		s += ", and peaks at " + format.SI(t.peak[k], t.unit) + " over all time"
+		s += ", peak " + format.SI(t.peak[k], t.unit)
 	}
 	for _, l := range t.limits {
 		s += ", " + l.finding(t)
 	}
-	s += "; the solutions differ by at most " + format.Percent(largestOf(t.found))
+	s += ", difference up to " + format.Percent(largestOf(t.found))
 	if len(t.expected) > 0 {
 		s += " (" + format.Percent(largestOf(t.expected)) + " expected)"
 	}

@@ -3,6 +3,7 @@ package report
 import (
 	"math"
 	"slices"
+	"strings"
 
 	"gonum.org/v1/plot/vg/draw"
 	"linewitness/report/figure"
@@ -14,11 +15,11 @@ import (
 // waveforms draws the stress run: the whole turn-on at the left, the last
 // periods with the phasor's own waveform at the right.
 func (d *document) waveforms(c *record.Case) {
-	list := distinct(c.Waveforms)
+	list, silent := heard(distinct(c.Waveforms), noise(c))
 	if len(list) == 0 {
 		return
 	}
-	height := 74.0
+	height := 72.0
 	if len(list) > crowdedWaveforms {
 		height = 58
 	}
@@ -27,13 +28,36 @@ func (d *document) waveforms(c *record.Case) {
 		{Style: ink.FDTDLine, Text: "time domain (right)"}, {Style: ink.TraceLine, Band: true, Text: "time domain, between its extremes where dense"},
 	}
 	d.b.Subheading("Waveforms", figure.KeyHeight+height+40)
-	if c.Stress.Profile != "" {
-		d.b.Note("Source as it starts in service: " + c.Stress.Profile + ". Shown for the start phase that gives the largest voltage, " + format.Angle(c.Stress.Voltage.Phase) + ".")
-	}
+	d.b.Note(startNote(c.Stress, silent))
 	d.key(key)
 	for i := range list {
-		d.waveform(&list[i], height)
+		d.waveform(&list[i], height, c.Model.Frequency)
 	}
+}
+
+// startNote says how the source starts, and what is not drawn.
+func startNote(s record.Stress, silent []string) string {
+	note := "Source as it starts in service: " + orElse(s.Profile, "not stated") + "."
+	if s.Worst {
+		note += " Shown for the start phase that gives the largest voltage, " + format.Angle(s.Voltage.Phase) + "."
+	}
+	if len(silent) > 0 {
+		note += " Zero throughout and not drawn: " + strings.Join(silent, ", ") + "."
+	}
+	return note
+}
+
+// heard parts the waveforms that are more than rounding from those that are
+// not, such as the voltage across a short.
+func heard(ws []record.Waveform, f floor) (list []record.Waveform, silent []string) {
+	for _, w := range ws {
+		if most := max(largestOf(w.Samples), largestOf(w.Tail.Phasor)); most < f.unit(w.Unit) {
+			silent = append(silent, w.Name)
+			continue
+		}
+		list = append(list, w)
+	}
+	return list, silent
 }
 
 // crowdedWaveforms is how many waveforms get rows of full height.
@@ -66,14 +90,14 @@ func (d *document) key(entries []figure.Entry) {
 }
 
 // waveform draws one row.
-func (d *document) waveform(w *record.Waveform, height float64) {
+func (d *document) waveform(w *record.Waveform, height, frequency float64) {
 	ts := figure.Times(w.Start, w.Step, len(w.Samples))
 	at := largestAt(w.Samples)
 	label, finding := d.figure(), waveformFinding(w, ts, at)
 	d.b.Need(height + d.b.CaptionHeight(label, finding))
 	d.b.Block(height, func(c draw.Canvas) {
 		split := c.Size().X * 0.62
-		turnOn(w, ts, at).Draw(draw.Crop(c, 0, split-c.Size().X, 0, 0))
+		turnOn(w, ts, at, frequency).Draw(draw.Crop(c, 0, split-c.Size().X, 0, 0))
 		lastPeriods(w).Draw(draw.Crop(c, split, 0, 0, 0))
 	})
 	d.b.Caption(label, finding)
@@ -101,16 +125,16 @@ func symmetric(series ...[]float64) (lo, hi float64) {
 	return -hi, hi
 }
 
-func turnOn(w *record.Waveform, ts []float64, at int) *figure.Panel {
+func turnOn(w *record.Waveform, ts []float64, at int, frequency float64) *figure.Panel {
 	lo, hi := symmetric(w.Samples, w.Tail.Phasor)
-	p := figure.New(w.Name, "turn-on", figure.Axis{Label: "time from switch-on", Unit: "s", Min: ts[0], Max: ts[len(ts)-1]},
+	p := figure.New(w.Name, "turn-on", figure.Axis{Label: "time from switch-on", Unit: "s", Min: min(0, ts[0]), Max: ts[len(ts)-1]},
 		figure.Axis{Unit: w.Unit, Min: lo, Max: hi})
 	if i := largestAt(w.Tail.Phasor); i >= 0 {
 		level := math.Abs(w.Tail.Phasor[i])
 		p.Level(level, ink.PhasorLine, "")
 		p.Level(-level, ink.PhasorLine, "")
 	}
-	p.Trace(ts, w.Samples)
+	p.Trace(ts, w.Samples, (ts[len(ts)-1]-ts[0])*frequency)
 	if at >= 0 {
 		p.Spot(ts[at], w.Samples[at], format.SI(w.Samples[at], w.Unit))
 	}
@@ -142,9 +166,12 @@ func waveformFinding(w *record.Waveform, ts []float64, at int) string {
 	}
 	amplitude := math.Abs(w.Tail.Phasor[i])
 	if amplitude > 0 && most > 0 {
-		s += ", " + format.Number(most/amplitude) + " times the steady amplitude"
+		s += ", " + format.Number(most/amplitude) + " of the steady amplitude"
 	}
-	return s + "; over the last periods it differs from the phasor's waveform by at most " + format.SI(deviation(w.Tail), w.Unit) + relativeTo(deviation(w.Tail), amplitude) + "."
+	if amplitude == 0 {
+		return s + "; it has no steady amplitude."
+	}
+	return s + "; last periods within " + format.Percent(deviation(w.Tail)/amplitude) + " of the phasor's waveform."
 }
 
 func deviation(t record.Tail) (most float64) {
@@ -154,11 +181,4 @@ func deviation(t record.Tail) (most float64) {
 		}
 	}
 	return most
-}
-
-func relativeTo(v, whole float64) string {
-	if whole <= 0 {
-		return ""
-	}
-	return " (" + format.Percent(v/whole) + ")"
 }

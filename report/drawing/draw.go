@@ -15,7 +15,7 @@ const mm = 72 / 25.4
 const (
 	leadWidth = 31 * mm // the column of the source
 	tailWidth = 7 * mm  // room at the right for the mark of a continued band
-	maxCell   = 44 * mm
+	maxCell   = 64 * mm
 	wireDrop  = 7.6 * mm // from the upper edge of a row to its wire
 	lanePitch = 1.6 * mm
 	textGap   = 1.5 * mm // between a label and what is beside it
@@ -139,8 +139,8 @@ func (p *pen) edge(e *edge, x, right, y float64) {
 	room := right - x - 2*textGap - lanes*lanePitch
 	if e.section != nil {
 		p.line(lineStyle, x, y, right, y)
-		p.label(nameStyle, x+textGap, y+2.9*mm, room, e.section.Name)
-		p.label(valueStyle, x+textGap, y+0.8*mm, room, format.SI(e.section.Length, "m"))
+		p.label(nameStyle, x+textGap, y+3.6*mm, room, e.section.Name)
+		p.label(valueStyle, x+textGap, y+1.0*mm, room, format.SI(e.section.Length, "m"))
 		return
 	}
 	middle := (x + right) / 2
@@ -152,7 +152,7 @@ func (p *pen) edge(e *edge, x, right, y float64) {
 
 // value writes the name and the value of a part above its symbol.
 func (p *pen) value(part *record.ModelPart, x, y, room float64) {
-	p.label(nameStyle, x+textGap, y+4.3*mm, room, part.Name)
+	p.label(nameStyle, x+textGap, y+4.7*mm, room, part.Name)
 	p.label(valueStyle, x+textGap, y+2.1*mm, room, typeset.Clean(part.Given))
 }
 
@@ -180,9 +180,9 @@ func (p *pen) part(part *record.ModelPart, x, y float64) {
 func (p *pen) node(n *node) {
 	x, y := p.x(n.col), p.y(n.row)
 	if n.end {
-		p.ring(x, y, 1.7)
+		p.ring(x, y, 2.2)
 	} else {
-		p.dot(x, y, 1.7)
+		p.dot(x, y, 2.2)
 	}
 	room := p.cell - 2*textGap - lanes*lanePitch
 	if n.on > 0 {

@@ -106,7 +106,7 @@ func withUnit(label, unit string) string {
 func styleAxis(a *plot.Axis, s scale) {
 	a.Min, a.Max = s.at(s.Min), s.at(s.Max)
 	a.Padding = 0
-	a.LineStyle = ink.FrameLine
+	a.LineStyle.Width = 0 // the frame is the line
 	a.Tick.LineStyle = ink.FrameLine
 	a.Tick.Length = vg.Points(2.5)
 	a.Tick.Label.Font = tickStyle.Face.Font(tickStyle.Size)

@@ -13,9 +13,9 @@ type Thinned struct{ X, Lo, Hi []float64 }
 // points of a curve do not show apart.
 const columns = 360
 
-// crowded is the number of samples in a window from which on a curve is drawn
-// as a band.
-const crowded = 6
+// crowded is the number of cycles from which on a waveform is drawn as a band:
+// more do not show apart on half the width of a page.
+const crowded = 60
 
 // Extremes returns the smallest and largest finite y in each of n windows of
 // equal width between the first and the last x, which must ascend. Windows
@@ -58,9 +58,6 @@ func (t Thinned) stretch(first, last float64) Thinned {
 	return t
 }
 
-// Crowded reports whether n samples are too many to draw as a line.
-func Crowded(n int) bool { return n > columns*crowded }
-
 // Times returns n equally spaced abscissas.
 func Times(start, step float64, n int) []float64 {
 	ts := make([]float64, n)
@@ -70,10 +67,12 @@ func Times(start, step float64, n int) []float64 {
 	return ts
 }
 
-// Trace draws samples as a line, or as a band if they are crowded.
-func (pn *Panel) Trace(xs, ys []float64) {
-	if Crowded(len(ys)) {
-		pn.Band(Extremes(xs, ys, columns), ink.TraceLine)
+// Trace draws a waveform of so many cycles as a line, or as a band if they
+// are crowded. Each window of the band holds a cycle or more, for with less
+// the edges of the band would beat with the waveform.
+func (pn *Panel) Trace(xs, ys []float64, cycles float64) {
+	if cycles > crowded {
+		pn.Band(Extremes(xs, ys, min(columns, int(cycles))), ink.TraceLine)
 		return
 	}
 	pn.Line(xs, ys, ink.TraceLine)

@@ -20,13 +20,27 @@ func (t ticks) Ticks(lo, hi float64) []plot.Tick {
 	if t.s.Log {
 		return t.decades(lo, hi)
 	}
-	step := niceStep((hi - lo) / float64(max(t.most, 2)))
+	step := t.step(lo, hi)
 	first, last := math.Ceil(lo/step-1e-6), math.Floor(hi/step+1e-6)
 	var out []plot.Tick
 	for k := first; k <= last; k++ {
 		out = append(out, t.tick(k*step, format.Tick(k*step, step)))
 	}
 	return out
+}
+
+// step returns the distance of the ticks: as chosen by most, or less if that
+// leaves fewer than three.
+func (t ticks) step(lo, hi float64) float64 {
+	const least = 3
+	step := niceStep((hi - lo) / float64(max(t.most, 2)))
+	for range 3 {
+		if math.Floor(hi/step+1e-6)-math.Ceil(lo/step-1e-6)+1 >= least {
+			break
+		}
+		step = niceStep(step * 0.45)
+	}
+	return step
 }
 
 func (t ticks) tick(v float64, label string) plot.Tick {

@@ -38,6 +38,31 @@ func Quantity(v float64, unit string) string {
 	return SI(v, base) + qualifier
 }
 
+// Uncertainty returns an uncertainty in the unit of a requirement, with two
+// significant digits and without the unit's qualifier: "0.80 V".
+func Uncertainty(v float64, unit string) string {
+	base, _, _ := strings.Cut(Unit(unit), " ")
+	if math.IsNaN(v) || base == "1" {
+		base = ""
+	}
+	p := Prefix{Factor: 1}
+	if prefixed[base] {
+		p = PrefixFor(v)
+	}
+	s := Digits(v/p.Factor, 2)
+	if base == "" || base == "°" {
+		return s + base
+	}
+	return s + Space + p.Symbol + base
+}
+
+// Bare is Quantity without the qualifier of the unit: "1.315 kV" in place of
+// "1.315 kV peak", for where the qualifier has been said.
+func Bare(v float64, unit string) string {
+	base, _, _ := strings.Cut(unit, " ")
+	return Quantity(v, base)
+}
+
 // Unit returns a unit as it is printed: "ohm" as Ω, "deg" as °.
 func Unit(unit string) string {
 	switch unit {
@@ -69,8 +94,15 @@ func Percent(fraction float64) string {
 	if math.IsNaN(fraction) {
 		return Missing
 	}
+	if a := math.Abs(fraction); a > 0 && a < rounding {
+		return "<" + Space + Pow10(-10) + Space + "%"
+	}
 	return Digits(100*fraction, 3) + Space + "%"
 }
+
+// rounding is the size below which a relative difference of two numbers is
+// the rounding of their arithmetic; its digits mean nothing.
+const rounding = 1e-12
 
 // Share returns a fraction as a percentage for running text: whole from 10 %
 // on, two digits below.

@@ -100,6 +100,7 @@ func (b *Book) hanging(st typeset.Style, lead string, indent float64, s string) 
 
 // Caption writes the finding under a figure: a bold label and its text.
 func (b *Book) Caption(label, s string) {
+	b.Space(captionRise)
 	b.labelled(CaptionStyle, label, s)
 	b.Space(9)
 }
@@ -107,8 +108,11 @@ func (b *Book) Caption(label, s string) {
 // CaptionHeight returns the height that Caption takes.
 func (b *Book) CaptionHeight(label, s string) float64 {
 	_, lines := labelLines(CaptionStyle, label, s, b.Width())
-	return float64(len(lines)) * leadingOf(CaptionStyle)
+	return captionRise + float64(len(lines))*leadingOf(CaptionStyle)
 }
+
+// captionRise is the room between a figure and its caption.
+const captionRise = 3.0
 
 // labelGap is the room between a bold label and its text.
 const labelGap = 5
