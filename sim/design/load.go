@@ -51,6 +51,9 @@ func read(src []byte, text *source, p *problems) *File {
 	judged := judge(nominal, requirements, walkers)
 	for _, w := range walkers {
 		w.design.Requirements = judged
+		if w.flawed && len(p.list) == 0 {
+			panic("design: a flaw was met and not told of")
+		}
 	}
 	return out
 }

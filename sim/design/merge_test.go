@@ -1,6 +1,7 @@
 package design
 
 import (
+	"fmt"
 	"strings"
 	"testing"
 )
@@ -25,7 +26,8 @@ func TestMergePatch(t *testing.T) {
 		{`{}`, `{"a":{"bb":{"ccc":null}}}`, `{"a":{"bb":{}}}`},
 	} {
 		p := &problems{}
-		original, patch := parse([]byte(tt.original), p), parse([]byte(tt.patch), p)
+		both := parse(fmt.Appendf(nil, `{"original": %s, "patch": %s}`, tt.original, tt.patch), p)
+		original, patch := both.get("original"), both.get("patch")
 		if len(p.list) > 0 {
 			t.Fatalf("%s, %s: %v", tt.original, tt.patch, p.list)
 		}

@@ -21,7 +21,10 @@ func parse(src []byte, p *problems) *node {
 	var syntax *yaml.LoadError
 	switch {
 	case err == nil:
-		return convert(doc, p)
+		if n := convert(doc, p); n.kind != null {
+			return n
+		}
+		fallthrough
 	case errors.Is(err, io.EOF):
 		p.problem(Pos{}, say("`linewitness starter FILE` writes a commented design file to begin from"), "the file has no content")
 	case errors.Is(err, errSecondDocument):
@@ -105,7 +108,11 @@ func convert(y *yaml.Node, p *problems) *node {
 	case yaml.SequenceNode:
 		n.kind = list
 		for _, c := range y.Content {
-			n.items = append(n.items, convert(c, p))
+			item := convert(c, p)
+			if item.kind == null {
+				p.problem(item.pos, say("give it a value or delete it"), "an entry of a list has no value")
+			}
+			n.items = append(n.items, item)
 		}
 	default:
 		n.plain = y.Style&(yaml.SingleQuotedStyle|yaml.DoubleQuotedStyle|yaml.LiteralStyle|yaml.FoldedStyle) == 0
