@@ -39,7 +39,7 @@ var whyNot = map[string]string{
 }
 
 // readCases reads the cases of the nominal design's file.
-func (w *walker) readCases(file *fields) (patches []*patch) {
+func (w *walker) readCases(file *fields, root *node) (patches []*patch) {
 	n := file.node("cases")
 	if n == nil || !w.isKind(n, file.name("cases"), mapping) {
 		return nil
@@ -57,6 +57,7 @@ func (w *walker) readCases(file *fields) (patches []*patch) {
 			w.problem(p.key.pos, say("give what it changes, or delete it"), "case %q has no value", p.key.text)
 		case w.isKind(p.value, `case "`+p.key.text+`"`, mapping):
 			w.checkPatch(p.key.text, p.value)
+			w.checkRemovals(p.key.text, p.value, root)
 			patches = append(patches, newPatch(p.key, p.value))
 		}
 	}
@@ -73,6 +74,21 @@ func (w *walker) checkPatch(name string, value *node) {
 			w.problem(p.key.pos, say("%s", rawText(reason)), "case %q cannot change %q", name, p.key.text)
 		case !caseTable.has(p.key.text):
 			w.problem(p.key.pos, didYouMean(p.key.text, caseTable.names()), "unknown key %q in case %q", p.key.text, name)
+		}
+	}
+}
+
+// checkRemovals tells of a null that removes nothing. RFC 7396 lets it pass,
+// but here it is a misspelled name, and the case would be the nominal design
+// under another name: a fault that the record would show as harmless.
+func (w *walker) checkRemovals(name string, patch, target *node) {
+	for _, p := range patch.pairs {
+		old := target.get(p.key.text)
+		switch {
+		case p.value.kind == null && old == nil:
+			w.problem(p.key.pos, didYouMean(p.key.text, target.keys()), "case %q removes %q, which is not there", name, p.key.text)
+		case p.value.kind == mapping && old != nil && old.kind == mapping:
+			w.checkRemovals(name, p.value, old)
 		}
 	}
 }

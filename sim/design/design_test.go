@@ -63,8 +63,10 @@ func TestTextsAndHeader(t *testing.T) {
 		{"line", d.Lines[0].Text, "r 20 mohm/m, l 1.7 uH/m, g 2 nS/m, c 6.7 pF/m"},
 		{"length", d.Sections[0].Length.Text, "0.25 wavelengths"},
 		{"junctions", fmt.Sprint(d.Junctions), "[tx hut]"},
-		{"nominal line", goodFile(t, "lengths_and_units.yaml").Nominal.Lines[0].Text,
-			"z0 50 Ω, velocity factor 66 %, 6.1 dB/100 ft at 0.1 GHz, dielectric share 10 %"},
+		{
+			"nominal line", goodFile(t, "lengths_and_units.yaml").Nominal.Lines[0].Text,
+			"z0 50 Ω, velocity factor 66 %, 6.1 dB/100 ft at 0.1 GHz, dielectric share 10 %",
+		},
 	} {
 		if tt.got != tt.want {
 			t.Errorf("%s is %q, want %q", tt.what, tt.got, tt.want)

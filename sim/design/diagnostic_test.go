@@ -21,20 +21,41 @@ func TestRender(t *testing.T) {
 		d    Diagnostic
 		want string
 	}{
-		{"with a hint", Diagnostic{"a.yaml", Pos{3, 5}, "bad", "foo: bar", "do this"},
-			"a.yaml:3:5: error: bad\n    foo: bar\n        ^\n    hint: do this\n"},
-		{"tabs stay tabs", Diagnostic{"a", Pos{1, 4}, "bad", "\tx\ty", ""},
-			"a:1:4: error: bad\n    \tx\ty\n    \t \t^\n"},
-		{"wide characters take two columns", Diagnostic{"a", Pos{1, 4}, "bad", "測定: x", ""},
-			"a:1:4: error: bad\n    測定: x\n         ^\n"},
-		{"combining marks take none", Diagnostic{"a", Pos{1, 4}, "bad", "e\u0301: x", ""},
-			"a:1:4: error: bad\n    e\u0301: x\n      ^\n"},
-		{"control characters stay in the file", Diagnostic{"a", Pos{1, 1}, "bad", "\x1b[31mred", ""},
-			"a:1:1: error: bad\n    \ufffd[31mred\n    ^\n"},
-		{"past the end of the line", Diagnostic{"a", Pos{1, 9}, "bad", "xy", ""},
-			"a:1:9: error: bad\n    xy\n      ^\n"},
-		{"about the whole file", Diagnostic{"a", Pos{}, "bad", "", "write one"},
-			"a: error: bad\n    hint: write one\n"},
+		{
+			"with a hint",
+			Diagnostic{"a.yaml", Pos{3, 5}, "bad", "foo: bar", "do this"},
+			"a.yaml:3:5: error: bad\n    foo: bar\n        ^\n    hint: do this\n",
+		},
+		{
+			"tabs stay tabs",
+			Diagnostic{"a", Pos{1, 4}, "bad", "\tx\ty", ""},
+			"a:1:4: error: bad\n    \tx\ty\n    \t \t^\n",
+		},
+		{
+			"wide characters take two columns",
+			Diagnostic{"a", Pos{1, 4}, "bad", "測定: x", ""},
+			"a:1:4: error: bad\n    測定: x\n         ^\n",
+		},
+		{
+			"combining marks take none",
+			Diagnostic{"a", Pos{1, 4}, "bad", "e\u0301: x", ""},
+			"a:1:4: error: bad\n    e\u0301: x\n      ^\n",
+		},
+		{
+			"control characters stay in the file",
+			Diagnostic{"a", Pos{1, 1}, "bad", "\x1b[31mred", ""},
+			"a:1:1: error: bad\n    \ufffd[31mred\n    ^\n",
+		},
+		{
+			"past the end of the line",
+			Diagnostic{"a", Pos{1, 9}, "bad", "xy", ""},
+			"a:1:9: error: bad\n    xy\n      ^\n",
+		},
+		{
+			"about the whole file",
+			Diagnostic{"a", Pos{}, "bad", "", "write one"},
+			"a: error: bad\n    hint: write one\n",
+		},
 		{"a blank line", Diagnostic{"a", Pos{2, 1}, "bad", "", ""}, "a:2:1: error: bad\n"},
 	} {
 		if got := render(t, false, tt.d); got != tt.want {
@@ -85,7 +106,11 @@ func TestEditDistance(t *testing.T) {
 		a, b string
 		want int
 	}{
-		{"", "", 0}, {"abc", "abc", 0}, {"abc", "acb", 1}, {"abc", "ab", 1}, {"abc", "xabc", 1},
+		{"", "", 0},
+		{"abc", "abc", 0},
+		{"abc", "acb", 1},
+		{"abc", "ab", 1},
+		{"abc", "xabc", 1},
 		{"kitten", "sitting", 3}, // the textbook example of V. Levenshtein's distance
 		{"abcd", "badc", 2},
 	} {

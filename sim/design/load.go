@@ -38,7 +38,7 @@ func read(src []byte, text *source, p *problems) *File {
 	if file == nil {
 		return nil
 	}
-	patches := nominal.readCases(file)
+	patches := nominal.readCases(file, root)
 	requirements := nominal.walkRequirements(file, caseNames(patches))
 	walkers := []*walker{nominal}
 	out := &File{Nominal: nominal.design}
@@ -76,6 +76,7 @@ func (w *walker) walk(root *node) *fields {
 	if file == nil {
 		return nil
 	}
+	w.file = file
 	w.walkHeader(file)
 	if n := file.node("source"); n != nil {
 		w.walkSource(w.fields(n, file.at["source"].key.pos, "the source", sourceTable))

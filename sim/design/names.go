@@ -64,8 +64,10 @@ func (w *walker) items(file *fields, key, kind string) []item {
 			w.problem(p.key.pos, say("give it a value or delete the line"), "%s has no value", what)
 			continue
 		}
+		w.entry, w.siblings = p.key.text, key
 		items = append(items, item{p.key, w.fields(p.value, p.key.pos, what, named[key])})
 	}
+	w.entry = ""
 	return items
 }
 

@@ -38,6 +38,14 @@ func (n *node) get(key string) *node {
 	return nil
 }
 
+// keys lists the keys of a mapping.
+func (n *node) keys() (keys []string) {
+	for _, p := range n.pairs {
+		keys = append(keys, p.key.text)
+	}
+	return keys
+}
+
 // end is the place of the last node inside n.
 func (n *node) end() Pos {
 	switch {

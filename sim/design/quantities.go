@@ -28,8 +28,6 @@ const largestReflection = 1 + math.Sqrt2
 // fullTurns bounds what can be meant by a phase, rad.
 const fullTurns = 2 * math.Pi
 
-func require(names ...string) []key { return must(names...) }
-
 // requirementOf makes the table of a quantity from what its requirement names.
 func requirementOf(q Quantity, own []key, choices ...choice) *table {
 	keys := slices.Concat(must("id", "quantity"), own, may("min", "max", "cases", "text", "source"))
@@ -43,42 +41,70 @@ func either(required bool, a, b string) choice {
 }
 
 var quantities = map[Quantity]judged{
-	VSWR: {table: requirementOf(VSWR, append(require("section", "end"), may("reference")...)), limits: vswrRatio,
-		impossible: func(l limits) string { return when(l.max < 1, "a VSWR is never below 1") }},
-	ReturnLoss: {table: requirementOf(ReturnLoss, append(require("section", "end"), may("reference")...)), limits: level,
-		impossible: func(l limits) string { return when(l.max < 0, "the return loss of a passive load is never below 0 dB") }},
-	Reflection: {table: requirementOf(Reflection, append(require("section", "end"), may("reference")...)), limits: reflected,
+	VSWR: {
+		table: requirementOf(VSWR, append(must("section", "end"), may("reference")...)), limits: vswrRatio,
+		impossible: func(l limits) string { return when(l.max < 1, "a VSWR is never below 1") },
+	},
+	ReturnLoss: {
+		table: requirementOf(ReturnLoss, append(must("section", "end"), may("reference")...)), limits: level,
+		impossible: func(l limits) string { return when(l.max < 0, "the return loss of a passive load is never below 0 dB") },
+	},
+	Reflection: {
+		table: requirementOf(Reflection, append(must("section", "end"), may("reference")...)), limits: reflected,
 		impossible: func(l limits) string {
 			return when(l.max < 0, "the size of a reflection coefficient is never below 0") +
 				when(l.min > largestReflection, "the reflection coefficient of a passive load is never above 2.414")
-		}},
+		},
+	},
 	InputImpedance: {table: inputImpedanceTable},
-	SteadyVoltage: {table: requirementOf(SteadyVoltage, may("section", "at", "relative_to"), either(false, "section", "at")),
-		limits: voltage, relative: level, impossible: amplitude},
-	SteadyCurrent: {table: requirementOf(SteadyCurrent, may("section", "at"), either(false, "section", "at")),
-		limits: current, impossible: amplitude},
-	PeakVoltage: {table: requirementOf(PeakVoltage, may("section", "at"), either(false, "section", "at")),
-		limits: voltage, impossible: amplitude},
-	PeakCurrent: {table: requirementOf(PeakCurrent, may("section", "at"), either(false, "section", "at")),
-		limits: current, impossible: amplitude},
-	Overshoot: {table: requirementOf(Overshoot, may("section", "at"), either(false, "section", "at")), limits: percentage,
-		impossible: func(l limits) string { return when(l.max < -1, "an overshoot is never below -100 %") }},
-	SettleTime: {table: requirementOf(SettleTime, may("at", "within")), limits: timeSpan,
-		impossible: func(l limits) string { return when(l.max <= 0, "nothing settles before it has begun") }},
-	LoadPower: {table: requirementOf(LoadPower, append(require("load"), may("relative_to")...)), limits: power, relative: level,
-		impossible: func(l limits) string { return when(l.max < 0, "the power into a passive load is never below 0") }},
-	Efficiency: {table: requirementOf(Efficiency, may("load")), limits: percentage,
+	SteadyVoltage: {
+		table:  requirementOf(SteadyVoltage, may("section", "at", "relative_to"), either(false, "section", "at")),
+		limits: voltage, relative: level, impossible: amplitude,
+	},
+	SteadyCurrent: {
+		table:  requirementOf(SteadyCurrent, may("section", "at"), either(false, "section", "at")),
+		limits: current, impossible: amplitude,
+	},
+	PeakVoltage: {
+		table:  requirementOf(PeakVoltage, may("section", "at"), either(false, "section", "at")),
+		limits: voltage, impossible: amplitude,
+	},
+	PeakCurrent: {
+		table:  requirementOf(PeakCurrent, may("section", "at"), either(false, "section", "at")),
+		limits: current, impossible: amplitude,
+	},
+	Overshoot: {
+		table: requirementOf(Overshoot, may("section", "at"), either(false, "section", "at")), limits: percentage,
+		impossible: func(l limits) string { return when(l.max < -1, "an overshoot is never below -100 %") },
+	},
+	SettleTime: {
+		table: requirementOf(SettleTime, may("at", "within")), limits: timeSpan,
+		impossible: func(l limits) string { return when(l.max <= 0, "nothing settles before it has begun") },
+	},
+	LoadPower: {
+		table: requirementOf(LoadPower, append(must("load"), may("relative_to")...)), limits: power, relative: level,
+		impossible: func(l limits) string { return when(l.max < 0, "the power into a passive load is never below 0") },
+	},
+	Efficiency: {
+		table: requirementOf(Efficiency, may("load")), limits: percentage,
 		impossible: func(l limits) string {
 			return when(l.max < 0 || finite(l.max) && l.max > 1 || l.min > 1 || finite(l.min) && l.min < 0, "an efficiency is from 0 to 100 %")
-		}},
-	Loss: {table: requirementOf(Loss, may("section", "load"), either(true, "section", "load")), limits: level,
-		impossible: func(l limits) string { return when(l.max < 0, "a passive network has no loss below 0 dB") }},
-	Phase: {table: requirementOf(Phase, may("at", "load", "relative_to"), either(true, "at", "load")), limits: angle, relative: angle,
-		impossible: turns, odd: true},
-	PhaseDifference: {table: requirementOf(PhaseDifference, require("between")), limits: angle, impossible: turns, odd: true},
-	PowerSplit:      {table: requirementOf(PowerSplit, require("between")), limits: level},
-	Agreement: {table: requirementOf(Agreement, nil), limits: percentage,
-		impossible: func(l limits) string { return when(l.max <= 0, "no two solutions agree to the last digit") }},
+		},
+	},
+	Loss: {
+		table: requirementOf(Loss, may("section", "load"), either(true, "section", "load")), limits: level,
+		impossible: func(l limits) string { return when(l.max < 0, "a passive network has no loss below 0 dB") },
+	},
+	Phase: {
+		table: requirementOf(Phase, may("at", "load", "relative_to"), either(true, "at", "load")), limits: angle, relative: angle,
+		impossible: turns, odd: true,
+	},
+	PhaseDifference: {table: requirementOf(PhaseDifference, must("between")), limits: angle, impossible: turns, odd: true},
+	PowerSplit:      {table: requirementOf(PowerSplit, must("between")), limits: level},
+	Agreement: {
+		table: requirementOf(Agreement, nil), limits: percentage,
+		impossible: func(l limits) string { return when(l.max <= 0, "no two solutions agree to the last digit") },
+	},
 }
 
 var inputImpedanceTable = &table{

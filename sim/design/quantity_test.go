@@ -195,8 +195,10 @@ var prose = map[string]bool{
 	"peak": true, "rms": true, "pp": true, "the": true, "same": true, "per": true, "km": true, "ft": true, "plain": true, "number": true,
 }
 
-var allDimensions = []*dimension{frequency, length, timeSpan, voltage, current, power, resistance, inductance, capacity, angle,
-	seriesR, seriesL, shuntG, shuntC, fading, percentage, fraction, vswrRatio, reflected, level, spread}
+var allDimensions = []*dimension{
+	frequency, length, timeSpan, voltage, current, power, resistance, inductance, capacity, angle,
+	seriesR, seriesL, shuntG, shuntC, fading, percentage, fraction, vswrRatio, reflected, level, spread,
+}
 
 // FuzzQuantity: no text makes the parser panic or return what is not finite,
 // and what is taken stays what it is with blanks in front of the unit.

@@ -123,8 +123,10 @@ func TestSchemaKeys(t *testing.T) {
 	if err := json.Unmarshal(Schema(), &doc); err != nil {
 		t.Fatal(err)
 	}
-	tables := []*table{fileTable, recordTable, sourceTable, seriesTable, startTable, stopTable, lineTable, lossTable,
-		sectionTable, loadTable, elementTable, caseTable, gridTable, windowTable}
+	tables := []*table{
+		fileTable, recordTable, sourceTable, seriesTable, startTable, stopTable, lineTable, lossTable,
+		sectionTable, loadTable, elementTable, caseTable, gridTable, windowTable,
+	}
 	for _, q := range quantities {
 		tables = append(tables, q.table)
 	}

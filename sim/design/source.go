@@ -1,58 +1,161 @@
 package design
 
-import (
-	"bytes"
-	"fmt"
-	"unicode/utf8"
-)
+import "math"
 
-// maxBytes is the largest design file that is read.
-const maxBytes = 1 << 20
-
-// source is the text of a design file by lines.
-type source struct {
-	lines [][]byte
+// walkSource reads the source. Times in periods need its frequency, so that
+// comes first.
+func (w *walker) walkSource(f *fields) {
+	if f == nil {
+		return
+	}
+	s := &w.design.Source
+	s.Pos, s.At = f.pos, f.junction("at")
+	if n := f.node("at"); n != nil {
+		w.sourceAt = n.pos
+	}
+	s.Frequency, _ = f.value("frequency", frequency, positive)
+	s.Impedance = f.sourceImpedance()
+	s.EMF, _ = f.value("emf", voltage, positive)
+	if p, ok := f.value("available_power", power, positive); ok {
+		w.available(f, p)
+	}
+	s.Start = Start{Pos: f.pos, Worst: true, Text: "abrupt, worst phase"}
+	if n := f.node("start"); n != nil {
+		s.Start = w.walkStart(w.fields(n, f.at["start"].key.pos, "the start of the source", startTable))
+	}
+	if n := f.node("stop"); n != nil {
+		s.Stop = w.walkStop(w.fields(n, f.at["stop"].key.pos, "the stop of the source", stopTable))
+	}
 }
 
-func newSource(src []byte) *source {
-	src = bytes.TrimPrefix(src, []byte("\ufeff"))
-	return &source{bytes.Split(src, []byte("\n"))}
+// available works the EMF out from the available power, |EMF|^2 = 8 R P.
+func (w *walker) available(f *fields, p Value) {
+	s := &w.design.Source
+	r := s.Impedance.resistance()
+	if r <= 0 && f.node("impedance") != nil && !w.flawed {
+		w.problem(p.Pos, say("give the emf instead, or a source impedance with a resistance"),
+			"a source without resistance has no available power")
+		return
+	}
+	s.Available = &p
+	s.EMF = Value{SI: math.Sqrt(8 * r * p.SI), Text: p.Text + " available", Pos: p.Pos}
 }
 
-// line returns a line, counted from 1, without its line break.
-func (s *source) line(number int) string {
-	if number < 1 || number > len(s.lines) {
+// resistance is the resistive part, ohm; that of a matched load is not known
+// here and counts as one.
+func (z Impedance) resistance() float64 {
+	switch z.Kind {
+	case SeriesParts:
+		return z.R
+	case Complex:
+		return real(z.Z)
+	case Matched:
+		return 1
+	default:
+		return 0
+	}
+}
+
+// ideal reports an impedance of exactly zero.
+func (z Impedance) ideal() bool {
+	return z.Kind == Short ||
+		z.Kind == Complex && z.Z == 0 ||
+		z.Kind == SeriesParts && z.R == 0 && z.L == 0 && z.C == 0
+}
+
+// sourceImpedance reads a complex value or series parts.
+func (f *fields) sourceImpedance() Impedance {
+	n := f.node("impedance")
+	if n == nil {
+		return Impedance{}
+	}
+	if n.kind == mapping {
+		parts := f.w.fields(n, f.at["impedance"].key.pos, "the impedance of the source", seriesTable)
+		z := parts.seriesParts()
+		z.Pos = n.pos
+		return z
+	}
+	z := f.impedance("impedance")
+	switch z.Kind {
+	case Short:
+		f.w.problem(n.pos, say("write 0 ohm for an ideal source"), "the impedance of the source cannot be short")
+	case Open, Matched:
+		f.w.problem(n.pos, say("give a complex value or series parts {r: 50 ohm, l: 2 uH, c: 1 nF}"), "the impedance of the source cannot be %s", n.text)
+	}
+	return z
+}
+
+func (w *walker) walkStart(f *fields) Start {
+	if f == nil {
+		return Start{}
+	}
+	s := Start{Pos: f.pos, Worst: true, Text: "abrupt"}
+	profile := f.oneOf("profile", "abrupt", "ramp")
+	_, rise := f.at["rise"]
+	switch {
+	case profile == "abrupt" && rise:
+		w.problem(f.at["rise"].key.pos, say("write profile: ramp if the source rises slowly"), "an abrupt start has no \"rise\"")
+	case profile == "ramp" && !rise:
+		w.problem(f.pos, say("for example rise: 3 periods"), "missing \"rise\", which goes with profile: ramp")
+	case profile == "ramp":
+		var text string
+		s.Ramp = true
+		s.Rise, text = f.time("rise", positive)
+		s.Text = "raised-cosine rise over " + text
+	}
+	s.Text += ", " + w.startPhase(f, &s)
+	return s
+}
+
+// startPhase reads the phase of the start into s and words it. The record
+// speaks the engineering convention throughout.
+func (w *walker) startPhase(f *fields, s *Start) string {
+	n := f.scalar("phase")
+	if n == nil || n.text == "worst" {
+		return "worst phase"
+	}
+	q, fault := parseQuantity(n.text, angle)
+	if fault != nil {
+		fault.hint = say("write worst, or an angle in deg or rad")
+		w.fault(n, f.name("phase"), fault)
 		return ""
 	}
-	return string(bytes.TrimSuffix(s.lines[number-1], []byte("\r")))
-}
-
-// check refuses what is not plain text before the YAML parser sees it: the
-// parser reports such characters without a place, and it takes some of them
-// for line breaks, which would put every later diagnostic on the wrong line.
-func (s *source) check(p *problems) {
-	for i, line := range s.lines {
-		column := 0
-		line = bytes.TrimSuffix(line, []byte("\r"))
-		for rest := line; len(rest) > 0; {
-			c, size := utf8.DecodeRune(rest)
-			rest = rest[size:]
-			column++
-			pos := Pos{i + 1, column}
-			switch {
-			case c == utf8.RuneError && size == 1:
-				p.problem(pos, say("save the file as UTF-8"), "not UTF-8 text")
-				return
-			case isControl(c):
-				p.problem(pos, say("delete it"), "control character %s in the file", fmt.Sprintf("%U", c))
-				return
-			}
-		}
+	s.Worst, s.Phase = false, w.design.Convention.sign()*q.value+0
+	if w.design.Convention == Physics {
+		return "phase " + conjugated(n.text)
 	}
+	return "phase " + n.text
 }
 
-// isControl reports the C0 and C1 controls but for the tab, and the line and
-// paragraph separators.
-func isControl(c rune) bool {
-	return c < ' ' && c != '\t' || c >= 0x7f && c <= 0x9f || c == 0x2028 || c == 0x2029
+// conjugated marks a text of a physics file whose value was conjugated.
+func conjugated(text string) string { return text + " in e^{-iwt}" }
+
+func (w *walker) walkStop(f *fields) *Stop {
+	if f == nil {
+		return nil
+	}
+	s := &Stop{Pos: f.pos}
+	var at, fall string
+	s.At, at = f.time("at", positive)
+	s.Fall, fall = f.time("fall", notNegative)
+	s.Text = "at " + at + ", abrupt"
+	if s.Fall > 0 {
+		s.Text = "at " + at + ", raised-cosine fall over " + fall
+	}
+	return s
+}
+
+// time reads a time in seconds or periods of the source.
+func (f *fields) time(key string, sign sign) (seconds float64, text string) {
+	q, n, ok := f.quantity(key, timeSpan)
+	if !ok || !f.hasSign(key, n, q.value, sign) {
+		return 0, ""
+	}
+	if q.unit.of == periods {
+		if f.w.design.Source.Frequency.SI == 0 {
+			return 0, n.text // the frequency has been told of
+		}
+		return q.value / f.w.design.Source.Frequency.SI, n.text
+	}
+	return q.value, n.text
 }

@@ -47,10 +47,14 @@ const (
 // The dimensions.
 var (
 	frequency = &dimension{"frequency", prefixed("Hz", "", "k", "M", "G"), "Hz, kHz, MHz, GHz", "1.6 MHz"}
-	length    = &dimension{"length", lengthUnits(),
-		"m, cm, mm, km, ft, in, or electrically deg, wavelengths, or as a delay ns, us, ps", "85 m"}
-	timeSpan = &dimension{"time", merged(prefixed("s", "", "m", "u", "n", "p"), units(periods, 0, 1, "periods", "period")),
-		"s, ms, us, ns, ps, periods", "15 us"}
+	length    = &dimension{
+		"length", lengthUnits(),
+		"m, cm, mm, km, ft, in, or electrically deg, wavelengths, or as a delay ns, us, ps", "85 m",
+	}
+	timeSpan = &dimension{
+		"time", merged(prefixed("s", "", "m", "u", "n", "p"), units(periods, 0, 1, "periods", "period")),
+		"s, ms, us, ns, ps, periods", "15 us",
+	}
 	voltage    = &dimension{"voltage", amplitudes("V"), "V, kV, mV, uV or MV, each followed by peak, rms or pp", "300 V peak"}
 	current    = &dimension{"current", amplitudes("A"), "A, kA, mA, uA or MA, each followed by peak, rms or pp", "6 A peak"}
 	power      = &dimension{"power", merged(prefixed("W", "", "k", "m", "M", "u"), units(dBm, 0, 1, "dBm")), "W, kW, mW, MW, uW, dBm", "250 W"}

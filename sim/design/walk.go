@@ -10,14 +10,16 @@ type walker struct {
 	base  *walker // the walker of the nominal design; nil in itself
 
 	design *Design
-	flawed bool // a problem was met: what needs a whole design must not be checked
-	whole  bool // the network read well
+	file   *fields // the whole file as merged
+	flawed bool    // a problem was met: what needs a whole design must not be checked
+	whole  bool    // the network read well
 
 	sections, loads, elements []item
 	lines                     map[string]*Line
 	lineNames                 []string
 	sourceAt                  Pos
 	lengths                   map[string]Value // of the sections
+	entry, siblings           string           // the named entry being read, and the key it stands under
 }
 
 // An item is a named entry with the nodes that later checks point at.
@@ -79,7 +81,7 @@ func (w *walker) fields(n *node, pos Pos, what string, t *table) *fields {
 	}
 	for _, k := range t.keys {
 		if _, ok := f.at[k.name]; k.required && !ok {
-			w.problem(pos, example(t, k.name), "missing %q in %s", k.name, what)
+			w.problem(pos, w.missingHint(t, k.name), "missing %q in %s", k.name, what)
 		}
 	}
 	for _, c := range t.choices {
@@ -213,7 +215,15 @@ func (f *fields) quantity(key string, d *dimension) (q quantity, n *node, ok boo
 		f.w.fault(n, f.name(key), fault)
 		return q, n, false
 	}
-	return q, n, true
+	return q, n, q.unit.name != "" || f.isPlain(key, n)
+}
+
+// isPlain tells of a plain number in quotes, which is a text.
+func (f *fields) isPlain(key string, n *node) bool {
+	if !n.plain {
+		f.w.problem(n.pos, say("take the quotes away"), "%s must be a number, not the text %q", f.name(key), n.text)
+	}
+	return n.plain
 }
 
 // sign is what a value may be.
@@ -252,8 +262,7 @@ func (f *fields) number(key string) (v float64, n *node, ok bool) {
 	if n == nil {
 		return 0, nil, false
 	}
-	if !n.plain {
-		f.w.problem(n.pos, say("take the quotes away"), "%s must be a number, not the text %q", f.name(key), n.text)
+	if !f.isPlain(key, n) {
 		return 0, n, false
 	}
 	v, fault := plainNumber(n.text)
@@ -261,6 +270,20 @@ func (f *fields) number(key string) (v float64, n *node, ok bool) {
 		f.w.fault(n, f.name(key), fault)
 	}
 	return v, n, fault == nil
+}
+
+// missingHint hints at what to do about a missing key. An entry that only a
+// case has, and that is not whole, is most likely a misspelled one of the
+// nominal design.
+func (w *walker) missingHint(t *table, key string) hint {
+	if w.base == nil || w.entry == "" {
+		return example(t, key)
+	}
+	known := w.base.file.node(w.siblings)
+	if known == nil || known.get(w.entry) != nil {
+		return example(t, key)
+	}
+	return didYouMean(w.entry, known.keys())
 }
 
 // example hints at what a missing key looks like.

@@ -34,18 +34,34 @@ func TestNominalAgainstTextbooks(t *testing.T) {
 		f          float64
 		want, half Constants
 	}{
-		{"SAD-11.1, lossless, beta 3 rad/m",
-			Nominal{Z0: 70, VelocityFactor: 2 * math.Pi * 1e8 / 3 / C0}, 1e8,
-			Constants{L: 334.2e-9, C: 68.2e-12}, Constants{L: 0.05e-9, C: 0.05e-12}},
-		{"SAD-PE11.1, distortionless, beta 1.5 rad/m",
-			Nominal{80, 2 * math.Pi * 5e8 / 1.5 / C0, 5e8, 0.04, 0.5}, 5e8,
-			Constants{3.2, 38.2e-9, 5e-4, 5.97e-12}, Constants{0.05, 0.05e-9, 0.5e-4, 0.005e-12}},
-		{"SAD-11.2, distortionless, u = 0.6c",
-			Nominal{60, 0.6 * c3e8 / C0, 1e8, 20e-3, 0.5}, 1e8,
-			Constants{1.2, 333e-9, 333e-6, 92.59e-12}, Constants{0.05, 0.5e-9, 0.5e-6, 0.005e-12}},
-		{"CHE-9.3, distortionless, 0.01 dB/m, 0.1 nF/m",
-			Nominal{50, 1 / (50 * 0.1e-9) / C0, 1e6, 0.01 / NeperDB, 0.5}, 1e6,
-			Constants{0.0576, 0.25e-6, 23.0e-6, 0.1e-9}, Constants{5e-5, 5e-9, 0.05e-6, roundTol * 1e-10}},
+		{
+			"SAD-11.1, lossless, beta 3 rad/m",
+			Nominal{Z0: 70, VelocityFactor: 2 * math.Pi * 1e8 / 3 / C0},
+			1e8,
+			Constants{L: 334.2e-9, C: 68.2e-12},
+			Constants{L: 0.05e-9, C: 0.05e-12},
+		},
+		{
+			"SAD-PE11.1, distortionless, beta 1.5 rad/m",
+			Nominal{80, 2 * math.Pi * 5e8 / 1.5 / C0, 5e8, 0.04, 0.5},
+			5e8,
+			Constants{3.2, 38.2e-9, 5e-4, 5.97e-12},
+			Constants{0.05, 0.05e-9, 0.5e-4, 0.005e-12},
+		},
+		{
+			"SAD-11.2, distortionless, u = 0.6c",
+			Nominal{60, 0.6 * c3e8 / C0, 1e8, 20e-3, 0.5},
+			1e8,
+			Constants{1.2, 333e-9, 333e-6, 92.59e-12},
+			Constants{0.05, 0.5e-9, 0.5e-6, 0.005e-12},
+		},
+		{
+			"CHE-9.3, distortionless, 0.01 dB/m, 0.1 nF/m",
+			Nominal{50, 1 / (50 * 0.1e-9) / C0, 1e6, 0.01 / NeperDB, 0.5},
+			1e6,
+			Constants{0.0576, 0.25e-6, 23.0e-6, 0.1e-9},
+			Constants{5e-5, 5e-9, 0.05e-6, roundTol * 1e-10},
+		},
 	} {
 		t.Run(tt.name, func(t *testing.T) {
 			got := tt.in.At(tt.f)
