@@ -190,8 +190,8 @@ type Requirement struct {
 }
 
 // Limit is a limit with the unit it was given in. SI is in SI units: peak
-// amplitudes, phases in radians, ratios as plain numbers (5 % is 0.05, a
-// reflection of -20 dB is 0.1, 30 dBm is 1 W). Where the quantity itself is a
+// amplitudes, phases in radians, ratios as plain numbers (5 % is 0.05),
+// powers in W (30 dBm is 1). Where the quantity itself is a
 // level in dB (return loss, loss, power split, anything relative to another
 // case but a phase) SI is that number of dB.
 type Limit struct {

@@ -228,7 +228,7 @@ func TestLimits(t *testing.T) {
 		{"VSWR as a proportion", r["R2"].Max, 1.5, "1"},
 		{"return loss, dB", r["R3"].Min, 6, "dB"},
 		{"reflection", r["R4"].Max, 0.5, "1"},
-		{"reflection in dB", r["R5"].Max, math.Pow(10, -0.3), "dB"},
+		{"reflection in per cent", r["R5"].Max, 0.5, "%"},
 		{"impedance window", r["R6"].R.Max, 100, "ohm"},
 		{"voltage, peak", r["R8"].Max, 80 * math.Sqrt2, "V rms"},
 		{"current, peak", r["R11"].Max, 2, "A pp"},

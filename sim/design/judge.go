@@ -146,7 +146,9 @@ func (d *demand) checkSubject(s subject, stock map[string]*inventory, order []*i
 		nominal.problem(s.node.pos, s.nearest(order[0]), "there is no %s %q", s.kind, s.node.text)
 		return
 	}
-	d.checkClear(s, order[0])
+	for _, i := range order {
+		d.checkClear(s, i)
+	}
 	judgedIn := d.Cases
 	if d.RelativeTo != "" && stock[d.RelativeTo] != nil {
 		judgedIn = append(slices.Clone(judgedIn), d.RelativeTo)

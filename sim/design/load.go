@@ -3,7 +3,6 @@ package design
 import (
 	"crypto/sha256"
 	"encoding/hex"
-	"slices"
 )
 
 // Load reads a design file; name is what diagnostics call it. An error is a
@@ -68,51 +67,3 @@ func caseNames(patches []*patch) []string {
 
 // nominalName is what requirements call the nominal design.
 const nominalName = "nominal"
-
-// walk reads one design. It returns nil if the file is not even a mapping.
-func (w *walker) walk(root *node) *fields {
-	w.design = &Design{}
-	file := w.fields(root, root.pos, "the file", fileTable)
-	if file == nil {
-		return nil
-	}
-	w.file = file
-	w.walkHeader(file)
-	if n := file.node("source"); n != nil {
-		w.walkSource(w.fields(n, file.at["source"].key.pos, "the source", sourceTable))
-	}
-	w.walkLines(w.items(file, "lines", "line"))
-	w.sections = w.items(file, "sections", "section")
-	w.loads = w.items(file, "loads", "load")
-	w.elements = w.items(file, "elements", "element")
-	w.walkSections(w.sections)
-	w.design.Loads = w.walkParts(w.loads, "load")
-	w.design.Elements = w.walkParts(w.elements, "element")
-	w.design.Junctions = w.junctions()
-	w.checkUnique()
-	w.whole = !w.flawed
-	w.checkNetwork()
-	return file
-}
-
-// junctions lists the junctions in the order in which the source, the
-// sections, the loads and the elements name them.
-func (w *walker) junctions() (names []string) {
-	seen := map[string]bool{"": true}
-	add := func(some ...string) {
-		for _, n := range some {
-			if !seen[n] {
-				seen[n] = true
-				names = append(names, n)
-			}
-		}
-	}
-	add(w.design.Source.At)
-	for _, s := range w.design.Sections {
-		add(s.From, s.To)
-	}
-	for _, p := range slices.Concat(w.design.Loads, w.design.Elements) {
-		add(p.At, p.To)
-	}
-	return names
-}

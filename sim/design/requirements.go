@@ -151,8 +151,6 @@ func (f *fields) limit(key string, d *dimension) *Limit {
 		if s := f.w.design.Source.Frequency.SI; s > 0 {
 			l.SI = q.value / s
 		}
-	case q.unit.of == decibels && d == reflected:
-		l.SI = math.Pow(10, q.value/20)
 	}
 	return l
 }

@@ -72,7 +72,7 @@ var (
 	percentage = &dimension{"percentage", units(percent, -2, 1, "%"), "%", "0.5 %"}
 	fraction   = &dimension{"ratio", merged(units(bare, 0, 1, ""), units(percent, -2, 1, "%")), "a plain number or %", "0.66"}
 	vswrRatio  = &dimension{"VSWR", units(bare, 0, 1, "", ":1"), "a plain number", "1.5"}
-	reflected  = &dimension{"reflection coefficient", merged(units(bare, 0, 1, ""), units(percent, -2, 1, "%"), units(decibels, 0, 1, "dB")), "a plain number, %, dB", "0.2"}
+	reflected  = &dimension{"reflection coefficient", merged(units(bare, 0, 1, ""), units(percent, -2, 1, "%")), "a plain number or %", "0.2"}
 	level      = &dimension{"level", units(decibels, 0, 1, "dB"), "dB", "20 dB"}
 	spread     = &dimension{"radius", merged(prefixed("ohm", "", "m", "k", "M"), units(percent, -2, 1, "%")), "ohm, mohm, kohm, Mohm, %", "2 ohm"}
 )
