@@ -9,7 +9,6 @@ import (
 
 	"linewitness/report/data"
 	"linewitness/sim"
-	"linewitness/sim/design"
 	"linewitness/sim/record"
 )
 
