@@ -66,7 +66,7 @@ type figureRow struct {
 // keyFigures writes the key figures by both witnesses.
 func (d *document) keyFigures(c *record.Case) {
 	t := sheet.Table{Columns: []sheet.Column{
-		left("Steady state"), right("Phasor"), right("Time domain"), right("Difference, relative"),
+		left("Steady state"), right("Phasor"), right(timeDomain(c)), right("Difference, relative"),
 	}}
 	for _, r := range keyRows(c) {
 		t.Rows = append(t.Rows, []sheet.Cell{
@@ -76,6 +76,14 @@ func (d *document) keyFigures(c *record.Case) {
 	d.b.Subheading("Key figures", 60)
 	d.b.Table(t)
 	d.b.Fields(d.transientFields(c))
+}
+
+// timeDomain heads the column of the time domain.
+func timeDomain(c *record.Case) string {
+	if !c.Settling.Settled {
+		return "Time domain, not settled"
+	}
+	return "Time domain"
 }
 
 func keyRows(c *record.Case) []figureRow {
@@ -144,7 +152,7 @@ func peak(p record.Peak, unit string) string {
 	if p.Section == "" {
 		return s
 	}
-	return s + " on " + p.Section + ", " + format.SI(p.At, "m") + " from its From end, " + format.SI(p.Time, "s") +
+	return s + " on " + p.Section + " at " + format.SI(p.At, "m") + ", " + format.SI(p.Time, "s") +
 		" after switch-on, start phase " + format.Angle(p.Phase)
 }
 

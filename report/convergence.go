@@ -170,7 +170,12 @@ func spectrumFinding(c *record.Case) string {
 	}
 	next := largestAt(rest)
 	text := "Right: the last " + format.Plural(int64(s.Periods), "period") + " at " + s.Where + " hold " + format.SI(s.Amplitude[k], "V") + " at " + format.SI(s.Frequency[k], "Hz")
-	if next >= 0 && rest[next] > 0 {
+	const silence = 1e-10
+	switch {
+	case next < 0:
+	case rest[next] < silence*s.Amplitude[k]:
+		text += "; no other line reaches " + format.DB(20*math.Log10(silence))
+	default:
 		text += "; the next largest line, at " + format.SI(s.Frequency[next], "Hz") + ", is " + format.DB(20*math.Log10(rest[next]/s.Amplitude[k])) + " to it"
 	}
 	return text + "."

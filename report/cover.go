@@ -18,6 +18,7 @@ func (d *document) cover() {
 	d.b.Overline("Design verification record, transmission-line network")
 	d.b.Title(title(d.r))
 	d.identity()
+	d.signatures()
 	d.banner()
 	if d.r.Design.Purpose != "" {
 		d.b.Paragraph(d.r.Design.Purpose)
@@ -27,7 +28,6 @@ func (d *document) cover() {
 	}
 	d.cases()
 	d.requirements()
-	d.signatures()
 }
 
 // field is a label and its value.
@@ -207,9 +207,9 @@ func bracket(s string) string {
 
 // signatures draws the block to sign.
 func (d *document) signatures() {
-	const height = 46.0
+	const height = 42.0
 	g := d.r.Design
-	d.b.Space(10)
+	d.b.Space(5)
 	d.b.Block(height, func(c draw.Canvas) {
 		third := c.Size().X / 3
 		for i, f := range []field{{"Prepared", g.PreparedBy}, {"Checked", g.CheckedBy}, {"Approved", g.ApprovedBy}} {
@@ -221,7 +221,7 @@ func (d *document) signatures() {
 			x, y, room := box.Min.X.Points()+5, box.Max.Y.Points(), third.Points()-10
 			d.b.Draw(c, sheet.NoteStyle, x, y-10, room, f.label)
 			d.b.Draw(c, sheet.BodyStyle, x, y-21, room, sheet.BodyStyle.Fit(f.value, room))
-			d.b.Draw(c, sheet.NoteStyle, x, y-40, room, "signature, date")
+			d.b.Draw(c, sheet.NoteStyle, x, y-36, room, "signature, date")
 		}
 	})
 	d.b.Space(8)

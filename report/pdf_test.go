@@ -13,5 +13,5 @@ func TestScratch(t *testing.T) {
 	if err := WritePDF(&b, reporttest.Feeder(), Options{}); err != nil {
 		t.Fatal(err)
 	}
-	os.WriteFile("/tmp/feeder.pdf", b.Bytes(), 0o644)
+	_ = os.Stdout
 }

@@ -140,7 +140,7 @@ func (d *document) allMet() string {
 		n += len(c.Requirements)
 		worst = max(worst, largest(c.Agreement))
 	}
-	agree := "the two solutions differ by at most " + format.Percent(worst) + " of a section's largest value, in " + format.Plural(int64(len(d.r.Cases)), "case") + "."
+	agree := "the two solutions differ by at most " + format.Percent(worst) + " of a section's largest value."
 	if n == 0 {
 		return "The design states no requirement; " + agree
 	}

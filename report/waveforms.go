@@ -19,9 +19,9 @@ func (d *document) waveforms(c *record.Case) {
 	if len(list) == 0 {
 		return
 	}
-	height := 72.0
+	height, each := 72.0, 1
 	if len(list) > crowdedWaveforms {
-		height = 58
+		height, each = 62, 2
 	}
 	key := []figure.Entry{
 		{Style: ink.PhasorLine, Text: "phasor: its amplitude (left), its waveform (right)"},
@@ -30,8 +30,8 @@ func (d *document) waveforms(c *record.Case) {
 	d.b.Subheading("Waveforms", figure.KeyHeight+height+40)
 	d.b.Note(startNote(c.Stress, silent))
 	d.key(key)
-	for i := range list {
-		d.waveform(&list[i], height, c.Model.Frequency)
+	for i := 0; i < len(list); i += each {
+		d.waveformRow(list[i:min(i+each, len(list))], each, height, c.Model.Frequency)
 	}
 }
 
@@ -60,7 +60,7 @@ func heard(ws []record.Waveform, f floor) (list []record.Waveform, silent []stri
 	return list, silent
 }
 
-// crowdedWaveforms is how many waveforms get rows of full height.
+// crowdedWaveforms is how many waveforms get a row each; more stand in pairs.
 const crowdedWaveforms = 12
 
 // distinct leaves out what repeats an earlier waveform sample by sample, as
@@ -89,19 +89,32 @@ func (d *document) key(entries []figure.Entry) {
 	d.b.Block(figure.KeyRoom(entries, d.b.Width()), func(c draw.Canvas) { figure.Key(c, entries) })
 }
 
-// waveform draws one row.
-func (d *document) waveform(w *record.Waveform, height, frequency float64) {
-	ts := figure.Times(w.Start, w.Step, len(w.Samples))
-	at := largestAt(w.Samples)
-	label, finding := d.figure(), waveformFinding(w, ts, at)
+// waveformRow draws waveforms side by side in columns of equal width.
+func (d *document) waveformRow(ws []record.Waveform, columns int, height, frequency float64) {
+	label, finding := d.figure(), ""
+	for i := range ws {
+		finding += waveformFinding(&ws[i]) + " "
+	}
+	finding = trimmed(finding)
 	d.b.Need(height + d.b.CaptionHeight(label, finding))
 	d.b.Block(height, func(c draw.Canvas) {
-		split := c.Size().X * 0.62
-		turnOn(w, ts, at, frequency).Draw(draw.Crop(c, 0, split-c.Size().X, 0, 0))
-		lastPeriods(w).Draw(draw.Crop(c, split, 0, 0, 0))
+		for i := range ws {
+			waveform(column(c, i, columns), &ws[i], frequency)
+		}
 	})
 	d.b.Caption(label, finding)
 }
+
+// waveform draws the turn-on at the left and the last periods at the right.
+func waveform(c draw.Canvas, w *record.Waveform, frequency float64) {
+	const share = 0.62 // of the turn-on
+	split := c.Size().X * share
+	turnOn(w, frequency).Draw(draw.Crop(c, 0, split-c.Size().X, 0, 0))
+	lastPeriods(w).Draw(draw.Crop(c, split, 0, 0, 0))
+}
+
+// times returns the times of the samples.
+func times(w *record.Waveform) []float64 { return figure.Times(w.Start, w.Step, len(w.Samples)) }
 
 // largestAt returns the index of the largest finite magnitude, or -1.
 func largestAt(ys []float64) int {
@@ -125,7 +138,8 @@ func symmetric(series ...[]float64) (lo, hi float64) {
 	return -hi, hi
 }
 
-func turnOn(w *record.Waveform, ts []float64, at int, frequency float64) *figure.Panel {
+func turnOn(w *record.Waveform, frequency float64) *figure.Panel {
+	ts, at := times(w), largestAt(w.Samples)
 	lo, hi := symmetric(w.Samples, w.Tail.Phasor)
 	p := figure.New(w.Name, "turn-on", figure.Axis{Label: "time from switch-on", Unit: "s", Min: min(0, ts[0]), Max: ts[len(ts)-1]},
 		figure.Axis{Unit: w.Unit, Min: lo, Max: hi})
@@ -154,7 +168,8 @@ func lastPeriods(w *record.Waveform) *figure.Panel {
 
 // waveformFinding says what a row shows: the largest value, and how near the
 // last periods come to the phasor's waveform.
-func waveformFinding(w *record.Waveform, ts []float64, at int) string {
+func waveformFinding(w *record.Waveform) string {
+	ts, at := times(w), largestAt(w.Samples)
 	if at < 0 {
 		return w.Name + ": no finite value."
 	}

@@ -187,6 +187,7 @@ func (p *pen) node(n *node) {
 	room := p.cell - 2*textGap - lanes*lanePitch
 	if n.on > 0 {
 		p.flag(x, y, n)
+		room = p.cell*flagAt - 2*textGap - lanePitch
 	}
 	if n.col == 0 && p.band.Index > 0 {
 		return // the lead has the name already

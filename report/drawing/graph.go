@@ -26,6 +26,7 @@ type vertex struct {
 	name  string
 	items []item // what branches off, in the order of the rows
 	depth int    // longest way down, in columns
+	open  bool   // nothing but one edge ends here
 }
 
 // item is what branches off a junction: a subtree, an edge that closes a loop
@@ -40,7 +41,7 @@ type item struct {
 // forest returns the depth-first trees of the network: that of the source
 // first, then any that is not tied to it.
 func forest(m record.Model) []*vertex {
-	b := builder{at: map[string][]*edge{}, parts: map[string][]*record.ModelPart{}, seen: map[string]*vertex{}, used: map[*edge]bool{}}
+	b := builder{source: m.Source.At, at: map[string][]*edge{}, parts: map[string][]*record.ModelPart{}, seen: map[string]*vertex{}, used: map[*edge]bool{}}
 	b.collect(m)
 	roots := []*vertex{b.visit(m.Source.At)}
 	for _, j := range m.Junctions {
@@ -56,10 +57,11 @@ func forest(m record.Model) []*vertex {
 
 // builder holds what the search has found so far.
 type builder struct {
-	at    map[string][]*edge
-	parts map[string][]*record.ModelPart
-	seen  map[string]*vertex
-	used  map[*edge]bool
+	source string
+	at     map[string][]*edge
+	parts  map[string][]*record.ModelPart
+	seen   map[string]*vertex
+	used   map[*edge]bool
 }
 
 func (b *builder) collect(m record.Model) {
@@ -88,7 +90,7 @@ func (b *builder) collect(m record.Model) {
 // visit searches depth first, so that every edge that is not in the tree
 // closes a loop between a junction and one above it.
 func (b *builder) visit(name string) *vertex {
-	v := &vertex{name: name}
+	v := &vertex{name: name, open: name != b.source && len(b.at[name])+len(b.parts[name]) == 1}
 	b.seen[name] = v
 	for _, e := range b.at[name] {
 		if b.used[e] {

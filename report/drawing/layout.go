@@ -11,7 +11,7 @@ type cell struct{ col, row int }
 type node struct {
 	name string
 	cell
-	end  bool // nothing branches off: an open end
+	end  bool // an open end
 	on   int  // band that continues it, or 0
 	low  int  // row of its lowest branch
 	used bool // a branch runs in its own row
@@ -99,7 +99,7 @@ func (p *placer) band(index int, r rest) *Band {
 // place puts v and what branches off it, the first branch in v's own row, and
 // returns the next free row.
 func (p *placer) place(v *vertex, items []item, at cell) int {
-	n := &node{name: v.name, cell: at, end: len(v.items) == 0, low: at.row}
+	n := &node{name: v.name, cell: at, end: v.open, low: at.row}
 	p.cur.nodes = append(p.cur.nodes, n)
 	row := at.row
 	for i, it := range items {

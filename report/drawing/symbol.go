@@ -102,7 +102,7 @@ func (p *pen) lead() {
 		return
 	}
 	p.line(wireStyle, x+7*mm, y, p.x0, y)
-	what := "continues"
+	what := "continued"
 	if !p.band.Tied {
 		what = "not tied to the source"
 	} else {
@@ -143,6 +143,9 @@ func (p *pen) wave(x, y float64) {
 	p.line(draw.LineStyle{Color: ink.Text, Width: 0.7}, xy...)
 }
 
+// flagAt is how far to the right of its junction a flag stands, in cells.
+const flagAt = 0.6
+
 // flag marks a junction that another band continues.
 func (p *pen) flag(x, y float64, n *node) {
 	if n.used { // the flag hangs below the branches that found room
@@ -151,8 +154,9 @@ func (p *pen) flag(x, y float64, n *node) {
 		p.pennant(x, low-4, letter(n.on))
 		return
 	}
-	p.line(wireStyle, x, y, x+2*mm, y)
-	p.pennant(x+4*mm, y, letter(n.on))
+	at := x + p.cell*flagAt
+	p.line(wireStyle, x, y, at, y)
+	p.pennant(at, y, letter(n.on))
 }
 
 // pennant draws the letter of a band in a circle.

@@ -15,7 +15,7 @@ type Entry struct {
 }
 
 // KeyHeight is the height of a line of a key.
-const KeyHeight = 11.0
+const KeyHeight = 12.5
 
 const (
 	keySample = 22.0

@@ -132,10 +132,12 @@ func (pn *Panel) Draw(c draw.Canvas) {
 
 // setTicks chooses tick distances that suit the size of the panel.
 func (pn *Panel) setTicks(c draw.Canvas) {
-	const perTickX, perTickY = 46, 17 // points
+	const below = 21.0 // tick labels and label of the horizontal axis
 	size := c.Size()
-	pn.p.X.Tick.Marker = ticks{s: pn.x, most: int(size.X.Points() / perTickX)}
-	pn.p.Y.Tick.Marker = ticks{s: pn.y, most: int(size.Y.Points() / perTickY)}
+	widest := func(label string) float64 { return tickStyle.Width(label) + 9 }
+	tall := func(string) float64 { return tickStyle.Size + 2.5 }
+	pn.p.X.Tick.Marker = ticks{s: pn.x, length: size.X.Points() - insetLeft - insetRight, wish: 46, need: widest}
+	pn.p.Y.Tick.Marker = ticks{s: pn.y, length: size.Y.Points() - below, wish: 17, need: tall}
 }
 
 // align crops c so that the data area begins and ends at the fixed insets.

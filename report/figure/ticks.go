@@ -7,10 +7,12 @@ import (
 	"linewitness/report/format"
 )
 
-// ticks places at most about most labelled ticks on an axis, two at least.
+// ticks places labelled ticks about wish points apart on an axis, and no
+// closer than their labels need.
 type ticks struct {
-	s    scale
-	most int
+	s            scale
+	length, wish float64 // of the axis, between ticks; points
+	need         func(label string) float64
 }
 
 var _ plot.Ticker = ticks{}
@@ -21,26 +23,38 @@ func (t ticks) Ticks(lo, hi float64) []plot.Tick {
 		return t.decades(lo, hi)
 	}
 	step := t.step(lo, hi)
-	first, last := math.Ceil(lo/step-1e-6), math.Floor(hi/step+1e-6)
 	var out []plot.Tick
-	for k := first; k <= last; k++ {
+	for k := math.Ceil(lo/step - 1e-6); k*step <= hi+step*1e-6; k++ {
 		out = append(out, t.tick(k*step, format.Tick(k*step, step)))
 	}
 	return out
 }
 
-// step returns the distance of the ticks: as chosen by most, or less if that
-// leaves fewer than three.
+// step returns the distance of the ticks: as wished, or less if that leaves
+// fewer than three, or more if the labels would not find room.
 func (t ticks) step(lo, hi float64) float64 {
 	const least = 3
-	step := niceStep((hi - lo) / float64(max(t.most, 2)))
-	for range 3 {
+	step := niceStep((hi - lo) / math.Max(t.length/t.wish, 1))
+	for finer := step; t.fits(finer, lo, hi); finer = niceStep(finer * 0.45) {
+		step = finer
 		if math.Floor(hi/step+1e-6)-math.Ceil(lo/step-1e-6)+1 >= least {
 			break
 		}
-		step = niceStep(step * 0.45)
+	}
+	for range 4 {
+		if t.fits(step, lo, hi) {
+			break
+		}
+		step = niceStep(step * 1.1)
 	}
 	return step
+}
+
+// fits reports whether labels of ticks at either end find room.
+func (t ticks) fits(step, lo, hi float64) bool {
+	first, last := math.Ceil(lo/step)*step, math.Floor(hi/step)*step
+	need := math.Max(t.need(format.Tick(first, step)), t.need(format.Tick(last, step)))
+	return step/(hi-lo)*t.length >= need
 }
 
 func (t ticks) tick(v float64, label string) plot.Tick {
@@ -53,7 +67,7 @@ func (t ticks) tick(v float64, label string) plot.Tick {
 // decades labels every decade, or every second, third, ... if they are many.
 func (t ticks) decades(lo, hi float64) []plot.Tick {
 	first, last := int(math.Ceil(lo-1e-9)), int(math.Floor(hi+1e-9))
-	every := 1 + (last-first)/max(t.most, 2)
+	every := 1 + (last-first)/max(int(t.length/t.wish), 2)
 	var out []plot.Tick
 	for n := first; n <= last; n++ {
 		label := ""

@@ -85,7 +85,9 @@ func (b *Book) Term(term, s string) {
 
 func (b *Book) hanging(st typeset.Style, lead string, indent float64, s string) {
 	first := true
-	for _, line := range st.Wrap(s, b.Width()-indent) {
+	lines := st.Wrap(s, b.Width()-indent)
+	for i, line := range lines {
+		b.keep(i, len(lines), leadingOf(st))
 		b.Block(leadingOf(st), func(c draw.Canvas) {
 			x, y := c.Min.X.Points(), c.Max.Y.Points()-st.Size*ascender
 			if first {
@@ -143,12 +145,23 @@ func (b *Book) labelled(st typeset.Style, label, s string) {
 	}
 }
 
-// lines writes wrapped text.
+// lines writes wrapped text. No line of it stands alone at the foot or at the
+// head of a page.
 func (b *Book) lines(st typeset.Style, s string) {
-	for _, line := range st.Wrap(s, b.Width()) {
+	lines := st.Wrap(s, b.Width())
+	for i, line := range lines {
+		b.keep(i, len(lines), leadingOf(st))
 		b.Block(leadingOf(st), func(c draw.Canvas) {
 			b.Draw(c, st, c.Min.X.Points(), c.Max.Y.Points()-st.Size*ascender, b.Width(), line)
 		})
+	}
+}
+
+// keep makes room for two lines where the first or the last but one of a
+// paragraph of n lines is to be written.
+func (b *Book) keep(i, n int, height float64) {
+	if n > 1 && (i == 0 || i == n-2) {
+		b.Need(2 * height)
 	}
 }
 
