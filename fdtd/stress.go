@@ -201,21 +201,21 @@ func (s *stresser) result() *Stress {
 			out.Current = q.Current
 		}
 	}
+	gain := averageGain(g.StepsPerPeriod)
 	for j := range s.nodes {
-		late := 0.0
+		early, unit := 0.0, 1.0
 		if !s.m.junction.stores[j] {
-			late = 0.5
+			early, unit = 0.5, gain
 		}
-		q := s.nodes[j].peak(-1, 0, 0, g.Step, late, 1)
-		out.Junctions = append(out.Junctions, q)
+		out.Junctions = append(out.Junctions, s.nodes[j].peak(-1, 0, 0, g.Step, early, unit))
 	}
 	for _, at := range s.m.branch {
 		q := Peak{Section: -1}
 		if at >= 0 {
-			q = s.parts[at].peak(-1, 0, 0, g.Step, 0.5, 1)
+			q = s.parts[at].peak(-1, 0, 0, g.Step, 0.5, gain)
 		}
 		out.Branches = append(out.Branches, q)
 	}
-	out.Source = s.parts[s.m.source].peak(-1, 0, 0, g.Step, 0.5, 1)
+	out.Source = s.parts[s.m.source].peak(-1, 0, 0, g.Step, 0.5, gain)
 	return out
 }

@@ -11,11 +11,17 @@ type Traces struct {
 	First int     // 1
 	// Whole is from switch-on on, Full false if the run was longer than it.
 	Junctions []Trace
-	Branches  []Trace // averages over a step: sample i is at (First + i - 1/2) Step
+	Branches  []Trace // at the middle of a step: sample i is at (First + i - 1/2) Step
 	Source    Trace   // likewise, the current out of the source
 	Full      bool
 	TailEnd   int // step of the last sample of every tail: the end of the run, or the stop
 }
+
+// averageGain is what turns the average of a sinusoid over a step into its
+// value in the middle of the step, 1/cos(pi/N). What is recorded as an average
+// is multiplied by it: exact at the source frequency, and of second order in
+// the step for all else.
+func averageGain(steps int) float64 { return 1 / math.Cos(math.Pi/float64(steps)) }
 
 // A Trace is one quantity in each lane: A the only or the cosine lane, B the
 // sine lane or nil.
@@ -102,20 +108,21 @@ func (t *tracer) traces() Traces {
 	out := Traces{Step: t.m.grid.Step, First: 1, Full: t.step <= t.limit, TailEnd: t.tailEnd()}
 	nj := len(t.m.net.Junctions)
 	for j := range nj {
-		early := 0.0
+		early, gain := 0.0, 1.0
 		if !t.m.junction.stores[j] {
-			early = 0.5
+			early, gain = 0.5, averageGain(t.m.grid.StepsPerPeriod)
 		}
-		out.Junctions = append(out.Junctions, t.column(j, 1, early))
+		out.Junctions = append(out.Junctions, t.column(j, gain, early))
 	}
+	gain := averageGain(t.m.grid.StepsPerPeriod)
 	for _, at := range t.m.branch {
+		c := nj + at
 		if at < 0 {
-			out.Branches = append(out.Branches, t.column(-1, 1, 0.5))
-			continue
+			c = -1
 		}
-		out.Branches = append(out.Branches, t.column(nj+at, 1, 0.5))
+		out.Branches = append(out.Branches, t.column(c, gain, 0.5))
 	}
-	out.Source = t.column(nj+t.m.source, -1, 0.5)
+	out.Source = t.column(nj+t.m.source, -gain, 0.5)
 	return out
 }
 
@@ -127,15 +134,16 @@ func (t *tracer) tailEnd() int {
 	return t.step
 }
 
-// column takes one quantity out of the record; column -1 is always zero.
-func (t *tracer) column(c int, sign, early float64) Trace {
+// column takes one quantity out of the record, times gain; column -1 is always
+// zero.
+func (t *tracer) column(c int, gain, early float64) Trace {
 	steps := min(t.step, t.limit)
 	out := Trace{Early: early}
 	pick := func(from []float64, row, lane int) float64 {
 		if c < 0 {
 			return 0
 		}
-		return sign * from[(row*t.lanes+lane)*t.width+c]
+		return gain * from[(row*t.lanes+lane)*t.width+c]
 	}
 	end := t.tailEnd()
 	tail := min(t.rows, end)

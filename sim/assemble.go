@@ -231,8 +231,8 @@ func (s *solved) waveforms() []record.Waveform {
 	t, src := s.stress.Traces, s.net.Source
 	name := s.net.Junctions[src.At]
 	out := []record.Waveform{
-		s.waveform(t.Junctions[src.At], s.found.junctions[src.At], "source voltage", name, "V"),
-		s.waveform(t.Source, s.found.source, "source current", name, "A"),
+		s.waveform(t.Junctions[src.At], s.exact.junctions[src.At], "source voltage", name, "V"),
+		s.waveform(t.Source, s.exact.source, "source current", name, "A"),
 	}
 	for j, n := range s.net.Junctions {
 		if j != src.At {
@@ -244,8 +244,6 @@ func (s *solved) waveforms() []record.Waveform {
 			out = append(out, s.waveform(t.Branches[b], s.exact.branches[b], br.Name+" current", br.Name, "A"))
 		}
 	}
-	out[0].Tail.Phasor = s.tailPhasor(t.Junctions[src.At], s.exact.junctions[src.At])
-	out[1].Tail.Phasor = s.tailPhasor(t.Source, s.exact.source)
 	return out
 }
 
