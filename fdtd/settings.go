@@ -5,6 +5,11 @@ type Settings struct {
 	Tolerance  float64 // remaining error allowed in steady state, default 1e-4
 	MaxPeriods int     // cap on a run, default 20000
 	MaxPoints  int     // recorded points a section, default 4096
+	// Rest is how near, relative to the largest amplitude, a waveform must keep
+	// to the steady state that a stress run was given, for the network to
+	// count as at rest; default 1e-3. It must be above the error of that
+	// steady state on the grid of the run.
+	Rest float64
 	// Progress, if not nil, is called after every period with the number of
 	// cell updates done since the last call.
 	Progress func(updates float64)
@@ -24,6 +29,9 @@ func (s Settings) withDefaults() Settings {
 	}
 	if s.MaxPoints == 0 {
 		s.MaxPoints = 4096
+	}
+	if s.Rest == 0 {
+		s.Rest = 1e-3
 	}
 	return s
 }

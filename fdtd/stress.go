@@ -57,7 +57,7 @@ type Peak struct {
 // each place and time: no phase is left out and none is scanned.
 //
 // The run ends when the waveform at every junction has kept to that of the
-// steady state, final, for a longest round trip, within restTolerance of the
+// steady state, final, for a longest round trip, within Settings.Rest of the
 // largest - or, after a stop, when it has kept to zero - and at
 // MaxPeriods at the latest.
 func StressRun(ctx context.Context, net *network.Network, final *Steady, set Settings) (*Stress, error) {
@@ -81,10 +81,6 @@ func StressRun(ctx context.Context, net *network.Network, final *Steady, set Set
 	}
 	return s.result(), nil
 }
-
-// restTolerance is the part of the largest steady amplitude within which a
-// waveform counts as at rest in a stress run. Peaks come long before.
-const restTolerance = 1e-3
 
 type stresser struct {
 	m      *model
@@ -126,7 +122,7 @@ func (s *stresser) stress() error {
 		}
 		rest := s.follow.rest(stop >= 0 && p > stop)
 		quiet++
-		if rest > restTolerance {
+		if rest > s.run.set.Rest {
 			quiet = 0
 		}
 		if quiet >= trip+1 && p >= max(start, stop)+trip+1 {

@@ -9,6 +9,9 @@ import (
 	"linewitness/sim/network"
 )
 
+// restDefault is the default of Settings.Rest.
+const restDefault = 1e-3
+
 // matchedLine is a line of 50 ohm, matched at both ends, at Courant number 1.
 func matchedLine(length float64) *network.Network {
 	return &network.Network{
@@ -98,7 +101,7 @@ func TestBurst(t *testing.T) {
 	a := s.Traces.Junctions[1].A
 	last := a[len(a)-g.StepsPerPeriod:]
 	for _, v := range last {
-		if math.Abs(v) > restTolerance*s.Voltage.Value*2 {
+		if math.Abs(v) > restDefault*s.Voltage.Value*2 {
 			t.Fatalf("still %.3g V at the end", v)
 		}
 	}
@@ -159,7 +162,7 @@ func TestTracesAgreeWithPhasor(t *testing.T) {
 		for i, v := range tr.Tail {
 			at := (start + float64(i)) * g.Step
 			want := real(p * cmplx.Rect(1, net.Omega()*at+0.7))
-			if d := math.Abs(v - want); d > 2*restTolerance*cmplx.Abs(p) { // at rest, and the largest is elsewhere
+			if d := math.Abs(v - want); d > 2*restDefault*cmplx.Abs(p) { // at rest, and the largest is elsewhere
 				t.Fatalf("%s at sample %d: %.6g, want %.6g", what, i, v, want)
 			}
 		}

@@ -68,7 +68,7 @@ func (s *solved) steadyRecord(st *state) record.Steady {
 	src := s.net.Source
 	v := st.junctions[src.At]
 	out := record.Steady{Source: record.SteadySource{
-		V: v, I: st.source, Impedance: v / st.source,
+		V: v, I: st.source, Impedance: ratio(v, st.source),
 		Power: st.sourcePower(), Available: src.Available(),
 	}}
 	for k, sec := range s.net.Sections {
@@ -98,7 +98,7 @@ func (s *solved) steadyRecord(st *state) record.Steady {
 func (s *state) end(k, e int, z0 complex128) record.End {
 	t := s.ends[k][e]
 	g := reflectionAt(s, k, e, z0)
-	return record.End{V: t.v, I: t.i, Impedance: t.v / t.i, Reflection: g, VSWR: vswrOf(g)}
+	return record.End{V: t.v, I: t.i, Impedance: ratio(t.v, t.i), Reflection: g, VSWR: vswrOf(g)}
 }
 
 func (s *solved) settlingRecord() record.Settling {

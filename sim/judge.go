@@ -56,34 +56,34 @@ func judge(c *solved, all map[string]*solved) []record.Requirement {
 
 // judgements is one judgement for most requirements, and one for each window
 // of an impedance.
-func (c *solved) judgements(r design.Requirement, b *budget, all map[string]*solved) []judgement {
+func (s *solved) judgements(r design.Requirement, b *budget, all map[string]*solved) []judgement {
 	one := judgement{req: r, subject: subject(r), min: r.Min, max: r.Max}
 	switch r.Quantity {
 	case design.InputImpedance:
-		return c.impedance(one, b)
+		return s.impedance(one, b)
 	case design.PeakVoltage, design.PeakCurrent:
-		p := c.peak(r)
+		p := s.peak(r)
 		one.values = []witnessed{{p.value, fdtdOnly}}
 		one.spread = p.spread
-		one.note = c.stressNote()
+		one.note = s.stressNote()
 	case design.Overshoot:
-		c.overshoot(&one)
+		s.overshoot(&one)
 	case design.SettleTime:
-		c.settleTime(&one)
+		s.settleTime(&one)
 	case design.Agreement:
-		one.values = []witnessed{{c.compared.Found(), byBoth}}
+		one.values = []witnessed{{s.compared.Found(), byBoth}}
 	default:
-		c.steadyValues(&one, b, all)
+		s.steadyValues(&one, b, all)
 	}
 	return []judgement{one}
 }
 
 // steadyValues fills a judgement of the steady state, or of its change from
 // another case.
-func (c *solved) steadyValues(j *judgement, b *budget, all map[string]*solved) {
-	q := finder{c.net}.steady(j.req)
-	j.values = []witnessed{{q(c.exact), byPhasor}, {q(c.found), byFDTD}}
-	j.spread = c.spreadOf(j.req, q, b)
+func (s *solved) steadyValues(j *judgement, b *budget, all map[string]*solved) {
+	q := finder{s.net}.steady(j.req)
+	j.values = []witnessed{{q(s.exact), byPhasor}, {q(s.found), byFDTD}}
+	j.spread = s.spreadOf(j.req, q, b)
 	if j.req.RelativeTo != "" {
 		ref := all[j.req.RelativeTo]
 		p := finder{ref.net}.steady(j.req)
@@ -91,7 +91,7 @@ func (c *solved) steadyValues(j *judgement, b *budget, all map[string]*solved) {
 		j.values[0].value = relative(j.req, j.values[0].value, exact)
 		j.values[1].value = relative(j.req, j.values[1].value, found)
 		refSpread := ref.spreadOf(j.req, p, newBudget(ref.net, &ref.compared))
-		j.spread = relativeSpread(j.req, q(c.exact), j.spread) + relativeSpread(j.req, exact, refSpread)
+		j.spread = relativeSpread(j.req, q(s.exact), j.spread) + relativeSpread(j.req, exact, refSpread)
 	}
 	if angular(j.req.Quantity) {
 		centre := j.centre()
@@ -104,15 +104,15 @@ func (c *solved) steadyValues(j *judgement, b *budget, all map[string]*solved) {
 // spreadOf is the uncertainty of a quantity, the larger of the two
 // witnesses'. An angle is followed from its own value, so that it does not
 // jump by a turn.
-func (c *solved) spreadOf(r design.Requirement, q quantity, b *budget) float64 {
+func (s *solved) spreadOf(r design.Requirement, q quantity, b *budget) float64 {
 	worst := 0.0
-	for _, s := range []*state{c.exact, c.found} {
+	for _, w := range []*state{s.exact, s.found} {
 		f := q
 		if angular(r.Quantity) {
-			base := q(s)
-			f = func(s *state) float64 { return base + math.Remainder(q(s)-base, 2*pi) }
+			base := q(w)
+			f = func(st *state) float64 { return base + math.Remainder(q(st)-base, 2*pi) }
 		}
-		worst = math.Max(worst, b.spread(s, f))
+		worst = math.Max(worst, b.spread(w, f))
 	}
 	return worst
 }
@@ -156,16 +156,16 @@ func (j *judgement) centre() float64 {
 }
 
 // impedance makes a judgement of each window on an input impedance.
-func (c *solved) impedance(one judgement, b *budget) []judgement {
-	f := finder{c.net}
+func (s *solved) impedance(one judgement, b *budget) []judgement {
+	f := finder{s.net}
 	var out []judgement
 	add := func(what string, min, max *design.Limit, part func(complex128) float64) {
-		q := func(s *state) float64 { return part(f.impedance(s, one.req)) }
+		q := func(st *state) float64 { return part(f.impedance(st, one.req)) }
 		j := one
 		j.subject += ", " + what
 		j.min, j.max, j.unit = min, max, "ohm"
-		j.values = []witnessed{{q(c.exact), byPhasor}, {q(c.found), byFDTD}}
-		j.spread = c.spreadOf(one.req, q, b)
+		j.values = []witnessed{{q(s.exact), byPhasor}, {q(s.found), byFDTD}}
+		j.spread = s.spreadOf(one.req, q, b)
 		out = append(out, j)
 	}
 	if w := one.req.R; w != nil {
@@ -186,29 +186,29 @@ type stressed struct{ value, spread float64 }
 
 // peak is the largest voltage or current along a section, at a junction, or
 // anywhere.
-func (c *solved) peak(r design.Requirement) stressed {
-	f := finder{c.net}
-	pick := func(s *fdtd.Stress) float64 {
+func (s *solved) peak(r design.Requirement) stressed {
+	f := finder{s.net}
+	pick := func(run *fdtd.Stress) float64 {
 		v := r.Quantity == design.PeakVoltage
 		switch {
 		case r.Section != "" && v:
-			return s.Sections[f.section(r.Section)].Voltage.Value
+			return run.Sections[f.section(r.Section)].Voltage.Value
 		case r.Section != "":
-			return s.Sections[f.section(r.Section)].Current.Value
+			return run.Sections[f.section(r.Section)].Current.Value
 		case r.At != "" && v:
-			return s.Junctions[f.junction(r.At)].Value
+			return run.Junctions[f.junction(r.At)].Value
 		case r.At != "":
-			return peakCurrentAt(c, s, f.junction(r.At))
+			return peakCurrentAt(s, run, f.junction(r.At))
 		case v:
-			return largestVoltage(s)
+			return largestVoltage(run)
 		}
-		top := s.Current.Value
-		for j := range c.net.Junctions {
-			top = math.Max(top, peakCurrentAt(c, s, j))
+		top := run.Current.Value
+		for j := range s.net.Junctions {
+			top = math.Max(top, peakCurrentAt(s, run, j))
 		}
 		return top
 	}
-	return c.stressed(pick)
+	return s.stressed(pick)
 }
 
 func largestVoltage(s *fdtd.Stress) float64 {
@@ -241,28 +241,28 @@ func peakCurrentAt(c *solved, s *fdtd.Stress, j int) float64 {
 	return top
 }
 
-func (c *solved) overshoot(j *judgement) {
+func (s *solved) overshoot(j *judgement) {
 	r := j.req
-	f := finder{c.net}
+	f := finder{s.net}
 	r.Quantity = design.SteadyVoltage
-	steady := f.steady(r)(c.exact)
+	steady := f.steady(r)(s.exact)
 	r.Quantity = design.PeakVoltage
-	p := c.peak(r)
+	p := s.peak(r)
 	j.values = []witnessed{{p.value/steady - 1, fdtdOnly}}
 	j.spread = p.spread / steady
-	j.note = c.stressNote()
+	j.note = s.stressNote()
 }
 
-func (c *solved) settleTime(j *judgement) {
+func (s *solved) settleTime(j *judgement) {
 	at := -1
 	if j.req.At != "" {
-		at = finder{c.net}.junction(j.req.At)
+		at = finder{s.net}.junction(j.req.At)
 	}
-	s := c.stressed(func(s *fdtd.Stress) float64 { return s.SettleTime(at, j.req.Settled) })
-	j.values = []witnessed{{s.value, fdtdOnly}}
-	j.spread = s.spread
-	if math.IsNaN(s.value) {
-		j.note = fmt.Sprintf("not within %.3g %% when the run ended after %.3g us", j.req.Settled*100, c.stress.Duration*1e6)
+	settled := s.stressed(func(run *fdtd.Stress) float64 { return run.SettleTime(at, j.req.Settled) })
+	j.values = []witnessed{{settled.value, fdtdOnly}}
+	j.spread = settled.spread
+	if math.IsNaN(settled.value) {
+		j.note = fmt.Sprintf("not within %.3g %% when the run ended after %.3g us", j.req.Settled*100, s.stress.Duration*1e6)
 	}
 }
 

@@ -16,7 +16,7 @@ type planned struct {
 	design *design.Design
 	net    *network.Network
 	grid   *gridding
-	coarse *fdtd.Grid // for the second stress run, nil if none is coarser
+	coarse *gridding // for the second stress run, nil if none is coarser
 	plan   PlanCase
 }
 
@@ -42,19 +42,24 @@ func newPlanned(name string, d *design.Design) (*planned, error) {
 	if p.grid, err = chooseGrid(p.net, d.Grid.CellsPerWavelength, d.Grid.Agreement); err != nil {
 		return nil, err
 	}
-	p.coarse = coarser(p.net, p.grid.grid)
+	p.coarse = coarser(p.net, p.grid)
 	p.predict()
 	return p, nil
 }
 
 // coarser is a grid with about half the steps, or nil if short sections do not
 // allow one clearly coarser.
-func coarser(net *network.Network, g fdtd.Grid) *fdtd.Grid {
-	c, err := fdtd.NewGrid(net, float64(g.StepsPerPeriod)/2)
-	if err != nil || 4*c.StepsPerPeriod > 3*g.StepsPerPeriod {
+func coarser(net *network.Network, fine *gridding) *gridding {
+	steps := fine.grid.StepsPerPeriod
+	g, err := fdtd.NewGrid(net, float64(steps)/2)
+	if err != nil || 4*g.StepsPerPeriod > 3*steps {
 		return nil
 	}
-	return &c
+	out, err := newGridding(net, g, fine.exact)
+	if err != nil {
+		return nil
+	}
+	return out
 }
 
 // predict fills the plan: how long the runs will be and what they will cost.
@@ -83,7 +88,7 @@ func (p *planned) predict() {
 	settle := g.Updates(p.plan.SettlePeriods)
 	stress := g.Updates(p.plan.StressPeriods) * lanes
 	if p.coarse != nil {
-		stress += p.coarse.Updates(p.plan.StressPeriods) * lanes
+		stress += p.coarse.grid.Updates(p.plan.StressPeriods) * lanes
 	}
 	p.plan.Grid.Updates = settle + stress
 	p.plan.Seconds = settle/settleRate + stress/stressRate

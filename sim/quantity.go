@@ -132,7 +132,7 @@ func (f finder) reflection(s *state, r design.Requirement) complex128 {
 // impedance is V/I at the end of a section, ohm.
 func (f finder) impedance(s *state, r design.Requirement) complex128 {
 	t := s.ends[f.section(r.Section)][endOf(r.End)]
-	return t.v / t.i
+	return ratio(t.v, t.i)
 }
 
 func (f finder) steadyVoltage(r design.Requirement) quantity {

@@ -39,12 +39,16 @@ func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, e
 	if s.steady, err = fdtd.Settle(ctx, p.net, p.grid.grid, set); err != nil {
 		return nil, err
 	}
+	// The steady state is off by what is left of the settling.
+	residual := math.Min(1, s.steady.Settling.Residual)
+	set.Rest = atRest + 3*residual
 	if s.stress, err = fdtd.StressRun(ctx, p.net, s.steady, set); err != nil {
 		return nil, err
 	}
 	if p.coarse != nil {
 		again := *s.steady
-		again.Grid = *p.coarse
+		again.Grid = p.coarse.grid
+		set.Rest += 2 * p.coarse.error // and that of this grid differs from it
 		if s.coarse, err = fdtd.StressRun(ctx, p.net, &again, set); err != nil {
 			return nil, err
 		}
@@ -52,6 +56,10 @@ func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, e
 	s.compare()
 	return s, nil
 }
+
+// atRest is the part of the largest amplitude within which a waveform counts as
+// that of the steady state. Peaks come long before.
+const atRest = 1e-3
 
 func (s *solved) compare() {
 	var samples []agree.Samples

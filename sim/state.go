@@ -49,6 +49,7 @@ func phasorState(net *network.Network, s *phasor.Solution) *state {
 		out.voltage = append(out.voltage, closedExtremes(s.VoltageExtremes(k)))
 		out.current = append(out.current, closedExtremes(s.CurrentExtremes(k)))
 	}
+	out.chop()
 	return out
 }
 
@@ -68,7 +69,41 @@ func fdtdState(net *network.Network, s *fdtd.Steady) *state {
 		i := append(append([]complex128{w.IFrom}, w.I...), w.ITo)
 		out.current = append(out.current, gridExtremes(z, i))
 	}
+	out.chop()
 	return out
+}
+
+// dust is the part of a section's largest amplitude below which a phasor at
+// its end is rounding: the current of an open end, the voltage of a short.
+const dust = 1e-12
+
+// chop makes an exact zero of what is only rounding.
+func (s *state) chop() {
+	top := make([]float64, len(s.junctions))
+	cut := func(p *complex128, largest float64) {
+		if cmplx.Abs(*p) <= dust*largest {
+			*p = 0
+		}
+	}
+	for k, sec := range s.net.Sections {
+		v, i := s.voltage[k].largest.value, s.current[k].largest.value
+		for e, j := range []int{sec.From, sec.To} {
+			top[j] = math.Max(top[j], v)
+			cut(&s.ends[k][e].v, v)
+			cut(&s.ends[k][e].i, i)
+		}
+	}
+	for j := range s.junctions {
+		cut(&s.junctions[j], top[j])
+	}
+}
+
+// ratio is the impedance v/i, infinite at an open end.
+func ratio(v, i complex128) complex128 {
+	if i == 0 {
+		return cmplx.Inf()
+	}
+	return v / i
 }
 
 // gridExtremes finds the extremes of |p| between the points of a grid. The

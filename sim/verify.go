@@ -2,6 +2,7 @@ package sim
 
 import (
 	"context"
+	"path/filepath"
 	"runtime"
 	"sync"
 	"time"
@@ -87,7 +88,7 @@ func newRecord(f *design.File, cases []*solved, version string) *record.Record {
 			Title: r.Title, Number: r.Number, Revision: r.Revision, Purpose: r.Purpose,
 			PreparedBy: r.PreparedBy, CheckedBy: r.CheckedBy, ApprovedBy: r.ApprovedBy,
 			Notes: r.Notes, Date: r.Date,
-			File: f.Name, SHA256: f.SHA256, Source: f.Source,
+			File: filepath.Base(f.Name), SHA256: f.SHA256, Source: f.Source,
 			Convention: conventionName(f.Nominal.Convention),
 			Agreement:  f.Nominal.Grid.Agreement,
 			Tolerance:  f.Nominal.Grid.SettleTolerance, MaxPeriods: f.Nominal.Grid.MaxPeriods,
