@@ -74,7 +74,10 @@ func holds(t *testing.T, what string, n int, got float64, all []plateau) {
 func TestOutsideBounceStep(t *testing.T) {
 	b := ladder(t, 100, 50, 200, 100, 1e8)
 	load := []plateau{
-		{0, 1, 0, 0, 0}, {1, 3, 6.4, 4 + 2.4, 0.05}, {3, 5, 7.68, 7.68, 5e-4}, {5, 7, 7.936, 7.936, 5e-4},
+		{0, 1, 0, 0, 0},
+		{1, 3, 6.4, 4 + 2.4, 0.05},
+		{3, 5, 7.68, 7.68, 5e-4},
+		{5, 7, 7.936, 7.936, 5e-4},
 		{60, 70, 8, 8, 1e-6},
 	}
 	generator := []plateau{
