@@ -29,6 +29,14 @@ const maxSteps = 1 << 20
 // S = 1 misses it by rounding only; its length is then off by no more.
 const unity = 1e-9
 
+// candidates bounds the search of NewGrid: some thousand step numbers differ
+// enough.
+const candidates = 8192
+
+// maxCells bounds the cells of a section, as a guard against overflow; the
+// cost of a run is the caller's to judge.
+const maxCells = 1e12
+
 // NewGrid makes the best grid with at least cells cells per wavelength on
 // every section, and at least one cell. With N0 the least number of steps that
 // does so, it takes the N in [N0, 1.25 N0] with the smallest error of
@@ -39,7 +47,7 @@ func NewGrid(net *network.Network, cells float64) (Grid, error) {
 		return Grid{}, err
 	}
 	best, score := Grid{}, math.Inf(1)
-	for n := lo; n <= lo+lo/4; n++ {
+	for n := lo; n <= lo+lo/4; n += 1 + lo/candidates {
 		g := fixedGrid(net, n)
 		if s := g.score(net); s < score {
 			best, score = g, s
@@ -61,6 +69,11 @@ func leastSteps(net *network.Network, cells float64) (int, error) {
 				ErrShortSection, s.Name, s.Length, m/l)
 		}
 		need = math.Max(need, m/l*(1-unity))
+	}
+	for _, s := range net.Sections {
+		if n := need * 1.25 * s.Delay() / net.Period(); n > maxCells {
+			return 0, fmt.Errorf("fdtd: section %s (%.3g m) would need %.3g cells", s.Name, s.Length, n)
+		}
 	}
 	return int(math.Ceil(need)), nil
 }
