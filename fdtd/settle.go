@@ -16,7 +16,7 @@ type Settling struct {
 	Time       float64 // s
 	LongPath   float64 // s, see LongestPath
 	Residual   float64 // estimated remaining error, relative to the section's largest amplitude
-	LoopFactor float64 // measured factor per longest round trip; 0 if nothing was left to measure
+	LoopFactor float64 // last measured factor per longest round trip; 1 or more if the changes do not fall, 0 if nothing was left to measure
 	Mean       float64 // largest mean, relative likewise, in the last window
 	Harmonic   float64 // largest second or third harmonic, relative likewise
 	Curve      []Comparison
@@ -176,10 +176,10 @@ func (w *watch) estimate() float64 {
 	if rho >= 1 {
 		last, rho = w.envelope()
 	}
+	w.LoopFactor = math.Pow(rho, float64(w.trip)/float64(w.gap))
 	if rho >= 1 {
 		return math.Inf(1)
 	}
-	w.LoopFactor = math.Pow(rho, float64(w.trip)/float64(w.gap))
 	return last * rho / (1 - rho)
 }
 

@@ -39,9 +39,13 @@ func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, e
 	if s.steady, err = fdtd.Settle(ctx, p.net, p.grid.grid, set); err != nil {
 		return nil, err
 	}
-	// The steady state is off by what is left of the settling.
-	residual := math.Min(1, s.steady.Settling.Residual)
-	set.Rest = atRest + 3*residual
+	// The steady state is off by what is left of the settling. Without a
+	// steady state nothing tells when the network is at rest: the run goes on
+	// to its cap.
+	set.Rest = atRest
+	if s.steady.Settling.Settled {
+		set.Rest += 3 * s.steady.Settling.Residual
+	}
 	if s.stress, err = fdtd.StressRun(ctx, p.net, s.steady, set); err != nil {
 		return nil, err
 	}
