@@ -24,13 +24,18 @@ func (n *Network) Omega() float64 { return 2 * math.Pi * n.Frequency }
 // Period is the period of the source, s.
 func (n *Network) Period() float64 { return 1 / n.Frequency }
 
-// A Section is a piece of uniform line between two junctions.
+// A Section is a piece of uniform line between two junctions. With dispersion,
+// Line holds the constants of the highest frequencies.
 type Section struct {
-	Name     string
-	From, To int     // junctions
-	Length   float64 // m
-	Line     line.Constants
+	Name       string
+	From, To   int     // junctions
+	Length     float64 // m
+	Line       line.Constants
+	Dispersion line.Dispersion
 }
+
+// At gives the constants of the section at an angular frequency.
+func (s Section) At(omega float64) line.Constants { return s.Dispersion.At(s.Line, omega) }
 
 // Delay is the one-way delay of the section, Length sqrt(LC), s. It is the
 // delay of a wave front: nothing arrives sooner.
