@@ -6,7 +6,6 @@ import (
 	"math"
 	"math/cmplx"
 
-	"linewitness/sim/line"
 	"linewitness/sim/network"
 )
 
@@ -63,7 +62,7 @@ func leastSteps(net *network.Network, cells float64) (int, error) {
 	need := cells
 	for _, s := range net.Sections {
 		l := s.Delay() / net.Period()
-		m := math.Max(1, math.Ceil(cells*shortening(s.Line, net.Omega())*l*(1-unity)))
+		m := math.Max(1, math.Ceil(cells*shortening(s, net.Omega())*l*(1-unity)))
 		if m/l > maxSteps {
 			return 0, fmt.Errorf("%w: %s (%.3g m) would need %.3g steps per period; make it longer or leave it out",
 				ErrShortSection, s.Name, s.Length, m/l)
@@ -80,8 +79,8 @@ func leastSteps(net *network.Network, cells float64) (int, error) {
 
 // shortening is how much shorter the wave on a lossy line is than that of its
 // wave front, beta/(w sqrt(LC)) >= 1; a decay as fast counts likewise.
-func shortening(c line.Constants, omega float64) float64 {
-	return math.Max(1, cmplx.Abs(c.Propagation(omega))*c.FrontVelocity()/omega)
+func shortening(s network.Section, omega float64) float64 {
+	return math.Max(1, cmplx.Abs(s.At(omega).Propagation(omega))*s.Line.FrontVelocity()/omega)
 }
 
 // fixedGrid is the grid with n steps per period, whether good or not.
@@ -103,7 +102,7 @@ func fixedGrid(net *network.Network, n int) Grid {
 // CellsPerWavelength is how many cells of section k make one wavelength.
 func (g Grid) CellsPerWavelength(net *network.Network, k int) float64 {
 	s := net.Sections[k]
-	return float64(g.StepsPerPeriod) * g.Courant[k] / shortening(s.Line, net.Omega())
+	return float64(g.StepsPerPeriod) * g.Courant[k] / shortening(s, net.Omega())
 }
 
 // Refine halves the step and every cell, times times over; every Courant
@@ -142,8 +141,9 @@ func (g Grid) score(net *network.Network) float64 {
 	sum := 0.0
 	for k, s := range net.Sections {
 		n := g.Numerical(net, k)
-		exact := s.Line.Propagation(net.Omega()) * complex(s.Length, 0)
-		sum += cmplx.Abs(n.Exponent-exact) + cmplx.Abs(n.EndImpedance/s.Line.Impedance(net.Omega())-1)
+		at := s.At(net.Omega())
+		exact := at.Propagation(net.Omega()) * complex(s.Length, 0)
+		sum += cmplx.Abs(n.Exponent-exact) + cmplx.Abs(n.EndImpedance/at.Impedance(net.Omega())-1)
 	}
 	return sum
 }

@@ -15,6 +15,9 @@ func newCoefs(s, r, g float64) coefs {
 	}
 }
 
+// onePlusG is 1 + g, from va = (1-g)/(1+g).
+func (c *coefs) onePlusG() float64 { return 2 / (1 + c.va) }
+
 // advance takes one section over one step: all of w, and v but for its two
 // ends, which belong to the junctions. len(v) is len(w)+1.
 //

@@ -11,7 +11,10 @@ type model struct {
 	net      *network.Network
 	grid     Grid
 	coefs    []coefs
-	z        []float64 // sqrt(L/C) of each section, ohm
+	series   []*relaxation // of each section, nil without skin effect
+	shunt    []*relaxation // of each section, nil without dielectric dispersion
+	z        []float64     // sqrt(L/C) of each section, ohm
+	store    []float64     // C dx/(2 dt) of each section, S
 	junction *junctionSystem
 	source   int   // index of the source among the companions
 	branch   []int // companion of each branch of the network, -1 if open
@@ -23,23 +26,35 @@ func newModel(net *network.Network, g Grid) (*model, error) {
 	stores := make([]bool, n)
 	add, keep := make([]float64, n), make([]float64, n)
 	for k, s := range net.Sections {
-		z := math.Sqrt(s.Line.L / s.Line.C)
-		m.z = append(m.z, z)
-		r := s.Line.R * g.Step / (2 * s.Line.L)
-		gg := s.Line.G * g.Step / (2 * s.Line.C)
-		m.coefs = append(m.coefs, newCoefs(g.Courant[k], r, gg))
-		// C dx/(2 dt) = 1/(2 z S), and G dx/4 is gg times that.
-		store := 1 / (2 * z * g.Courant[k])
+		gg := m.section(k)
 		for _, j := range []int{s.From, s.To} {
 			stores[j] = true
-			add[j] += store * (1 + gg)
-			keep[j] += store * (1 - gg)
+			add[j] += m.store[k] * (1 + gg)
+			keep[j] += m.store[k] * (1 - gg)
 		}
 	}
 	branches := m.companions()
 	var err error
 	m.junction, err = newJunctionSystem(stores, add, keep, branches)
 	return m, err
+}
+
+// section adds the constants of section k and returns its g = G dt/(2C), with
+// the conductance of the relaxation.
+func (m *model) section(k int) (gg float64) {
+	s, g := m.net.Sections[k], m.grid
+	z := math.Sqrt(s.Line.L / s.Line.C)
+	series := newRelaxation(skinForm(s.Dispersion.Skin, m.net.Omega()), g.Step)
+	shunt := newRelaxation(debyeForm(s.Dispersion, m.net.Omega()), g.Step)
+	r := (s.Line.R + series.resistance()) * g.Step / (2 * s.Line.L)
+	gg = (s.Line.G + shunt.resistance()) * g.Step / (2 * s.Line.C)
+	series.finish(g.Step / s.Line.L / (1 + r))
+	shunt.finish(g.Step / s.Line.C / (1 + gg))
+	m.z = append(m.z, z)
+	m.series, m.shunt = append(m.series, series), append(m.shunt, shunt)
+	m.coefs = append(m.coefs, newCoefs(g.Courant[k], r, gg))
+	m.store = append(m.store, 1/(2*z*g.Courant[k])) // C dx/(2 dt)
+	return gg
 }
 
 // companions makes the companion forms of all closed branches and, last, of
@@ -65,6 +80,8 @@ func (m *model) companions() []companion {
 type lane struct {
 	m    *model
 	v, w [][]float64 // of each section
+	gw   []afterglow // of each section\'s centres
+	gv   []afterglow // of its edges, the ends included
 	j    []float64   // junction voltages: at the step, or averaged over the last step where nothing is stored
 	mem  []memory    // of each companion
 	avg  []float64   // current of each companion averaged over the last step, A
@@ -88,25 +105,47 @@ func (m *model) newLane() *lane {
 		l.v, back = append(l.v, back[:n+1:n+1]), back[n+1:]
 		l.w, back = append(l.w, back[:n:n]), back[n:]
 	}
+	for k, n := range m.grid.Cells {
+		l.gw = append(l.gw, m.series[k].newAfterglow(n))
+		l.gv = append(l.gv, m.shunt[k].newAfterglow(n+1))
+	}
 	return l
 }
 
 // step takes the lane over one step, at whose end the EMF is e1. It does not
 // allocate.
 func (l *lane) step(e1 float64) {
+	m := l.m
 	for k := range l.v {
-		advance(l.v[k], l.w[k], &l.m.coefs[k])
+		if m.series[k] == nil && m.shunt[k] == nil {
+			advance(l.v[k], l.w[k], &m.coefs[k])
+		} else {
+			advanceDispersive(l.v[k], l.w[k], &m.coefs[k], m.series[k], l.gw[k], m.shunt[k], l.gv[k])
+		}
 	}
 	l.assemble(e1)
-	l.m.junction.solve(l.x, l.rhs)
+	m.junction.solve(l.x, l.rhs)
 	l.currents(e1)
 	copy(l.j, l.x)
 	for k := range l.v {
-		s := &l.m.net.Sections[k]
+		s := &m.net.Sections[k]
 		v := l.v[k]
-		v[0], v[len(v)-1] = l.j[s.From], l.j[s.To]
+		last := len(v) - 1
+		if m.shunt[k] != nil {
+			l.end(k, 0, v[0]+l.j[s.From])
+			l.end(k, last, v[last]+l.j[s.To])
+		}
+		v[0], v[last] = l.j[s.From], l.j[s.To]
 	}
 	l.e0 = e1
+}
+
+// end takes the relaxation of an end edge of section k over the step, with the
+// sum u of the voltages before and after.
+func (l *lane) end(k, edge int, u float64) {
+	r, g := l.m.shunt[k], &l.gv[k]
+	n := len(r.p)
+	g.sum[edge] = r.push(g.j[edge*n:edge*n+n:edge*n+n], u)
 }
 
 // assemble fills the right-hand side of the junction system.
@@ -120,6 +159,10 @@ func (l *lane) assemble(e1 float64) {
 		s, w := &l.m.net.Sections[k], l.w[k]
 		l.rhs[s.From] -= w[0] / l.m.z[k]
 		l.rhs[s.To] += w[len(w)-1] / l.m.z[k]
+		if l.m.shunt[k] != nil { // the half cells relax too
+			l.rhs[s.From] += l.m.relaxed(k) * l.gv[k].sum[0]
+			l.rhs[s.To] += l.m.relaxed(k) * l.gv[k].sum[len(w)]
+		}
 	}
 	for b := range js.branches {
 		c := &js.branches[b]
@@ -134,6 +177,12 @@ func (l *lane) assemble(e1 float64) {
 			l.rhs[c.b] += i
 		}
 	}
+}
+
+// relaxed turns the sum of the poles of an end edge of section k, in volts of a
+// full update, into the current of its half cell, A: C dx/(2 dt) (1 + g).
+func (m *model) relaxed(k int) float64 {
+	return m.store[k] * m.coefs[k].onePlusG()
 }
 
 // emf is the EMF of branch b averaged over the step; only the source has one.

@@ -73,11 +73,10 @@ func (s *settler) standing(k int) Standing {
 		out.I = append(out.I, w.w[k][p]/complex(m.z[k], 0))
 	}
 	out.VFrom, out.VTo = out.V[0], out.V[len(out.V)-1]
-	// The half cell takes C dx/2 dV/dt + G dx/2 V at the half step; the
-	// current at the end is an average over the step like that of a branch.
-	sin, cos := math.Sincos(math.Pi / float64(g.StepsPerPeriod))
-	gg := sec.Line.G * g.Step / (2 * sec.Line.C)
-	half := complex(gg*cos, sin) / complex(m.z[k]*g.Courant[k], 0)
+	// The half cell takes half of a cell's admittance; the current at the end
+	// is an average over the step like that of a branch.
+	_, yd := g.cell(m.net, k)
+	half, cos := yd/2, math.Cos(math.Pi/float64(g.StepsPerPeriod))
 	out.IFrom = (out.I[0] + half*out.VFrom) / complex(cos, 0)
 	out.ITo = (out.I[len(out.I)-1] - half*out.VTo) / complex(cos, 0)
 	return out

@@ -7,7 +7,8 @@
 //	V(z) = P e^{-gz} + M e^{-g(l-z)}
 //	I(z) = (P e^{-gz} - M e^{-g(l-z)})/Zc
 //
-// with g = sqrt((R+jwL)(G+jwC)) and Zc = (R+jwL)/g. P is the forward wave at
+// with g = sqrt(Z' Y') and Zc = Z'/g, Z' = R + jwL + K sqrt(jw) and
+// Y' = G + jwC + ... as package line has them, in exact form. P is the forward wave at
 // the From end and M the backward wave at the To end, so no exponential is
 // larger than 1: a long lossy line cannot overflow, and a half-wave lossless
 // line is not singular as it is in an admittance form.

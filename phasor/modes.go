@@ -116,8 +116,7 @@ func roundTrip(net *network.Network, s complex128) [][]complex128 {
 	}
 	decay := make([]complex128, len(net.Sections))
 	for k, sec := range net.Sections {
-		z := complex(sec.Line.R, 0) + s*complex(sec.Line.L, 0)
-		y := complex(sec.Line.G, 0) + s*complex(sec.Line.C, 0)
+		z, y := lineAt(sec, s)
 		g := cmplx.Sqrt(z) * cmplx.Sqrt(y)
 		y0 := cmplx.Sqrt(y) / cmplx.Sqrt(z)
 		decay[k] = cmplx.Exp(-g * complex(sec.Length, 0))

@@ -30,7 +30,7 @@ func newSystem(net *network.Network) *system {
 	omega := net.Omega()
 	logs := 0.0
 	for _, sec := range net.Sections {
-		gamma, zc := Propagation(sec.Line, omega)
+		gamma, zc := Propagation(sec, omega)
 		s.waves = append(s.waves, wave{length: sec.Length, gamma: gamma, zc: zc})
 		logs += math.Log(cmplx.Abs(zc))
 	}

@@ -3,19 +3,26 @@ package phasor
 import (
 	"math/cmplx"
 
-	"linewitness/sim/line"
+	"linewitness/sim/network"
 )
 
+// lineAt gives the series impedance, ohm/m, and the shunt admittance, S/m, of
+// a section at s, with its dispersion in exact form.
+func lineAt(sec network.Section, s complex128) (z, y complex128) {
+	z = complex(sec.Line.R, 0) + s*complex(sec.Line.L, 0) + sec.Dispersion.Series(s)
+	y = complex(sec.Line.G, 0) + s*complex(sec.Line.C, 0) + sec.Dispersion.Shunt(s)
+	return z, y
+}
+
 // Propagation gives the propagation constant g, in 1/m, and the
-// characteristic impedance Zc, in ohm, of a line at angular frequency omega:
+// characteristic impedance Zc, in ohm, of a section at angular frequency omega:
 //
-//	g = sqrt((R+jwL)(G+jwC)),  Zc = (R+jwL)/g
+//	g = sqrt(Z' Y'),  Zc = Z'/g
 //
 // Zc is taken from g rather than as a second square root, so that the two
 // always belong to the same direction of travel.
-func Propagation(c line.Constants, omega float64) (gamma, zc complex128) {
-	z := complex(c.R, omega*c.L)
-	y := complex(c.G, omega*c.C)
+func Propagation(sec network.Section, omega float64) (gamma, zc complex128) {
+	z, y := lineAt(sec, complex(0, omega))
 	// sqrt(z) sqrt(y), not sqrt(z y): each factor lies in the right half
 	// plane, so the product keeps Im g > 0 however small the loss is.
 	gamma = cmplx.Sqrt(z) * cmplx.Sqrt(y)

@@ -27,6 +27,7 @@ func Equivalent(net *network.Network, waves []Wave) *network.Network {
 		s := &eq.Sections[k]
 		g := w.Exponent / complex(s.Length, 0)
 		z, y := g*w.EndImpedance, g/w.EndImpedance
+		s.Dispersion = line.Dispersion{}
 		s.Line = line.Constants{
 			R: real(z), L: imag(z) / net.Omega(),
 			G: real(y), C: imag(y) / net.Omega(),

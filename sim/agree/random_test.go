@@ -21,15 +21,22 @@ const expectedSlack = 3
 
 // TestRandomNetworks lets both witnesses solve random trees and rings, and
 // requires their difference to be the one that the grid must cause.
-func TestRandomNetworks(t *testing.T) {
-	if flag.Lookup("rapid.checks").Value.String() == "100" {
-		if err := flag.Set("rapid.checks", "200"); err != nil {
+func TestRandomNetworks(t *testing.T) { randomNetworks(t, "200", networktest.Draw) }
+
+// TestRandomDispersiveNetworks does the same for lines with skin effect and
+// dielectric loss.
+func TestRandomDispersiveNetworks(t *testing.T) { randomNetworks(t, "100", networktest.DrawDispersive) }
+
+func randomNetworks(t *testing.T, checks string, draw func(*rapid.T) *network.Network) {
+	if f := flag.Lookup("rapid.checks"); f.Value.String() == f.DefValue {
+		if err := flag.Set("rapid.checks", checks); err != nil {
 			t.Fatal(err)
 		}
+		defer func() { _ = flag.Set("rapid.checks", f.DefValue) }()
 	}
 	worst := 0.0
 	rapid.Check(t, func(t *rapid.T) {
-		net := networktest.Draw(t)
+		net := draw(t)
 		if phasor.Decay(net) < net.Frequency/300 {
 			t.Skip("rings for thousands of periods")
 		}
