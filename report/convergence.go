@@ -83,11 +83,10 @@ func smallestOf(ys []float64) float64 {
 // roundTrips returns multiples of the round trip up to last: each one, or
 // every second, fifth, tenth, ... if they would stand too close.
 func roundTrips(trip, last float64) []float64 {
-	const most = 16
-	if trip <= 0 || math.IsInf(last, 0) || math.IsNaN(last) {
+	every := roundTripsApart(last / trip)
+	if every == 0 {
 		return nil
 	}
-	every := roundTripsApart(last/trip, most)
 	var out []float64
 	for k := 1.0; k*every*trip < last; k++ {
 		out = append(out, k*every*trip)
@@ -95,12 +94,18 @@ func roundTrips(trip, last float64) []float64 {
 	return out
 }
 
+// mostMarks is how many round trips are marked at most.
+const mostMarks = 16
+
 // roundTripsApart returns the smallest of 1, 2, 5, 10, ... that leaves at most
-// most marks of n.
-func roundTripsApart(n, most float64) float64 {
+// mostMarks marks of n, or 0 if n is not a number of marks.
+func roundTripsApart(n float64) float64 {
+	if !(n > 0) || math.IsInf(n, 0) {
+		return 0
+	}
 	for power := 1.0; ; power *= 10 {
 		for _, m := range []float64{1, 2, 5} {
-			if n/(m*power) <= most {
+			if n/(m*power) <= mostMarks {
 				return m * power
 			}
 		}
@@ -116,7 +121,7 @@ func settlingFinding(s record.Settling, tolerance float64) string {
 	} else {
 		text += "; the tolerance of " + format.Percent(tolerance) + " was not reached."
 	}
-	if every := roundTripsApart(s.Time/s.RoundTrip, 16); every > 1 && s.RoundTrip > 0 {
+	if every := roundTripsApart(s.Time / s.RoundTrip); every > 1 {
 		text += " The upright lines are " + format.Count(int64(every)) + " round trips apart."
 	}
 	return text

@@ -127,9 +127,9 @@ func (p *pen) source(s *record.ModelSource, x, y float64) {
 		p.box(middle, y)
 	}
 	room := leadWidth - 2*mm - textGap
-	p.label(nameStyle, x, y+6.0*mm, room, "source")
-	p.label(valueStyle, x, y+3.4*mm, room, typeset.Clean(s.Given))
-	p.label(valueStyle, x+9*mm, y-4.2*mm, room-9*mm, format.Complex(s.Impedance, "Ω"))
+	p.label(nameStyle, x, y+5.6*mm, room, "source")
+	p.label(valueStyle, x, y+3.1*mm, room, typeset.Clean(s.Given))
+	p.label(valueStyle, x+9*mm, y-3.9*mm, room-9*mm, format.Complex(s.Impedance, "Ω"))
 }
 
 // wave draws a period of a sine in the circle of the source.

@@ -63,8 +63,12 @@ func New(name, quantity string, x, y Axis) *Panel {
 	return pn
 }
 
+// narrowest is the least range of an axis relative to its ends: below it the
+// labels would have more digits than a number holds.
+const narrowest = 1e-9
+
 func newScale(a Axis) scale {
-	if !finite(a.Min, a.Max) || a.Max <= a.Min {
+	if !finite(a.Min, a.Max) || a.Max-a.Min <= narrowest*math.Max(math.Abs(a.Min), math.Abs(a.Max)) {
 		switch {
 		case finite(a.Min) && a.Log && a.Min > 0:
 			a.Max = 10 * a.Min

@@ -1,11 +1,14 @@
 package sheet
 
-import "strings"
+import (
+	"slices"
+	"strings"
+)
 
 // fit returns the widths of the columns. Each gets its natural width if all
 // find room, and what is left over goes to the columns that grow. Otherwise
-// the columns shrink in proportion to what wrapping can save, and if that is
-// not enough, to less than their longest word.
+// the columns shrink in proportion to what wrapping can save. If that is not
+// enough, the columns with the longest words are made narrower than those.
 func (l *layout) fit(width float64) []float64 {
 	natural, least := l.natural()
 	spare := width - sum(natural)
@@ -19,11 +22,26 @@ func (l *layout) fit(width float64) []float64 {
 		}
 		return natural
 	}
-	scale := width / sum(least)
-	for i := range least {
-		least[i] *= scale
+	return capped(least, width)
+}
+
+// capped lowers the largest widths to one cap, so that all add up to total,
+// which is less than they do.
+func capped(widths []float64, total float64) []float64 {
+	order := slices.Clone(widths)
+	slices.Sort(order)
+	limit := total / float64(len(order))
+	for i, w := range order {
+		limit = total / float64(len(order)-i)
+		if w > limit {
+			break
+		}
+		total -= w
 	}
-	return least
+	for i := range widths {
+		widths[i] = min(widths[i], limit)
+	}
+	return widths
 }
 
 // natural returns the width of each column without any wrapping, and with

@@ -53,18 +53,19 @@ func runs(s string) []run {
 // width returns the width of s in fnt.
 func width(fnt font.Font, s string) vg.Length {
 	var w vg.Length
+	m := metricsOf(fnt)
 	for _, r := range runs(s) {
-		face := cache().Lookup(fnt, fnt.Size*vg.Length(r.size))
-		w += face.Width(r.text)
+		w += m.width(r.text, fnt.Size*vg.Length(r.size))
 	}
 	return w
 }
 
 // draw draws s from its baseline start at pt.
 func draw(c vg.Canvas, fnt font.Font, pt vg.Point, s string) {
+	m := metricsOf(fnt)
 	for _, r := range runs(s) {
-		face := cache().Lookup(fnt, fnt.Size*vg.Length(r.size))
-		c.FillString(face, vg.Point{X: pt.X, Y: pt.Y + fnt.Size*vg.Length(r.shift)}, r.text)
-		pt.X += face.Width(r.text)
+		size := fnt.Size * vg.Length(r.size)
+		c.FillString(cache().Lookup(fnt, size), vg.Point{X: pt.X, Y: pt.Y + fnt.Size*vg.Length(r.shift)}, r.text)
+		pt.X += m.width(r.text, size)
 	}
 }

@@ -33,6 +33,20 @@ func TestWidth(t *testing.T) {
 	}
 }
 
+// The widths are those that gonum measures, whose axes leave room by them.
+func TestWidthAsGonum(t *testing.T) {
+	const tol = 1e-9 // the same sum of whole font units
+	for _, f := range []Face{Sans, Bold, Italic, Mono} {
+		face := f.Face(9)
+		for _, s := range []string{"P.Y.LT11", "AV To fi", "50.01 − j0.03 Ω", "λ/4 ≤ β·ℓ"} {
+			got, want := Style{Face: f, Size: 9}.Width(s), face.Width(s).Points()
+			if math.Abs(got-want) > tol {
+				t.Errorf("face %d, %q: width %v, want %v", f, s, got, want)
+			}
+		}
+	}
+}
+
 func TestWrap(t *testing.T) {
 	for _, c := range []struct {
 		in    string

@@ -21,7 +21,7 @@ func (n Network) Case(name string, opt Options) record.Case {
 		opt.MaxPoints = 600
 	}
 	v := n.solve()
-	c := record.Case{Name: name, Verdict: record.Verified, Model: n.echo()}
+	c := record.Case{Name: name, Verdict: record.Verified, Model: n.Model()}
 	c.Phasor = n.steady(v, 1)
 	c.FDTD = n.steady(v, complex(1+opt.Error/3, opt.Error/2))
 	for _, s := range n.Sections {
@@ -39,7 +39,8 @@ func (n Network) Case(name string, opt Options) record.Case {
 	return c
 }
 
-func (n Network) echo() record.Model {
+// Model returns the network as a record echoes it.
+func (n Network) Model() record.Model {
 	m := record.Model{Frequency: n.Frequency, Junctions: n.junctions()}
 	for _, s := range n.Sections {
 		e := n.model(s)

@@ -1,0 +1,198 @@
+package sheet
+
+import (
+	"bytes"
+	"strconv"
+	"strings"
+	"testing"
+	"time"
+
+	"gonum.org/v1/plot/vg/draw"
+	"linewitness/report/typeset"
+	"pgregory.net/rapid"
+)
+
+func book() *Book {
+	return New(Meta{Title: "Title", Header: "Title", Number: "N-1", Date: time.Unix(0, 0)}, A4)
+}
+
+// finish writes the book and fails on any error or text that is too wide.
+func finish(t interface {
+	Helper()
+	Fatal(...any)
+	Fatalf(string, ...any)
+}, b *Book) []byte {
+	t.Helper()
+	var out bytes.Buffer
+	if err := b.Write(&out); err != nil {
+		t.Fatal(err)
+	}
+	if b.Overfull > 0 {
+		t.Fatalf("%d texts are wider than their room", b.Overfull)
+	}
+	return out.Bytes()
+}
+
+// Blocks never run into the foot of the page, and none is lost.
+func TestBlocksBreakPages(t *testing.T) {
+	b := book()
+	const height = 100.0
+	drawn := 0
+	for range 20 {
+		b.Block(height, func(c draw.Canvas) {
+			drawn++
+			if c.Min.Y.Points() < marginBottom-1e-9 {
+				t.Errorf("block at %v runs into the foot", c.Min.Y.Points())
+			}
+		})
+	}
+	perPage := int(b.Body() / height)
+	if want := (20 + perPage - 1) / perPage; b.Pages() != want || drawn != 20 {
+		t.Errorf("%d blocks on %d pages, want 20 on %d", drawn, b.Pages(), want)
+	}
+	finish(t, b)
+}
+
+// A heading keeps room for what follows, so it is never alone at the foot.
+func TestHeadingIsNotLeftAlone(t *testing.T) {
+	b := book()
+	b.Block(b.Body()-60, func(draw.Canvas) {})
+	b.Heading("Heading", 80)
+	if b.Pages() != 2 {
+		t.Errorf("the heading is on page %d, want 2", b.Pages())
+	}
+	finish(t, b)
+}
+
+// No line of a paragraph stands alone at the foot or the head of a page.
+func TestParagraphKeepsTwoLines(t *testing.T) {
+	for _, c := range []struct {
+		room  float64 // lines that fit on the first page
+		pages int
+		left  int // lines on the second page
+	}{{1, 2, 4}, {2, 2, 2}, {3, 2, 2}, {4, 1, 0}} {
+		b := book()
+		step := leadingOf(BodyStyle)
+		b.Block(b.Body()-(c.room+0.5)*step, func(draw.Canvas) {})
+		b.lines(BodyStyle, fourLines(t, b))
+		used := int((b.paper.Height-marginTop-b.y)/step + 0.5)
+		if b.Pages() != c.pages || c.pages == 2 && used != c.left {
+			t.Errorf("room for %v lines: %d pages, %d lines on the last, want %d and %d", c.room, b.Pages(), used, c.pages, c.left)
+		}
+		finish(t, b)
+	}
+}
+
+func fourLines(t *testing.T, b *Book) string {
+	t.Helper()
+	s := "mm"
+	for len(BodyStyle.Wrap(s+" mm", b.Width())) <= 4 {
+		s += " mm"
+	}
+	return s
+}
+
+// Whatever the cells hold, no text is wider than its room and the columns
+// fill the width.
+func TestTableFits(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		columns := rapid.IntRange(1, 12).Draw(t, "columns")
+		table := Table{}
+		for range columns {
+			table.Columns = append(table.Columns, Column{
+				Head: rapid.StringMatching(`[A-Za-z ]{0,20}`).Draw(t, "head"), Grow: rapid.Float64Range(0, 2).Draw(t, "grow"),
+				Align: rapid.SampledFrom([]typeset.Align{typeset.Left, typeset.Right}).Draw(t, "align"),
+			})
+		}
+		for range rapid.IntRange(0, 30).Draw(t, "rows") {
+			var row []Cell
+			for range columns {
+				row = append(row, Cell{
+					Text: rapid.StringMatching(`[A-Za-z0-9_ ]{0,60}`).Draw(t, "text"),
+					Mark: Mark(rapid.IntRange(0, 3).Draw(t, "mark")), Bold: rapid.Bool().Draw(t, "bold"),
+				})
+			}
+			table.Rows = append(table.Rows, row)
+		}
+		b := book()
+		if got := sum(b.layout(table).widths); got > b.Width()+0.01 || got < b.Width()-0.01 {
+			t.Fatalf("columns are %v wide, the page %v", got, b.Width())
+		}
+		b.Table(table)
+		if b.Overfull > 0 {
+			t.Fatalf("%d texts are wider than their room", b.Overfull)
+		}
+	})
+}
+
+// A row taller than a page is continued, not cut.
+func TestTallRow(t *testing.T) {
+	b := book()
+	word := "w"
+	b.Table(Table{Columns: []Column{{Head: "A"}, {Head: "B"}}, Rows: [][]Cell{Row(strings.Repeat(word+" ", 12000), "x")}})
+	if b.Pages() < 2 {
+		t.Errorf("%d pages", b.Pages())
+	}
+	file := finish(t, b)
+	if len(file) == 0 {
+		t.Error("empty file")
+	}
+}
+
+func TestCut(t *testing.T) {
+	for _, c := range []struct {
+		in         string
+		n          int
+		head, tail string
+	}{{"abc", 3, "abc", ""}, {"abcd", 3, "abc", "d"}, {"Ωλµβ", 2, "Ωλ", "µβ"}, {"", 5, "", ""}} {
+		head, tail := cut(c.in, c.n)
+		if head != c.head || tail != c.tail {
+			t.Errorf("cut(%q, %d) = %q, %q", c.in, c.n, head, tail)
+		}
+	}
+}
+
+func TestFirst(t *testing.T) {
+	lines := []string{"a", "b", "c"}
+	if got := strings.Join(First(lines, 2), ""); got != "a…" {
+		t.Errorf("First gives %q", got)
+	}
+	if lines[1] != "b" {
+		t.Error("First changed its argument")
+	}
+}
+
+// Every offset of the cross-reference table is that of its object.
+func TestCrossReference(t *testing.T) {
+	b := book()
+	b.Paragraph("Ω − β")
+	b.Heading("Bold", 0)
+	file := string(finish(t, b))
+	m := crossReference.FindStringSubmatch(file)
+	if m == nil {
+		t.Fatal("no table")
+	}
+	for i, line := range strings.Split(strings.TrimSpace(m[1]), "\n") {
+		want := itoa(i+1) + " 0 obj"
+		if at := atoi(t, line[:10]); !strings.HasPrefix(file[at:], want) {
+			t.Errorf("object %d: %.20q at its offset", i+1, file[at:])
+		}
+	}
+	if at := atoi(t, m[2]); !strings.HasPrefix(file[at:], "xref") {
+		t.Errorf("startxref leads to %.20q", file[at:])
+	}
+	if strings.Contains(file, "<0000> <FFFF> <0000>") {
+		t.Error("a font still maps all characters by one range")
+	}
+}
+
+func itoa(n int) string { return strconv.Itoa(n) }
+
+func atoi(t *testing.T, s string) int {
+	t.Helper()
+	n, err := strconv.Atoi(s)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return n
+}
