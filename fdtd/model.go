@@ -119,9 +119,10 @@ func (l *lane) step(e1 float64) {
 	for k := range l.v {
 		if m.series[k] == nil && m.shunt[k] == nil {
 			advance(l.v[k], l.w[k], &m.coefs[k])
-		} else {
-			advanceDispersive(l.v[k], l.w[k], &m.coefs[k], m.series[k], l.gw[k], m.shunt[k], l.gv[k])
+			continue
 		}
+		advanceCurrents(l.v[k], l.w[k], &m.coefs[k], m.series[k], &l.gw[k])
+		advanceVoltages(l.v[k], l.w[k], &m.coefs[k], m.shunt[k], &l.gv[k])
 	}
 	l.assemble(e1)
 	m.junction.solve(l.x, l.rhs)
@@ -129,23 +130,22 @@ func (l *lane) step(e1 float64) {
 	copy(l.j, l.x)
 	for k := range l.v {
 		s := &m.net.Sections[k]
-		v := l.v[k]
-		last := len(v) - 1
-		if m.shunt[k] != nil {
-			l.end(k, 0, v[0]+l.j[s.From])
-			l.end(k, last, v[last]+l.j[s.To])
-		}
-		v[0], v[last] = l.j[s.From], l.j[s.To]
+		l.ends(k, l.j[s.From], l.j[s.To])
 	}
 	l.e0 = e1
 }
 
-// end takes the relaxation of an end edge of section k over the step, with the
-// sum u of the voltages before and after.
-func (l *lane) end(k, edge int, u float64) {
-	r, g := l.m.shunt[k], &l.gv[k]
-	n := len(r.p)
-	g.sum[edge] = r.push(g.j[edge*n:edge*n+n:edge*n+n], u)
+// ends sets the voltages of the two end edges of section k, and relaxes its
+// edges.
+func (l *lane) ends(k int, from, to float64) {
+	v := l.v[k]
+	last := len(v) - 1
+	if r := l.m.shunt[k]; r != nil {
+		g := &l.gv[k]
+		g.u[0], g.u[last] = v[0]+from, v[last]+to
+		r.relax(g)
+	}
+	v[0], v[last] = from, to
 }
 
 // assemble fills the right-hand side of the junction system.

@@ -7,15 +7,14 @@ package fdtd
 //
 //	j[k] <- p[k] j[k] + b[k] (u0 + u1)
 //
-// The arrays are padded with dead poles to a multiple of poleBlock.
+// Dead poles fill the arrays where a form has fewer than poles.
 type relaxation struct {
-	p, b  []float64
+	p, b  [poles]float64
 	total float64 // sum of r/(1 + x dt/2): the resistance (or conductance) at once, ohm/m or S/m
 }
 
-// poleBlock is how many poles a pass of the kernel takes at once, each into a
-// sum of its own so that they do not wait for each other.
-const poleBlock = 3
+// poles is the number of poles of a form: those of innerPoles and the two ends.
+const poles = int(2*poleSpan*polesPerDecade) + 3
 
 // newRelaxation makes the relaxation of a form, or nil for an empty one. The
 // scale that turns a share of the field into W (or V), dt/L over 1+r (or dt/C
@@ -29,11 +28,8 @@ func newRelaxation(f rational, dt float64) *relaxation {
 		h := 1 + x*dt/2
 		g := f.r[k] / h
 		r.total += g
-		r.p = append(r.p, 1-x*dt/h)
-		r.b = append(r.b, x*dt/h*g/2)
-	}
-	for len(r.p)%poleBlock != 0 {
-		r.p, r.b = append(r.p, 0), append(r.b, 0)
+		r.p[k] = 1 - x*dt/h
+		r.b[k] = x * dt / h * g / 2
 	}
 	return r
 }
@@ -55,68 +51,98 @@ func (r *relaxation) finish(scale float64) {
 	}
 }
 
-// An afterglow is the state of a relaxation along a section in one lane: the
-// poles of a cell side by side, and their sum.
-type afterglow struct{ j, sum []float64 }
+// cellsPerBlock is how many cells lie side by side in the arrays of the poles,
+// so that one instruction takes the same pole of all of them.
+const cellsPerBlock = 4
 
+// An afterglow is the state of a relaxation along a section in one lane.
+type afterglow struct {
+	j   []float64 // [block][pole][cell of the block]
+	sum []float64 // of the poles of each cell
+	u   []float64 // of each cell, the field before and after the step added up
+}
+
+// newAfterglow makes the state for a number of cells, rounded up to blocks.
 func (r *relaxation) newAfterglow(cells int) afterglow {
 	if r == nil {
 		return afterglow{}
 	}
-	return afterglow{j: make([]float64, cells*len(r.p)), sum: make([]float64, cells)}
+	blocks := (cells + cellsPerBlock - 1) / cellsPerBlock
+	return afterglow{
+		j:   make([]float64, blocks*poles*cellsPerBlock),
+		sum: make([]float64, blocks*cellsPerBlock),
+		u:   make([]float64, blocks*cellsPerBlock),
+	}
 }
 
-// push takes the poles of one cell over a step with u = u0 + u1 and returns
-// their new sum.
-func (r *relaxation) push(j []float64, u float64) float64 {
-	p, b := r.p[:len(j)], r.b[:len(j)]
-	var s0, s1, s2 float64
-	for k := 0; k+poleBlock <= len(j); k += poleBlock {
-		x, y, z := j[k:k+3:k+3], p[k:k+3:k+3], b[k:k+3:k+3]
-		x0 := y[0]*x[0] + z[0]*u
-		x1 := y[1]*x[1] + z[1]*u
-		x2 := y[2]*x[2] + z[2]*u
-		x[0], x[1], x[2] = x0, x1, x2
-		s0 += x0
-		s1 += x1
-		s2 += x2
+// relax takes all poles over the step and adds them up.
+func (r *relaxation) relax(g *afterglow) {
+	blocks := len(g.sum) / cellsPerBlock
+	if len(g.u) != len(g.sum) || len(g.j) != blocks*poles*cellsPerBlock {
+		panic("fdtd: afterglow arrays do not match")
 	}
-	return s0 + s1 + s2
+	if blocks > 0 {
+		relaxBlocks(g, &r.p, &r.b)
+	}
 }
 
-// advanceDispersive is advance with the relaxation of the series impedance, of
-// the shunt admittance, or of both; a nil one is not there.
-func advanceDispersive(v, w []float64, c *coefs, series *relaxation, sw afterglow, shunt *relaxation, sv afterglow) {
-	if len(v) != len(w)+1 || len(w) == 0 {
-		panic("fdtd: section arrays do not match")
+// relaxSlow is the loop that relaxBlocks stands for.
+func relaxSlow(g *afterglow, p, b *[poles]float64) {
+	j := g.j
+	for i := 0; i < len(g.sum); i += cellsPerBlock {
+		u := (*[cellsPerBlock]float64)(g.u[i:])
+		var s [cellsPerBlock]float64
+		for k := range poles {
+			x := (*[cellsPerBlock]float64)(j[k*cellsPerBlock:])
+			pk, bk := p[k], b[k]
+			x0 := pk*x[0] + bk*u[0]
+			x1 := pk*x[1] + bk*u[1]
+			x2 := pk*x[2] + bk*u[2]
+			x3 := pk*x[3] + bk*u[3]
+			x[0], x[1], x[2], x[3] = x0, x1, x2, x3
+			s[0] += x0
+			s[1] += x1
+			s[2] += x2
+			s[3] += x3
+		}
+		*(*[cellsPerBlock]float64)(g.sum[i:]) = s
+		j = j[poles*cellsPerBlock:]
 	}
-	if series == nil {
+}
+
+// advanceCurrents takes w over one step with what its relaxation adds, or none
+// if r is nil, and the relaxation with it.
+func advanceCurrents(v, w []float64, c *coefs, r *relaxation, g *afterglow) {
+	v = v[:len(w)+1]
+	if r == nil {
 		for i := range w {
 			w[i] = c.wa*w[i] - c.wb*(v[i+1]-v[i])
 		}
-	} else {
-		n := len(series.p)
-		sum, j := sw.sum[:len(w)], sw.j
-		for i, old := range w {
-			now := c.wa*old - c.wb*(v[i+1]-v[i]) + sum[i]
-			w[i] = now
-			sum[i] = series.push(j[:n:n], old+now)
-			j = j[n:]
-		}
+		return
 	}
-	if shunt == nil {
+	sum, u := g.sum[:len(w)], g.u[:len(w)]
+	for i, old := range w {
+		now := c.wa*old - c.wb*(v[i+1]-v[i]) + sum[i]
+		w[i] = now
+		u[i] = old + now
+	}
+	r.relax(g)
+}
+
+// advanceVoltages takes the inner edges of v over one step. The relaxation
+// waits for the two end edges.
+func advanceVoltages(v, w []float64, c *coefs, r *relaxation, g *afterglow) {
+	if r == nil {
 		for i := 1; i < len(w); i++ {
 			v[i] = c.va*v[i] - c.vb*(w[i]-w[i-1])
 		}
 		return
 	}
-	n := len(shunt.p)
-	sum, j := sv.sum[:len(w)], sv.j[n:]
+	sum, u := g.sum[:len(w)], g.u[:len(w)]
 	for i := 1; i < len(w); i++ {
 		old := v[i]
 		now := c.va*old - c.vb*(w[i]-w[i-1]) + sum[i]
 		v[i] = now
-		sum[i] = shunt.push(j[:n:n], old+now)
-		j = j[n:]
+		u[i] = old + now
 	}
 }
