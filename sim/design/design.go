@@ -9,6 +9,16 @@ type File struct {
 	SHA256  string // of Source, lower-case hex
 	Nominal *Design
 	Cases   []Case // in the order of the file, the nominal design not among them
+	// Attachments are the other files that were read, each once, in the order
+	// in which the design first names them.
+	Attachments []Attachment
+}
+
+// An Attachment is a file that a design file refers to.
+type Attachment struct {
+	Name   string // as the design file gives it
+	Data   []byte
+	SHA256 string // of Data, lower-case hex
 }
 
 // A Case is a variant of the nominal design, already merged with it.
@@ -50,6 +60,7 @@ type Design struct {
 	Junctions    []string      // in the order in which sections, loads, elements and the source name them: source first
 	Requirements []Requirement // of the nominal design; the same in every case
 	Grid         Grid
+	Warnings     []string // of the lines and parts, each with what it is about
 }
 
 // Record is the identity of the document.
@@ -78,9 +89,19 @@ type Impedance struct {
 	Text string // the value or parts as written, "28 ohm, 29.2 nH"
 	Kind ImpedanceKind
 	Z    complex128 // for Complex, ohm at the design frequency, engineering convention
-	R    float64    // for SeriesParts, ohm
+	R    float64    // for SeriesParts, ohm; what q or esr adds is in it
 	L    float64    // H
 	C    float64    // F; 0 means no capacitor
+	Tree Node       // for Combination
+}
+
+// A Node is a combination of lumped parts. A leaf has neither Series nor
+// Parallel: it is R, L and C in series, of which a zero is not there. Any other
+// node has one of the two, and no R, L and C.
+type Node struct {
+	R, L, C  float64 // ohm, H, F
+	Series   []Node
+	Parallel []Node
 }
 
 // ImpedanceKind says which form an impedance was given in.
@@ -92,7 +113,9 @@ const (
 	Complex
 	Short
 	Open
-	Matched // the characteristic impedance of the one section that ends there
+	Matched     // the characteristic impedance of the one section that ends there
+	Combination // series and parallel combinations, nested
+	Transformer // no impedance at all: see Part.Ratio
 )
 
 // Start is how the source is switched on.
@@ -113,34 +136,106 @@ type Stop struct {
 }
 
 // Line is a kind of line.
+//
+// At the design frequency it has Constants, whatever the model: z0 and
+// velocity_factor hold there. The dispersive model has the constants Base at the
+// highest frequencies and what Dispersion adds; the constant model has Constants
+// throughout, Base is the same and Dispersion is zero.
 type Line struct {
-	Pos       Pos
-	Name      string
-	Text      string         // the data as given, in one line for the record
-	Nominal   *Nominal       // nil if r, l, g, c were given
-	Constants line.Constants // at the design frequency, always filled
+	Pos        Pos
+	Name       string
+	Text       string         // the data as given, in one line for the record
+	Model      Model          // constant or dispersive
+	Nominal    *Nominal       // nil if r, l, g, c or dimensions were given
+	Constants  line.Constants // at the design frequency, always filled
+	Base       line.Constants
+	Dispersion line.Dispersion
+	Pedigree   []Provenance
+	Fit        []FitPoint // of a loss table, in its order; else empty
+	// FieldPerVolt is the largest electric field in the line, at the inner
+	// conductor of a coaxial line given by its dimensions, for one volt between
+	// the conductors, 1/m. It is 0 for any other line.
+	FieldPerVolt float64
+	Rating       Rating
+	Warnings     []string
 }
 
 // Nominal is the datasheet form of a line.
 type Nominal = line.Nominal
 
-// Section is a piece of line.
+// Model says how a line depends on frequency.
+type Model string
+
+// The models of a line.
+const (
+	Constant   Model = "constant"   // r, l, g and c are those of the design frequency throughout
+	Dispersive Model = "dispersive" // skin effect and a constant loss tangent
+)
+
+// Provenance is one piece of data and where it comes from.
+type Provenance struct {
+	What string // "velocity factor"
+	Text string // "0.66"
+	Kind Origin
+	Note string // may be empty
+}
+
+// Origin says where a piece of data comes from.
+type Origin string
+
+// Where data come from.
+const (
+	Measured      Origin = "measured"
+	Datasheet     Origin = "datasheet"
+	Catalogue     Origin = "catalogue" // the cable table of the program
+	FromGeometry  Origin = "geometry"  // worked out from dimensions
+	Assumed       Origin = "assumed"   // not in the file: a default
+	GivenInDesign Origin = "given"     // in the design file, which does not say from where
+)
+
+// FitPoint is one row of a loss table and what the fit makes of it.
+type FitPoint struct {
+	Frequency     float64 // Hz
+	Given, Fitted float64 // Np/m
+	Text          string  // as given, "2.0 dB/100m at 10 MHz"
+}
+
+// Residual is Fitted over Given less one.
+func (p FitPoint) Residual() float64 { return p.Fitted/p.Given - 1 }
+
+// Rating is what a line, or a section of it, stands. A nil limit was not given.
+type Rating struct {
+	Voltage, Current *Limit  // SI: peak
+	MarginDB         float64 // to be kept below the limits: allowed is limit 10^(-MarginDB/20)
+	Source           string  // where it comes from: "line coax", "section main", "cable table"; "" without limits
+}
+
+// Section is a piece of line. Its rating is its own where it gives one, and for
+// the rest that of its line.
 type Section struct {
-	Pos       Pos
-	Name      string
-	From, To  string
-	Line      string
-	Constants line.Constants
-	Length    Value // SI: metres, whatever unit it was given in
+	Pos        Pos
+	Name       string
+	From, To   string
+	Line       string
+	Constants  line.Constants // at the design frequency
+	Base       line.Constants
+	Dispersion line.Dispersion
+	Length     Value // SI: metres, whatever unit it was given in
+	Rating     Rating
 }
 
 // Part is a load or an element. A part to the return conductor has At and an
-// empty To; a bridging element runs from At to To.
+// empty To; a bridging element and a transformer run from At to To.
 type Part struct {
 	Pos       Pos
 	Name      string
 	At, To    string
 	Impedance Impedance
+	// Ratio is the turns ratio of an ideal transformer, To over At: the voltage
+	// at To is Ratio times that at At. It is 0 for what is not a transformer.
+	Ratio     float64
+	RatioText string // as written, "1:4"
+	Warnings  []string
 }
 
 // Quantity names what a requirement limits.

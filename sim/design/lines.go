@@ -25,6 +25,7 @@ func (w *walker) walkLines(items []item) {
 		} else {
 			w.constantLine(i.fields, &l)
 		}
+		l.Base, l.Model = l.Constants, Constant
 		w.design.Lines = append(w.design.Lines, l)
 		w.lines[l.Name] = &l
 	}

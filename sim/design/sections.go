@@ -16,7 +16,7 @@ func (w *walker) walkSections(items []item) {
 		}
 		l := w.lineOf(i.fields)
 		if l != nil {
-			s.Line, s.Constants = l.Name, l.Constants
+			s.Line, s.Constants, s.Base, s.Dispersion = l.Name, l.Constants, l.Base, l.Dispersion
 		}
 		s.Length = w.sectionLength(i.fields, s.Name, l)
 		w.lengths[s.Name] = s.Length
