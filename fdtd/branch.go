@@ -17,6 +17,7 @@ import (
 type companion struct {
 	a, b  int     // junctions; b may be network.Ground
 	ideal bool    // no impedance: i is an unknown of the junction system
+	turns float64 // of an ideal transformer, b to a; else 1. turns va - vb = e, and turns i leaves a
 	y     float64 // S; not used if ideal
 	twoL  float64 // 2L/dt, ohm
 	invC  float64 // 1/C, 1/F
@@ -33,7 +34,7 @@ type memory struct{ i, q float64 }
 func newCompanion(s network.Series, a, b int, dt float64, steps int) companion {
 	x := math.Pi / float64(steps)
 	warp := x / math.Tan(x)
-	c := companion{a: a, b: b, dt: dt, ideal: s.Ideal()}
+	c := companion{a: a, b: b, dt: dt, ideal: s.Ideal(), turns: 1}
 	r := s.R
 	if s.L > 0 {
 		c.twoL = 2 * s.L * warp / dt

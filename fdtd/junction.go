@@ -108,8 +108,8 @@ func (s *junctionSystem) stampIdeal(plus func(i, j int, v float64), c companion)
 			wb = s.half(c.b)
 		}
 	}
-	plus(c.a, c.slot, 1)
-	plus(c.slot, c.a, wa)
+	plus(c.a, c.slot, c.turns)
+	plus(c.slot, c.a, c.turns*wa)
 	if c.b != network.Ground {
 		plus(c.b, c.slot, -1)
 		plus(c.slot, c.b, -wb)

@@ -69,7 +69,9 @@ func (m *model) companions() []companion {
 			continue
 		}
 		m.branch = append(m.branch, len(all))
-		all = append(all, newCompanion(b.Series, b.A, b.B, dt, steps))
+		c := newCompanion(b.Series, b.A, b.B, dt, steps)
+		c.turns = b.Turns()
+		all = append(all, c)
 	}
 	m.source = len(all)
 	src := m.net.Source
@@ -196,7 +198,7 @@ func (l *lane) emf(b int, e1 float64) float64 {
 // constraint is the right-hand side for an ideal branch.
 func (l *lane) constraint(c *companion, avg float64, b int, e1 float64) float64 {
 	if l.m.junction.onAverage(*c) {
-		return avg - l.known(c.a) + l.known(c.b)
+		return avg - c.turns*l.known(c.a) + l.known(c.b)
 	}
 	if b == l.m.source {
 		return e1

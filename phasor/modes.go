@@ -142,7 +142,7 @@ func roundTrip(net *network.Network, s complex128) [][]complex128 {
 // matrix, each with its current as an unknown.
 func stampBranches(net *network.Network, s complex128, a [][]complex128) {
 	row := len(net.Junctions)
-	enter := func(from, to int, part network.Series, open bool) {
+	enter := func(from, to int, turns float64, part network.Series, open bool) {
 		if open {
 			a[row][row] = 1
 			row++
@@ -152,7 +152,7 @@ func stampBranches(net *network.Network, s complex128, a [][]complex128) {
 		if part.C > 0 {
 			z += 1 / (s * complex(part.C, 0))
 		}
-		a[from][row], a[row][from] = 1, 1
+		a[from][row], a[row][from] = complex(turns, 0), complex(turns, 0)
 		if to != network.Ground {
 			a[to][row], a[row][to] = -1, -1
 		}
@@ -160,9 +160,9 @@ func stampBranches(net *network.Network, s complex128, a [][]complex128) {
 		row++
 	}
 	for _, b := range net.Branches {
-		enter(b.A, b.B, b.Series, b.Open)
+		enter(b.A, b.B, b.Turns(), b.Series, b.Open)
 	}
-	enter(net.Source.At, network.Ground, net.Source.Series, false)
+	enter(net.Source.At, network.Ground, 1, net.Source.Series, false)
 }
 
 // solveComplex solves a x = b for every column of b through the real form. A

@@ -17,7 +17,8 @@ type Solution struct {
 // Junction is the voltage of junction j, V.
 func (s *Solution) Junction(j int) complex128 { return s.junctions[j] }
 
-// Branch is the current of branch b from its A to its B, A.
+// Branch is the current of branch b from its A to its B, A; of a transformer
+// that into B.
 func (s *Solution) Branch(b int) complex128 { return s.branches[b] }
 
 // Source is the current out of the source, A.

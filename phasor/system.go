@@ -99,7 +99,7 @@ func (s *system) currentLaw() {
 		s.add(at(sec.To), s.backward(k), y)
 	}
 	for b, br := range s.net.Branches {
-		s.add(at(br.A), s.branch(b), 1)
+		s.add(at(br.A), s.branch(b), complex(br.Turns(), 0))
 		if br.B != network.Ground {
 			s.add(at(br.B), s.branch(b), -1)
 		}
@@ -108,7 +108,8 @@ func (s *system) currentLaw() {
 	s.row += len(s.net.Junctions)
 }
 
-// branches writes VA - VB = Z I for each branch, or I = 0 for an open one.
+// branches writes n VA - VB = Z I for each branch, n being 1 but for a
+// transformer, or I = 0 for an open one.
 func (s *system) branches() {
 	for b, br := range s.net.Branches {
 		if br.Open {
@@ -118,7 +119,7 @@ func (s *system) branches() {
 		}
 		z := br.Impedance(s.net.Omega()) / complex(s.scale, 0)
 		w := complex(1/math.Max(1, cmplx.Abs(z)), 0) // keeps the row near unit size
-		s.addVoltage(s.row, br.A, w)
+		s.addVoltage(s.row, br.A, w*complex(br.Turns(), 0))
 		s.addVoltage(s.row, br.B, -w)
 		s.add(s.row, s.branch(b), -w*z)
 		s.row++

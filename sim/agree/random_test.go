@@ -27,6 +27,10 @@ func TestRandomNetworks(t *testing.T) { randomNetworks(t, "200", networktest.Dra
 // dielectric loss.
 func TestRandomDispersiveNetworks(t *testing.T) { randomNetworks(t, "100", networktest.DrawDispersive) }
 
+// TestRandomTransformers does the same with an ideal transformer in the
+// network.
+func TestRandomTransformers(t *testing.T) { randomNetworks(t, "60", networktest.DrawTransformer) }
+
 func randomNetworks(t *testing.T, checks string, draw func(*rapid.T) *network.Network) {
 	if f := flag.Lookup("rapid.checks"); f.Value.String() == f.DefValue {
 		if err := flag.Set("rapid.checks", checks); err != nil {

@@ -13,9 +13,29 @@ const Ground = -1
 type Network struct {
 	Frequency float64  // Hz
 	Junctions []string // names; a junction is known by its index
+	Named     int      // how many of them, the first, the design names; 0 means all. The others lie inside parts
 	Sections  []Section
 	Branches  []Branch
+	Parts     []Part // what the design calls a load or an element; the witnesses do not read them
 	Source    Source
+}
+
+// NamedJunctions is how many junctions, the first, the design names.
+func (n *Network) NamedJunctions() int {
+	if n.Named == 0 {
+		return len(n.Junctions)
+	}
+	return n.Named
+}
+
+// A Part is a load or an element of the design, made of one branch or of
+// several. The current from A into it is that of the Branches added up, each
+// of which leaves A; an open part has none.
+type Part struct {
+	Name     string
+	Kind     Kind
+	A, B     int
+	Branches []int
 }
 
 // Omega is the angular frequency of the source, rad/s.
@@ -61,10 +81,10 @@ func (s Series) Impedance(omega float64) complex128 {
 	return complex(s.R, x)
 }
 
-// Kind says what a branch is for; the witnesses treat all kinds alike.
+// Kind says what a part is for.
 type Kind int
 
-// The kinds of branch.
+// The kinds of part.
 const (
 	Load    Kind = iota // power into it is reported
 	Element             // a lumped part that is not a load
@@ -72,12 +92,29 @@ const (
 
 // A Branch is a lumped series combination from junction A to junction B, or
 // to the return conductor if B is Ground. An Open branch carries no current.
+//
+// A branch with a Ratio n that is not 0 is an ideal transformer with n turns on
+// the side of B for each on the side of A, and nothing else:
+//
+//	VB = n VA,  IA = n I
+//
+// where I, the current of the branch, flows into B, and IA out of A.
 type Branch struct {
-	Name string
-	Kind Kind
-	A, B int
-	Open bool
+	Name  string
+	Kind  Kind
+	A, B  int
+	Open  bool
+	Ratio float64
 	Series
+}
+
+// Turns is Ratio, or 1 for a branch that is no transformer: the branch law is
+// Turns VA - VB = Z I, and Turns I leaves A.
+func (b Branch) Turns() float64 {
+	if b.Ratio == 0 {
+		return 1
+	}
+	return b.Ratio
 }
 
 // A Source is an EMF behind a series combination, from the return conductor

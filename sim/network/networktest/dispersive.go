@@ -19,3 +19,23 @@ func DrawDispersive(t *rapid.T) *network.Network {
 	}
 	return net
 }
+
+// DrawTransformer draws a network as Draw does and puts an ideal transformer
+// between its last junction and a new one, with a load.
+func DrawTransformer(t *rapid.T) *network.Network {
+	net := Draw(t)
+	d := drawer{t: t, net: net}
+	a := rapid.IntRange(0, len(net.Junctions)-1).Draw(t, "primary")
+	b := d.junction()
+	net.Branches = append(net.Branches, network.Branch{
+		Name: "transformer", Kind: network.Element, A: a, B: b,
+		Ratio: rapid.Float64Range(0.2, 5).Draw(t, "ratio"),
+	})
+	if rapid.Bool().Draw(t, "line beyond") {
+		c := d.junction()
+		d.section(b, c)
+		b = c
+	}
+	d.branch(network.Load, b, network.Ground, d.lossy())
+	return net
+}
