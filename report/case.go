@@ -38,7 +38,7 @@ func (d *document) verdictLine(c *record.Case) {
 	s := "Requirements: " + count(c.Requirements).String() + ". The two solutions differ by " + format.Percent(largest(a)) +
 		" at most; " + format.Percent(a.Expected) + " was expected and the limit is " + format.Percent(a.Limit) + "."
 	if a.Worst.Section != "" {
-		s += " The largest difference is in the " + a.Worst.Quantity + " of " + a.Worst.Section + " at " + format.SI(a.Worst.At, "m") + "."
+		s += " The largest difference is in the " + a.Worst.Quantity + " of " + a.Worst.Section + " at " + place(a.Worst.At) + "."
 	}
 	d.b.Verdict(markOf(c.Verdict), colorOf(c.Verdict), capital(string(c.Verdict))+".", s)
 }
@@ -132,7 +132,7 @@ func tops(s record.Steady) (v, i float64) {
 // transientFields are the key figures of the two time-domain runs.
 func (d *document) transientFields(c *record.Case) []sheet.Field {
 	s, x := c.Settling, c.Stress
-	start := "start: " + x.Profile
+	start := "start: " + format.Signed(x.Profile)
 	if x.Worst {
 		start += " (every phase was considered)"
 	}
@@ -152,7 +152,7 @@ func peak(p record.Peak, unit string) string {
 	if p.Section == "" {
 		return s
 	}
-	return s + " on " + p.Section + " at " + format.SI(p.At, "m") + ", " + format.SI(p.Time, "s") +
+	return s + " on " + p.Section + " at " + place(p.At) + ", " + format.SI(p.Time, "s") +
 		" after switch-on, start phase " + format.Angle(p.Phase)
 }
 
@@ -181,8 +181,8 @@ func (d *document) sections(c *record.Case) {
 		}
 		t.Rows = append(t.Rows, []sheet.Cell{
 			{Text: s.Name, Bold: true}, {Text: format.Complex(s.From.Impedance, "Ω")}, {Text: format.VSWR(s.From.VSWR)}, {Text: format.VSWR(s.To.VSWR)},
-			{Text: format.SI(s.VoltageMax.Value, "V")}, {Text: format.SI(s.VoltageMax.At, "m")}, {Text: format.SI(real(near.voltage(complex(s.VoltageMin.Value, 0))), "V")},
-			{Text: format.SI(s.CurrentMax.Value, "A")}, {Text: format.SI(s.CurrentMax.At, "m")}, {Text: format.SI(s.Loss, "W")},
+			{Text: format.SI(s.VoltageMax.Value, "V")}, {Text: place(s.VoltageMax.At)}, {Text: format.SI(real(near.voltage(complex(s.VoltageMin.Value, 0))), "V")},
+			{Text: format.SI(s.CurrentMax.Value, "A")}, {Text: place(s.CurrentMax.At)}, {Text: format.SI(s.Loss, "W")},
 			{Text: format.SI(x.Voltage, "V")}, {Text: format.SI(x.Current, "A")},
 		})
 	}

@@ -179,7 +179,7 @@ func spectrumFinding(c *record.Case) string {
 	switch {
 	case next < 0:
 	case rest[next] < silence*s.Amplitude[k]:
-		text += "; no other line reaches " + format.DB(20*math.Log10(silence))
+		text += "; no other line reaches " + format.Fixed(20*math.Log10(silence), 0) + format.Space + "dB to it"
 	default:
 		text += "; the next largest line, at " + format.SI(s.Frequency[next], "Hz") + ", is " + format.DB(20*math.Log10(rest[next]/s.Amplitude[k])) + " to it"
 	}

@@ -139,7 +139,7 @@ func (d *document) requirementRows() [][]sheet.Cell {
 	for _, c := range d.r.Cases {
 		for _, q := range c.Requirements {
 			rows = append(rows, []sheet.Cell{
-				{Text: q.ID, Bold: true}, {Text: c.Name}, {Text: quantityOf(q)}, {Text: q.Limit},
+				{Text: q.ID, Bold: true}, {Text: c.Name}, {Text: quantityOf(q)}, {Text: format.Signed(q.Limit)},
 				{Text: format.Quantity(q.Value, q.Unit)}, {Text: format.Uncertainty(q.Uncertainty, q.Unit)},
 				{Text: format.Bare(q.Margin, q.Unit)}, {Text: relative(q)},
 				{Text: string(q.Verdict), Mark: markOfRequirement(q.Verdict), Bold: q.Verdict != record.Met},

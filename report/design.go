@@ -142,9 +142,9 @@ func (d *document) source(m record.Model) {
 	d.b.Subheading("Source", 50)
 	d.b.Fields([]sheet.Field{
 		{Label: "At junction", Value: s.At}, {Label: "Frequency", Value: format.SI(m.Frequency, "Hz")},
-		{Label: "As given", Value: s.Given}, {Label: "EMF", Value: format.SI(s.EMF, "V") + " peak, " + format.SI(s.EMF/math.Sqrt2, "V") + " rms"},
+		{Label: "As given", Value: format.Signed(s.Given)}, {Label: "EMF", Value: format.SI(s.EMF, "V") + " peak, " + format.SI(s.EMF/math.Sqrt2, "V") + " rms"},
 		{Label: "Impedance", Value: format.Complex(s.Impedance, "Ω")}, {Label: "Available power", Value: available(s.Available)},
-		{Label: "Start", Value: s.Start}, {Label: "Stop", Value: orElse(s.Stop, "stays on")},
+		{Label: "Start", Value: format.Signed(s.Start)}, {Label: "Stop", Value: orElse(s.Stop, "stays on")},
 	})
 }
 

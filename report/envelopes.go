@@ -49,12 +49,7 @@ type track struct {
 // record has no profile.
 func tracks(c *record.Case, k int) []*track {
 	p := c.Profiles[k]
-	var m record.ModelSection
-	for _, s := range c.Model.Sections {
-		if s.Name == p.Section {
-			m = s
-		}
-	}
+	m := sectionOf(c, k)
 	v := &track{symbol: "|V|", unit: "V", z: p.ZV, peakZ: p.PeakZV, peak: p.PeakV, limits: limitsOf(c, p.Section, "voltage")}
 	v.compare(p.VF, p.VP, p.EV)
 	i := &track{symbol: "|I|", unit: "A", z: p.ZI, peakZ: p.PeakZI, peak: p.PeakI, limits: limitsOf(c, p.Section, "current")}
@@ -67,6 +62,16 @@ func tracks(c *record.Case, k int) []*track {
 		}
 	}
 	return out
+}
+
+// sectionOf returns the section of the k-th profile.
+func sectionOf(c *record.Case, k int) record.ModelSection {
+	for _, s := range c.Model.Sections {
+		if s.Name == c.Profiles[k].Section {
+			return s
+		}
+	}
+	return record.ModelSection{}
 }
 
 // compare fills the magnitudes and the errors.
@@ -106,7 +111,7 @@ func (d *document) envelopes(c *record.Case) {
 		{Style: ink.PhasorLine, Text: "phasor; expected error"}, {Style: ink.FDTDLine, Text: "time domain; found error"},
 		{Style: ink.PeakLine, Text: "peak over all time"}, {Style: ink.LimitLine, Text: "limit, hatched beyond"},
 	}
-	d.b.Subheading("Along the sections: envelopes and agreement", envelopeHeight+stripHeight+50)
+	d.b.Subheading("Along the sections: envelopes and agreement", firstHeight(c)+80)
 	d.b.Note("Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end.")
 	d.key(entries)
 	var short [][]*track
@@ -121,6 +126,17 @@ func (d *document) envelopes(c *record.Case) {
 		}
 	}
 	d.shortSections(short)
+}
+
+// firstHeight returns the height of the first figure, which the heading is to
+// share a page with.
+func firstHeight(c *record.Case) float64 {
+	for k := range c.Profiles {
+		if sectionOf(c, k).Wavelengths > manyWavelengths { // long ones come first
+			return 2 * (envelopeHeight + stripHeight)
+		}
+	}
+	return envelopeHeight + stripHeight
 }
 
 // shortSections draws one section a row, or two if they are many.

@@ -4,6 +4,7 @@ import (
 	"math"
 	"math/cmplx"
 
+	"linewitness/report/format"
 	"linewitness/sim/record"
 )
 
@@ -32,6 +33,12 @@ func (f floor) unit(unit string) float64 {
 		return f.i
 	}
 	return f.v
+}
+
+// place prints a distance along a section; less than a nanometre is rounding.
+func place(z float64) string {
+	const nanometre = 1e-9
+	return format.SI(real(atLeast(complex(z, 0), nanometre)), "m")
 }
 
 func atLeast(v complex128, least float64) complex128 {

@@ -261,7 +261,7 @@ func hollow(opt reporttest.Options) *record.Record {
 
 // randomRecords is how many records TestRandomRecords writes: each is a whole
 // document of some 60 ms.
-const randomRecords = "30"
+const randomRecords = "20"
 
 func TestMain(m *testing.M) {
 	if err := flag.Set("rapid.checks", randomRecords); err != nil {

@@ -129,7 +129,7 @@ func (t *track) finding() string {
 	if i < 0 {
 		return t.symbol + " has no finite value"
 	}
-	s := t.symbol + " up to " + format.SI(t.phasor[i], t.unit) + " at " + format.SI(t.z[i], "m")
+	s := t.symbol + " up to " + format.SI(t.phasor[i], t.unit) + " at " + place(t.z[i])
 	if k := largestAt(t.peak); k >= 0 {
 		s += ", peak " + format.SI(t.peak[k], t.unit)
 	}

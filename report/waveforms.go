@@ -37,7 +37,7 @@ func (d *document) waveforms(c *record.Case) {
 
 // startNote says how the source starts, and what is not drawn.
 func startNote(s record.Stress, silent []string) string {
-	note := "Source as it starts in service: " + orElse(s.Profile, "not stated") + "."
+	note := "Source as it starts in service: " + orElse(format.Signed(s.Profile), "not stated") + "."
 	if s.Worst {
 		note += " Shown for the start phase that gives the largest voltage, " + format.Angle(s.Voltage.Phase) + "."
 	}

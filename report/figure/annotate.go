@@ -9,7 +9,8 @@ import (
 	"linewitness/report/typeset"
 )
 
-// Level draws a horizontal line over the panel, with a label on it.
+// Level draws a horizontal line over the panel, with a label on it at the
+// left.
 func (pn *Panel) Level(v float64, style draw.LineStyle, label string) {
 	if !finite(v) {
 		return
@@ -17,7 +18,7 @@ func (pn *Panel) Level(v float64, style draw.LineStyle, label string) {
 	pn.p.Add(inData(func(c draw.Canvas, _, y func(float64) vg.Length) {
 		at := y(pn.y.at(v))
 		c.StrokeLine2(style, c.Min.X, at, c.Max.X, at)
-		tag(c, c.Max.X.Points()-3, at.Points()+2, label, style)
+		tagAt(c, c.Min.X.Points()+3, at.Points()+2, label, style)
 	}))
 }
 

@@ -88,7 +88,8 @@ func newScale(a Axis) scale {
 // at returns the coordinate of an SI value.
 func (s scale) at(v float64) float64 {
 	if s.Log {
-		return math.Log10(math.Max(v, s.Min))
+		// What is too low for the axis leaves the panel at its foot.
+		return math.Log10(math.Max(v, s.Min*1e-3))
 	}
 	return v / s.prefix.Factor
 }

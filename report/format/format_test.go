@@ -84,6 +84,32 @@ func TestComplex(t *testing.T) {
 	}
 }
 
+func TestSigned(t *testing.T) {
+	for in, want := range map[string]string{
+		"-2 deg to 2 deg":        "−2 deg to 2 deg",
+		"phase -90 deg (-3 dB)":  "phase −90 deg (−3 dB)",
+		"series R-L, 10-4, a -b": "series R-L, 10-4, a -b",
+		"Ω -1":                   "Ω −1",
+		"":                       "",
+		"-":                      "-",
+	} {
+		if got := Signed(in); got != want {
+			t.Errorf("Signed(%q) = %q, want %q", in, got, want)
+		}
+	}
+}
+
+func TestFactor(t *testing.T) {
+	for symbol, want := range map[string]float64{"k": 1e3, "": 1, "u": 1e-6, "µ": 1e-6, "M": 1e6} {
+		if got, ok := Factor(symbol); !ok || got != want {
+			t.Errorf("Factor(%q) = %v, %v, want %v", symbol, got, ok, want)
+		}
+	}
+	if _, ok := Factor("x"); ok {
+		t.Error("x is taken for a prefix")
+	}
+}
+
 func TestSmallForms(t *testing.T) {
 	for _, c := range []struct{ got, want string }{
 		{Count(0), "0"}, {Count(9999), "9999"}, {Count(-1234567), "-1 234 567"},
@@ -95,6 +121,10 @@ func TestSmallForms(t *testing.T) {
 		{Tick(0.30000000000000004, 0.1), "0.3"}, {Tick(-500, 500), "-500"}, {Tick(1e-17, 0.5), "0.0"}, {Tick(2.5, 2.5), "2.5"},
 		{Decade(-2), "1 %"}, {Decade(-4), "0.01 %"}, {Decade(-6), "10^{-6}"}, {Decade(0), "100 %"},
 		{VSWR(math.Inf(1)), "infinite"},
+		{Percent(1e-17), "< 10^{-10} %"}, {Percent(0), "0 %"},
+		{Bare(1315, "V peak"), "1.315 kV"}, {Bare(0.353, "dBm"), "0.35 dB"}, {Bare(0.5, "1"), "0.5000"},
+		{Uncertainty(0.8, "V peak"), "800 mV"}, {Uncertainty(0.00018, "1"), "0.00018"}, {Uncertainty(0.0093, "deg"), "0.0093°"},
+		{Uncertainty(math.NaN(), "V peak"), "–"}, {Uncertainty(0.0007, "dBm"), "0.00070 dB"},
 	} {
 		if show(c.got) != c.want {
 			t.Errorf("got %q, want %q", show(c.got), c.want)

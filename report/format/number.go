@@ -115,6 +115,22 @@ func plain(v float64, decimals int) string {
 	return sign(s)
 }
 
+// Signed puts the minus sign in place of every hyphen that signs a number, in
+// a text that was not made here: "-2 deg to 2 deg".
+func Signed(s string) string {
+	b := []byte(s)
+	var out strings.Builder
+	for i, c := range b {
+		starts := i == 0 || b[i-1] == ' ' || b[i-1] == '('
+		if c == '-' && starts && i+1 < len(b) && b[i+1] >= '0' && b[i+1] <= '9' {
+			out.WriteString(Minus)
+			continue
+		}
+		out.WriteByte(c)
+	}
+	return out.String()
+}
+
 // sign puts the minus sign in place of the hyphen.
 func sign(s string) string {
 	if rest, negative := strings.CutPrefix(s, "-"); negative {

@@ -39,9 +39,9 @@ func Quantity(v float64, unit string) string {
 }
 
 // Uncertainty returns an uncertainty in the unit of a requirement, with two
-// significant digits and without the unit's qualifier: "0.80 V".
+// significant digits and without the unit's qualifier: "8.4 mA".
 func Uncertainty(v float64, unit string) string {
-	base, _, _ := strings.Cut(Unit(unit), " ")
+	base, _, _ := strings.Cut(Unit(difference(unit)), " ")
 	if math.IsNaN(v) || base == "1" {
 		base = ""
 	}
@@ -57,10 +57,19 @@ func Uncertainty(v float64, unit string) string {
 }
 
 // Bare is Quantity without the qualifier of the unit: "1.315 kV" in place of
-// "1.315 kV peak", for where the qualifier has been said.
+// "1.315 kV peak", for margins, whose qualifier has been said.
 func Bare(v float64, unit string) string {
-	base, _, _ := strings.Cut(unit, " ")
+	base, _, _ := strings.Cut(difference(unit), " ")
 	return Quantity(v, base)
+}
+
+// difference returns the unit of a difference of two quantities: levels in
+// dBm differ by dB.
+func difference(unit string) string {
+	if unit == "dBm" {
+		return "dB"
+	}
+	return unit
 }
 
 // Unit returns a unit as it is printed: "ohm" as Ω, "deg" as °.
