@@ -183,7 +183,7 @@ func TestExtremes(t *testing.T) {
 		"not settled":       {reporttest.One("Stuck", reporttest.Single(2), stuck), []string{"No steady state was reached", "Time domain, not settled"}},
 		"long names":        {named(long, opt), nil},
 		"fifty":             {demanding(50, opt), []string{"Q50"}},
-		"nothing is finite": {hollow(opt), []string{"–", "infinite"}},
+		"nothing is finite": {hollow(opt), []string{"–", "infinite", nothingFinite}},
 	} {
 		all := strings.Join(pages(t, write(t, c.r, Options{})), "\n")
 		for _, s := range c.want {

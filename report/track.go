@@ -35,6 +35,9 @@ func (t *track) draw(c draw.Canvas, s span) {
 	e.Line(x, y, ink.FDTDLine)
 	x, y = s.in(t.peakZ, t.peak)
 	e.Line(x, y, ink.PeakLine)
+	if largestAt(t.phasor) < 0 && largestAt(t.fdtd) < 0 {
+		e.Say(nothingFinite)
+	}
 	e.Draw(upper)
 	strip := t.strip(s)
 	x, y = s.in(t.z, t.expected)
@@ -64,6 +67,9 @@ func (t *track) drawBand(c draw.Canvas) {
 	strip.Line(b.X, b.Hi, ink.FDTDLine)
 	strip.Draw(lower)
 }
+
+// nothingFinite stands in a panel whose data are NaN or infinite throughout.
+const nothingFinite = "no finite value"
 
 // stack splits a column into envelope and strip.
 func (t *track) stack(c draw.Canvas) (upper, lower draw.Canvas) {

@@ -151,6 +151,8 @@ func turnOn(w *record.Waveform, frequency float64) *figure.Panel {
 	p.Trace(ts, w.Samples, (ts[len(ts)-1]-ts[0])*frequency)
 	if at >= 0 {
 		p.Spot(ts[at], w.Samples[at], format.SI(w.Samples[at], w.Unit))
+	} else {
+		p.Say(nothingFinite)
 	}
 	return p
 }

@@ -80,6 +80,14 @@ func (pn *Panel) Spot(xv, yv float64, label string) {
 	}))
 }
 
+// Say writes a text in the middle of a panel that has nothing to draw.
+func (pn *Panel) Say(s string) {
+	pn.p.Add(inData(func(c draw.Canvas, _, _ func(float64) vg.Length) {
+		middle := c.Center()
+		textStyle.Of(ink.Soft).Draw(c, middle.X.Points(), middle.Y.Points()-2, s, typeset.Center)
+	}))
+}
+
 // tag writes a label that ends at x, on white, so that curves do not run
 // through it.
 func tag(c draw.Canvas, x, y float64, s string, style draw.LineStyle) {
