@@ -17,7 +17,7 @@ type Stress struct {
 	Junctions []Peak // largest |v| of each junction
 	Voltage   Peak   // largest |v| anywhere on a section
 	Current   Peak   // largest |i|
-	Branches  []Peak // largest |i| of each branch, 0 for an open one
+	Parts     []Peak // largest |i| into each of the network's parts at its A, 0 for an open one
 	Source    Peak   // largest |i| out of the source
 	// SettleTime is the time from switch-on after which the voltage phasor of
 	// a junction, or of every junction for -1, taken over the period that
@@ -89,7 +89,7 @@ type stresser struct {
 	worst  bool
 	peaks  []sectionPeaks
 	nodes  []held // junctions
-	parts  []held // companions
+	parts  []held // network parts, and the source last
 	follow *follower
 	traces *tracer
 	done   bool
@@ -100,7 +100,7 @@ func (s *stresser) prepare(phases []float64) {
 		s.peaks = append(s.peaks, newSectionPeaks(s.m.grid.Cells[k]))
 	}
 	s.nodes = make([]held, len(s.m.net.Junctions))
-	s.parts = make([]held, len(s.m.junction.branches))
+	s.parts = make([]held, len(s.m.net.Parts)+1)
 	s.follow = newFollower(s.m, s.final, phases)
 	s.traces = newTracer(s.m, len(phases))
 }
@@ -165,9 +165,22 @@ func (s *stresser) lumped(a, b *lane, n int) {
 	for j := range s.nodes {
 		s.nodes[j].see(a.j[j], second*b.j[j], j, n)
 	}
-	for k := range s.parts {
-		s.parts[k].see(a.avg[k], second*b.avg[k], k, n)
+	for p := range s.m.net.Parts {
+		s.parts[p].see(s.m.partCurrent(a, p), second*s.m.partCurrent(b, p), p, n)
 	}
+	src := s.m.source
+	s.parts[len(s.parts)-1].see(a.avg[src], second*b.avg[src], 0, n)
+}
+
+// partCurrent is the average current over the last step into part p at its A.
+func (m *model) partCurrent(l *lane, p int) float64 {
+	sum := 0.0
+	for _, b := range m.net.Parts[p].Branches {
+		if at := m.branch[b]; at >= 0 {
+			sum += l.avg[at] * m.junction.branches[at].turns
+		}
+	}
+	return sum
 }
 
 func (s *stresser) result() *Stress {
@@ -205,13 +218,9 @@ func (s *stresser) result() *Stress {
 		}
 		out.Junctions = append(out.Junctions, s.nodes[j].peak(-1, 0, 0, g.Step, early, unit))
 	}
-	for _, at := range s.m.branch {
-		q := Peak{Section: -1}
-		if at >= 0 {
-			q = s.parts[at].peak(-1, 0, 0, g.Step, 0.5, gain)
-		}
-		out.Branches = append(out.Branches, q)
+	for p := range net.Parts {
+		out.Parts = append(out.Parts, s.parts[p].peak(-1, 0, 0, g.Step, 0.5, gain))
 	}
-	out.Source = s.parts[s.m.source].peak(-1, 0, 0, g.Step, 0.5, gain)
+	out.Source = s.parts[len(s.parts)-1].peak(-1, 0, 0, g.Step, 0.5, gain)
 	return out
 }

@@ -31,6 +31,21 @@ type Trace struct {
 	Early       float64   // steps by which a sample lies before its step
 }
 
+// Plus adds two traces of one run, sample by sample.
+func (t Trace) Plus(u Trace) Trace {
+	add := func(a, b []float64) []float64 {
+		if a == nil {
+			return nil
+		}
+		out := make([]float64, len(a))
+		for i := range a {
+			out[i] = a[i] + b[i]
+		}
+		return out
+	}
+	return Trace{A: add(t.A, u.A), B: add(t.B, u.B), Tail: add(t.Tail, u.Tail), TailB: add(t.TailB, u.TailB), Early: t.Early}
+}
+
 // At gives the waveform for a start phase p: A cos p - B sin p.
 func (t Trace) At(p float64) (whole, tail []float64) {
 	return mix(t.A, t.B, p), mix(t.Tail, t.TailB, p)

@@ -24,8 +24,10 @@ const manySections = 3
 
 // The heights of an envelope and of the error strip below it.
 const (
-	envelopeHeight = 88.0
-	stripHeight    = 52.0
+	envelopeHeight = 86.0
+	stripHeight    = 50.0
+	rowHeight      = envelopeHeight + stripHeight
+	zoomHeight     = rowHeight - 14 // of the zooms below a long section
 )
 
 // track is one quantity along one section.
@@ -133,10 +135,10 @@ func (d *document) envelopes(c *record.Case) {
 func firstHeight(c *record.Case) float64 {
 	for k := range c.Profiles {
 		if sectionOf(c, k).Wavelengths > manyWavelengths { // long ones come first
-			return 2 * (envelopeHeight + stripHeight)
+			return rowHeight + zoomHeight
 		}
 	}
-	return envelopeHeight + stripHeight
+	return rowHeight
 }
 
 // shortSections draws one section a row, or two if they are many.
@@ -158,10 +160,9 @@ func (d *document) shortSections(sections [][]*track) {
 
 // envelopeRow draws tracks side by side, in columns of equal width.
 func (d *document) envelopeRow(row []*track, columns int, finding string) {
-	const height = envelopeHeight + stripHeight
 	label := d.figure()
-	d.b.Need(height + d.b.CaptionHeight(label, finding))
-	d.b.Block(height, func(c draw.Canvas) {
+	d.b.Need(rowHeight + d.b.CaptionHeight(label, finding))
+	d.b.Block(rowHeight, func(c draw.Canvas) {
 		for i, t := range row {
 			t.draw(column(c, i, columns), span{0, t.length})
 		}
@@ -177,12 +178,12 @@ func column(c draw.Canvas, i, n int) draw.Canvas {
 
 // longSection draws the whole length as bands and zooms of both ends.
 func (d *document) longSection(ts []*track) {
-	const height = 2 * (envelopeHeight + stripHeight)
+	const height = rowHeight + zoomHeight
 	label, finding := d.figure(), envelopeFinding(ts)+" Upper row: extremes over each half wavelength; lower row: the outer "+format.Plural(zoomWavelengths, "wavelength")+" at each end."
 	d.b.Need(height + d.b.CaptionHeight(label, finding))
 	d.b.Block(height, func(c draw.Canvas) {
-		upper := draw.Crop(c, 0, 0, c.Size().Y/2, 0)
-		lower := draw.Crop(c, 0, 0, 0, -c.Size().Y/2)
+		upper := draw.Crop(c, 0, 0, vg.Points(zoomHeight), 0)
+		lower := draw.Crop(c, 0, 0, 0, -vg.Points(rowHeight))
 		for i, t := range ts {
 			t.drawBand(column(upper, i, len(ts)))
 			part := zoomWavelengths * t.length / t.wavelengths

@@ -73,7 +73,7 @@ const nothingFinite = "no finite value"
 
 // stack splits a column into envelope and strip.
 func (t *track) stack(c draw.Canvas) (upper, lower draw.Canvas) {
-	return draw.Crop(c, 0, 0, vg.Points(stripHeight), 0), draw.Crop(c, 0, 0, 0, -vg.Points(envelopeHeight))
+	return draw.Crop(c, 0, 0, vg.Points(stripHeight), 0), draw.Crop(c, 0, 0, 0, vg.Points(stripHeight)-c.Size().Y)
 }
 
 // envelope returns the upper panel with the limits that fit on it.

@@ -72,7 +72,7 @@ func (s *solved) steadyRecord(st *state) record.Steady {
 		Power: st.sourcePower(), Available: src.Available(),
 	}}
 	for k, sec := range s.net.Sections {
-		z0 := sec.Line.Impedance(s.net.Omega())
+		z0 := sec.At(s.net.Omega()).Impedance(s.net.Omega())
 		out.Sections = append(out.Sections, record.SteadySection{
 			Name: sec.Name,
 			From: st.end(k, 0, z0), To: st.end(k, 1, z0),
@@ -82,14 +82,14 @@ func (s *solved) steadyRecord(st *state) record.Steady {
 			Loss:       st.sectionLoss(k),
 		})
 	}
-	for b, br := range s.net.Branches {
-		if br.Kind == network.Load {
+	for p, part := range s.net.Parts {
+		if part.Kind == network.Load {
 			out.Loads = append(out.Loads, record.SteadyLoad{
-				Name: br.Name, V: st.branchVoltage(b), I: st.branches[b], Power: st.branchPower(b),
+				Name: part.Name, V: st.partVoltage(p), I: st.partCurrent(p), Power: st.partPower(p),
 			})
 		}
 	}
-	for j, name := range s.net.Junctions {
+	for j, name := range s.net.Junctions[:s.net.NamedJunctions()] {
 		out.Junctions = append(out.Junctions, record.SteadyJunction{Name: name, V: st.junctions[j]})
 	}
 	return out
@@ -193,7 +193,7 @@ func (s *solved) agreementRecord() record.Agreement {
 func gridRecord(net *network.Network, g fdtd.Grid) record.Grid {
 	out := record.Grid{StepsPerPeriod: g.StepsPerPeriod, Step: g.Step}
 	for k, s := range net.Sections {
-		exact := s.Line.Propagation(net.Omega()) * complex(s.Length, 0)
+		exact := s.At(net.Omega()).Propagation(net.Omega()) * complex(s.Length, 0)
 		out.Sections = append(out.Sections, record.GridSection{
 			Name: s.Name, Cells: g.Cells[k], Cell: s.Length / float64(g.Cells[k]),
 			Courant: g.Courant[k], CellsPerWavelength: g.CellsPerWavelength(net, k),
@@ -234,17 +234,27 @@ func (s *solved) waveforms() []record.Waveform {
 		s.waveform(t.Junctions[src.At], s.exact.junctions[src.At], "source voltage", name, "V"),
 		s.waveform(t.Source, s.exact.source, "source current", name, "A"),
 	}
-	for j, n := range s.net.Junctions {
+	for j, n := range s.net.Junctions[:s.net.NamedJunctions()] {
 		if j != src.At {
 			out = append(out, s.waveform(t.Junctions[j], s.exact.junctions[j], n+" voltage", n, "V"))
 		}
 	}
-	for b, br := range s.net.Branches {
-		if br.Kind == network.Load && !br.Open {
-			out = append(out, s.waveform(t.Branches[b], s.exact.branches[b], br.Name+" current", br.Name, "A"))
+	for p, part := range s.net.Parts {
+		if part.Kind == network.Load && !s.net.Branches[part.Branches[0]].Open {
+			out = append(out, s.waveform(s.partTrace(p), s.exact.partCurrent(p), part.Name+" current", part.Name, "A"))
 		}
 	}
 	return out
+}
+
+// partTrace adds up the traces of the branches that leave a part's A.
+func (s *solved) partTrace(p int) fdtd.Trace {
+	branches := s.net.Parts[p].Branches
+	sum := s.stress.Traces.Branches[branches[0]]
+	for _, b := range branches[1:] {
+		sum = sum.Plus(s.stress.Traces.Branches[b])
+	}
+	return sum
 }
 
 func (s *solved) waveform(t fdtd.Trace, p complex128, name, where, unit string) record.Waveform {
@@ -285,24 +295,25 @@ func (s *solved) tailPhasor(t fdtd.Trace, p complex128) []float64 {
 // model echoes the network in every equivalent form.
 func (s *solved) model() record.Model {
 	d, net := s.design, s.net
-	out := record.Model{Frequency: net.Frequency, Junctions: net.Junctions}
+	out := record.Model{Frequency: net.Frequency, Junctions: d.Junctions}
 	for k, sec := range net.Sections {
-		g := sec.Line.Propagation(net.Omega())
+		at := sec.At(net.Omega())
+		g := at.Propagation(net.Omega())
 		w := imag(g) * sec.Length / (2 * pi)
 		out.Sections = append(out.Sections, record.ModelSection{
 			Name: sec.Name, Line: d.Sections[k].Line, From: d.Sections[k].From, To: d.Sections[k].To,
 			Given: d.Sections[k].Length.Text, Length: sec.Length,
 			Wavelengths: w, Degrees: 360 * w, Delay: sec.Delay(),
 			LossDB: real(g) * sec.Length * line.NeperDB,
-			Z0:     sec.Line.Impedance(net.Omega()), VelocityFactor: net.Omega() / imag(g) / line.C0,
-			R: sec.Line.R, L: sec.Line.L, G: sec.Line.G, C: sec.Line.C,
+			Z0:     at.Impedance(net.Omega()), VelocityFactor: net.Omega() / imag(g) / line.C0,
+			R: at.R, L: at.L, G: at.G, C: at.C,
 		})
 	}
-	for b, br := range net.Branches {
-		if b < len(d.Loads) {
-			out.Loads = append(out.Loads, part(net, br, d.Loads[b]))
+	for p := range net.Parts {
+		if p < len(d.Loads) {
+			out.Loads = append(out.Loads, part(net, p, d.Loads[p]))
 		} else {
-			out.Elements = append(out.Elements, part(net, br, d.Elements[b-len(d.Loads)]))
+			out.Elements = append(out.Elements, part(net, p, d.Elements[p-len(d.Loads)]))
 		}
 	}
 	out.Source = s.modelSource()

@@ -225,9 +225,12 @@ func peakCurrentAt(c *solved, s *fdtd.Stress, j int) float64 {
 	if c.net.Source.At == j {
 		top = s.Source.Value
 	}
-	for b, br := range c.net.Branches {
-		if br.A == j || br.B == j {
-			top = math.Max(top, s.Branches[b].Value)
+	for p, part := range c.net.Parts {
+		switch j {
+		case part.A:
+			top = math.Max(top, s.Parts[p].Value)
+		case part.B: // what flows in at A flows out at B, but for a transformer
+			top = math.Max(top, s.Parts[p].Value/c.net.Branches[part.Branches[0]].Turns())
 		}
 	}
 	for k, sec := range c.net.Sections {

@@ -55,9 +55,9 @@ func (f finder) junction(name string) int {
 }
 
 func (f finder) load(name string) int {
-	for b, br := range f.net.Branches {
-		if br.Kind == network.Load && br.Name == name {
-			return b
+	for p, part := range f.net.Parts {
+		if part.Kind == network.Load && part.Name == name {
+			return p
 		}
 	}
 	panic("sim: requirement names a load that the case does not have")
@@ -65,9 +65,9 @@ func (f finder) load(name string) int {
 
 // voltage finds the phasor of a junction, or of a load across it, by name.
 func (f finder) voltage(name string) func(*state) complex128 {
-	for b, br := range f.net.Branches {
-		if br.Kind == network.Load && br.Name == name {
-			return func(s *state) complex128 { return s.branchVoltage(b) }
+	for p, part := range f.net.Parts {
+		if part.Kind == network.Load && part.Name == name {
+			return func(s *state) complex128 { return s.partVoltage(p) }
 		}
 	}
 	j := f.junction(name)
@@ -90,7 +90,7 @@ func (f finder) steady(r design.Requirement) quantity {
 		return f.steadyCurrent(r)
 	case design.LoadPower:
 		b := f.load(r.Load)
-		return func(s *state) float64 { return s.branchPower(b) }
+		return func(s *state) float64 { return s.partPower(b) }
 	case design.Efficiency:
 		return f.efficiency(r)
 	case design.Loss:
@@ -107,7 +107,7 @@ func (f finder) steady(r design.Requirement) quantity {
 		return func(s *state) float64 { return cmplx.Phase(a(s) * cmplx.Conj(b(s))) }
 	case design.PowerSplit:
 		a, b := f.load(r.Between[0]), f.load(r.Between[1])
-		return func(s *state) float64 { return 10 * math.Log10(s.branchPower(a)/s.branchPower(b)) }
+		return func(s *state) float64 { return 10 * math.Log10(s.partPower(a)/s.partPower(b)) }
 	}
 	return nil
 }
@@ -122,7 +122,7 @@ func endOf(name string) int {
 
 func (f finder) reflection(s *state, r design.Requirement) complex128 {
 	k := f.section(r.Section)
-	z0 := f.net.Sections[k].Line.Impedance(f.net.Omega())
+	z0 := f.net.Sections[k].At(f.net.Omega()).Impedance(f.net.Omega())
 	if r.Reference != nil {
 		z0 = complex(r.Reference.SI, 0)
 	}
@@ -184,8 +184,13 @@ func (s *state) largestCurrentAt(j int) float64 {
 		top = cmplx.Abs(s.source)
 	}
 	for b, br := range s.net.Branches {
-		if br.A == j || br.B == j {
+		if br.B == j {
 			top = math.Max(top, cmplx.Abs(s.branches[b]))
+		}
+	}
+	for p, part := range s.net.Parts {
+		if part.A == j {
+			top = math.Max(top, cmplx.Abs(s.partCurrent(p)))
 		}
 	}
 	for k, sec := range s.net.Sections {
@@ -203,9 +208,9 @@ func (s *state) largestCurrentAt(j int) float64 {
 func (f finder) efficiency(r design.Requirement) quantity {
 	return func(s *state) float64 {
 		p := 0.0
-		for b, br := range f.net.Branches {
-			if br.Kind == network.Load && (r.Load == "" || br.Name == r.Load) {
-				p += s.branchPower(b)
+		for i, part := range f.net.Parts {
+			if part.Kind == network.Load && (r.Load == "" || part.Name == r.Load) {
+				p += s.partPower(i)
 			}
 		}
 		return p / s.sourcePower()
@@ -232,6 +237,6 @@ func (f finder) loss(r design.Requirement) quantity {
 		if math.IsInf(p, 1) {
 			p = s.sourcePower()
 		}
-		return 10 * math.Log10(p/s.branchPower(b))
+		return 10 * math.Log10(p/s.partPower(b))
 	}
 }

@@ -143,20 +143,29 @@ func vertex(z, sq []float64, i int) extreme {
 	return extreme{root(sq[i] + b*x + a*x*x), z[i] + x}
 }
 
-// branchVoltage is VA - VB of a branch.
-func (s *state) branchVoltage(b int) complex128 {
-	br := s.net.Branches[b]
-	v := s.junctions[br.A]
-	if br.B != network.Ground {
-		v -= s.junctions[br.B]
+// partVoltage is VA - VB of a part.
+func (s *state) partVoltage(p int) complex128 {
+	part := s.net.Parts[p]
+	v := s.junctions[part.A]
+	if part.B != network.Ground {
+		v -= s.junctions[part.B]
 	}
 	return v
+}
+
+// partCurrent is the current from A into a part.
+func (s *state) partCurrent(p int) complex128 {
+	sum := complex128(0)
+	for _, b := range s.net.Parts[p].Branches {
+		sum += s.branches[b] * complex(s.net.Branches[b].Turns(), 0)
+	}
+	return sum
 }
 
 // power is Re(V I*)/2, W, for peak phasors.
 func power(v, i complex128) float64 { return real(v*cmplx.Conj(i)) / 2 }
 
-func (s *state) branchPower(b int) float64 { return power(s.branchVoltage(b), s.branches[b]) }
+func (s *state) partPower(p int) float64 { return power(s.partVoltage(p), s.partCurrent(p)) }
 
 // sourcePower is the power that the source delivers, W.
 func (s *state) sourcePower() float64 {

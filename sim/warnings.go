@@ -32,6 +32,7 @@ func (s *solved) warnings() []string {
 	if !s.stress.Traces.Full {
 		say("the waveforms are kept to %.3g us only", float64(len(s.stress.Traces.Source.A))*s.stress.Grid.Step*1e6)
 	}
+	out = append(out, s.design.Warnings...)
 	s.thinned(say)
 	s.realised(say)
 	return out
@@ -57,8 +58,8 @@ func (s *solved) thinned(say func(string, ...any)) {
 // realised says which complex impedances the time-domain run replaced.
 func (s *solved) realised(say func(string, ...any)) {
 	parts := append(append([]design.Part(nil), s.design.Loads...), s.design.Elements...)
-	for b, p := range parts {
-		z := s.net.Branches[b]
+	for i, p := range parts {
+		z := s.net.Branches[s.net.Parts[i].Branches[0]]
 		if k := p.Impedance.Kind; (k == design.Complex || k == design.Matched) && (z.L > 0 || z.C > 0) {
 			say("%s is realised in time as a %s that has its impedance at the design frequency; transients see it so", p.Name, realisedAs(z))
 		}

@@ -149,18 +149,19 @@ func merge(target, patch *node, t *table, key string) *node {
 
 // inner is the table of the value of a key.
 func inner(t *table, parent, key string) *table {
-	switch {
-	case t == nil && named[parent] != nil:
+	if t == nil {
 		return named[parent]
-	case t == fileTable && key == "source":
-		return sourceTable
-	case t == sourceTable && key == "start":
-		return startTable
-	case t == sourceTable && key == "stop":
-		return stopTable
-	default:
-		return nil
 	}
+	return nested[t][key]
+}
+
+// nested are the mappings inside mappings in which forms exclude each other.
+var nested = map[*table]map[string]*table{
+	fileTable:    {"source": sourceTable},
+	sourceTable:  {"start": startTable},
+	lineTable:    {"geometry": geometryTable},
+	loadTable:    {"parallel": lumpedTable, "series": lumpedTable},
+	elementTable: {"parallel": lumpedTable, "series": lumpedTable},
 }
 
 // overridden lists the keys whose inherited values a patch drops because it
@@ -172,12 +173,12 @@ func overridden(patch *node, t *table) (keys []string) {
 	gives := func(k string) bool { v := patch.get(k); return v != nil && v.kind != null }
 	for _, c := range t.choices {
 		for i, f := range c.forms {
-			if !slices.ContainsFunc(f.keys, gives) {
+			if !slices.ContainsFunc(f.all(), gives) {
 				continue
 			}
 			for j, other := range c.forms {
 				if j != i {
-					keys = append(keys, other.keys...)
+					keys = append(keys, other.all()...)
 				}
 			}
 		}

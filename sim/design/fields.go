@@ -1,6 +1,9 @@
 package design
 
-import "strings"
+import (
+	"slices"
+	"strings"
+)
 
 // fields are the values of one mapping by key.
 type fields struct {
@@ -63,7 +66,7 @@ func (w *walker) isKind(n *node, what string, due nodeKind) bool {
 func (f *fields) checkChoice(c choice) {
 	var given []string // the first key of each form that is given
 	for _, form := range c.forms {
-		if first := f.firstOf(form.keys); first != "" {
+		if first := f.firstOf(form.all()); first != "" {
 			given = append(given, first)
 			f.checkForm(form, first)
 		}
@@ -84,6 +87,9 @@ func (f *fields) checkForm(form form, given string) {
 		}
 	}
 }
+
+// all are the keys that belong to a form.
+func (f form) all() []string { return slices.Concat(f.keys, f.with) }
 
 func (f *fields) firstOf(keys []string) string {
 	for _, k := range keys {

@@ -26,6 +26,7 @@ type choice struct {
 type form struct {
 	keys []string
 	need []string // those of the keys that must be there if any is
+	with []string // keys that say more about the others and mean nothing without them
 }
 
 func must(names ...string) []key { return keysOf(true, names) }
@@ -48,11 +49,6 @@ func (t *table) names() (names []string) {
 func (t *table) has(name string) bool {
 	return slices.ContainsFunc(t.keys, func(k key) bool { return k.name == name })
 }
-
-var (
-	impedanceChoice = choice{required: true, forms: []form{{keys: []string{"impedance"}}, {keys: []string{"r", "l", "c"}}}}
-	placeChoice     = choice{required: true, forms: []form{{keys: []string{"at"}}, {keys: []string{"between"}}}}
-)
 
 // The mappings of a design file.
 var (
@@ -79,24 +75,6 @@ var (
 	}
 	startTable = &table{def: "start", keys: append(must("profile"), may("rise", "phase")...)}
 	stopTable  = &table{def: "stop", keys: append(must("at"), may("fall")...)}
-	lineTable  = &table{
-		def:  "line",
-		keys: may("z0", "velocity_factor", "loss", "r", "l", "g", "c"),
-		choices: []choice{{required: true, forms: []form{
-			{keys: []string{"z0", "velocity_factor", "loss"}, need: []string{"z0", "velocity_factor"}},
-			{keys: []string{"r", "l", "g", "c"}, need: []string{"l", "c"}},
-		}}},
-	}
-	lossTable    = &table{def: "loss", keys: append(must("at", "attenuation"), may("dielectric_share")...)}
-	sectionTable = &table{def: "section", keys: must("from", "to", "length", "line")}
-	loadTable    = &table{
-		def: "load", keys: append(must("at"), may("impedance", "r", "l", "c")...),
-		choices: []choice{impedanceChoice},
-	}
-	elementTable = &table{
-		def: "element", keys: may("at", "between", "impedance", "r", "l", "c"),
-		choices: []choice{placeChoice, impedanceChoice},
-	}
 	caseTable   = &table{def: "case", keys: may("source", "lines", "sections", "loads", "elements")}
 	gridTable   = &table{def: "grid", keys: may("cells_per_wavelength", "settle_tolerance", "agreement", "max_periods")}
 	windowTable = &table{

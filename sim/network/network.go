@@ -16,7 +16,7 @@ type Network struct {
 	Named     int      // how many of them, the first, the design names; 0 means all. The others lie inside parts
 	Sections  []Section
 	Branches  []Branch
-	Parts     []Part // what the design calls a load or an element; the witnesses do not read them
+	Parts     []Part // what the design calls a load or an element; the witnesses use them only to add up the current into a part
 	Source    Source
 }
 

@@ -112,8 +112,9 @@ type ModelPart struct {
 	Given        string     // as the design file gives it: "36.5 ohm + 1.2 uH", "short"
 	As           string     // what it was realised as: "series R-L", "exact short", ...
 	R, L, C      float64    // series parts, 0 where absent
-	Impedance    complex128 // at the design frequency; not used for open
+	Impedance    complex128 // at the design frequency; not used for open and for a transformer
 	Open, Short  bool
+	Ratio        float64 // turns To over At of an ideal transformer, else 0
 }
 
 // ModelSource is the source as modelled.
