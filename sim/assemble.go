@@ -4,8 +4,10 @@ import (
 	"fmt"
 	"math"
 	"math/cmplx"
+	"slices"
 
 	"linewitness/fdtd"
+	"linewitness/sim/design"
 	"linewitness/sim/line"
 	"linewitness/sim/network"
 	"linewitness/sim/record"
@@ -39,29 +41,36 @@ func (s *solved) caseRecord(reqs []record.Requirement) record.Case {
 	for k := range c.Grid.Sections {
 		c.Grid.Sections[k].Points = len(s.steady.Sections[k].ZV)
 	}
-	c.Verdict = s.verdict(reqs)
-	c.Warnings = s.warnings()
+	c.Ratings = s.ratings()
+	c.Verdict = s.verdict(reqs, c.Ratings)
+	c.Warnings = append(s.warnings(), exceeded(c.Ratings)...)
 	return c
 }
 
-// verdict is the worst of settling, agreement and requirements.
-func (s *solved) verdict(reqs []record.Requirement) record.Verdict {
+// verdict is the worst of settling, agreement, requirements and ratings.
+func (s *solved) verdict(reqs []record.Requirement, ratings []record.Rating) record.Verdict {
 	switch {
 	case !s.steady.Settling.Settled:
 		return record.Unsettle
 	case s.compared.Found() > s.design.Grid.Agreement || !s.compared.Explained():
 		return record.Disagree
 	}
-	v := record.Verified
+	var all []record.RequirementVerdict
 	for _, r := range reqs {
-		switch {
-		case r.Verdict == record.MissedReq:
-			return record.Missed
-		case r.Verdict == record.NotShownReq:
-			v = record.NotShown
+		all = append(all, r.Verdict)
+	}
+	for _, r := range ratings {
+		if r.Source != design.CableTable { // from memory: it warns and does not judge
+			all = append(all, r.Verdict)
 		}
 	}
-	return v
+	switch {
+	case slices.Contains(all, record.MissedReq):
+		return record.Missed
+	case slices.Contains(all, record.NotShownReq):
+		return record.NotShown
+	}
+	return record.Verified
 }
 
 func (s *solved) steadyRecord(st *state) record.Steady {
@@ -295,7 +304,7 @@ func (s *solved) tailPhasor(t fdtd.Trace, p complex128) []float64 {
 // model echoes the network in every equivalent form.
 func (s *solved) model() record.Model {
 	d, net := s.design, s.net
-	out := record.Model{Frequency: net.Frequency, Junctions: d.Junctions}
+	out := record.Model{Frequency: net.Frequency, Junctions: d.Junctions, Lines: s.lines()}
 	for k, sec := range net.Sections {
 		at := sec.At(net.Omega())
 		g := at.Propagation(net.Omega())
@@ -317,6 +326,29 @@ func (s *solved) model() record.Model {
 		}
 	}
 	out.Source = s.modelSource()
+	return out
+}
+
+// lines echoes the kinds of line that sections are made of.
+func (s *solved) lines() []record.ModelLine {
+	var out []record.ModelLine
+	for _, l := range s.design.Lines {
+		if !slices.ContainsFunc(s.design.Sections, func(sec design.Section) bool { return sec.Line == l.Name }) {
+			continue
+		}
+		m := record.ModelLine{Name: l.Name, Text: l.Text, Model: string(l.Model), FieldPerVolt: l.FieldPerVolt}
+		m.SeriesResidual, m.ShuntResidual = fdtd.FormResidual(l.Dispersion, s.net.Omega())
+		for _, p := range l.Pedigree {
+			m.Pedigree = append(m.Pedigree, record.Pedigree{What: p.What, Text: p.Text, Kind: string(p.Kind), Note: p.Note})
+		}
+		for _, f := range l.Fit {
+			m.Fit = append(m.Fit, record.FitPoint{
+				Frequency: f.Frequency, Text: f.Text,
+				Given: f.Given * line.NeperDB, Fitted: f.Fitted * line.NeperDB,
+			})
+		}
+		out = append(out, m)
+	}
 	return out
 }
 

@@ -5,6 +5,7 @@ import (
 	"math"
 
 	"linewitness/sim/design"
+	"linewitness/sim/record"
 )
 
 // warnings are what a reader of the record must know to trust the numbers no
@@ -41,6 +42,20 @@ func (s *solved) warnings() []string {
 // peakChange is the change of the largest voltage from grid to grid that a
 // reader is told of: "two grids agreeing to 1 %".
 const peakChange = 0.01
+
+// exceeded says which ratings are passed, or may be.
+func exceeded(ratings []record.Rating) []string {
+	var out []string
+	for _, r := range ratings {
+		switch r.Verdict {
+		case record.MissedReq:
+			out = append(out, fmt.Sprintf("section %s is beyond its %s rating of %s (%s)", r.Section, r.Quantity, r.Text, r.Source))
+		case record.NotShownReq:
+			out = append(out, fmt.Sprintf("section %s is not shown to keep its %s rating of %s (%s)", r.Section, r.Quantity, r.Text, r.Source))
+		}
+	}
+	return out
+}
 
 func (s *solved) abrupt() bool {
 	src := s.net.Source

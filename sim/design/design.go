@@ -210,6 +210,9 @@ type Rating struct {
 	Source           string  // where it comes from: "line coax", "section main", "cable table"; "" without limits
 }
 
+// CableTable is the Source of a rating that the cable table gives.
+const CableTable = "cable table"
+
 // Section is a piece of line. Its rating is its own where it gives one, and for
 // the rest that of its line.
 type Section struct {

@@ -74,6 +74,7 @@ type Case struct {
 	Agreement    Agreement
 	Grid         Grid
 	Requirements []Requirement
+	Ratings      []Rating // worst first; empty where nothing is rated
 	Warnings     []string
 
 	// What only the figures and the CSV files need.
@@ -86,10 +87,62 @@ type Case struct {
 type Model struct {
 	Frequency float64
 	Junctions []string
+	Lines     []ModelLine // the kinds of line that the sections are made of
 	Sections  []ModelSection
 	Loads     []ModelPart
 	Elements  []ModelPart
 	Source    ModelSource
+}
+
+// ModelLine is a kind of line: what was given, where it comes from, and how it
+// depends on frequency.
+type ModelLine struct {
+	Name, Text string
+	Model      string // "constant" or "dispersive"
+	Pedigree   []Pedigree
+	Fit        []FitPoint // of a loss table; else empty
+	// How far the rational form that is stepped in time is from the exact law,
+	// relative to it, at worst from a tenth to ten times the design frequency;
+	// 0 for what is not there.
+	SeriesResidual, ShuntResidual float64
+	// The largest field at the inner conductor of a coaxial line for one volt
+	// between the conductors, 1/m; 0 where it is not known.
+	FieldPerVolt float64
+}
+
+// Pedigree is one piece of data of a line and where it comes from.
+type Pedigree struct {
+	What, Text string
+	Kind       string // measured, datasheet, catalogue, geometry, assumed, given
+	Note       string
+}
+
+// FitPoint is one row of a loss table beside its fit, dB/m.
+type FitPoint struct {
+	Frequency     float64 // Hz
+	Given, Fitted float64
+	Text          string
+}
+
+// Rating compares one section with what it is rated for, in one case.
+type Rating struct {
+	Section, Quantity string  // "voltage" or "current"
+	Unit              string  // "V" or "A", all values peak
+	Steady            float64 // largest along the section in steady state, the worse witness
+	SteadyAt          float64 // m
+	Peak              float64 // largest at any time
+	PeakAt, PeakTime  float64 // m, s
+	Uncertainty       float64 // of the larger of the two
+	Rated             float64 // the limit as given
+	Text              string  // the limit in words, "3.7 kV rms"
+	Source            string  // where it comes from
+	Derating          float64 // dB
+	Allowed           float64 // Rated less Derating
+	Margin            float64 // Allowed less the larger value; negative beyond
+	MarginDB          float64 // 20 lg of Allowed over the larger value
+	MarginPercent     float64 // of Allowed
+	Verdict           RequirementVerdict
+	Field             float64 // V/m, peak, at the inner conductor for the larger voltage; 0 where not known
 }
 
 // ModelSection is a section in the equivalent forms of the echo table.
@@ -103,7 +156,7 @@ type ModelSection struct {
 	LossDB               float64    // one way, matched
 	Z0                   complex128 // characteristic impedance, ohm
 	VelocityFactor       float64    // phase velocity at the design frequency over c
-	R, L, G, C           float64    // per metre
+	R, L, G, C           float64    // per metre, at the design frequency
 }
 
 // ModelPart is a load or an element as modelled.

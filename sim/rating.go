@@ -1,0 +1,95 @@
+package sim
+
+import (
+	"math"
+	"slices"
+
+	"linewitness/fdtd"
+	"linewitness/sim/design"
+	"linewitness/sim/record"
+)
+
+// ratings compares every rated section with its rating, worst first.
+func (s *solved) ratings() []record.Rating {
+	var out []record.Rating
+	b := newBudget(s.net, &s.compared)
+	for k, sec := range s.design.Sections {
+		peaks := s.stress.Sections[k]
+		if l := sec.Rating.Voltage; l != nil {
+			r := s.rating(sec.Name, "voltage", "V", sec.Rating, l)
+			r.steady(s.exact.voltage[k].largest, s.found.voltage[k].largest, b.ends[k][0])
+			r.peak(peaks.Voltage, s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Voltage.Value }).spread)
+			r.judge()
+			r.Field = math.Max(r.Steady, r.Peak) * s.fieldPerVolt(sec.Line)
+			out = append(out, r.Rating)
+		}
+		if l := sec.Rating.Current; l != nil {
+			r := s.rating(sec.Name, "current", "A", sec.Rating, l)
+			r.steady(s.exact.current[k].largest, s.found.current[k].largest, b.ends[k][1])
+			r.peak(peaks.Current, s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Current.Value }).spread)
+			r.judge()
+			out = append(out, r.Rating)
+		}
+	}
+	slices.SortStableFunc(out, func(a, b record.Rating) int {
+		switch {
+		case a.MarginDB < b.MarginDB:
+			return -1
+		case a.MarginDB > b.MarginDB:
+			return 1
+		}
+		return 0
+	})
+	return out
+}
+
+// A rated value is being compared with its rating.
+type rated struct {
+	record.Rating
+	steadySpread, peakSpread float64
+}
+
+func (s *solved) rating(section, quantity, unit string, r design.Rating, l *design.Limit) rated {
+	return rated{Rating: record.Rating{
+		Section: section, Quantity: quantity, Unit: unit,
+		Rated: l.SI, Text: l.Text, Source: r.Source,
+		Derating: r.MarginDB, Allowed: l.SI * math.Pow(10, -r.MarginDB/20),
+	}}
+}
+
+// steady takes the larger of the two witnesses' values.
+func (r *rated) steady(exact, found extreme, spread float64) {
+	e := exact
+	if found.value > e.value {
+		e = found
+	}
+	r.Steady, r.SteadyAt, r.steadySpread = e.value, e.at, spread
+}
+
+func (r *rated) peak(p fdtd.Peak, spread float64) {
+	r.Peak, r.PeakAt, r.PeakTime, r.peakSpread = p.Value, p.At, p.Time, spread
+}
+
+// judge compares the larger of the steady and the largest value ever with what
+// is allowed.
+func (r *rated) judge() {
+	worst := math.Max(r.Steady, r.Peak)
+	r.Uncertainty = r.peakSpread
+	if r.Steady >= r.Peak {
+		r.Uncertainty = r.steadySpread
+	}
+	r.Margin = r.Allowed - worst
+	r.MarginDB = 20 * math.Log10(r.Allowed/worst)
+	r.MarginPercent = 100 * r.Margin / r.Allowed
+	r.Verdict = outcome(worst, r.Margin, r.Uncertainty)
+}
+
+// fieldPerVolt is that of a kind of line, by name.
+func (s *solved) fieldPerVolt(name string) float64 {
+	for _, l := range s.design.Lines {
+		if l.Name == name {
+			return l.FieldPerVolt
+		}
+	}
+	return 0
+}
