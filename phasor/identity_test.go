@@ -32,7 +32,7 @@ func watts(v, i complex128) float64 { return real(v*cmplx.Conj(i)) / 2 }
 // taken from its ends.
 func TestPowerBalance(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
-		net := networktest.Draw(t)
+		net := networktest.DrawTransformer(t)
 		s := solved(t, net)
 		in := watts(s.Junction(net.Source.At), s.Source())
 		out := 0.0
@@ -64,6 +64,55 @@ func dissipated(s *Solution, k int, sec network.Section) float64 {
 		sum += w * (sec.Line.R*c*c + sec.Line.G*v*v) / 2
 	}
 	return sum * sec.Length / n / 3
+}
+
+// TestModelsAgreeAtTheDesignFrequency: a line's steady state at the frequency
+// it is specified at does not depend on how it is said to depend on frequency.
+func TestModelsAgreeAtTheDesignFrequency(t *testing.T) {
+	const tolerance = 1e-9 // of the EMF
+	rapid.Check(t, func(t *rapid.T) {
+		dispersive := networktest.DrawDispersive(t)
+		constant := *dispersive
+		constant.Sections = append([]network.Section(nil), dispersive.Sections...)
+		for k := range constant.Sections {
+			s := &constant.Sections[k]
+			s.Line, s.Dispersion = s.At(dispersive.Omega()), line.Dispersion{}
+		}
+		a, b := solved(t, dispersive), solved(t, &constant)
+		for j := range dispersive.Junctions {
+			if d := cmplx.Abs(a.Junction(j) - b.Junction(j)); d > tolerance*dispersive.Source.EMF {
+				t.Fatalf("junction %d differs by %.3g V", j, d)
+			}
+		}
+	})
+}
+
+// TestTransformer: an ideal transformer keeps the power, multiplies the voltage
+// by its ratio and shows an impedance divided by its square.
+func TestTransformer(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		n := rapid.Float64Range(0.1, 10).Draw(t, "ratio")
+		load := network.Series{R: rapid.Float64Range(1, 500).Draw(t, "r"), L: rapid.Float64Range(1e-9, 1e-6).Draw(t, "l")}
+		net := &network.Network{
+			Frequency: 10e6, Junctions: []string{"a", "b"},
+			Branches: []network.Branch{
+				{A: 0, B: 1, Ratio: n},
+				{A: 1, B: network.Ground, Series: load},
+			},
+			Source: network.Source{EMF: 1, Series: network.Series{R: 50}},
+		}
+		s := solved(t, net)
+		z := load.Impedance(net.Omega()) / complex(n*n, 0)
+		if want := z / (z + 50); cmplx.Abs(s.Junction(0)-want) > identityTolerance {
+			t.Fatalf("primary %v V, want %v V", s.Junction(0), want)
+		}
+		if d := cmplx.Abs(s.Junction(1) - complex(n, 0)*s.Junction(0)); d > identityTolerance*n {
+			t.Fatalf("secondary %v V for %v V at a ratio of %g", s.Junction(1), s.Junction(0), n)
+		}
+		if in, out := watts(s.Junction(0), s.Source()), watts(s.Junction(1), s.Branch(1)); math.Abs(in-out) > identityTolerance*in {
+			t.Fatalf("%v W in, %v W out", in, out)
+		}
+	})
 }
 
 // TestReciprocity: an EMF at a in series with z gives at b, through a branch of
