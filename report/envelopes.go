@@ -104,41 +104,50 @@ func largestOf(ys []float64) float64 {
 	return 0
 }
 
+// headingRoom is what a heading of the second level takes, the gap above it
+// included.
+const headingRoom = 30.0
+
 // envelopes draws |V| and |I| along every section, with the error below.
 func (d *document) envelopes(c *record.Case) {
 	if len(c.Profiles) == 0 {
 		return
 	}
-	entries := []figure.Entry{
+	const headed = 70.0 // note, key and caption
+	long, short := sorted(c)
+	first := rowHeight
+	if len(long) > 0 && (len(short) == 0 || d.b.Room() > rowHeight+zoomHeight+headed+headingRoom) {
+		first += zoomHeight
+	}
+	d.b.Subheading("Along the sections: envelopes and agreement", first+headed)
+	d.b.Note("Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end.")
+	d.key([]figure.Entry{
 		{Style: ink.PhasorLine, Text: "phasor; expected error"}, {Style: ink.FDTDLine, Text: "time domain; found error"},
 		{Style: ink.PeakLine, Text: "peak over all time"}, {Style: ink.LimitLine, Text: "limit, hatched beyond"},
+	})
+	if first == rowHeight { // a long one would leave the rest of the page empty
+		d.shortSections(short)
+		short = nil
 	}
-	d.b.Subheading("Along the sections: envelopes and agreement", firstHeight(c)+80)
-	d.b.Note("Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end.")
-	d.key(entries)
-	var short [][]*track
+	for _, ts := range long {
+		d.longSection(ts)
+	}
+	d.shortSections(short)
+}
+
+// sorted parts the sections into those drawn as bands and the others.
+func sorted(c *record.Case) (long, short [][]*track) {
 	for k := range c.Profiles {
 		ts := tracks(c, k)
 		switch {
 		case len(ts) == 0:
 		case ts[0].wavelengths > manyWavelengths:
-			d.longSection(ts)
+			long = append(long, ts)
 		default:
 			short = append(short, ts)
 		}
 	}
-	d.shortSections(short)
-}
-
-// firstHeight returns the height of the first figure, which the heading is to
-// share a page with.
-func firstHeight(c *record.Case) float64 {
-	for k := range c.Profiles {
-		if sectionOf(c, k).Wavelengths > manyWavelengths { // long ones come first
-			return rowHeight + zoomHeight
-		}
-	}
-	return rowHeight
+	return long, short
 }
 
 // shortSections draws one section a row, or two if they are many.

@@ -82,7 +82,7 @@ func (t *track) envelope(s span) *figure.Panel {
 	top := max(largestOf(t.fdtd), largestOf(t.phasor), largestOf(t.peak)) * air
 	for _, l := range t.limits {
 		if t.shows(l) {
-			top = max(top, l.value*1.13)
+			top = max(top, l.value*1.18)
 		}
 	}
 	p := figure.New(t.section, t.symbol, figure.Axis{Min: s.from, Max: s.to, Unit: "m", Bare: true}, figure.Axis{Unit: t.unit, Max: top})

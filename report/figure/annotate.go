@@ -38,7 +38,7 @@ func (pn *Panel) Forbid(v float64, above bool, label string) {
 		hatch(c, region)
 		c.StrokeLine2(ink.LimitLine, c.Min.X, at, c.Max.X, at)
 		rise := 2.5
-		if above { // the label stands on the allowed side, where it is not hatched
+		if !above { // the label stands on the side where curves should not be
 			rise = -tagStyle.Size - 0.5
 		}
 		tag(c, c.Max.X.Points()-3, at.Points()+rise, label, ink.LimitLine)
