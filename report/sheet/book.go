@@ -51,6 +51,7 @@ func New(meta Meta, paper Paper) *Book {
 	pdf.SetSubject(meta.Subject, true)
 	pdf.SetAuthor(meta.Author, true)
 	pdf.SetCreator(meta.Creator, true)
+	pdf.SetProducer(meta.Creator, true)
 	b := &Book{pdf: pdf, fonts: canvas.NewFonts(pdf), paper: paper, meta: meta}
 	// The outline is encoded as the current font is.
 	b.fail(b.fonts.Use(typeset.Sans.Face(10)))
