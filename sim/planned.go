@@ -91,8 +91,33 @@ func (p *planned) predict() {
 		stress += p.coarse.grid.Updates(p.plan.StressPeriods) * lanes
 	}
 	p.plan.Grid.Updates = settle + stress
-	p.plan.Seconds = settle/settleRate + stress/stressRate
+	p.plan.Seconds = (settle/settleRate + stress/stressRate) * p.slowdown()
 	p.plan.Bytes = p.bytes(lanes)
+}
+
+// slowdown is how much longer a cell takes than one of a constant line, over
+// all cells: about three times as long again for each relaxation (measured by
+// BenchmarkStep of package fdtd).
+func (p *planned) slowdown() float64 {
+	cells, work := 0.0, 0.0
+	for k, n := range p.grid.grid.Cells {
+		cells += float64(n)
+		work += float64(n) * (1 + 3*float64(relaxations(p.net.Sections[k])))
+	}
+	return work / cells
+}
+
+// relaxations is how many of its two laws, series and shunt, a section has to
+// relax.
+func relaxations(s network.Section) int {
+	n := 0
+	if s.Dispersion.Skin != 0 {
+		n++
+	}
+	if s.Dispersion.Delta != 0 {
+		n++
+	}
+	return n
 }
 
 // settlePeriods predicts the settling run: the rule of fdtd.Settle with
@@ -139,5 +164,9 @@ func (p *planned) bytes(lanes float64) float64 {
 	cells := float64(g.TotalCells())
 	points := math.Min(2*cells, 2*4096*float64(len(g.Cells)))
 	recorder := math.Min(points*float64(g.StepsPerPeriod), 8<<20) * 8
-	return cells*(16+16*lanes+16) + points*16*8 + recorder + 3*16<<20
+	poles := 0.0
+	for k, n := range g.Cells {
+		poles += float64(n*relaxations(p.net.Sections[k])) * 11 // nine poles, their sum and the field
+	}
+	return cells*(16+16*lanes+16) + poles*8*lanes + points*16*8 + recorder + 3*16<<20
 }
