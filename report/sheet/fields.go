@@ -14,6 +14,7 @@ func (b *Book) Overline(s string) {
 
 // Title writes the title of the document.
 func (b *Book) Title(s string) {
+	b.outline("Summary", 0, 0) // an outline must begin with its first level
 	b.lines(TitleStyle, s)
 	b.Block(4, func(c draw.Canvas) {
 		rule(c, c.Min.X.Points(), c.Max.X.Points(), c.Min.Y.Points(), 1.4)
