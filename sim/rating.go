@@ -16,7 +16,7 @@ func (s *solved) ratings() []record.Rating {
 	for k, sec := range s.design.Sections {
 		peaks := s.stress.Sections[k]
 		if l := sec.Rating.Voltage; l != nil {
-			r := s.rating(sec.Name, "voltage", "V", sec.Rating, l)
+			r := s.rating(sec.Name, "voltage", "V", sec.Rating.MarginDB, l, sec.Rating.VoltageSource)
 			r.steady(s.exact.voltage[k].largest, s.found.voltage[k].largest, b.ends[k][0])
 			r.peak(peaks.Voltage, s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Voltage.Value }).spread)
 			r.judge()
@@ -24,7 +24,7 @@ func (s *solved) ratings() []record.Rating {
 			out = append(out, r.Rating)
 		}
 		if l := sec.Rating.Current; l != nil {
-			r := s.rating(sec.Name, "current", "A", sec.Rating, l)
+			r := s.rating(sec.Name, "current", "A", sec.Rating.MarginDB, l, sec.Rating.CurrentSource)
 			r.steady(s.exact.current[k].largest, s.found.current[k].largest, b.ends[k][1])
 			r.peak(peaks.Current, s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Current.Value }).spread)
 			r.judge()
@@ -49,11 +49,11 @@ type rated struct {
 	steadySpread, peakSpread float64
 }
 
-func (s *solved) rating(section, quantity, unit string, r design.Rating, l *design.Limit) rated {
+func (s *solved) rating(section, quantity, unit string, marginDB float64, l *design.Limit, source string) rated {
 	return rated{Rating: record.Rating{
 		Section: section, Quantity: quantity, Unit: unit,
-		Rated: l.SI, Text: l.Text, Source: r.Source,
-		Derating: r.MarginDB, Allowed: l.SI * math.Pow(10, -r.MarginDB/20),
+		Rated: l.SI, Text: l.Text, Source: source,
+		Derating: marginDB, Allowed: l.SI * math.Pow(10, -marginDB/20),
 	}}
 }
 

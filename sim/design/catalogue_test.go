@@ -1,9 +1,12 @@
 package design
 
 import (
+	"bytes"
+	"fmt"
 	"go/ast"
 	"go/parser"
 	"go/token"
+	"io/fs"
 	"path/filepath"
 	"regexp"
 	"strconv"
@@ -35,9 +38,33 @@ func TestEveryProblemIsShown(t *testing.T) {
 	}
 }
 
-// toldOfOddBytes is what is told of files that no editor would keep.
+// toldOfOddBytes is what is told of files that no editor would keep, and of
+// folders that no test can bring about everywhere.
 func toldOfOddBytes(t *testing.T) string {
-	return rendered(t, "x", make([]byte, maxBytes+1))
+	comment := append([]byte("!"), bytes.Repeat([]byte("-"), 4<<20-20)...)
+	large := func(string) ([]byte, error) { return append(comment, "\n# MHz\n10 0 0\n"...), nil }
+	locked := func(path string) ([]byte, error) {
+		return nil, &fs.PathError{Op: "open", Path: "/elsewhere/" + path, Err: fs.ErrPermission}
+	}
+	said := told(t, "x", withFiles(1), locked)
+	if strings.Contains(said, "elsewhere") {
+		t.Errorf("a path of this machine is told of: %s", said)
+	}
+	return said + told(t, "x", withFiles(5), large) + told(t, "x", withFiles(1), nil) +
+		rendered(t, "x", make([]byte, maxBytes+1))
+}
+
+// withFiles is a design that refers to some files.
+func withFiles(n int) []byte {
+	var b strings.Builder
+	b.WriteString("format: 1\nrecord: {title: T, number: 1}\n" +
+		"source: {at: tx, frequency: 10 MHz, emf: 1 V peak, impedance: 50 ohm}\n" +
+		"lines: {coax: {z0: 50 ohm, velocity_factor: 0.66}}\n" +
+		"sections: {main: {from: tx, to: mast, length: 20 m, line: coax}}\nloads:\n")
+	for i := range n {
+		fmt.Fprintf(&b, "  a%d: {at: mast, file: a%d.s1p}\n", i, i)
+	}
+	return []byte(b.String())
 }
 
 func wordsOfProblems(t *testing.T) map[string]token.Position {

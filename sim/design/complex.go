@@ -26,15 +26,15 @@ func (c Convention) sign() float64 {
 	return 1
 }
 
-// parseComplex reads an impedance in one of its three written forms and
-// returns it in the engineering convention:
+// parseComplex reads an impedance or an admittance, as d says, in one of its
+// three written forms and returns it in the engineering convention:
 //
 //	36.5 - j61.1 ohm    36.5-61.1j ohm    71.2 ohm at -59.1 deg
 //
 // Either part may be missing. Under the physics convention the letter is i.
-func parseComplex(text string, c Convention) (complex128, *fault) {
+func parseComplex(text string, d *dimension, c Convention) (complex128, *fault) {
 	if size, at, polar := strings.Cut(text, " at "); polar {
-		return parsePolar(strings.TrimSpace(size), strings.TrimSpace(at), c)
+		return parsePolar(strings.TrimSpace(size), strings.TrimSpace(at), d, c)
 	}
 	s := complexScanner{rest: text}
 	re, im, f := s.parts()
@@ -44,7 +44,7 @@ func parseComplex(text string, c Convention) (complex128, *fault) {
 	if s.letter != "" && s.letter != c.letter() {
 		return 0, wrongLetter(text, s, c)
 	}
-	u, f := resistance.unit(strings.Join(strings.Fields(s.rest), " "), text)
+	u, f := d.unit(strings.Join(strings.Fields(s.rest), " "), text)
 	if f != nil {
 		return 0, f
 	}
@@ -56,8 +56,8 @@ func parseComplex(text string, c Convention) (complex128, *fault) {
 	return complex(r, c.sign()*x+0), f
 }
 
-func parsePolar(size, at string, c Convention) (complex128, *fault) {
-	q, f := parseQuantity(size, resistance)
+func parsePolar(size, at string, d *dimension, c Convention) (complex128, *fault) {
+	q, f := parseQuantity(size, d)
 	if f != nil {
 		return 0, f
 	}
@@ -66,7 +66,7 @@ func parsePolar(size, at string, c Convention) (complex128, *fault) {
 		return 0, f
 	}
 	if q.value < 0 {
-		return 0, newFault(say("turn the angle by 180 deg instead"), "the size %q of an impedance is negative", size)
+		return 0, newFault(say("turn the angle by 180 deg instead"), "the size %q of a complex value is negative", size)
 	}
 	return rect(q.value, c.sign()*phase.value), nil
 }

@@ -34,7 +34,7 @@ func TestComplex(t *testing.T) {
 		"71.2 ohm at 1 rad":     cmplx.Rect(71.2, 1),
 		"71.2 ohm at -59.1 deg": cmplx.Rect(71.2, -59.1*math.Pi/180),
 	} {
-		got, f := parseComplex(text, Engineering)
+		got, f := parseComplex(text, resistance, Engineering)
 		if f != nil {
 			t.Errorf("%q: %s", text, f.message)
 			continue
@@ -43,7 +43,7 @@ func TestComplex(t *testing.T) {
 			t.Errorf("%q = %v, want %v", text, got, want)
 		}
 		physics := strings.ReplaceAll(text, "j", "i")
-		if got, f := parseComplex(physics, Physics); f != nil || cmplx.Abs(got-cmplx.Conj(want)) > polarTol*cmplx.Abs(want) {
+		if got, f := parseComplex(physics, resistance, Physics); f != nil || cmplx.Abs(got-cmplx.Conj(want)) > polarTol*cmplx.Abs(want) {
 			t.Errorf("physics %q = %v, want %v", physics, got, cmplx.Conj(want))
 		}
 	}
@@ -55,7 +55,7 @@ func TestComplexRefused(t *testing.T) {
 		"50 + i3 ohm", "50 + k3 ohm", "50 ohm + j3 ohm", "50 ohm at", "50 ohm at 30", "at 30 deg", "-5 ohm at 30 deg",
 		"nan + j3 ohm", "1_0 ohm", "50 +- j3 ohm", "50 + j-3 ohm", "jj3 ohm", "3jj ohm", "j3j ohm", "short", "50 V peak",
 	} {
-		if z, f := parseComplex(text, Engineering); f == nil {
+		if z, f := parseComplex(text, resistance, Engineering); f == nil {
 			t.Errorf("%q is taken for %v", text, z)
 		}
 	}
@@ -79,12 +79,12 @@ func TestComplexForms(t *testing.T) {
 			if tiny(r) || tiny(x) {
 				continue // refused as too small
 			}
-			if got, f := parseComplex(text, Engineering); f != nil || got != want {
+			if got, f := parseComplex(text, resistance, Engineering); f != nil || got != want {
 				t.Fatalf("%q = %v, want %v", text, got, want)
 			}
 		}
 		polar := fmt.Sprintf("%.15g ohm at %.15g rad", cmplx.Abs(want), cmplx.Phase(want))
-		if got, f := parseComplex(polar, Engineering); f == nil && cmplx.Abs(got-want) > halfDigit*cmplx.Abs(want) {
+		if got, f := parseComplex(polar, resistance, Engineering); f == nil && cmplx.Abs(got-want) > halfDigit*cmplx.Abs(want) {
 			t.Fatalf("%q = %v, want %v", polar, got, want)
 		}
 	})
@@ -108,7 +108,7 @@ func TestWrongLetter(t *testing.T) {
 		{"3 + 5e-1j ohm", Physics, "would mean 3 - 5e-1i ohm;"},
 		{"5e-1j ohm", Physics, "would mean -5e-1i ohm;"},
 	} {
-		_, f := parseComplex(tt.text, tt.c)
+		_, f := parseComplex(tt.text, resistance, tt.c)
 		if f == nil || !strings.Contains(f.message, tt.want) {
 			t.Errorf("%q under %s: %v, want %q", tt.text, tt.c, f, tt.want)
 			continue
@@ -116,8 +116,8 @@ func TestWrongLetter(t *testing.T) {
 		// What it is said to mean is what it means under the other convention.
 		_, meant, _ := strings.Cut(f.message, "would mean ")
 		meant, _, _ = strings.Cut(meant, ";")
-		z, f1 := parseComplex(meant, tt.c)
-		w, f2 := parseComplex(tt.text, tt.c.other())
+		z, f1 := parseComplex(meant, resistance, tt.c)
+		w, f2 := parseComplex(tt.text, resistance, tt.c.other())
 		if f1 != nil || f2 != nil || z != w {
 			t.Errorf("%q is said to mean %q: %v and %v", tt.text, meant, w, z)
 		}
@@ -130,7 +130,7 @@ func FuzzComplex(f *testing.F) {
 	}
 	f.Fuzz(func(t *testing.T, text string) {
 		for _, c := range []Convention{Engineering, Physics} {
-			z, fault := parseComplex(text, c)
+			z, fault := parseComplex(text, resistance, c)
 			if fault != nil {
 				fault.hint()
 			} else if cmplx.IsNaN(z) || cmplx.Abs(z) > 2*largest {

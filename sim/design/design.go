@@ -86,7 +86,8 @@ type Source struct {
 // Impedance is a lumped impedance as given.
 type Impedance struct {
 	Pos  Pos
-	Text string // the value or parts as written, "28 ohm, 29.2 nH"
+	Text string // the value or parts as written, "28 ohm, 29.2 nH"; with what it was read from
+	From string // for what was read from a table or a file: "the table" or the file's name
 	Kind ImpedanceKind
 	Z    complex128 // for Complex, ohm at the design frequency, engineering convention
 	R    float64    // for SeriesParts, ohm; what q or esr adds is in it
@@ -205,12 +206,13 @@ func (p FitPoint) Residual() float64 { return p.Fitted/p.Given - 1 }
 
 // Rating is what a line, or a section of it, stands. A nil limit was not given.
 type Rating struct {
-	Voltage, Current *Limit  // SI: peak
-	MarginDB         float64 // to be kept below the limits: allowed is limit 10^(-MarginDB/20)
-	Source           string  // where it comes from: "line coax", "section main", "cable table"; "" without limits
+	Voltage, Current *Limit // SI: peak
+	// Where the limits come from: "line coax", "section main" or CableTable.
+	VoltageSource, CurrentSource string
+	MarginDB                     float64 // to be kept below the limits: allowed is limit 10^(-MarginDB/20)
 }
 
-// CableTable is the Source of a rating that the cable table gives.
+// CableTable is the source of a rating that the cable table gives.
 const CableTable = "cable table"
 
 // Section is a piece of line. Its rating is its own where it gives one, and for

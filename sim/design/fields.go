@@ -83,7 +83,7 @@ func (f *fields) checkChoice(c choice) {
 func (f *fields) checkForm(form form, given string) {
 	for _, need := range form.need {
 		if _, ok := f.at[need]; !ok {
-			f.w.problem(f.at[given].key.pos, noHint, "missing %q in %s, which goes with %q", need, f.what, given)
+			f.w.problem(f.at[given].key.pos, example(f.table, need), "missing %q in %s, which goes with %q", need, f.what, given)
 		}
 	}
 }
@@ -149,5 +149,12 @@ var examples = map[string]string{
 	"source.at": "tx", "source.frequency": "1.6 MHz", "source.impedance": "50 ohm",
 	"start.profile": "abrupt", "stop.at": "15 us",
 	"loss.at": "10 MHz", "loss.attenuation": "2.0 dB/100m",
-	"section.length": "85 m", "load.at": "mast",
+	"section.length": "85 m", "load.at": "mast", "element.ratio": "1:4; other parts between two junctions have between: [a, b]",
+	"loss_point.at": "10 MHz", "loss_point.attenuation": "2.0 dB/100m",
+	"impedance_point.at": "90 MHz", "impedance_point.impedance": "28 + j10 ohm",
+	"coax.inner_diameter": "5.5 mm", "coax.outer_diameter": "16 mm",
+	"two_wire.diameter": "2 mm", "two_wire.spacing": "150 mm",
+	"wire_over_ground.diameter": "4 mm", "wire_over_ground.height": "3 m",
+	"microstrip.width": "3 mm", "microstrip.height": "1.6 mm",
+	"stripline.width": "1 mm", "stripline.ground_spacing": "2 mm",
 }

@@ -25,8 +25,8 @@ func FuzzLoad(f *testing.F) {
 		}
 	}
 	f.Fuzz(func(t *testing.T, src []byte) {
-		file, err := Load("f.yaml", src)
-		again, err2 := Load("f.yaml", src)
+		file, err := LoadWith("f.yaml", src, openIn(filesDir))
+		again, err2 := LoadWith("f.yaml", src, openIn(filesDir))
 		if diff := cmp.Diff(file, again); diff != "" {
 			t.Errorf("loads differently the second time:\n%s", diff)
 		}

@@ -61,7 +61,12 @@ func TestBadDesigns(t *testing.T) {
 // rendered loads a bad design and returns what is told.
 func rendered(t *testing.T, name string, src []byte) string {
 	t.Helper()
-	_, err := Load(name, src)
+	return told(t, name, src, openIn(filesDir))
+}
+
+func told(t *testing.T, name string, src []byte, open func(string) ([]byte, error)) string {
+	t.Helper()
+	_, err := LoadWith(name, src, open)
 	ds, ok := err.(Diagnostics)
 	if !ok {
 		t.Fatalf("loaded, or gave an error that is not Diagnostics: %v", err)

@@ -39,8 +39,8 @@ func (d *Design) parts() (parts []part) {
 	return parts
 }
 
-// checkConnected tells of what no path of sections and closed bridging
-// elements ties to the source. A part at a junction of an untied section is
+// checkConnected tells of what no path of sections, closed bridging
+// elements and transformers ties to the source. A part at a junction of an untied section is
 // not told of: tying the section ties it.
 func (w *walker) checkConnected() {
 	d := w.design
@@ -112,29 +112,6 @@ func (w *walker) checkMatched() {
 	}
 }
 
-// ground is the return conductor, which no junction can be called.
-const ground = "return conductor"
-
-// checkIdealLoops tells of loops of branches without any impedance, in which
-// the current is undefined.
-func (w *walker) checkIdealLoops() {
-	d := w.design
-	tied := newGroups()
-	if d.Source.Impedance.ideal() {
-		tied.join(d.Source.At, ground)
-	}
-	for _, p := range d.parts() {
-		to := p.To
-		if to == "" {
-			to = ground
-		}
-		if p.Impedance.ideal() && !tied.join(p.At, to) {
-			w.problem(p.Impedance.Pos, say("give it or another branch of the loop an impedance, or take it away"),
-				"%s %q closes a loop of branches without impedance, in which the current is undefined", p.kind, p.Name)
-		}
-	}
-}
-
 // checkResistance tells of a design in which nothing takes energy away.
 func (w *walker) checkResistance() {
 	d := w.design
@@ -143,7 +120,7 @@ func (w *walker) checkResistance() {
 		lossy = lossy || s.Constants.R > 0 || s.Constants.G > 0
 	}
 	for _, p := range d.parts() {
-		lossy = lossy || p.Impedance.resistance() > 0
+		lossy = lossy || p.Impedance.resistive()
 	}
 	if !lossy {
 		w.problem(d.Source.Pos, say("give the source its impedance or the lines their loss"),
@@ -152,13 +129,14 @@ func (w *walker) checkResistance() {
 }
 
 // checkFrequency tells of reactances in a case that changes the frequency:
-// a complex value is known at one frequency only.
+// a complex value is known at one frequency only. Tables and files are read
+// again at the other.
 func (w *walker) checkFrequency() {
 	if w.base == nil || w.base.design.Source.Frequency.SI == w.design.Source.Frequency.SI {
 		return
 	}
 	told := func(z Impedance, what string) {
-		if z.Kind == Complex && imag(z.Z) != 0 && !w.patch.covers(z.Pos) {
+		if z.Kind == Complex && z.From == "" && imag(z.Z) != 0 && !w.patch.covers(z.Pos) {
 			w.problem(z.Pos, say("give r, l and c parts, or its value at the frequency of the case in the case"),
 				"the case changes the frequency, but the impedance of %s is a complex value, known at one frequency only", rawText(what))
 		}
@@ -187,14 +165,11 @@ func (g groups) root(j string) string {
 	}
 }
 
-// join ties two junctions; it reports false if they were tied already.
-func (g groups) join(a, b string) bool {
-	a, b = g.root(a), g.root(b)
-	if a == b {
-		return false
+// join ties two junctions.
+func (g groups) join(a, b string) {
+	if a, b = g.root(a), g.root(b); a != b {
+		g[a] = b
 	}
-	g[a] = b
-	return true
 }
 
 func (g groups) same(a, b string) bool { return g.root(a) == g.root(b) }

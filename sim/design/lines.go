@@ -2,7 +2,6 @@ package design
 
 import (
 	"fmt"
-	"math"
 	"strings"
 
 	"linewitness/sim/line"
@@ -20,78 +19,77 @@ func (w *walker) walkLines(items []item) {
 			continue
 		}
 		l := Line{Pos: i.name.pos, Name: i.name.text}
-		if _, ok := i.fields.at["z0"]; ok {
-			w.nominalLine(i.fields, &l)
-		} else {
-			w.constantLine(i.fields, &l)
-		}
-		l.Base, l.Model = l.Constants, Constant
+		w.walkLine(i.fields, &l)
+		l.Rating = i.fields.rating("line "+l.Name, l.Rating)
 		w.design.Lines = append(w.design.Lines, l)
 		w.lines[l.Name] = &l
 	}
 }
 
-func (w *walker) nominalLine(f *fields, l *Line) {
-	z0, _ := f.value("z0", resistance, positive)
-	vf, n, ok := f.quantity("velocity_factor", fraction)
-	if !ok {
-		return
+func (w *walker) walkLine(f *fields, l *Line) {
+	var known known
+	var ok bool
+	switch {
+	case f.has("cable"):
+		known, ok = f.cable(l)
+	case f.has("geometry"):
+		known, ok = f.geometry(l)
+	case f.firstOf(lineChoice.forms[0].keys) != "":
+		known, ok = f.nominal(l)
+	default:
+		known, ok = f.constants(l)
 	}
-	if vf.value <= 0 || vf.value > 1 {
-		w.problem(n.pos, say("it is the phase velocity over that of light, such as 0.66"),
-			"%s must be above 0 and at most 1, not %q", f.name("velocity_factor"), n.text)
-		return
-	}
-	l.Nominal = &Nominal{Z0: z0.SI, VelocityFactor: vf.value}
-	l.Text = fmt.Sprintf("z0 %s, velocity factor %s", z0.Text, n.text)
-	if loss := f.node("loss"); loss != nil {
-		w.walkLoss(w.fields(loss, f.at["loss"].key.pos, "the loss of "+f.what, lossTable), l)
-	}
-	if freq := w.design.Source.Frequency.SI; freq > 0 && z0.SI > 0 {
-		l.Constants = l.Nominal.At(freq)
+	asked := Model(f.oneOf("model", string(Constant), string(Dispersive)))
+	if ok {
+		f.model(l, known, asked)
 	}
 }
 
-func (w *walker) walkLoss(f *fields, l *Line) {
-	if f == nil {
-		return
+// reference is the frequency at which the data of lines hold: that of the
+// nominal design, also in a case that changes the frequency, because the same
+// cable is in it. It is 0 if the source did not read well.
+func (w *walker) reference() float64 {
+	if w.base != nil {
+		return w.base.design.Source.Frequency.SI
 	}
-	at, ok1 := f.value("at", frequency, positive)
-	attenuation, ok2 := f.value("attenuation", fading, notNegative)
-	if !ok1 || !ok2 {
-		return
-	}
-	l.Nominal.LossAt, l.Nominal.Attenuation = at.SI, attenuation.SI
-	l.Text += fmt.Sprintf(", %s at %s", attenuation.Text, at.Text)
-	share, n, ok := f.quantity("dielectric_share", fraction)
-	if !ok {
-		return
-	}
-	if share.value < 0 || share.value > 1 {
-		w.problem(n.pos, say("it is the part of the loss that is in the dielectric"), "%s must be from 0 to 1, not %q", f.name("dielectric_share"), n.text)
-	}
-	l.Nominal.DielectricShare = share.value
-	l.Text += fmt.Sprintf(", dielectric share %s", n.text)
+	return w.design.Source.Frequency.SI
 }
 
-func (w *walker) constantLine(f *fields, l *Line) {
+// constants reads a line of r, l, g and c.
+func (f *fields) constants(l *Line) (known, bool) {
 	r, _ := f.value("r", seriesR, notNegative)
 	ind, _ := f.value("l", seriesL, positive)
 	g, _ := f.value("g", shuntG, notNegative)
 	c, _ := f.value("c", shuntC, positive)
-	l.Constants = line.Constants{R: r.SI, L: ind.SI, G: g.SI, C: c.SI}
 	var text []string
 	for i, v := range []Value{r, ind, g, c} {
 		if v.Text != "" {
 			text = append(text, "rlgc"[i:i+1]+" "+v.Text)
+			l.given("rlgc"[i:i+1], v.Text)
 		}
 	}
 	l.Text = strings.Join(text, ", ")
 	if ind.SI <= 0 || c.SI <= 0 {
-		return
+		return known{}, false
 	}
-	if v := 1 / (math.Sqrt(ind.SI) * math.Sqrt(c.SI)); v > line.C0*(1+lightTolerance) {
-		w.problem(ind.Pos, say("l times c is at least 1.1127e-17 s2/m2; check the unit prefixes and lengths"),
+	k := line.Constants{R: r.SI, L: ind.SI, G: g.SI, C: c.SI}
+	if v := k.FrontVelocity(); v > line.C0*(1+lightTolerance) {
+		f.w.problem(ind.Pos, say("l times c is at least 1.1127e-17 s2/m2; check the unit prefixes and lengths"),
 			"%s is faster than light: 1/sqrt(l c) is %.4g times c", f.what, v/line.C0)
 	}
+	return known{Constants: k}, true
+}
+
+// given adds a value that the file gives to the pedigree of a line.
+func (l *Line) given(what, text string) { l.trace(what, text, GivenInDesign, "") }
+
+// assumed adds a default to the pedigree of a line.
+func (l *Line) assumed(what, text, note string) { l.trace(what, text, Assumed, note) }
+
+func (l *Line) trace(what, text string, kind Origin, note string) {
+	l.Pedigree = append(l.Pedigree, Provenance{what, text, kind, note})
+}
+
+func (l *Line) warn(format string, args ...any) {
+	l.Warnings = append(l.Warnings, fmt.Sprintf(format, args...))
 }

@@ -197,7 +197,7 @@ var prose = map[string]bool{
 
 var allDimensions = []*dimension{
 	frequency, length, timeSpan, voltage, current, power, resistance, inductance, capacity, angle,
-	seriesR, seriesL, shuntG, shuntC, fading, percentage, fraction, vswrRatio, reflected, level, spread,
+	seriesR, seriesL, shuntG, shuntC, fading, admittance, slowing, size, conductivity, plain, percentage, fraction, vswrRatio, reflected, level, spread,
 }
 
 // FuzzQuantity: no text makes the parser panic or return what is not finite,

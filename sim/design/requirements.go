@@ -186,7 +186,7 @@ func (f *fields) circle(key string) *Circle {
 	q, fault := parseQuantity(strings.TrimSpace(size), spread)
 	c := &Circle{Text: n.text, Pos: n.pos}
 	if fault == nil {
-		c.Of, fault = parseComplex(strings.TrimSpace(of), f.w.design.Convention)
+		c.Of, fault = parseComplex(strings.TrimSpace(of), resistance, f.w.design.Convention)
 	}
 	if fault != nil {
 		f.w.fault(n, f.name(key), fault)

@@ -125,7 +125,8 @@ func TestSchemaKeys(t *testing.T) {
 	}
 	tables := []*table{
 		fileTable, recordTable, sourceTable, seriesTable, startTable, stopTable, lineTable, lossTable,
-		sectionTable, loadTable, elementTable, caseTable, gridTable, windowTable,
+		lossPointTable, ratingTable, geometryTable, coaxTable, twoWireTable, wireOverGroundTable, microstripTable, striplineTable,
+		sectionTable, loadTable, elementTable, memberTable, lumpedTable, impedancePointTable, caseTable, gridTable, windowTable,
 	}
 	for _, q := range quantities {
 		tables = append(tables, q.table)

@@ -18,6 +18,7 @@ func (w *walker) walkSections(items []item) {
 		if l != nil {
 			s.Line, s.Constants, s.Base, s.Dispersion = l.Name, l.Constants, l.Base, l.Dispersion
 		}
+		s.Rating = i.fields.sectionRating(s.Name, l)
 		s.Length = w.sectionLength(i.fields, s.Name, l)
 		w.lengths[s.Name] = s.Length
 		w.design.Sections = append(w.design.Sections, s)
@@ -68,10 +69,11 @@ func (w *walker) sectionLength(f *fields, name string, l *Line) Value {
 	return v
 }
 
-// wavelength is that of the line at a frequency, m.
+// wavelength is that of the line at the design frequency f, m. Where z0 and
+// the velocity are nominal, it is of that velocity: the loss does not change it.
 func (l *Line) wavelength(f float64) float64 {
 	if l.Nominal != nil {
-		return l.Nominal.Wavelength(f)
+		return l.Constants.FrontVelocity() / f
 	}
 	return l.Constants.Wavelength(f)
 }

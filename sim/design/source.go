@@ -41,28 +41,6 @@ func (w *walker) available(f *fields, p Value) {
 	s.EMF = Value{SI: math.Sqrt(8 * r * p.SI), Text: p.Text + " available", Pos: p.Pos}
 }
 
-// resistance is the resistive part, ohm; that of a matched load is not known
-// here and counts as one.
-func (z Impedance) resistance() float64 {
-	switch z.Kind {
-	case SeriesParts:
-		return z.R
-	case Complex:
-		return real(z.Z)
-	case Matched:
-		return 1
-	default:
-		return 0
-	}
-}
-
-// ideal reports an impedance of exactly zero.
-func (z Impedance) ideal() bool {
-	return z.Kind == Short ||
-		z.Kind == Complex && z.Z == 0 ||
-		z.Kind == SeriesParts && z.R == 0 && z.L == 0 && z.C == 0
-}
-
 // sourceImpedance reads a complex value or series parts.
 func (f *fields) sourceImpedance() Impedance {
 	n := f.node("impedance")

@@ -73,8 +73,8 @@ var (
 		keys:    may("r", "l", "c"),
 		choices: []choice{{required: true, forms: []form{{keys: []string{"r", "l", "c"}}}}},
 	}
-	startTable = &table{def: "start", keys: append(must("profile"), may("rise", "phase")...)}
-	stopTable  = &table{def: "stop", keys: append(must("at"), may("fall")...)}
+	startTable  = &table{def: "start", keys: append(must("profile"), may("rise", "phase")...)}
+	stopTable   = &table{def: "stop", keys: append(must("at"), may("fall")...)}
 	caseTable   = &table{def: "case", keys: may("source", "lines", "sections", "loads", "elements")}
 	gridTable   = &table{def: "grid", keys: may("cells_per_wavelength", "settle_tolerance", "agreement", "max_periods")}
 	windowTable = &table{

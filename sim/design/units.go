@@ -61,13 +61,19 @@ var (
 	resistance = &dimension{"resistance", prefixed("ohm", "", "m", "k", "M"), "ohm, mohm, kohm, Mohm", "50 ohm"}
 	inductance = &dimension{"inductance", prefixed("H", "", "m", "u", "n", "p"), "H, mH, uH, nH, pH", "1.2 uH"}
 	capacity   = &dimension{"capacitance", prefixed("F", "", "m", "u", "n", "p"), "F, mF, uF, nF, pF", "120 pF"}
+	admittance = &dimension{"admittance", prefixed("S", "", "m", "u", "n"), "S, mS, uS, nS", "8 mS"}
 	angle      = &dimension{"angle", merged(units(si, 0, degree, "deg"), units(si, 0, 1, "rad")), "deg, rad", "30 deg"}
 
 	seriesR = &dimension{"resistance per length", perLength("ohm", "", "m", "u", "k"), "ohm/m, mohm/m, uohm/m, kohm/m, or the same per km or per ft", "20 mohm/m"}
 	seriesL = &dimension{"inductance per length", perLength("H", "", "m", "u", "n"), "H/m, mH/m, uH/m, nH/m, or the same per km or per ft", "1.7 uH/m"}
 	shuntG  = &dimension{"conductance per length", perLength("S", "", "m", "u", "n", "p"), "S/m, mS/m, uS/m, nS/m, pS/m, or the same per km or per ft", "2 nS/m"}
 	shuntC  = &dimension{"capacitance per length", perLength("F", "", "u", "n", "p"), "F/m, uF/m, nF/m, pF/m, or the same per km or per ft", "6.7 pF/m"}
+	slowing = &dimension{"delay per length", perLength("s", "u", "n", "p"), "ns/m, us/m, ps/m, or the same per km or per ft", "5.05 ns/m"}
 	fading  = &dimension{"attenuation", attenuations(), "dB/m, dB/100m, dB/km, dB/ft, dB/100ft, Np/m, Np/km", "2.0 dB/100m"}
+
+	size         = &dimension{"dimension", sizes(), "mm, m, cm, um, in, mil, ft", "5.5 mm"}
+	conductivity = &dimension{"conductivity", prefixed("S/m", "", "m", "k", "M"), "S/m, mS/m, kS/m, MS/m", "58 MS/m"}
+	plain        = &dimension{"ratio", units(bare, 0, 1, ""), "a plain number", "2.25"}
 
 	percentage = &dimension{"percentage", units(percent, -2, 1, "%"), "%", "0.5 %"}
 	fraction   = &dimension{"ratio", merged(units(bare, 0, 1, ""), units(percent, -2, 1, "%")), "a plain number or %", "0.66"}
@@ -115,6 +121,12 @@ func lengthUnits() map[string]unit {
 		units(si, 0, metresPerInch, "in"),
 		units(wavelengths, 0, 1.0/360, "deg"), units(wavelengths, 0, 1, "wavelengths", "wavelength"),
 		units(delay, -6, 1, "us"), units(delay, -9, 1, "ns"), units(delay, -12, 1, "ps"))
+}
+
+// sizes are the units of the dimensions of a line.
+func sizes() map[string]unit {
+	return merged(prefixed("m", "", "m", "u"), units(si, -2, 1, "cm"),
+		units(si, 0, metresPerInch, "in"), units(si, -3, metresPerInch, "mil"), units(si, 0, metresPerFoot, "ft"))
 }
 
 func amplitudes(base string) map[string]unit {

@@ -23,6 +23,9 @@ func (f *fields) scalar(key string) *node {
 // name is how diagnostics call the value of a key: length of section "main".
 func (f *fields) name(key string) string { return key + " of " + f.what }
 
+// has reports whether a key is given.
+func (f *fields) has(key string) bool { _, ok := f.at[key]; return ok }
+
 // text returns the value of a key as text.
 func (f *fields) text(key string) string {
 	if n := f.scalar(key); n != nil {
@@ -112,4 +115,29 @@ func (f *fields) number(key string) (v float64, n *node, ok bool) {
 		f.w.fault(n, f.name(key), fault)
 	}
 	return v, n, fault == nil
+}
+
+// rows reads a list of mappings of one kind; ok is false if one does not read.
+func (f *fields) rows(key string, n *node, t *table, most int) (rows []*fields, ok bool) {
+	if !f.w.isKind(n, f.name(key), list) {
+		return nil, false
+	}
+	switch {
+	case len(n.items) == 0:
+		f.w.problem(n.pos, noHint, "%s has no rows", f.name(key))
+		return nil, false
+	case len(n.items) > most:
+		f.w.problem(n.items[most].pos, say("thin it out"), "%s has more than %d rows", f.name(key), most)
+		return nil, false
+	}
+	ok = true
+	for _, item := range n.items {
+		row := f.w.fields(item, item.pos, "a row of "+f.name(key), t)
+		if row == nil {
+			ok = false
+			continue
+		}
+		rows = append(rows, row)
+	}
+	return rows, ok
 }

@@ -6,8 +6,9 @@ import "slices"
 // every case, merged with it.
 type walker struct {
 	*problems
-	patch *patch  // the case; nil for the nominal design
-	base  *walker // the walker of the nominal design; nil in itself
+	folder *folder
+	patch  *patch  // the case; nil for the nominal design
+	base   *walker // the walker of the nominal design; nil in itself
 
 	design *Design
 	file   *fields // the whole file as merged
@@ -73,9 +74,26 @@ func (w *walker) walk(root *node) *fields {
 	w.design.Elements = w.walkParts(w.elements, "element")
 	w.design.Junctions = w.junctions()
 	w.checkUnique()
+	w.gatherWarnings()
 	w.whole = !w.flawed
 	w.checkNetwork()
 	return file
+}
+
+// gatherWarnings lists what is worth a warning, with what it is about.
+func (w *walker) gatherWarnings() {
+	d := w.design
+	add := func(kind, name string, warnings []string) {
+		for _, text := range warnings {
+			d.Warnings = append(d.Warnings, kind+" "+name+": "+text)
+		}
+	}
+	for _, l := range d.Lines {
+		add("line", l.Name, l.Warnings)
+	}
+	for _, p := range d.parts() {
+		add(p.kind, p.Name, p.Warnings)
+	}
 }
 
 // junctions lists the junctions in the order in which the source, the
