@@ -27,9 +27,8 @@ func (f *fields) cable(l *Line) (known, bool) {
 	l.listed("velocity factor", fmt.Sprintf("%g", c.VelocityFactor))
 	l.warn("%s is taken from the cable table: its values are nominal and from memory; replace them by the sheet of the cable in hand", c.Type)
 	if c.Capacitance > 0 {
-		text := fmt.Sprintf("%g pF/m", round(c.Capacitance*1e12))
-		l.listed("capacitance", text)
-		l.mismatch(c.Capacitance, text, c.VelocityFactor)
+		l.listed("capacitance", fmt.Sprintf("%g pF/m", round(c.Capacitance*1e12)))
+		l.warnOf(line.CapacitanceWarning(c.Z0, c.VelocityFactor, c.Capacitance))
 	}
 	f.cableLoss(l, c)
 	f.cableRating(n, l, c)

@@ -90,6 +90,13 @@ func (l *Line) trace(what, text string, kind Origin, note string) {
 	l.Pedigree = append(l.Pedigree, Provenance{what, text, kind, note})
 }
 
+// warnOf adds a warning, if there is one.
+func (l *Line) warnOf(text string) {
+	if text != "" {
+		l.Warnings = append(l.Warnings, text)
+	}
+}
+
 func (l *Line) warn(format string, args ...any) {
 	l.Warnings = append(l.Warnings, fmt.Sprintf(format, args...))
 }

@@ -15,9 +15,9 @@ type known struct {
 }
 
 // leastLeft is how much of L and C at the design frequency must be left at the
-// highest ones. Below that the skin effect has more reactance than the line's
-// outer field, which is no line of the radio kind, and the law of the root
-// does not hold for it.
+// highest ones for a line to be dispersive without being asked. Below that more
+// than half of its reactance is that of the skin effect, or of a dielectric with
+// a loss tangent above a tenth: hardly a line, and most likely a wrong unit.
 const leastLeft = 0.5
 
 // model decides how the line depends on frequency, which the file may ask for,
@@ -57,19 +57,20 @@ func (k known) at(ratio float64) line.Constants {
 // disperse gives a line the dispersive model, if it can have it.
 func (f *fields) disperse(l *Line, k known, asked Model) {
 	ref, freq := f.w.reference(), f.w.design.Source.Frequency.SI
-	base, d := line.Disperse(k.Constants, 2*math.Pi*ref, k.conductor, k.dielectric)
-	switch {
-	case base.L >= leastLeft*k.L && base.C >= leastLeft*k.C:
-	case asked == Dispersive:
-		f.w.problem(f.node("model").pos, say("write model: constant, or check the unit of the loss"),
-			"%s has too much loss at the design frequency for the laws of the dispersive model", f.what)
+	omega := 2 * math.Pi * ref
+	warning, err := line.CheckDispersion(k.Constants, omega, k.conductor, k.dielectric)
+	base, d := line.Disperse(k.Constants, omega, k.conductor, k.dielectric)
+	switch doubtful := err != nil || base.L < leastLeft*k.L || base.C < leastLeft*k.C; {
+	case asked == Dispersive && err != nil:
+		f.w.problem(f.node("model").pos, say("check the unit of the loss"), "%s cannot have the dispersive model: %s", f.what, rawText(err.Error()))
 		return
-	default:
-		l.warn("constant r, l, g, c, because the loss at the design frequency is too high for the laws of the dispersive model: check its unit")
+	case asked != Dispersive && doubtful:
+		l.warn("its loss at the design frequency is too high to be skin effect and a loss tangent, so r, l, g, c are taken as constant: check the unit of the loss")
 		l.assumed("model", "constant", "too much loss for the dispersive model")
 		return
 	}
 	l.Model, l.Base, l.Dispersion = Dispersive, base, d
+	l.warnOf(warning)
 	if freq != ref {
 		l.Constants = d.At(base, 2*math.Pi*freq)
 	}
@@ -78,11 +79,4 @@ func (f *fields) disperse(l *Line, k known, asked Model) {
 	} else {
 		l.assumed("model", "dispersive", "resistance by skin effect, conductance by a constant loss tangent")
 	}
-	if v := base.FrontVelocity() / line.C0; v > 1+frontTolerance {
-		l.warn("the wave front of the dispersive model is %.2g %% faster than light: the velocity and the loss at the design frequency do not fit each other", 100*(v-1))
-	}
 }
-
-// frontTolerance is how much faster than light a wave front may come out
-// because a velocity factor was rounded to three figures.
-const frontTolerance = 1e-3

@@ -99,10 +99,6 @@ func (f *fields) slowed(key string, d *dimension, l *Line, factorOf func(float64
 	return factor, true
 }
 
-// largestMismatch is how far a capacitance may be from 1/(z0 v) without a
-// warning: figures of a datasheet are rounded to two or three digits.
-const largestMismatch = 0.03
-
 // checkCapacitance compares the capacitance, if it is given too, with what the
 // other figures make of it: C = 1/(z0 v).
 func (f *fields) checkCapacitance(l *Line, factor float64) {
@@ -111,15 +107,7 @@ func (f *fields) checkCapacitance(l *Line, factor float64) {
 		return
 	}
 	l.tell("capacitance", c.Text)
-	l.mismatch(c.SI, c.Text, factor)
-}
-
-// mismatch warns of a capacitance that is not 1/(z0 v).
-func (l *Line) mismatch(c float64, text string, factor float64) {
-	want := 1 / (l.Nominal.Z0 * factor * line.C0)
-	if off := c/want - 1; math.Abs(off) > largestMismatch {
-		l.warn("the capacitance %s is %+.2g %% off 1/(z0 v), which is %.4g pF/m: one of the three figures is wrong", text, 100*off, want*1e12)
-	}
+	l.warnOf(line.CapacitanceWarning(l.Nominal.Z0, factor, c.SI))
 }
 
 // tell adds a value of the file to the text and the pedigree of a line.
