@@ -65,13 +65,20 @@ func (c *combiner) member(n *node, depth int) (Node, string) {
 	case f == nil:
 		return Node{}, ""
 	case f.has("series"):
-		return c.members(f.at["series"], depth+1)
+		return bracketed(c.members(f.at["series"], depth+1))
 	case f.has("parallel"):
-		node, text := c.members(f.at["parallel"], depth+1)
-		return node, "(" + text + ")"
+		return bracketed(c.members(f.at["parallel"], depth+1))
 	default:
 		return c.series(f)
 	}
+}
+
+// bracketed puts the text of a combination in brackets.
+func bracketed(n Node, text string) (Node, string) {
+	if n.leaf() {
+		return n, text
+	}
+	return n, "(" + text + ")"
 }
 
 // series is a leaf.
