@@ -5,6 +5,7 @@
 //	linewitness verify DESIGN...   solve, compare, judge; write DESIGN.pdf and DESIGN.json
 //	linewitness plan DESIGN        the grid and the predicted cost; solves nothing
 //	linewitness starter [FILE]     a commented design file to begin from
+//	linewitness cables             the cable table with its pedigree
 //	linewitness schema             the JSON Schema of the design file
 //	linewitness version            the version of this program
 //	linewitness completion SHELL   a completion script

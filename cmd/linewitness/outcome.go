@@ -20,6 +20,7 @@ func writeOutcome(w io.Writer, r *record.Record) {
 			{"settling", settlingText(c.Settling)},
 		})
 		writeTable(w, requirementRows(c.Requirements))
+		writeTable(w, ratingRows(c.Ratings))
 	}
 	if ws := warnings(r.Cases); len(ws) > 0 {
 		fmt.Fprintf(w, "\n%s\n", strings.Join(ws, "\n"))
@@ -102,6 +103,30 @@ func requirementRows(rs []record.Requirement) [][]string {
 		rows = append(rows, []string{
 			r.ID, quantity, inUnit(r.Value, r.Unit), r.Limit,
 			inUnit(r.Margin, differenceUnit(r.Unit)), spread(r.Uncertainty, differenceUnit(r.Unit)), verdict,
+		})
+	}
+	return rows
+}
+
+// mostRatings is how many ratings of a case are listed; they come worst first.
+const mostRatings = 4
+
+// ratingRows are the rows of the table of ratings, header first; there are
+// none where nothing is rated.
+func ratingRows(rs []record.Rating) [][]string {
+	if len(rs) == 0 {
+		return nil
+	}
+	rows := [][]string{{"rated", "largest", "rating", "allowed", "margin", "uncertainty", "verdict"}}
+	for i, r := range rs {
+		if i == mostRatings {
+			rows = append(rows, []string{fmt.Sprintf("and %d more, in the record", len(rs)-i)})
+			break
+		}
+		peak := r.Unit + " peak"
+		rows = append(rows, []string{
+			r.Section + " " + r.Quantity, inUnit(max(r.Steady, r.Peak), peak), r.Text,
+			inUnit(r.Allowed, peak), inUnit(r.MarginDB, "dB"), spread(r.Uncertainty, peak), string(r.Verdict),
 		})
 	}
 	return rows

@@ -88,6 +88,7 @@ compares the two, and writes a record for the design review.
   linewitness verify DESIGN...    solve, compare, judge; write DESIGN.pdf and DESIGN.json
   linewitness plan DESIGN         the grid and the predicted cost; solves nothing
   linewitness starter [FILE]      write a commented design file to begin from
+  linewitness cables              the cable table with its pedigree
   linewitness schema              the JSON Schema of the design file, for editors
   linewitness version             the version of this program
   linewitness completion SHELL    a completion script for bash, zsh, fish or powershell
@@ -125,7 +126,7 @@ func (a *app) rootCommand() *cobra.Command {
 	root.SetHelpCommand(helpCommand())
 	root.AddCommand(
 		a.verifyCommand(), a.planCommand(), a.starterCommand(),
-		a.schemaCommand(), a.versionCommand(), a.completionCommand(),
+		a.cablesCommand(), a.schemaCommand(), a.versionCommand(), a.completionCommand(),
 	)
 	return root
 }
