@@ -64,8 +64,9 @@ func written(n *node) string {
 
 // A patch that gives one form drops the inherited other form; see merge.
 func TestPatchDropsOtherForm(t *testing.T) {
-	const design = `{source: {emf: 1, start: {profile: ramp, rise: 3}}, lines: {c: {z0: 1, velocity_factor: 2, loss: 3}},
-		loads: {a: {at: m, r: 1, l: 2}, b: {at: m, impedance: 5}}, elements: {e: {at: m, c: 1}}}`
+	const design = `{source: {emf: 1, start: {profile: ramp, rise: 3}}, lines: {c: {z0: 1, velocity_factor: 2, loss: 3}, g: {geometry: {coax: {inner_diameter: 1}}}},
+		loads: {a: {at: m, r: 1, l: 2}, b: {at: m, impedance: 5}, p: {at: m, parallel: {l: 1, q: 2}}, t: {at: m, table: [x]}},
+		elements: {e: {at: m, c: 1}, b: {from: m, to: n, ratio: 2}}}`
 	for _, tt := range []struct{ patch, key, want string }{
 		{`{loads: {a: {impedance: short}}}`, "loads", `"a":{"at":"m","impedance":"short"}`},
 		{`{loads: {a: {l: 3}}}`, "loads", `"a":{"at":"m","r":"1","l":"3"}`},
@@ -77,6 +78,22 @@ func TestPatchDropsOtherForm(t *testing.T) {
 		{`{source: {start: {profile: abrupt}}}`, "source", `"start":{"profile":"abrupt"}`},
 		{`{source: {start: {rise: 4}}}`, "source", `"start":{"profile":"ramp","rise":"4"}`},
 		{`{lines: {c: {l: 1, c: 2}}}`, "lines", `"c":{"l":"1","c":"2"}`},
+		{`{loads: {a: {parallel: {r: 1, c: 2}}}}`, "loads", `"a":{"at":"m","parallel":{"r":"1","c":"2"}}`},
+		{`{loads: {a: {q: 100}}}`, "loads", `"a":{"at":"m","r":"1","l":"2","q":"100"}`},
+		{`{loads: {b: {q: 100, l: 1}}}`, "loads", `"b":{"at":"m","q":"100","l":"1"}`},
+		{`{loads: {p: {parallel: {esr: 3}}}}`, "loads", `"p":{"at":"m","parallel":{"l":"1","esr":"3"}}`},
+		{`{loads: {p: {parallel: [x, y]}}}`, "loads", `"p":{"at":"m","parallel":["x","y"]}`},
+		{`{loads: {p: {l: 3}}}`, "loads", `"p":{"at":"m","l":"3"}`},
+		{`{loads: {t: {file: x}}}`, "loads", `"t":{"at":"m","file":"x"}`},
+		{`{elements: {b: {r: 1}}}`, "elements", `"b":{"from":"m","to":"n","r":"1"}`}, // refused later
+		{`{elements: {b: {at: m, r: 1}}}`, "elements", `"b":{"at":"m","r":"1"}`},
+		{`{elements: {e: {from: m, to: n, ratio: 3}}}`, "elements", `"e":{"from":"m","to":"n","ratio":"3"}`},
+		{`{lines: {c: {delay: 5}}}`, "lines", `"c":{"z0":"1","loss":"3","delay":"5"}`},
+		{`{lines: {c: {capacitance: 5}}}`, "lines", `"c":{"z0":"1","velocity_factor":"2","loss":"3","capacitance":"5"}`},
+		{`{lines: {c: {cable: X, rating: {margin: 3}}}}`, "lines", `"c":{"cable":"X","rating":{"margin":"3"}}`},
+		{`{lines: {g: {geometry: {two_wire: {spacing: 5}}}}}`, "lines", `"g":{"geometry":{"two_wire":{"spacing":"5"}}}`},
+		{`{lines: {g: {geometry: {coax: {wall: 5}}}}}`, "lines", `"g":{"geometry":{"coax":{"inner_diameter":"1","wall":"5"}}}`},
+		{`{lines: {g: {r: 1, model: constant}}}`, "lines", `"g":{"r":"1","model":"constant"}`},
 		{`{lines: {c: {loss: null}}}`, "lines", `"c":{"z0":"1","velocity_factor":"2"}`},
 	} {
 		p := &problems{}
