@@ -158,7 +158,7 @@ func inner(t *table, parent, key string) *table {
 // nested are the mappings inside mappings in which forms exclude each other.
 var nested = map[*table]map[string]*table{
 	fileTable:    {"source": sourceTable},
-	sourceTable:  {"start": startTable},
+	sourceTable:  {"start": startTable, "impedance": seriesTable},
 	lineTable:    {"geometry": geometryTable},
 	loadTable:    {"parallel": lumpedTable, "series": lumpedTable},
 	elementTable: {"parallel": lumpedTable, "series": lumpedTable},

@@ -60,7 +60,7 @@ type Design struct {
 	Junctions    []string      // in the order in which sections, loads, elements and the source name them: source first
 	Requirements []Requirement // of the nominal design; the same in every case
 	Grid         Grid
-	Warnings     []string // of the lines and parts, each with what it is about
+	Warnings     []string // of the source, the lines and the parts, each with what it is about
 }
 
 // Record is the identity of the document.
@@ -81,6 +81,7 @@ type Source struct {
 	Impedance Impedance
 	Start     Start
 	Stop      *Stop
+	Warnings  []string
 }
 
 // Impedance is a lumped impedance as given.

@@ -43,7 +43,8 @@
 // series and parallel combinations, a table of impedances or a one-port file.
 // Admittances, tables and files become the complex impedance at the design
 // frequency; in a case at another frequency, tables and files are read there. An
-// element with a ratio is an ideal transformer.
+// element with a ratio is an ideal transformer. The impedance of the source may be
+// a table or a file too: that of the antenna whose EMF it is.
 //
 // Files are named by a path inside the folder of the design, so that a record
 // can be repeated from a copy of that folder. They are kept with the File.

@@ -226,3 +226,21 @@ func TestQualityInACaseOfOtherFrequency(t *testing.T) {
 	near(t, "the capacitor", partOf(t, d, "capacitor").Impedance.R, 1/(omega100*30e-12*1000))
 	near(t, "the coil, given anew", partOf(t, d, "coil").Impedance.R, 5+1.05*omega100*2e-6/100)
 }
+
+// A source may have the measured impedance of an antenna.
+func TestAntennaAsSource(t *testing.T) {
+	f := goodFile(t, "antenna_source.yaml")
+	s := f.Nominal.Source
+	if s.Impedance.Kind != Complex || s.Impedance.From != "antenna.s1p" || len(f.Attachments) != 1 {
+		t.Errorf("source impedance %+v", s.Impedance)
+	}
+	near(t, "R", real(s.Impedance.Z), 28)
+	near(t, "EMF", s.EMF.SI, math.Sqrt(8*28e-3))
+	near(t, "EMF at 105 MHz", caseOf(t, f, "other").Source.EMF.SI, math.Sqrt(8*35e-3))
+	if z := caseOf(t, f, "parts").Source.Impedance; z.Kind != SeriesParts || z.R != 50 {
+		t.Errorf("parts: %+v", z)
+	}
+	if z := caseOf(t, f, "typed").Source.Impedance; z.From != "the table" || real(z.Z) < 30 || real(z.Z) > 40 {
+		t.Errorf("table: %+v", z)
+	}
+}

@@ -14,7 +14,7 @@ func (w *walker) walkSource(f *fields) {
 		w.sourceAt = n.pos
 	}
 	s.Frequency, _ = f.value("frequency", frequency, positive)
-	s.Impedance = f.sourceImpedance()
+	s.Impedance, s.Warnings = f.sourceImpedance()
 	s.EMF, _ = f.value("emf", voltage, positive)
 	if p, ok := f.value("available_power", power, positive); ok {
 		w.available(f, p)
@@ -41,26 +41,30 @@ func (w *walker) available(f *fields, p Value) {
 	s.EMF = Value{SI: math.Sqrt(8 * r * p.SI), Text: p.Text + " available", Pos: p.Pos}
 }
 
-// sourceImpedance reads a complex value or series parts.
-func (f *fields) sourceImpedance() Impedance {
+// sourceImpedance reads a complex value, series parts, a table or a file.
+func (f *fields) sourceImpedance() (z Impedance, warnings []string) {
 	n := f.node("impedance")
 	if n == nil {
-		return Impedance{}
+		return Impedance{}, nil
 	}
+	word := n.text
 	if n.kind == mapping {
-		parts := f.w.fields(n, f.at["impedance"].key.pos, "the impedance of the source", seriesTable)
-		z := parts.seriesParts()
-		z.Pos = n.pos
-		return z
+		in := f.w.fields(n, f.at["impedance"].key.pos, "the impedance of the source", seriesTable)
+		if in == nil {
+			return Impedance{}, nil
+		}
+		z, warnings = in.partImpedance()
+		z.Pos, word = n.pos, "open"
+	} else {
+		z = f.impedance("impedance")
 	}
-	z := f.impedance("impedance")
 	switch z.Kind {
 	case Short:
 		f.w.problem(n.pos, say("write 0 ohm for an ideal source"), "the impedance of the source cannot be short")
 	case Open, Matched:
-		f.w.problem(n.pos, say("give a complex value or series parts {r: 50 ohm, l: 2 uH, c: 1 nF}"), "the impedance of the source cannot be %s", n.text)
+		f.w.problem(n.pos, say("give a complex value or series parts {r: 50 ohm, l: 2 uH, c: 1 nF}"), "the impedance of the source cannot be %s", word)
 	}
-	return z
+	return z, warnings
 }
 
 func (w *walker) walkStart(f *fields) Start {

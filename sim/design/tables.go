@@ -68,10 +68,13 @@ var (
 			{keys: []string{"emf"}}, {keys: []string{"available_power"}},
 		}}},
 	}
+	// seriesTable is the impedance of a source.
 	seriesTable = &table{
-		def:     "series",
-		keys:    may("r", "l", "c"),
-		choices: []choice{{required: true, forms: []form{{keys: []string{"r", "l", "c"}}}}},
+		def:  "series",
+		keys: may("r", "l", "c", "table", "file"),
+		choices: []choice{{required: true, forms: []form{
+			{keys: []string{"r", "l", "c"}}, {keys: []string{"table"}}, {keys: []string{"file"}},
+		}}},
 	}
 	startTable  = &table{def: "start", keys: append(must("profile"), may("rise", "phase")...)}
 	stopTable   = &table{def: "stop", keys: append(must("at"), may("fall")...)}

@@ -1,6 +1,9 @@
 package design
 
-import "slices"
+import (
+	"slices"
+	"strings"
+)
 
 // A walker turns nodes into one Design. It walks the nominal design and then
 // every case, merged with it.
@@ -85,9 +88,10 @@ func (w *walker) gatherWarnings() {
 	d := w.design
 	add := func(kind, name string, warnings []string) {
 		for _, text := range warnings {
-			d.Warnings = append(d.Warnings, kind+" "+name+": "+text)
+			d.Warnings = append(d.Warnings, strings.TrimSpace(kind+" "+name)+": "+text)
 		}
 	}
+	add("source", "", d.Source.Warnings)
 	for _, l := range d.Lines {
 		add("line", l.Name, l.Warnings)
 	}
