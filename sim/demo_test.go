@@ -9,6 +9,7 @@ import (
 	"testing"
 
 	"linewitness/sim/design"
+	"linewitness/sim/line"
 	"linewitness/sim/record"
 )
 
@@ -179,6 +180,9 @@ func TestHilltopFeeder(t *testing.T) {
 // for the slowest rise: the transmitter's own peak is 1040.6 V there, by this
 // program and by Fourier synthesis from the phasor solver alone, and the 1047 V
 // are the line's largest, some metres away.
+//
+// That program had lines of constant r, l, g, c, and so has this test. With the
+// skin effect of the demo as it stands the sine start peaks at 1395 V.
 func TestHilltopStart(t *testing.T) {
 	for _, tt := range []struct {
 		name  string
@@ -193,6 +197,7 @@ func TestHilltopStart(t *testing.T) {
 	} {
 		f := load(t, "hilltop-fm-feeder")
 		f.Cases = nil
+		constant(f.Nominal)
 		f.Nominal.Source.Start = tt.start
 		f.Nominal.Requirements = []design.Requirement{{
 			ID: "P", Quantity: design.PeakVoltage, At: tt.at, Section: tt.along,
@@ -202,6 +207,15 @@ func TestHilltopStart(t *testing.T) {
 		if math.Abs(q.Value/tt.peak-1) > demoTolerance {
 			t.Errorf("%s: peak %.5g V, want %.5g V (uncertainty %.2g V)", tt.name, q.Value, tt.peak, q.Uncertainty)
 		}
+	}
+}
+
+// constant gives the lines of a design the constants of its frequency
+// throughout.
+func constant(d *design.Design) {
+	for k := range d.Sections {
+		s := &d.Sections[k]
+		s.Base, s.Dispersion = s.Constants, line.Dispersion{}
 	}
 }
 

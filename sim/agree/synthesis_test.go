@@ -37,14 +37,26 @@ func feeder() *network.Network {
 // each of them, and the inverse FFT of the answers is the transient. The two
 // share nothing but the network.
 //
-// The lines have constant r, l, g, c, in both.
+// The lines have constant r, l, g, c, and then skin effect.
 func TestTransientBySynthesis(t *testing.T) {
+	t.Run("constant", func(t *testing.T) { synthesis(t, feeder()) })
+	t.Run("dispersive", func(t *testing.T) {
+		net := feeder()
+		for k := range net.Sections {
+			s := &net.Sections[k]
+			s.Line.R *= 30 // enough for the dispersion to show on 12 m
+			s.Line, s.Dispersion = line.Disperse(s.Line, net.Omega(), s.Line.R, 0)
+		}
+		synthesis(t, net)
+	})
+}
+
+func synthesis(t *testing.T, net *network.Network) {
 	// Left out are the parts of the spectrum above twice the carrier, where a
 	// raised-cosine rise of 3 periods has some 1e-4 left, and the error of a
 	// grid of 80 cells.
 	const tolerance = 2e-3
 	for _, rise := range []float64{3, 10} {
-		net := feeder()
 		period := net.Period()
 		net.Source.Start = network.Start{Rise: rise * period, Phase: -math.Pi / 2}
 		net.Source.Stop = &network.Stop{At: 50 * period, Fall: rise * period}
