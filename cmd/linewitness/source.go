@@ -28,7 +28,12 @@ func (a *app) load(ctx context.Context, path string) (*design.File, error) {
 	if err != nil {
 		return nil, fileError(err.Error(), "")
 	}
-	f, err := design.Load(displayName(path), source)
+	f, err := await(ctx, func() (*design.File, error) {
+		return design.LoadWith(displayName(path), source, besides(path))
+	})
+	if errors.Is(err, context.Canceled) {
+		return nil, err
+	}
 	var problems design.Diagnostics
 	if errors.As(err, &problems) {
 		problems.Render(a.stderr, colourful(a.stderr))
@@ -36,6 +41,27 @@ func (a *app) load(ctx context.Context, path string) (*design.File, error) {
 	}
 	return f, err
 }
+
+// besides opens the files that a design file names, beside the design file; a
+// design from standard input has them beside the working directory.
+func besides(path string) func(string) ([]byte, error) {
+	folder := "."
+	if path != standardInput {
+		folder = filepath.Dir(path)
+	}
+	return func(name string) ([]byte, error) {
+		f, err := os.Open(filepath.Join(folder, filepath.FromSlash(name)))
+		if err != nil {
+			return nil, err
+		}
+		defer f.Close()
+		return io.ReadAll(io.LimitReader(f, maxAttached))
+	}
+}
+
+// maxAttached bounds a file that a design file names: one byte more than a
+// reader of such files accepts.
+const maxAttached = 4<<20 + 1
 
 func (a *app) read(path string) ([]byte, error) {
 	if path == standardInput {
