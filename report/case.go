@@ -23,6 +23,7 @@ func (d *document) solved(c *record.Case) {
 		d.unsettled(c)
 	}
 	d.keyFigures(c)
+	d.caseRatings(c)
 	d.sections(c)
 	d.loads(c)
 	d.waveforms(c)
@@ -35,7 +36,11 @@ func (d *document) solved(c *record.Case) {
 // verdictLine says the verdict of the case in a line.
 func (d *document) verdictLine(c *record.Case) {
 	a := c.Agreement
-	s := "Requirements: " + count(c.Requirements).String() + ". The two solutions differ by " + format.Percent(largest(a)) +
+	s := "Requirements: " + count(c.Requirements).String() + "."
+	if len(c.Ratings) > 0 {
+		s += " Ratings: " + countRatings(c.Ratings).String() + "."
+	}
+	s += " The two solutions differ by " + format.Percent(largest(a)) +
 		" at most; " + format.Percent(a.Expected) + " was expected and the limit is " + format.Percent(a.Limit) + "."
 	if a.Worst.Section != "" {
 		s += " The largest difference is in the " + a.Worst.Quantity + " of " + a.Worst.Section + " at " + place(a.Worst.At) + "."

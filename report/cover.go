@@ -13,7 +13,7 @@ import (
 	"linewitness/sim/record"
 )
 
-// cover writes the first page: identity, verdict, cases, requirements.
+// cover writes the first page: identity, verdict, cases, requirements, ratings.
 func (d *document) cover() {
 	d.b.Overline("Design verification record, transmission-line network")
 	d.b.Title(title(d.r))
@@ -28,6 +28,8 @@ func (d *document) cover() {
 	}
 	d.cases()
 	d.requirements()
+	d.ratings()
+	d.toConfirm()
 }
 
 // field is a label and its value.
@@ -95,22 +97,25 @@ func capital(s string) string {
 
 // cases writes the summary of the cases.
 func (d *document) cases() {
-	t := sheet.Table{Columns: []sheet.Column{
-		{Head: "Case", Grow: 2}, {Head: "Verdict", Grow: 2}, {Head: "Requirements", Grow: 2},
-		{Head: "Solutions differ by", Align: typeset.Right, Grow: 1},
-		{Head: "Settled to 1 % after", Align: typeset.Right, Grow: 1},
-		{Head: "Peak voltage", Align: typeset.Right, Grow: 1},
-		{Head: "Peak current", Align: typeset.Right, Grow: 1},
-	}}
+	rated := d.rated()
+	t := sheet.Table{Columns: []sheet.Column{{Head: "Case", Grow: 2}, {Head: "Verdict", Grow: 2}, {Head: "Requirements", Grow: 2}}}
+	if rated {
+		t.Columns = append(t.Columns, sheet.Column{Head: "Ratings", Grow: 2})
+	}
+	t.Columns = append(t.Columns, right("Solutions differ by"), right("Settled to 1 % after"), right("Peak voltage"), right("Peak current"))
 	for _, c := range d.r.Cases {
-		t.Rows = append(t.Rows, []sheet.Cell{
+		row := []sheet.Cell{
 			{Text: c.Name, Bold: true}, {Text: string(c.Verdict), Mark: markOf(c.Verdict)},
 			{Text: count(c.Requirements).String()},
-			{Text: format.Percent(largest(c.Agreement))},
-			{Text: format.SI(c.Settling.To1Percent, "s")},
-			{Text: format.SI(c.Stress.Voltage.Value, "V")},
-			{Text: format.SI(c.Stress.Current.Value, "A")},
-		})
+		}
+		if rated {
+			row = append(row, sheet.Cell{Text: countRatings(c.Ratings).String()})
+		}
+		t.Rows = append(t.Rows, append(row,
+			sheet.Cell{Text: format.Percent(largest(c.Agreement))},
+			sheet.Cell{Text: format.SI(c.Settling.To1Percent, "s")},
+			sheet.Cell{Text: format.SI(c.Stress.Voltage.Value, "V")},
+			sheet.Cell{Text: format.SI(c.Stress.Current.Value, "A")}))
 	}
 	d.b.Subheading("Cases", 60)
 	d.b.Table(t)

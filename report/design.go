@@ -23,6 +23,7 @@ func (d *document) design() {
 	d.network(c.Model)
 	d.lengths(c.Model)
 	d.constants(c.Model)
+	d.lines()
 	d.parts("Loads", c.Model.Loads)
 	d.parts("Elements", c.Model.Elements)
 	d.source(c.Model)
@@ -110,7 +111,7 @@ func (d *document) parts(title string, parts []record.ModelPart) {
 			at += ", " + p.To
 		}
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: p.Name, Bold: true}, {Text: at}, {Text: p.Given}, {Text: p.As},
+			{Text: p.Name, Bold: true}, {Text: at}, {Text: format.Signed(p.Given)}, {Text: realised(p)},
 			{Text: absent(p.R, "Ω")}, {Text: absent(p.L, "H")}, {Text: absent(p.C, "F")}, {Text: impedance(p)},
 		})
 	}
@@ -126,12 +127,23 @@ func absent(v float64, unit string) string {
 	return format.SI(v, unit)
 }
 
+// realised says what a part was realised as, and of a transformer what it does
+// in the order of its junctions.
+func realised(p record.ModelPart) string {
+	if p.Ratio == 0 {
+		return p.As
+	}
+	return p.As + ": voltage at " + p.To + " is " + format.Number(p.Ratio) + " times that at " + p.At
+}
+
 func impedance(p record.ModelPart) string {
 	switch {
 	case p.Open:
 		return format.Infinite
 	case p.Short:
 		return "0" + format.Space + "Ω"
+	case p.Ratio != 0:
+		return format.Missing
 	}
 	return format.Complex(p.Impedance, "Ω")
 }

@@ -3,6 +3,7 @@ package report
 import (
 	"math"
 	"math/cmplx"
+	"slices"
 
 	"gonum.org/v1/plot/vg"
 	"gonum.org/v1/plot/vg/draw"
@@ -120,11 +121,7 @@ func (d *document) envelopes(c *record.Case) {
 		first += zoomHeight
 	}
 	d.b.Subheading("Along the sections: envelopes and agreement", first+headed)
-	d.b.Note("Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end.")
-	d.key([]figure.Entry{
-		{Style: ink.PhasorLine, Text: "phasor; expected error"}, {Style: ink.FDTDLine, Text: "time domain; found error"},
-		{Style: ink.PeakLine, Text: "peak over all time"}, {Style: ink.LimitLine, Text: "limit, hatched beyond"},
-	})
+	d.envelopeKey(c)
 	if first == rowHeight { // a long one would leave the rest of the page empty
 		d.shortSections(short)
 		short = nil
@@ -133,6 +130,23 @@ func (d *document) envelopes(c *record.Case) {
 		d.longSection(ts)
 	}
 	d.shortSections(short)
+}
+
+// envelopeKey writes what the curves and lines of the envelopes are.
+func (d *document) envelopeKey(c *record.Case) {
+	note := "Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end."
+	key := []figure.Entry{
+		{Style: ink.PhasorLine, Text: "phasor; expected error"}, {Style: ink.FDTDLine, Text: "time domain; found error"},
+		{Style: ink.PeakLine, Text: "peak over all time"}, {Style: ink.LimitLine, Text: "limit, hatched beyond"},
+	}
+	if len(c.Ratings) > 0 {
+		note += " Ratings hold for the amplitude and for the peak over all time; all lines are peak values. A limit far above the curves is not drawn; the caption has it."
+	}
+	if slices.ContainsFunc(c.Ratings, func(r record.Rating) bool { return r.Derating > 0 }) {
+		key = append(key, figure.Entry{Style: ink.RatedLine, Text: "rated, before derating"})
+	}
+	d.b.Note(note)
+	d.key(key)
 }
 
 // sorted parts the sections into those drawn as bands and the others.

@@ -11,37 +11,84 @@ import (
 // limit is a limit on a voltage or a current along a section.
 type limit struct {
 	label string
-	id    string
+	name  string  // in a finding: "the limit of R2, 1.950 kV"
 	value float64 // peak, V or A
 	upper bool    // values above it are not allowed
-	peak  bool    // on the peak over all time; else on the steady amplitude
+	on    kind    // which curve it is on
+	mild  bool    // a rating before its derating: shown, and no finding
 }
 
+// kind is the curve that a limit is on.
+type kind int
+
+const (
+	onSteady kind = iota // the steady amplitude
+	onPeak               // the peak over all time
+	onBoth               // whichever is larger: ratings
+)
+
 // limitsOf returns the limits on a quantity ("voltage" or "current") that
-// apply to a section: those about it, and those about the whole network.
+// apply to a section: requirements about it, requirements about the whole
+// network, and its ratings.
 func limitsOf(c *record.Case, section, quantity string) []limit {
 	var out []limit
 	for _, q := range c.Requirements {
-		kind, name, _ := strings.Cut(q.Quantity, "_")
-		if name != quantity || (kind != "peak" && kind != "steady") || !concerns(c.Model, q, section) {
-			continue
+		if concerns(c.Model, q, section) {
+			out = append(out, requiredLimits(q, quantity)...)
 		}
-		factor, ok := toPeak(q.Unit)
-		if !ok {
-			continue
-		}
-		for _, bound := range []struct {
-			v     *float64
-			upper bool
-		}{{q.Max, true}, {q.Min, false}} {
-			if bound.v != nil {
-				l := limit{id: q.ID, value: *bound.v * factor, upper: bound.upper, peak: kind == "peak"}
-				l.label = l.id + ", " + kind + format.Space + format.SI(l.value, unitOf(quantity))
-				out = append(out, l)
-			}
+	}
+	for _, r := range c.Ratings {
+		if r.Section == section && r.Quantity == quantity {
+			out = append(out, ratedLimits(r)...)
 		}
 	}
 	return out
+}
+
+// requiredLimits returns the limits that a requirement puts on a quantity.
+func requiredLimits(q record.Requirement, quantity string) []limit {
+	which, name, _ := strings.Cut(q.Quantity, "_")
+	factor, ok := toPeak(q.Unit)
+	if name != quantity || (which != "peak" && which != "steady") || !ok {
+		return nil
+	}
+	on := onSteady
+	if which == "peak" {
+		on = onPeak
+	}
+	var out []limit
+	for _, bound := range []struct {
+		v     *float64
+		upper bool
+	}{{q.Max, true}, {q.Min, false}} {
+		if bound.v != nil {
+			value := *bound.v * factor
+			text := format.SI(value, unitOf(quantity))
+			out = append(out, limit{
+				label: q.ID + ", " + which + format.Space + text, name: "the limit of " + q.ID + ", " + text,
+				value: value, upper: bound.upper, on: on,
+			})
+		}
+	}
+	return out
+}
+
+// ratedLimits returns the limit that a rating allows, and the rating itself
+// where it was derated.
+func ratedLimits(r record.Rating) []limit {
+	allowed, rated := format.SI(r.Allowed, r.Unit), format.SI(r.Rated, r.Unit)
+	from := ""
+	if r.Advisory {
+		from = " (cable table)"
+	}
+	if r.Derating == 0 {
+		return []limit{{label: "rated" + format.Space + rated + from, name: "the rated " + rated + from, value: r.Rated, upper: true, on: onBoth}}
+	}
+	return []limit{
+		{label: "allowed" + format.Space + allowed + from, name: "the allowed " + allowed + " (" + r.Text + " less " + format.DB(r.Derating) + ")",
+			value: r.Allowed, upper: true, on: onBoth},
+		{label: "rated" + format.Space + rated + from, value: r.Rated, upper: true, on: onBoth, mild: true},
+	}
 }
 
 func unitOf(quantity string) string {
@@ -51,9 +98,12 @@ func unitOf(quantity string) string {
 	return "V"
 }
 
-// concerns reports whether a requirement is about a section: its subject names
-// the section, or no part of the network at all.
+// concerns reports whether a requirement is about a section: it names the
+// section, or no part of the network at all.
 func concerns(m record.Model, q record.Requirement, section string) bool {
+	if q.Section != "" {
+		return q.Section == section
+	}
 	subject, _, _ := strings.Cut(q.Subject, ",")
 	subject = strings.TrimPrefix(strings.TrimPrefix(subject, "along "), "section ")
 	if subject == section {
@@ -106,13 +156,16 @@ func toPeak(unit string) (factor float64, ok bool) {
 // finding says how far the curve that the limit is on stays from it.
 func (l limit) finding(t *track) string {
 	value := largestOf(t.phasor)
-	if l.peak {
+	switch l.on {
+	case onPeak:
 		value = largestOf(t.peak)
+	case onBoth:
+		value = max(value, largestOf(t.fdtd), largestOf(t.peak))
 	}
 	gap := (l.value - value) / l.value
 	side := "below"
 	if gap < 0 {
 		side = "above"
 	}
-	return format.Share(math.Abs(gap)) + " " + side + " the limit of " + l.id + ", " + format.SI(l.value, t.unit)
+	return format.Share(math.Abs(gap)) + " " + side + " " + l.name
 }

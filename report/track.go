@@ -79,19 +79,33 @@ func (t *track) stack(c draw.Canvas) (upper, lower draw.Canvas) {
 // envelope returns the upper panel with the limits that fit on it.
 func (t *track) envelope(s span) *figure.Panel {
 	const air = 1.1
-	top := max(largestOf(t.fdtd), largestOf(t.phasor), largestOf(t.peak)) * air
+	var limits []figure.Limit
 	for _, l := range t.limits {
 		if t.shows(l) {
-			top = max(top, l.value*1.18)
+			limits = append(limits, figure.Limit{Value: l.value, Above: l.upper, Mild: l.mild, Label: l.label})
 		}
 	}
+	top := max(max(largestOf(t.fdtd), largestOf(t.phasor), largestOf(t.peak))*air, headroom(limits))
 	p := figure.New(t.section, t.symbol, figure.Axis{Min: s.from, Max: s.to, Unit: "m", Bare: true}, figure.Axis{Unit: t.unit, Max: top})
-	for _, l := range t.limits {
-		if t.shows(l) {
-			p.Forbid(l.value, l.upper, l.label)
+	p.Limits(limits)
+	return p
+}
+
+// headroom returns the top of a panel that has room for the labels above the
+// highest limit, which stack where limits are close.
+func headroom(limits []figure.Limit) float64 {
+	const label = figure.TagHeight / (envelopeHeight - 20) // over the height of the data area
+	var highest float64
+	for _, l := range limits {
+		highest = max(highest, l.Value)
+	}
+	stacked := 0.0
+	for _, l := range limits {
+		if l.Above && l.Value > highest*(1-label) {
+			stacked++
 		}
 	}
-	return p
+	return highest * (1 + 0.06 + label*max(stacked, 1))
 }
 
 // shows reports whether a limit is near enough to the curves to share their
@@ -140,7 +154,9 @@ func (t *track) finding() string {
 		s += ", peak " + format.SI(t.peak[k], t.unit)
 	}
 	for _, l := range t.limits {
-		s += ", " + l.finding(t)
+		if !l.mild {
+			s += ", " + l.finding(t)
+		}
 	}
 	s += ", difference up to " + format.Percent(largestOf(t.found))
 	if len(t.expected) > 0 {

@@ -51,16 +51,20 @@ type tally struct{ met, missed, open int }
 
 func count(qs []record.Requirement) (t tally) {
 	for _, q := range qs {
-		switch q.Verdict {
-		case record.Met:
-			t.met++
-		case record.MissedReq:
-			t.missed++
-		default:
-			t.open++
-		}
+		t.add(q.Verdict)
 	}
 	return t
+}
+
+func (t *tally) add(v record.RequirementVerdict) {
+	switch v {
+	case record.Met:
+		t.met++
+	case record.MissedReq:
+		t.missed++
+	default:
+		t.open++
+	}
 }
 
 func (t tally) String() string {
@@ -92,35 +96,55 @@ func (d *document) reason() string {
 	}
 	parts = append(parts, d.named(record.MissedReq, "missed")...)
 	parts = append(parts, d.named(record.NotShownReq, "not shown")...)
+	counted, advised := d.broken()
+	parts = append(parts, counted...)
 	if len(parts) == 0 {
 		parts = append(parts, d.allMet())
 	}
+	parts = append(parts, advised...)
 	return strings.Join(parts, " ")
 }
 
 // named lists the requirements of one verdict with their cases.
 func (d *document) named(v record.RequirementVerdict, word string) []string {
-	var ids []string
-	cases := map[string][]string{}
+	var list casesOf
 	for _, c := range d.r.Cases {
 		for _, q := range c.Requirements {
-			if q.Verdict != v {
-				continue
+			if q.Verdict == v {
+				list.add(q.ID+" is "+word, c.Name)
 			}
-			if cases[q.ID] == nil {
-				ids = append(ids, q.ID)
-			}
-			cases[q.ID] = append(cases[q.ID], c.Name)
 		}
 	}
+	return list.sentences("further requirements are " + word)
+}
+
+// casesOf collects statements and the cases in which each holds.
+type casesOf struct {
+	statements []string
+	cases      map[string][]string
+}
+
+func (l *casesOf) add(statement, name string) {
+	if l.cases == nil {
+		l.cases = map[string][]string{}
+	}
+	if l.cases[statement] == nil {
+		l.statements = append(l.statements, statement)
+	}
+	l.cases[statement] = append(l.cases[statement], name)
+}
+
+// sentences makes a sentence of each statement, of the first few; further says
+// what the rest are.
+func (l *casesOf) sentences(further string) []string {
 	const most = 6 // more would push the table off the page; it has them all
 	var parts []string
-	for i, id := range ids {
+	for i, s := range l.statements {
 		if i == most {
-			parts = append(parts, fmt.Sprintf("%d further requirements are %s.", len(ids)-most, word))
+			parts = append(parts, fmt.Sprintf("%d %s.", len(l.statements)-most, further))
 			break
 		}
-		parts = append(parts, id+" is "+word+" in "+among(cases[id], most)+".")
+		parts = append(parts, s+" in "+among(l.cases[s], most)+".")
 	}
 	return parts
 }
@@ -134,15 +158,21 @@ func among(names []string, n int) string {
 }
 
 func (d *document) allMet() string {
-	n := 0
+	n, kept := 0, 0
 	var worst float64
 	for _, c := range d.r.Cases {
 		n += len(c.Requirements)
+		kept += countRatings(c.Ratings).met
 		worst = max(worst, largest(c.Agreement))
 	}
 	agree := "the two solutions differ by at most " + format.Percent(worst) + " of a section's largest value."
-	if n == 0 {
+	switch {
+	case n == 0 && kept == 0:
 		return "The design states no requirement; " + agree
+	case n == 0:
+		return "The design states no requirement; every rating is kept in every case; " + agree
+	case kept > 0:
+		return "Every requirement is met in every case that it applies to, and every rating is kept; " + agree
 	}
 	return "Every requirement is met in every case that it applies to; " + agree
 }

@@ -22,29 +22,6 @@ func (pn *Panel) Level(v float64, style draw.LineStyle, label string) {
 	}))
 }
 
-// Forbid draws a limit and hatches the side of it that is not allowed.
-func (pn *Panel) Forbid(v float64, above bool, label string) {
-	if !finite(v) {
-		return
-	}
-	pn.p.Add(inData(func(c draw.Canvas, _, y func(float64) vg.Length) {
-		at := y(pn.y.at(v))
-		region := c.Rectangle
-		if above {
-			region.Min.Y = at
-		} else {
-			region.Max.Y = at
-		}
-		hatch(c, region)
-		c.StrokeLine2(ink.LimitLine, c.Min.X, at, c.Max.X, at)
-		rise := 2.5
-		if !above { // the label stands on the side where curves should not be
-			rise = -tagStyle.Size - 0.5
-		}
-		tag(c, c.Max.X.Points()-3, at.Points()+rise, label, ink.LimitLine)
-	}))
-}
-
 // Upright draws vertical lines, the first with a label at its head.
 func (pn *Panel) Upright(vs []float64, style draw.LineStyle, label string) {
 	pn.p.Add(inData(func(c draw.Canvas, x, _ func(float64) vg.Length) {
@@ -88,12 +65,7 @@ func (pn *Panel) Say(s string) {
 	}))
 }
 
-// tag writes a label that ends at x, on white, so that curves do not run
-// through it.
-func tag(c draw.Canvas, x, y float64, s string, style draw.LineStyle) {
-	tagAt(c, x-tagStyle.Width(s), y, s, style)
-}
-
+// tagAt writes a label on white, so that curves do not run through it.
 func tagAt(c draw.Canvas, x, y float64, s string, style draw.LineStyle) {
 	if s == "" {
 		return
@@ -107,26 +79,6 @@ func tagAt(c draw.Canvas, x, y float64, s string, style draw.LineStyle) {
 	c.SetColor(ink.White)
 	c.Fill(box.Path())
 	tagStyle.Of(style.Color).Draw(c, x, y, s, typeset.Left)
-}
-
-// hatch draws oblique lines over a region.
-func hatch(c draw.Canvas, r vg.Rectangle) {
-	const pitch = 4.0 // points
-	c.SetLineStyle(ink.HatchLine)
-	h := r.Size().Y
-	if h <= 0 {
-		return
-	}
-	for x := r.Min.X - h; x < r.Max.X; x += vg.Points(pitch) {
-		from, to := vg.Point{X: x, Y: r.Min.Y}, vg.Point{X: x + h, Y: r.Max.Y}
-		if from.X < r.Min.X {
-			from = vg.Point{X: r.Min.X, Y: r.Min.Y + (r.Min.X - x)}
-		}
-		if to.X > r.Max.X {
-			to = vg.Point{X: r.Max.X, Y: r.Max.Y - (to.X - r.Max.X)}
-		}
-		c.StrokeLine2(ink.HatchLine, from.X, from.Y, to.X, to.Y)
-	}
 }
 
 func circle(at vg.Point, r vg.Length) vg.Path {

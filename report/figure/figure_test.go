@@ -110,8 +110,8 @@ func TestPanelStaysInside(t *testing.T) {
 		p.Dots(xs, ys, ink.FDTDLine)
 		p.Trace(xs, ys, 1e4)
 		p.Level(nan, ink.LimitLine, "nowhere")
-		p.Forbid(1.5, true, "limit")
-		p.Forbid(-1.5, false, "lower limit")
+		p.Limits([]Limit{{Value: 1.5, Above: true, Label: "limit"}, {Value: 1.6, Above: true, Mild: true, Label: "limit of " + strings.Repeat("a long name ", 9)},
+			{Value: nan, Above: true, Label: "nowhere"}, {Value: -1.5, Label: "lower limit"}, {Value: 1e9, Above: true, Label: "far off"}})
 		p.Upright([]float64{1, inf}, ink.MarkLine, "mark")
 		p.Spot(2, 2, "at the very corner")
 		p.Draw(c)

@@ -48,6 +48,7 @@ var (
 	TraceLine  = style(FDTD, 0.7)
 	PeakLine   = style(Peak, 0.7, 0.9, 1.5)
 	LimitLine  = style(Limit, 0.9, 6, 1.8, 1.2, 1.8)
+	RatedLine  = style(Limit, 0.6, 9, 2.2)
 	MarkLine   = style(Soft, 0.45, 1, 1.6)
 	FrameLine  = style(Soft, 0.5)
 	GridLine   = style(Grid, 0.4)

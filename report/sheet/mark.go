@@ -8,7 +8,8 @@ import (
 )
 
 // A Mark is the shape that goes with the word of a verdict. The shapes differ
-// without their colours too: outlined for what holds, filled for what fails.
+// without their colours too: outlined for what holds, filled for what fails. One
+// more flags data that need confirmation.
 type Mark int
 
 // The marks.
@@ -19,6 +20,7 @@ const (
 	Fails          // a filled square with a cross
 	Differs        // a filled diamond with two bars: the methods disagree
 	Unsettled      // a filled circle with a wave
+	Confirm        // a flag on a staff: a value that needs confirmation
 )
 
 // Draw draws the mark in a square of the given size around (x, y).
@@ -49,6 +51,10 @@ func (m Mark) Draw(c vg.Canvas, x, y, size float64) {
 		c.SetColor(ink.Bad)
 		c.Fill(g.circle())
 		g.white(-0.6, -0.15, -0.3, 0.3, 0, 0, 0.3, -0.3, 0.6, 0.15)
+	case Confirm:
+		c.SetColor(ink.Doubt)
+		g.stroke(g.poly(false, -0.6, -1, -0.6, 1))
+		c.Fill(g.poly(true, -0.6, 1, 0.9, 0.45, -0.6, -0.1))
 	}
 }
 

@@ -136,6 +136,7 @@ type Rating struct {
 	Rated             float64 // the limit as given
 	Text              string  // the limit in words, "3.7 kV rms"
 	Source            string  // where it comes from
+	Advisory          bool    // from memory: it warns and does not count in the verdict
 	Derating          float64 // dB
 	Allowed           float64 // Rated less Derating
 	Margin            float64 // Allowed less the larger value; negative beyond
@@ -356,6 +357,7 @@ type Requirement struct {
 	ID, Text, Source string
 	Quantity         string // as in the design file
 	Subject          string // what it is about, in words: "main, from end"
+	Section          string // the section it is about; empty for a junction, a load or the whole network
 	Unit             string // unit of the fields below: "V peak", "dB", "1", ...
 	Value            float64
 	Min, Max         *float64 // limits, in Unit

@@ -1,0 +1,112 @@
+package report
+
+import (
+	"slices"
+	"strings"
+
+	"linewitness/report/ink"
+	"linewitness/report/sheet"
+	"linewitness/sim/record"
+)
+
+// origins says in words where a piece of data comes from.
+var origins = map[string]string{
+	"measured":  "measured",
+	"datasheet": "data sheet",
+	"catalogue": "cable table",
+	"geometry":  "from dimensions",
+	"assumed":   "assumed",
+	"given":     "design file, no origin stated",
+}
+
+// unconfirmed reports whether somebody has yet to answer for a piece of data:
+// the cable table is from memory, and a default is nobody's statement.
+func unconfirmed(p record.Pedigree) bool { return p.Kind == "catalogue" || p.Kind == "assumed" }
+
+// originOf says where a piece of data comes from, and whether that needs
+// confirmation.
+func originOf(p record.Pedigree) string {
+	s := orElse(origins[p.Kind], p.Kind)
+	if unconfirmed(p) {
+		s += ", needs confirmation"
+	}
+	return s
+}
+
+// pedigree writes where the data of the lines come from.
+func (d *document) pedigree(kinds []lineKind) {
+	t := sheet.Table{Columns: []sheet.Column{
+		left("Line"), left("What"), {Head: "Value", Grow: 2}, {Head: "Origin", Grow: 2}, {Head: "Note", Grow: 3},
+	}}
+	flagged := false
+	for _, k := range kinds {
+		for i, p := range gathered(k.Pedigree) {
+			row := []sheet.Cell{{}, {Text: p.What}, {Text: p.Text}, {Text: originOf(p)}, {Text: p.Note}}
+			if i == 0 {
+				row[0] = sheet.Cell{Text: k.label, Bold: true}
+			}
+			if unconfirmed(p) {
+				row[3].Mark, row[3].Bold, flagged = sheet.Confirm, true, true
+			}
+			t.Rows = append(t.Rows, row)
+		}
+	}
+	if len(t.Rows) == 0 {
+		return
+	}
+	d.b.Subheading("Where the data of the lines come from", 70)
+	d.b.Table(t)
+	if flagged {
+		d.b.Note("A flag marks what needs confirmation: values of the cable table are nominal and from memory, to be replaced by the sheet of the cable in hand; assumed values are defaults of the program.")
+	}
+}
+
+// gathered joins rows that follow one another and differ in their values only,
+// such as those of a loss table.
+func gathered(ps []record.Pedigree) []record.Pedigree {
+	var out []record.Pedigree
+	for _, p := range ps {
+		if n := len(out); n > 0 && out[n-1].What == p.What && out[n-1].Kind == p.Kind && out[n-1].Note == p.Note {
+			out[n-1].Text += "; " + p.Text
+			continue
+		}
+		out = append(out, p)
+	}
+	return out
+}
+
+// toConfirm names on the cover what the record rests on and nobody has
+// confirmed.
+func (d *document) toConfirm() {
+	var parts []string
+	for _, k := range d.lineKinds() {
+		if s := confirmations(k.Pedigree); s != "" {
+			parts = append(parts, "line "+k.label+": "+s)
+		}
+	}
+	if len(parts) == 0 {
+		return
+	}
+	d.b.Space(4)
+	d.b.Verdict(sheet.Confirm, ink.Doubt, "To be confirmed:", strings.Join(parts, ". ")+". See the tables of the design as modelled.")
+}
+
+// confirmations lists what of a line needs confirmation, by origin.
+func confirmations(ps []record.Pedigree) string {
+	var groups []string
+	for _, g := range []struct{ kind, words string }{
+		{"catalogue", "from the cable table (nominal, from memory; to be replaced by the sheet of the cable in hand)"},
+		{"assumed", "assumed"},
+	} {
+		var whats []string
+		for _, p := range ps {
+			if p.Kind == g.kind && !slices.Contains(whats, p.What) {
+				whats = append(whats, p.What)
+			}
+		}
+		if len(whats) > 0 {
+			groups = append(groups, strings.Join(whats, ", ")+" "+g.words)
+		}
+	}
+	return strings.Join(groups, "; ")
+}
