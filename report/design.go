@@ -2,6 +2,7 @@ package report
 
 import (
 	"math"
+	"slices"
 
 	"gonum.org/v1/plot/vg/draw"
 	"linewitness/report/drawing"
@@ -57,6 +58,9 @@ func networkFinding(m record.Model) string {
 		format.Plural(int64(len(m.Junctions)), "junction") + ", " + format.Plural(int64(len(m.Loads)), "load") + "."
 	if name != "" {
 		s += " The longest section is " + name + ", " + format.Wavelengths(longest) + "."
+	}
+	if slices.ContainsFunc(m.Elements, func(p record.ModelPart) bool { return p.Ratio != 0 }) {
+		s += " The ratio of a transformer is that of its turns, read from left to right."
 	}
 	return s + " Thick lines are sections, not to scale; thin ones have no length. Loads end on the return conductor."
 }

@@ -4,6 +4,7 @@ import (
 	"slices"
 	"strings"
 
+	"linewitness/report/format"
 	"linewitness/report/ink"
 	"linewitness/report/sheet"
 	"linewitness/sim/record"
@@ -36,20 +37,12 @@ func originOf(p record.Pedigree) string {
 // pedigree writes where the data of the lines come from.
 func (d *document) pedigree(kinds []lineKind) {
 	t := sheet.Table{Columns: []sheet.Column{
-		left("Line"), left("What"), {Head: "Value", Grow: 2}, {Head: "Origin", Grow: 2}, {Head: "Note", Grow: 3},
+		left("Line"), left("What"), left("Value"), left("Origin"), left("Note"),
 	}}
 	flagged := false
 	for _, k := range kinds {
-		for i, p := range gathered(k.Pedigree) {
-			row := []sheet.Cell{{}, {Text: p.What}, {Text: p.Text}, {Text: originOf(p)}, {Text: p.Note}}
-			if i == 0 {
-				row[0] = sheet.Cell{Text: k.label, Bold: true}
-			}
-			if unconfirmed(p) {
-				row[3].Mark, row[3].Bold, flagged = sheet.Confirm, true, true
-			}
-			t.Rows = append(t.Rows, row)
-		}
+		t.Rows = append(t.Rows, pedigreeRows(k)...)
+		flagged = flagged || slices.ContainsFunc(k.Pedigree, unconfirmed)
 	}
 	if len(t.Rows) == 0 {
 		return
@@ -59,6 +52,28 @@ func (d *document) pedigree(kinds []lineKind) {
 	if flagged {
 		d.b.Note("A flag marks what needs confirmation: values of the cable table are nominal and from memory, to be replaced by the sheet of the cable in hand; assumed values are defaults of the program.")
 	}
+}
+
+// pedigreeRows returns the rows of one line. A note that repeats that of the
+// row above is not printed again.
+func pedigreeRows(k lineKind) [][]sheet.Cell {
+	var rows [][]sheet.Cell
+	var above record.Pedigree
+	for i, p := range gathered(k.Pedigree) {
+		note := p.Note
+		if note != "" && note == above.Note && p.Kind == above.Kind {
+			note = "as above"
+		}
+		row := []sheet.Cell{{}, {Text: p.What}, {Text: format.Signed(p.Text)}, {Text: originOf(p)}, {Text: note}}
+		if i == 0 {
+			row[0] = sheet.Cell{Text: k.label, Bold: true}
+		}
+		if unconfirmed(p) {
+			row[3].Mark, row[3].Bold = sheet.Confirm, true
+		}
+		rows, above = append(rows, row), p
+	}
+	return rows
 }
 
 // gathered joins rows that follow one another and differ in their values only,
@@ -79,16 +94,19 @@ func gathered(ps []record.Pedigree) []record.Pedigree {
 // confirmed.
 func (d *document) toConfirm() {
 	var parts []string
+	said := map[string]bool{}
 	for _, k := range d.lineKinds() {
-		if s := confirmations(k.Pedigree); s != "" {
-			parts = append(parts, "line "+k.label+": "+s)
+		s := confirmations(k.Pedigree)
+		if key := k.Name + ":" + s; s != "" && !said[key] { // a case may have it again
+			said[key] = true
+			parts = append(parts, "Line "+k.label+": "+s)
 		}
 	}
 	if len(parts) == 0 {
 		return
 	}
 	d.b.Space(4)
-	d.b.Verdict(sheet.Confirm, ink.Doubt, "To be confirmed:", strings.Join(parts, ". ")+". See the tables of the design as modelled.")
+	d.b.Verdict(sheet.Confirm, ink.Doubt, "To be confirmed:", strings.Join(parts, ". ")+". The tables of the design as modelled have each value.")
 }
 
 // confirmations lists what of a line needs confirmation, by origin.

@@ -105,7 +105,7 @@ func ratingRow(r caseRating, named, field bool) []sheet.Cell {
 	}
 	row = append(row, sheet.Cell{Text: r.Section + ", " + r.Quantity, Bold: true},
 		sheet.Cell{Text: format.SI(r.Steady, r.Unit) + " at" + format.Space + place(r.SteadyAt)},
-		sheet.Cell{Text: format.SI(r.Peak, r.Unit) + " at" + format.Space + place(r.PeakAt) + ", " + format.SI(r.PeakTime, "s")},
+		sheet.Cell{Text: format.SI(r.Peak, r.Unit) + " at" + format.Space + place(r.PeakAt) + "," + format.Space + format.SI(r.PeakTime, "s")},
 		sheet.Cell{Text: trimmed(r.Text + " " + bracket(r.Source))},
 		sheet.Cell{Text: derating(r.Derating)},
 		sheet.Cell{Text: format.SI(r.Allowed, r.Unit)},
@@ -166,4 +166,3 @@ func (d *document) broken() (counted, advised []string) {
 	counted = append(missed.sentences("further ratings are exceeded"), open.sentences("further ratings are not shown to be kept")...)
 	return counted, advisory.sentences("further ratings of the cable table are not kept")
 }
-

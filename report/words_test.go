@@ -80,7 +80,8 @@ func TestLimitsOf(t *testing.T) {
 	} {
 		var got []string
 		for _, l := range limitsOf(&c, k.section, k.quantity) {
-			got = append(got, l.id+" "+readable(format.SI(l.value, "V")))
+			id, _, _ := strings.Cut(l.label, ",")
+			got = append(got, id+" "+readable(format.SI(l.value, "V")))
 		}
 		if s := strings.Join(got, ", "); s != k.want {
 			t.Errorf("%s of %s: %q, want %q", k.quantity, k.section, s, k.want)

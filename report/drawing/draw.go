@@ -1,6 +1,8 @@
 package drawing
 
 import (
+	"strings"
+
 	"gonum.org/v1/plot/vg"
 	"gonum.org/v1/plot/vg/draw"
 	"linewitness/report/format"
@@ -19,6 +21,9 @@ const (
 	wireDrop  = 7.6 * mm // from the upper edge of a row to its wire
 	lanePitch = 1.6 * mm
 	textGap   = 1.5 * mm // between a label and what is beside it
+
+	nodeDrop    = 2.9 * mm // from a wire to the base of its junction's name
+	nodeDropLow = 3.8 * mm // likewise below a transformer
 )
 
 // RowHeight is the height of a row of a band.
@@ -103,14 +108,14 @@ func (p *pen) wire(w *wire) {
 	case w.part != nil:
 		p.part(w.part, x, y)
 	case w.child != nil:
-		p.edge(w.via, x, right, y)
+		p.edge(w, x, right, y)
 	case w.way.known:
 		right -= float64(w.way.lane) * lanePitch
-		p.edge(w.via, x, right, y)
+		p.edge(w, x, right, y)
 		p.up(w.way, right, y)
 	default:
 		right -= p.cell * 0.3
-		p.edge(w.via, x, right, y)
+		p.edge(w, x, right, y)
 		p.arrow(right, y, w.close)
 	}
 }
@@ -135,8 +140,8 @@ func (p *pen) arrow(x, y float64, name string) {
 
 // edge draws a section as a thick line, an element as its symbol, with its
 // name and its length or value above.
-func (p *pen) edge(e *edge, x, right, y float64) {
-	room := right - x - 2*textGap - lanes*lanePitch
+func (p *pen) edge(w *wire, x, right, y float64) {
+	e, room := w.via, right-x-2*textGap-lanes*lanePitch
 	if e.section != nil {
 		p.line(lineStyle, x, y, right, y)
 		p.label(nameStyle, x+textGap, y+3.6*mm, room, e.section.Name)
@@ -147,18 +152,39 @@ func (p *pen) edge(e *edge, x, right, y float64) {
 	p.line(wireStyle, x, y, middle-symbolHalf, y)
 	p.line(wireStyle, middle+symbolHalf, y, right, y)
 	p.symbol(e.part, middle, y)
-	p.value(e.part, x, y, room)
+	given := e.part.Given
+	if e.part.Ratio != 0 && w.turned() {
+		given = turnedRatio(given)
+	}
+	p.value(e.part, given, x, y, room)
 }
 
-// value writes the name and the value of a part above its symbol.
-func (p *pen) value(part *record.ModelPart, x, y, room float64) {
-	p.label(nameStyle, x+textGap, y+4.7*mm, room, part.Name)
-	p.label(valueStyle, x+textGap, y+2.1*mm, room, typeset.Clean(part.Given))
+// turnedRatio is a ratio read from its other side: "4:1" for "1:4".
+func turnedRatio(s string) string {
+	a, b, ok := strings.Cut(s, ":")
+	if !ok {
+		return "1:(" + s + ")"
+	}
+	return strings.TrimSpace(b) + ":" + strings.TrimSpace(a)
 }
+
+// value writes the name and the value of a part above its symbol. A combination
+// whose value finds no room says what it is; the table has its value.
+func (p *pen) value(part *record.ModelPart, given string, x, y, room float64) {
+	given = format.Signed(typeset.Clean(given))
+	if combined(part) && valueStyle.Width(given) > room {
+		given = part.As
+	}
+	p.label(nameStyle, x+textGap, y+4.7*mm, room, part.Name)
+	p.label(valueStyle, x+textGap, y+2.1*mm, room, given)
+}
+
+// combined reports whether a part is more than a series combination.
+func combined(part *record.ModelPart) bool { return strings.HasPrefix(part.As, "combination") }
 
 // part draws a load or an element to the return conductor.
 func (p *pen) part(part *record.ModelPart, x, y float64) {
-	p.value(part, x, y, p.cell-2*textGap-lanes*lanePitch)
+	p.value(part, part.Given, x, y, p.cell-2*textGap-lanes*lanePitch)
 	middle := x + p.cell*0.45
 	end := middle + symbolHalf + 3*mm
 	switch {
@@ -195,5 +221,9 @@ func (p *pen) node(n *node) {
 	if p.x(n.col)+room > p.c.Max.X.Points() {
 		room = p.c.Max.X.Points() - x - textGap
 	}
-	p.label(nodeStyle, x+textGap, y-2.9*mm, room, n.name)
+	drop := nodeDrop
+	if n.windings { // which reach down to where the name would be
+		drop = nodeDropLow
+	}
+	p.label(nodeStyle, x+textGap, y-drop, room, n.name)
 }

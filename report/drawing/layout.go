@@ -15,6 +15,8 @@ type node struct {
 	on   int  // band that continues it, or 0
 	low  int  // row of its lowest branch
 	used bool // a branch runs in its own row
+
+	windings bool // that branch is a transformer
 }
 
 // wire is what runs from a junction through a row: an edge to another
@@ -25,6 +27,15 @@ type wire struct {
 	row  int
 	to   int // column of the far end
 	way  way // for an edge that closes a loop
+}
+
+// turned reports whether an edge is drawn from its B to its A.
+func (w *wire) turned() bool {
+	far := w.close
+	if w.child != nil {
+		far = w.child.name
+	}
+	return far == w.via.a && w.via.a != w.via.b
 }
 
 // way is how an edge that closes a loop reaches its far junction.
@@ -109,6 +120,9 @@ func (p *placer) place(v *vertex, items []item, at cell) int {
 			break
 		}
 		n.low, n.used = row, true
+		if row == at.row && it.via != nil && it.via.part != nil {
+			n.windings = it.via.part.Ratio != 0
+		}
 		w := &wire{item: it, from: at, row: row, to: at.col + 1}
 		p.cur.wires = append(p.cur.wires, w)
 		if it.child != nil {

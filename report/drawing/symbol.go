@@ -15,17 +15,60 @@ import (
 const symbolHalf = 3 * mm
 
 // symbol draws a part around (x, y): after IEC 60617 a rectangle for a
-// resistor, half circles for an inductor, two plates for a capacitor, and a
-// rectangle for any series combination.
+// resistor, half circles for an inductor, two plates for a capacitor, two
+// windings for a transformer, and a rectangle for any series combination; one
+// that is more than a series combination has a Z in it.
 func (p *pen) symbol(part *record.ModelPart, x, y float64) {
 	switch {
+	case part.Ratio != 0:
+		p.windings(x, y)
 	case part.L > 0 && part.R == 0 && part.C == 0:
 		p.coil(x, y)
 	case part.C > 0 && part.R == 0 && part.L == 0:
 		p.plates(x, y)
+	case part.Short:
+		p.line(wireStyle, x-symbolHalf, y, x+symbolHalf, y)
+	case combined(part):
+		p.box(x, y)
+		valueStyle.At(6).Draw(p.c, x, y-2.1, "Z", typeset.Center)
 	default:
 		p.box(x, y)
 	}
+}
+
+// windings draws a transformer: the wires come to the heads of two windings
+// that face each other, and their feet are on the return conductor.
+func (p *pen) windings(x, y float64) {
+	const (
+		reach = 1.6 * mm // of the windings above and below the wire
+		apart = 0.9 * mm // from the middle to a winding
+		lead  = 2.1 * mm // from the middle to where a wire turns up
+	)
+	for _, side := range []float64{-1, 1} {
+		turn, at := x+side*lead, x+side*apart
+		p.line(wireStyle, x+side*symbolHalf, y, turn, y, turn, y+reach, at, y+reach)
+		p.winding(at, y, reach, side)
+		p.line(wireStyle, at, y-reach, turn, y-reach)
+		for k, half := range []float64{0.55 * mm, 0.3 * mm} {
+			foot := turn + side*float64(k)*0.45*mm
+			p.line(draw.LineStyle{Color: ink.Text, Width: 0.7}, foot, y-reach-half, foot, y-reach+half)
+		}
+	}
+}
+
+// winding draws half circles from y+reach down to y-reach that bulge to the
+// other winding.
+func (p *pen) winding(x, y, reach, side float64) {
+	const turns = 3
+	r := reach / turns
+	var path vg.Path
+	path.Move(vg.Point{X: vg.Points(x), Y: vg.Points(y + reach)})
+	for k := range turns {
+		center := y + reach - (2*float64(k)+1)*r
+		path.Arc(vg.Point{X: vg.Points(x), Y: vg.Points(center)}, vg.Points(r), math.Pi/2, side*math.Pi)
+	}
+	p.c.SetLineStyle(draw.LineStyle{Color: ink.Text, Width: 0.8})
+	p.c.Stroke(path)
 }
 
 func (p *pen) box(x, y float64) {

@@ -82,7 +82,7 @@ func tags(c draw.Canvas, limits []Limit, at func(Limit) float64) {
 	}
 	spread(ys, c.Min.Y.Points()+1.8, c.Max.Y.Points()-tagStyle.Size+0.5, len(limits) > 0 && limits[0].Above)
 	for i, l := range limits {
-		s := tagStyle.Fit(l.Label, (c.Max.X - c.Min.X).Points()-6)
+		s := tagStyle.Fit(l.Label, (c.Max.X-c.Min.X).Points()-6)
 		tagAt(c, c.Max.X.Points()-3-tagStyle.Width(s), ys[i], s, l.style())
 	}
 }

@@ -185,6 +185,7 @@ func (b *Book) Verdict(m Mark, clr color.Color, word, s string) {
 		lines = append(lines[:1:1], st.Wrap(rest, b.Width()-indent)...)
 	}
 	for i, line := range lines {
+		b.keep(i, len(lines), leadingOf(st))
 		b.Block(leadingOf(st), func(c draw.Canvas) {
 			x, y := c.Min.X.Points(), c.Max.Y.Points()-st.Size*ascender
 			at := x + indent

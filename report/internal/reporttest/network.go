@@ -31,6 +31,8 @@ type Load struct {
 	Name, At, To string
 	R, L, C      float64
 	Open, Short  bool
+	Ratio        float64 // of an ideal transformer, To over At; only of a bridge
+	Given, As    string  // instead of what follows from the values
 }
 
 func (n Network) omega() float64 { return 2 * math.Pi * n.Frequency }
@@ -121,6 +123,15 @@ func (n Network) solve() map[string]complex128 {
 		}
 	}
 	for _, l := range n.Bridges {
+		if l.Ratio != 0 {
+			stiff := complex(1e3, 0) // near enough to an ideal one for a picture
+			i, j, r := index[l.At], index[l.To], complex(l.Ratio, 0)
+			a[i][i] += r * r * stiff
+			a[j][j] += stiff
+			a[i][j] -= r * stiff
+			a[j][i] -= r * stiff
+			continue
+		}
 		bridge(l.At, l.To, 1/n.z(l), -1/n.z(l))
 	}
 	i := index[n.At]

@@ -69,6 +69,10 @@ func (n Network) part(l Load) record.ModelPart {
 		Impedance: n.z(l), Open: l.Open, Short: l.Short, Given: trim(l.R) + " ohm", As: "resistor",
 	}
 	switch {
+	case l.Ratio != 0:
+		p.Given, p.As, p.Ratio, p.R, p.Impedance = l.Given, "ideal transformer", l.Ratio, 0, 0
+	case l.As != "":
+		p.Given, p.As, p.R, p.L, p.C = l.Given, l.As, 0, 0, 0
 	case l.Open:
 		p.Given, p.As = "open", "exact open"
 	case l.Short:
