@@ -14,6 +14,7 @@ type follower struct {
 	step   int
 	turn   []complex128   // e^{-j 2 pi m/N}
 	final  [][]complex128 // [lane][junction]
+	sample [][]complex128 // likewise, of what is sampled: an average over the step where nothing is stored
 	early  []float64      // 0.5 where a junction voltage is an average over the step
 	ring   [][]float64    // [lane x junctions][N] last period
 	sum    []complex128   // sliding DFT
@@ -29,13 +30,19 @@ func newFollower(m *model, final *Steady, phases []float64) *follower {
 	for k := range n {
 		f.turn = append(f.turn, cmplx.Rect(1, -2*math.Pi*float64(k)/float64(n)))
 	}
+	x := math.Pi / float64(n)
 	for _, p := range phases {
-		var row []complex128
-		for _, v := range final.Junctions {
-			row = append(row, v*cmplx.Rect(1, p))
+		var row, sample []complex128
+		for j, v := range final.Junctions {
+			v *= cmplx.Rect(1, p)
+			row = append(row, v)
+			if !m.junction.stores[j] {
+				v *= cmplx.Rect(math.Cos(x), -x)
+			}
+			sample = append(sample, v)
 			f.top = math.Max(f.top, cmplx.Abs(v))
 		}
-		f.final = append(f.final, row)
+		f.final, f.sample = append(f.final, row), append(f.sample, sample)
 	}
 	for j := range final.Junctions {
 		e := 0.0
@@ -82,12 +89,12 @@ func (f *follower) take(v float64, i, j, at int) float64 {
 	old := f.ring[k][at]
 	f.ring[k][at] = v
 	f.sum[k] += complex(v-old, 0) * f.turn[at]
-	end := f.final[i][j]
 	// e^{jwt} is the conjugate of turn.
+	end := f.sample[i][j]
 	d := v - real(end)*real(f.turn[at]) - imag(end)*imag(f.turn[at])
 	f.miss[k] += d * d
 	f.dead[k] += v * v
-	return f.error(k, j, end)
+	return f.error(k, j, f.final[i][j])
 }
 
 // error is the departure of the sliding phasor of slot k from its end value,

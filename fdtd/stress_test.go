@@ -171,3 +171,27 @@ func TestTracesAgreeWithPhasor(t *testing.T) {
 	check("load current", s.Traces.Branches[0], st.Branches[0])
 	check("source current", s.Traces.Source, st.Source)
 }
+
+// TestRestBehindATransformer: a junction where no section ends has averages
+// for samples; the follower must know, or the network never comes to rest.
+func TestRestBehindATransformer(t *testing.T) {
+	net := matchedLine(1.3 * wavelength)
+	net.Branches[0].R = 120
+	net.Junctions = append(net.Junctions, "inside", "primary")
+	net.Branches = append(net.Branches,
+		network.Branch{A: 1, B: 2, Series: network.Series{R: 20, L: 50e-9}},
+		network.Branch{A: 2, B: network.Ground, Series: network.Series{R: 80}},
+		network.Branch{A: 3, B: 0, Ratio: 2},
+	)
+	net.Source.At = 3
+	net.Source.Start = network.Start{Rise: 3 / testFrequency, Worst: true}
+	s := stressed(t, net, fixedGrid(net, 40))
+	if !s.Complete || s.Duration*testFrequency > 40 {
+		t.Errorf("complete %v after %.1f periods", s.Complete, s.Duration*testFrequency)
+	}
+	for j := range net.Junctions {
+		if at := s.SettleTime(j, 0.01); !(at*testFrequency < 20) {
+			t.Errorf("junction %s settled after %.2f periods", net.Junctions[j], at*testFrequency)
+		}
+	}
+}
