@@ -32,6 +32,7 @@ func changes(a, b record.Model) []string {
 	if x, y := sourceTerm(a.Source), sourceTerm(b.Source); x != y {
 		out = append(out, became("source", x, y))
 	}
+	out = append(out, changedLines(a, b)...)
 	out = append(out, compare("section", sectionTerms(a), sectionTerms(b))...)
 	out = append(out, compare("load", partTerms(a.Loads), partTerms(b.Loads))...)
 	return append(out, compare("element", partTerms(a.Elements), partTerms(b.Elements))...)
@@ -49,6 +50,22 @@ func sourceTerm(s record.ModelSource) string {
 
 // term is a named part of a model in words.
 type term struct{ name, words string }
+
+// changedLines compares the kinds of line that both models have; one that only
+// one of them has shows in its sections.
+func changedLines(a, b record.Model) []string {
+	var out []string
+	for _, x := range a.Lines {
+		for _, y := range b.Lines {
+			if p, q := lineTerm(x), lineTerm(y); x.Name == y.Name && p != q {
+				out = append(out, became("line "+x.Name, p, q))
+			}
+		}
+	}
+	return out
+}
+
+func lineTerm(l record.ModelLine) string { return l.Text + " (" + l.Model + ")" }
 
 func sectionTerms(m record.Model) []term {
 	var out []term

@@ -152,7 +152,7 @@ func (l *casesOf) sentences(further string) []string {
 // among joins names, naming at most n.
 func among(names []string, n int) string {
 	if len(names) > n {
-		return strings.Join(names[:n], ", ") + fmt.Sprintf(" and %d further cases", len(names)-n)
+		return strings.Join(names[:n], ", ") + fmt.Sprintf(" and %d more", len(names)-n)
 	}
 	return strings.Join(names, ", ")
 }

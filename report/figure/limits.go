@@ -39,15 +39,20 @@ func (pn *Panel) Limits(limits []Limit) {
 			below = append(below, l)
 		}
 	}
+	height := func(y func(float64) vg.Length) func(Limit) float64 {
+		return func(l Limit) float64 { return y(pn.y.at(l.Value)).Points() }
+	}
 	pn.p.Add(inData(func(c draw.Canvas, _, y func(float64) vg.Length) {
-		at := func(l Limit) float64 { return y(pn.y.at(l.Value)).Points() }
+		at := height(y)
 		hatch(c, beyond(c.Rectangle, above, at))
 		hatch(c, beyond(c.Rectangle, below, at))
 		for _, l := range slices.Concat(above, below) {
 			c.StrokeLine2(l.style(), c.Min.X, vg.Points(at(l)), c.Max.X, vg.Points(at(l)))
 		}
-		tags(c, above, at)
-		tags(c, below, at)
+	}))
+	pn.over = append(pn.over, inData(func(c draw.Canvas, _, y func(float64) vg.Length) {
+		tags(c, above, height(y))
+		tags(c, below, height(y))
 	}))
 }
 

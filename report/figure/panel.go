@@ -25,6 +25,7 @@ type Panel struct {
 	Name, Quantity string // of the title: bold, then plain with its unit
 	p              *plot.Plot
 	x, y           scale
+	over           []plot.Plotter // what is drawn last, so that no curve runs through it
 }
 
 // scale maps SI values to the coordinates of an axis.
@@ -132,6 +133,8 @@ func (pn *Panel) Draw(c draw.Canvas) {
 	textStyle.Draw(c, x, y, textStyle.Fit(quantity, c.Max.X.Points()-x), typeset.Left)
 	c = draw.Crop(c, 0, 0, 0, vg.Points(-titleHeight))
 	pn.setTicks(c)
+	pn.p.Add(pn.over...)
+	pn.over = nil
 	pn.p.Draw(pn.align(c))
 }
 
