@@ -35,8 +35,11 @@ var (
 	geometryTable = &table{
 		def: "geometry", keys: may("coax", "two_wire", "wire_over_ground", "microstrip", "stripline"),
 		choices: []choice{{required: true, forms: []form{
-			{keys: []string{"coax"}}, {keys: []string{"two_wire"}}, {keys: []string{"wire_over_ground"}},
-			{keys: []string{"microstrip"}}, {keys: []string{"stripline"}},
+			{keys: []string{"coax"}},
+			{keys: []string{"two_wire"}},
+			{keys: []string{"wire_over_ground"}},
+			{keys: []string{"microstrip"}},
+			{keys: []string{"stripline"}},
 		}}},
 	}
 	coaxTable           = shapeOf("coax", must("inner_diameter", "outer_diameter"), "wall", "outer_conductivity")

@@ -26,13 +26,19 @@ var (
 var (
 	impedanceKeys  = may("impedance", "r", "l", "c", "q", "esr", "series", "parallel", "admittance", "table", "file")
 	impedanceForms = []form{
-		{keys: []string{"impedance"}}, lumpedForm, {keys: []string{"series"}}, {keys: []string{"parallel"}},
-		{keys: []string{"admittance"}}, {keys: []string{"table"}}, {keys: []string{"file"}},
+		{keys: []string{"impedance"}},
+		lumpedForm,
+		{keys: []string{"series"}},
+		{keys: []string{"parallel"}},
+		{keys: []string{"admittance"}},
+		{keys: []string{"table"}},
+		{keys: []string{"file"}},
 	}
 	lumpedForm    = form{keys: []string{"r", "l", "c"}, with: []string{"q", "esr"}}
 	qualityChoice = either(false, "q", "esr")
 	placeChoice   = choice{required: true, forms: []form{
-		{keys: []string{"at"}}, {keys: []string{"between"}},
+		{keys: []string{"at"}},
+		{keys: []string{"between"}},
 		{keys: []string{"from", "to"}, need: []string{"from", "to", "ratio"}, with: []string{"ratio"}},
 	}}
 )
