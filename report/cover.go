@@ -102,7 +102,7 @@ func (d *document) cases() {
 	if rated {
 		t.Columns = append(t.Columns, sheet.Column{Head: "Ratings", Grow: 2})
 	}
-	t.Columns = append(t.Columns, right("Solutions differ by"), right("Settled to 1 % after"), right("Peak voltage"), right("Peak current"))
+	t.Columns = append(t.Columns, right("Solutions differ by"), right("Settled to 1"+format.Space+"% after"), right("Peak voltage"), right("Peak current"))
 	for _, c := range d.r.Cases {
 		row := []sheet.Cell{
 			{Text: c.Name, Bold: true}, {Text: string(c.Verdict), Mark: markOf(c.Verdict)},

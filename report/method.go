@@ -50,7 +50,7 @@ func (d *document) methodDispersive(m models) {
 // methodTime writes the time-domain part.
 func (d *document) methodTime() {
 	d.b.Subheading("Time domain (fdtd)", 60)
-	d.b.Paragraph("Voltage and current are stepped in turn on a grid, currents half a cell and half a step from the voltages, with the losses averaged over the step; for constants that do not change with frequency")
+	d.b.Paragraph("Voltage and current are stepped in turn on a grid, currents half a cell and half a step from the voltages, with the losses averaged over the step; where the constants do not change with frequency that is")
 	d.b.Equation("(C′/Δt + G′/2) v" + sup("n+1") + " = (C′/Δt − G′/2) v" + sup("n") + " − Δi/Δz,   (L′/Δt + R′/2) i" + sup("n+½") + " = (L′/Δt − R′/2) i" + sup("n−½") + " − Δv/Δz")
 	d.b.Paragraph("The step is a whole fraction of the period. Each section's Courant number S = v Δt/Δz is at most 1 and as near to 1 as its length allows, for the error of the grid over a section of electrical length ℓ/λ with N steps a period is")
 	d.b.Equation("Δφ ≈ 60° (π/N)" + sup("2") + " (1 − S" + sup("2") + ") ℓ/λ")

@@ -4,6 +4,7 @@ import (
 	"cmp"
 	"fmt"
 	"slices"
+	"strings"
 
 	"linewitness/report/format"
 	"linewitness/report/sheet"
@@ -106,7 +107,7 @@ func ratingRow(r caseRating, named, field bool) []sheet.Cell {
 	row = append(row, sheet.Cell{Text: r.Section + ", " + r.Quantity, Bold: true},
 		sheet.Cell{Text: format.SI(r.Steady, r.Unit) + " at" + format.Space + place(r.SteadyAt)},
 		sheet.Cell{Text: format.SI(r.Peak, r.Unit) + " at" + format.Space + place(r.PeakAt) + "," + format.Space + format.SI(r.PeakTime, "s")},
-		sheet.Cell{Text: trimmed(r.Text + " " + bracket(r.Source))},
+		sheet.Cell{Text: trimmed(unbroken(r.Text) + " " + unbroken(bracket(r.Source)))},
 		sheet.Cell{Text: derating(r.Derating)},
 		sheet.Cell{Text: format.SI(r.Allowed, r.Unit)},
 		sheet.Cell{Text: format.DB(r.MarginDB) + ", " + format.Percent(r.MarginPercent/100)},
@@ -120,6 +121,9 @@ func ratingRow(r caseRating, named, field bool) []sheet.Cell {
 	}
 	return append(row, verdict)
 }
+
+// unbroken keeps a text together on a line.
+func unbroken(s string) string { return strings.ReplaceAll(s, " ", format.Space) }
 
 // derating prints how far below its rating a value must stay.
 func derating(dB float64) string {

@@ -26,7 +26,7 @@ func (d *document) validity() []string {
 		"The lines are uniform and carry one mode; connectors, bends, supports and changes of cross-section are in the model only where the design file puts a section or an element for them.",
 	}
 	if len(m.constant) > 0 || len(m.dispersive) == 0 {
-		out = append(out, m.say(m.constant, "The constants R′, L′, G′, C′ of a constant line")+" hold at the design frequency. Steady values at that frequency are exact to the agreement; transients contain other frequencies, for which real lines have other losses and delays: fronts come out steeper, and peaks mostly higher.")
+		out = append(out, m.say(m.constant, "The constants R′, L′, G′, C′ of a constant line")+" hold at the design frequency. Steady values at that frequency are exact to the agreement; transients contain other frequencies, for which real lines have other losses and delays: their fronts are less steep.")
 	}
 	if len(m.dispersive) > 0 {
 		out = append(out, m.say(m.dispersive, "The two laws of a dispersive line")+" are those of solid smooth conductors much thicker than the skin depth and of one loss tangent; roughness counts as it is at the design frequency. Where the skin depth nears the thickness of a conductor, and far from the frequencies at which the loss was given, a real line differs. From a tenth to ten times the design frequency the time domain follows the laws within the residual in the table of the kinds of line; beyond, less closely.")

@@ -48,8 +48,13 @@ func CSV(r *record.Record) ([]CSVFile, error) {
 	return files, nil
 }
 
-// csvDigits is the number of significant digits of a CSV number.
-const csvDigits = 9
+// The significant digits of CSV numbers. The samples of a waveform, of which
+// there are many, have fewer; their times have all, so that two neighbours
+// differ at the end of the longest run.
+const (
+	csvDigits    = 9
+	sampleDigits = 7
+)
 
 // A table writes the rows of one CSV file.
 type table struct {
@@ -73,11 +78,13 @@ func (t *table) text(fields ...string) { t.row = append(t.row, fields...) }
 
 // numbers appends number fields to the current row; what is not a number
 // leaves its field empty.
-func (t *table) numbers(xs ...float64) {
+func (t *table) numbers(xs ...float64) { t.digits(csvDigits, xs...) }
+
+func (t *table) digits(n int, xs ...float64) {
 	for _, x := range xs {
 		field := ""
 		if !math.IsNaN(x) && !math.IsInf(x, 0) {
-			field = strconv.FormatFloat(x+0, 'g', csvDigits, 64)
+			field = strconv.FormatFloat(x+0, 'g', n, 64)
 		}
 		t.row = append(t.row, field)
 	}

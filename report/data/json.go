@@ -9,8 +9,8 @@ import (
 // JSON returns the record as a JSON document of format record.Format, indented
 // and with a final newline. The same record gives the same bytes.
 //
-// It fails if two cases, or two sections, loads or junctions of a case, have
-// the same name or none, because then one of them would be lost to a reader.
+// It fails if two cases, or two lines, sections, loads or junctions of a case,
+// have the same name or none, because then one of them would be lost to a reader.
 func JSON(r *record.Record) ([]byte, error) {
 	var cases named
 	for i := range r.Cases {
@@ -68,9 +68,14 @@ func caseObject(c *record.Case) (object, error) {
 	if err != nil {
 		return nil, fmt.Errorf("grid: %w", err)
 	}
+	lines, err := linesObject(c.Model.Lines)
+	if err != nil {
+		return nil, err
+	}
 	return object{
 		{"verdict", string(c.Verdict)},
 		{"frequency_hz", c.Model.Frequency},
+		{"lines", lines},
 		{"phasor", phasor},
 		{"fdtd", fdtd},
 		{"settling", settlingObject(c.Settling)},
@@ -78,6 +83,7 @@ func caseObject(c *record.Case) (object, error) {
 		{"agreement", agreement},
 		{"grid", grid},
 		{"requirements", requirementList(c.Requirements)},
+		{"ratings", ratingList(c.Ratings)},
 		{"warnings", stringList(c.Warnings)},
 	}, nil
 }

@@ -70,6 +70,19 @@ func TestJSONRead(t *testing.T) {
 		{"cases/nominal/requirements/1/value", nil},
 		{"cases/nominal/requirements/1/limit", nil},
 		{"cases/nominal/warnings/0", "the source is ideal: it has no available power"},
+		{"cases/nominal/requirements/0/section", "main"},
+		{"cases/nominal/lines/coax/model", "dispersive"},
+		{"cases/nominal/lines/coax/series_residual", 4e-4},
+		{"cases/nominal/lines/coax/shunt_residual", nil}, // no dielectric form
+		{"cases/nominal/lines/coax/pedigree/0/kind", "catalogue"},
+		{"cases/nominal/lines/coax/loss_fit/0/fitted_db_per_m", 0.01991},
+		{"cases/nominal/lines/wire/field_per_volt_per_m", nil},
+		{"cases/nominal/ratings/0/peak_time_s", 7.5e-9},
+		{"cases/nominal/ratings/0/rated_text", "20 V rms"},
+		{"cases/nominal/ratings/0/advisory", true},
+		{"cases/nominal/ratings/0/field_v_per_m", 8064.0},
+		{"cases/nominal/ratings/1/uncertainty", nil},
+		{"cases/nominal/ratings/1/verdict", "not shown"},
 		{"cases/ring, lossless/settling/settled", false},
 		{"cases/ring, lossless/settling/to_1_percent_s", nil},
 	} {
@@ -124,6 +137,7 @@ func TestJSONRefusesNames(t *testing.T) {
 		{"two cases", func(r *record.Record) { r.Cases[1].Name = "nominal" }, `kind case have the name "nominal"`},
 		{"no name", func(r *record.Record) { r.Cases[1].Name = "" }, "kind case has no name"},
 		{"two junctions", func(r *record.Record) { r.Cases[0].FDTD.Junctions[1].Name = "source" }, `"nominal": fdtd: two entries of kind junction`},
+		{"two lines", func(r *record.Record) { r.Cases[0].Model.Lines[1].Name = "coax" }, `kind line have the name "coax"`},
 		{"two grids", func(r *record.Record) {
 			g := &r.Cases[0].Grid
 			g.Sections = append(g.Sections, g.Sections[0])

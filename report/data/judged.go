@@ -54,6 +54,7 @@ func requirementObject(r record.Requirement) object {
 		{"id", r.ID},
 		{"quantity", r.Quantity},
 		{"subject", r.Subject},
+		{"section", r.Section},
 		{"value", r.Value},
 		{"limit", nearerLimit(r)},
 		{"margin", r.Margin},

@@ -40,7 +40,7 @@ func sample() *record.Record {
 	nominal := record.Case{
 		Name:    "nominal",
 		Verdict: record.Missed,
-		Model:   record.Model{Frequency: 100e6},
+		Model:   record.Model{Frequency: 100e6, Lines: sampleLines()},
 		Phasor:  sampleSteady(1),
 		FDTD:    sampleSteady(1.0001),
 		Settling: record.Settling{
@@ -57,7 +57,7 @@ func sample() *record.Record {
 		},
 		Requirements: []record.Requirement{
 			{
-				ID: "R1", Quantity: "vswr", Subject: "main, from end", Unit: "1", Value: 1.75, Max: &limit, Min: &low,
+				ID: "R1", Quantity: "vswr", Subject: "main, from end", Section: "main", Unit: "1", Value: 1.75, Max: &limit, Min: &low,
 				Limit: "from 1 to 1.5", Margin: -0.25, MarginDB: math.NaN(), MarginPercent: -16.7, Uncertainty: 1e-4,
 				Verdict: record.MissedReq, Method: "fdtd", Text: `"low" & < 1.5`, Source: "SPEC-7 4.2",
 			},
@@ -67,6 +67,7 @@ func sample() *record.Record {
 				Uncertainty: 0.001, Verdict: record.MissedReq, Method: "phasor",
 			},
 		},
+		Ratings:   sampleRatings(),
 		Warnings:  []string{"the source is ideal: it has no available power"},
 		Profiles:  []record.Profile{sampleProfile()},
 		Waveforms: sampleWaveforms(),
@@ -148,6 +149,35 @@ func sampleWaveforms() []record.Waveform {
 		{
 			Name: "end current", Where: "end", Quantity: "current", Unit: "A", Start: 1e-9, Step: 2.5e-10, Samples: []float64{0.125},
 			Tail: record.Tail{Start: 800e-9, Step: 2.5e-10, Samples: []float64{0.1}},
+		},
+	}
+}
+
+func sampleLines() []record.ModelLine {
+	return []record.ModelLine{
+		{
+			Name: "coax", Text: "RG-213 of the cable table", Model: "dispersive", SeriesResidual: 4e-4, FieldPerVolt: 384,
+			Pedigree: []record.Pedigree{
+				{What: "z0", Text: "50 ohm", Kind: "catalogue", Note: "nominal, from memory"},
+				{What: "model", Text: "dispersive", Kind: "assumed"},
+			},
+			Fit: []record.FitPoint{{Frequency: 10e6, Given: 0.0197, Fitted: 0.01991, Text: "1.97 dB/100m at 10 MHz"}},
+		},
+		{Name: "wire", Text: "l 1 uH/m, c 11.2 pF/m", Model: "constant"},
+	}
+}
+
+func sampleRatings() []record.Rating {
+	return []record.Rating{
+		{
+			Section: "main", Quantity: "voltage", Unit: "V", Steady: 12, SteadyAt: 0.5, Peak: 21, PeakAt: 0.5, PeakTime: 7.5e-9,
+			Uncertainty: 0.01, Rated: 28.2842712474619, Text: "20 V rms", Source: "cable table", Advisory: true, Derating: 6,
+			Allowed: 14.1755, Margin: -6.8245, MarginDB: -3.41, MarginPercent: -48.1, Verdict: record.MissedReq, Field: 8064,
+		},
+		{
+			Section: "main", Quantity: "current", Unit: "A", Steady: 0.2, Peak: 0.4, PeakAt: 0.025, PeakTime: 5e-9,
+			Uncertainty: math.NaN(), Rated: 1, Text: "1 A peak", Source: "section main",
+			Allowed: 1, Margin: 0.6, MarginDB: 7.96, MarginPercent: 60, Verdict: record.NotShownReq,
 		},
 	}
 }

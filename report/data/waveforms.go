@@ -37,9 +37,9 @@ func waveformRow(t *table, name string, w *record.Waveform, part string, time, f
 	t.text(name, w.Name, w.Where, part)
 	t.numbers(time)
 	if w.Quantity == "current" {
-		t.numbers(math.NaN(), math.NaN(), fdtd, phasor)
+		t.digits(sampleDigits, math.NaN(), math.NaN(), fdtd, phasor)
 	} else {
-		t.numbers(fdtd, phasor, math.NaN(), math.NaN())
+		t.digits(sampleDigits, fdtd, phasor, math.NaN(), math.NaN())
 	}
 	t.end()
 }
