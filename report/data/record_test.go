@@ -143,7 +143,7 @@ func sampleProfile() record.Profile {
 func sampleWaveforms() []record.Waveform {
 	return []record.Waveform{
 		{
-			Name: "source voltage", Where: "source", Quantity: "voltage", Unit: "V", Start: 0, Step: 2.5e-10, Samples: []float64{0, 10},
+			Name: "source voltage", Where: "source", Quantity: "voltage", Unit: "V", Start: 0, Step: 2.5e-10, Samples: []float64{0, 10.0 / 3},
 			Tail: record.Tail{Start: 800e-9, Step: 2.5e-10, Samples: []float64{9.9}, Phasor: []float64{10}},
 		},
 		{

@@ -1,6 +1,7 @@
 package drawing
 
 import (
+	"slices"
 	"testing"
 
 	"gonum.org/v1/plot/vg"
@@ -58,12 +59,12 @@ func TestLabelsApart(t *testing.T) {
 				}
 			}
 		}
-		if len(seen) != len(m.Sections) || len(parts) != len(m.Loads) {
-			t.Fatalf("%d sections and %d loads drawn, want %d and %d", len(seen), len(parts), len(m.Sections), len(m.Loads))
+		if len(seen) != len(m.Sections)+len(m.Elements) || len(parts) != len(m.Loads) {
+			t.Fatalf("%d edges and %d loads drawn, want %d and %d", len(seen), len(parts), len(m.Sections)+len(m.Elements), len(m.Loads))
 		}
 		for e, times := range seen {
 			if times != 1 {
-				t.Fatalf("section %s drawn %d times", e.section.Name, times)
+				t.Fatalf("the edge from %s to %s is drawn %d times", e.a, e.b, times)
 			}
 		}
 	})
@@ -123,6 +124,29 @@ func TestUntied(t *testing.T) {
 		}
 	}
 	t.Errorf("texts %q lack the stray junction", texts)
+}
+
+// A transformer's ratio reads in the order in which its ends are drawn, and a
+// combination without room for its value says what it is.
+func TestPartsInWords(t *testing.T) {
+	n := reporttest.ReceivingNetwork() // its unun is 1:2 from the balun to the aerial, and the aerial is at the left
+	l := Lay(n.Model(), 10)
+	_, texts, _ := drawn(l, l.Bands[0])
+	for _, want := range []string{"unun", "2:1", "combination of 2"} {
+		if !slices.Contains(texts, want) {
+			t.Errorf("texts %q lack %q", texts, want)
+		}
+	}
+	n.At, n.Bridges[0].At, n.Bridges[0].To = "aerial", "aerial", "balun"
+	l = Lay(n.Model(), 10)
+	if _, texts, _ = drawn(l, l.Bands[0]); !slices.Contains(texts, "1:2") {
+		t.Errorf("texts %q lack 1:2", texts)
+	}
+	for in, want := range map[string]string{"1:4": "4:1", "2.5 : 1": "1:2.5", "3": "1:(3)"} {
+		if got := turnedRatio(in); got != want {
+			t.Errorf("turnedRatio(%q) = %q, want %q", in, got, want)
+		}
+	}
 }
 
 func TestLetter(t *testing.T) {

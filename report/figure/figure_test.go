@@ -2,6 +2,7 @@ package figure
 
 import (
 	"math"
+	"slices"
 	"strings"
 	"testing"
 
@@ -161,5 +162,47 @@ func TestKeyBreaksLines(t *testing.T) {
 	}
 	if got := KeyRoom(e, 100); got != 3*KeyHeight {
 		t.Errorf("narrow key is %v high", got)
+	}
+}
+
+// Labels in a stack keep their order and their distance, and stay inside if
+// there is room for all.
+func TestSpread(t *testing.T) {
+	const slack = 1e-9 // of sums of a few points of size
+	rapid.Check(t, func(t *rapid.T) {
+		ys := rapid.SliceOfN(rapid.Float64Range(-50, 150), 1, 8).Draw(t, "ys")
+		slices.Sort(ys)
+		const lo, hi = 0, 100 // 8 labels of TagHeight find room
+		spread(ys, lo, hi, rapid.Bool().Draw(t, "up"))
+		for i, y := range ys {
+			if y < lo-slack || y > hi+slack || i > 0 && y-ys[i-1] < TagHeight-slack {
+				t.Fatalf("labels at %v", ys)
+			}
+		}
+	})
+	ys := []float64{10, 40}
+	if spread(ys, 0, 100, true); ys[0] != 10 || ys[1] != 40 {
+		t.Errorf("labels with room were moved to %v", ys)
+	}
+}
+
+// Only the side beyond the nearest limit is hatched, and a mild one hatches
+// nothing.
+func TestBeyond(t *testing.T) {
+	at := func(l Limit) float64 { return l.Value }
+	area := vg.Rectangle{Max: vg.Point{X: 10, Y: 100}}
+	for _, c := range []struct {
+		limits []Limit
+		lo, hi vg.Length
+	}{
+		{[]Limit{{Value: 80, Above: true}, {Value: 60, Above: true}, {Value: 50, Above: true, Mild: true}}, 60, 100},
+		{[]Limit{{Value: 10}, {Value: 30}}, 0, 30},
+	} {
+		if r := beyond(area, c.limits, at); r.Min.Y != c.lo || r.Max.Y != c.hi {
+			t.Errorf("%v hatches %v to %v, want %v to %v", c.limits, r.Min.Y, r.Max.Y, c.lo, c.hi)
+		}
+	}
+	if r := beyond(area, []Limit{{Value: 50, Above: true, Mild: true}}, at); r.Max.Y > r.Min.Y {
+		t.Errorf("a mild limit hatches %v", r)
 	}
 }

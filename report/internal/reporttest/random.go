@@ -36,7 +36,29 @@ func Random(t *rapid.T, most int) Network {
 			n.Loads = append(n.Loads, load(t, i, j))
 		}
 	}
+	for i := range rapid.IntRange(0, min(len(junctions)-1, 3)).Draw(t, "bridges") {
+		n.Bridges = append(n.Bridges, bridge(t, i, junctions))
+	}
 	return n
+}
+
+// bridge draws an element between two junctions: a resistor, a combination or
+// a transformer.
+func bridge(t *rapid.T, i int, junctions []string) Load {
+	l := Load{Name: name(t, "bridge", i), R: rapid.Float64Range(0.1, 1e4).Draw(t, "r")}
+	a := rapid.IntRange(0, len(junctions)-2).Draw(t, "a")
+	b := rapid.IntRange(a+1, len(junctions)-1).Draw(t, "b")
+	if rapid.Bool().Draw(t, "turned") {
+		a, b = b, a
+	}
+	l.At, l.To = junctions[a], junctions[b]
+	switch rapid.IntRange(0, 2).Draw(t, "kind") {
+	case 0:
+		l.Ratio, l.Given = rapid.Float64Range(0.1, 10).Draw(t, "ratio"), rapid.SampledFrom([]string{"1:4", "2.5 : 1", "49:1"}).Draw(t, "turns")
+	case 1:
+		l.Given, l.As = "(47 nH with Q 180 || 56 pF with Q 1000), 48 nH with Q 180", "combination of 3"
+	}
+	return l
 }
 
 func load(t *rapid.T, i int, at string) Load {
