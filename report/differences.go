@@ -33,7 +33,8 @@ func changes(a, b record.Model) []string {
 		out = append(out, became("source", x, y))
 	}
 	out = append(out, changedLines(a, b)...)
-	out = append(out, compare("section", sectionTerms(a), sectionTerms(b))...)
+	derived := a.Frequency == b.Frequency // else everything that follows from it differs
+	out = append(out, compare("section", sectionTerms(a, derived), sectionTerms(b, derived))...)
 	out = append(out, compare("load", partTerms(a.Loads), partTerms(b.Loads))...)
 	return append(out, compare("element", partTerms(a.Elements), partTerms(b.Elements))...)
 }
@@ -67,11 +68,17 @@ func changedLines(a, b record.Model) []string {
 
 func lineTerm(l record.ModelLine) string { return l.Text + " (" + l.Model + ")" }
 
-func sectionTerms(m record.Model) []term {
+// sectionTerms gives the sections in words, with or without what follows from
+// the frequency.
+func sectionTerms(m record.Model, derived bool) []term {
 	var out []term
 	for _, s := range m.Sections {
-		out = append(out, term{s.Name, fmt.Sprintf("%s to %s, %s (%s), line %s, %s %s, R′ %s",
-			s.From, s.To, s.Given, format.Wavelengths(s.Wavelengths), s.Line, z0, format.Complex(s.Z0, "Ω"), format.SI(s.R, "Ω/m"))})
+		words := fmt.Sprintf("%s to %s, %s, line %s", s.From, s.To, s.Given, s.Line)
+		if derived {
+			words = fmt.Sprintf("%s to %s, %s (%s), line %s, %s %s, R′ %s",
+				s.From, s.To, s.Given, format.Wavelengths(s.Wavelengths), s.Line, z0, format.Complex(s.Z0, "Ω"), format.SI(s.R, "Ω/m"))
+		}
+		out = append(out, term{s.Name, words})
 	}
 	return out
 }

@@ -121,7 +121,7 @@ func (d *document) envelopes(c *record.Case) {
 		first += zoomHeight
 	}
 	d.b.Subheading("Along the sections: envelopes and agreement", first+headed)
-	d.envelopeKey(c)
+	d.envelopeKey(c, slices.Concat(long, short))
 	if first == rowHeight { // a long one would leave the rest of the page empty
 		d.shortSections(short)
 		short = nil
@@ -133,7 +133,7 @@ func (d *document) envelopes(c *record.Case) {
 }
 
 // envelopeKey writes what the curves and lines of the envelopes are.
-func (d *document) envelopeKey(c *record.Case) {
+func (d *document) envelopeKey(c *record.Case, sections [][]*track) {
 	note := "Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end."
 	key := []figure.Entry{
 		{Style: ink.PhasorLine, Text: "phasor; expected error"}, {Style: ink.FDTDLine, Text: "time domain; found error"},
@@ -142,7 +142,7 @@ func (d *document) envelopeKey(c *record.Case) {
 	if len(c.Ratings) > 0 {
 		note += " Ratings hold for the amplitude and for the peak over all time; all lines are peak values. A limit far above the curves is not drawn; the caption has it."
 	}
-	if slices.ContainsFunc(c.Ratings, func(r record.Rating) bool { return r.Derating > 0 }) {
+	if slices.ContainsFunc(slices.Concat(sections...), (*track).showsMild) {
 		key = append(key, figure.Entry{Style: ink.RatedLine, Text: "rated, before derating"})
 	}
 	d.b.Note(note)

@@ -162,10 +162,18 @@ func (l limit) finding(t *track) string {
 	case onBoth:
 		value = max(value, largestOf(t.fdtd), largestOf(t.peak))
 	}
-	gap := (l.value - value) / l.value
-	side := "below"
-	if gap < 0 {
-		side = "above"
+	return distance(value, l.value) + " " + l.name
+}
+
+// distance says how far a value is from a limit: in per cent of the limit, or
+// in dB where it is less than a tenth of it.
+func distance(value, limit float64) string {
+	gap := (limit - value) / limit
+	switch {
+	case gap > 0.9 && value > 0:
+		return format.Fixed(20*math.Log10(limit/value), 0) + format.Space + "dB below"
+	case gap < 0:
+		return format.Share(-gap) + " above"
 	}
-	return format.Share(math.Abs(gap)) + " " + side + " " + l.name
+	return format.Share(gap) + " below"
 }

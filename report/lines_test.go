@@ -17,7 +17,7 @@ func TestLinesAndRatingsInText(t *testing.T) {
 		"Ratings: the 12 worst of 18", "All 18 ratings stand with their cases.", "250 V rms", "6 A peak", "missed",
 		"To be confirmed:", "Line RG-213: z0, velocity factor, capacitance, loss, voltage rating from the cable table",
 		"RG-213 of the cable table", "dispersive", "0.0390 %", "0.210 %", "384.0 V/m", "kV/m",
-		"cable table, needs", "nominal, from memory; to be", "assumed, needs", "from dimensions", "design file, no origin", "sheet 4411, issue 3",
+		"cable table, needs", "nominal, from memory; to be", "assumed, needs", "from dimensions", "Design file: it gives the value", "sheet 4411, issue 3",
 		"hardline (case", "Loss table of RG-213 and its fit", "−2.10 %", "Its largest residual is −2.10 %, at 50.00 MHz.",
 		"ideal transformer: voltage at aerial is 2.000 times that at balun", "combination of 2", "parallel of 2.2 uH (Q 180) and 122 pF",
 		"line hardline: coaxial", "rated 353.6 V (cable table)", "allowed 4.248 A", "rated 6.000 A", "allowed 425.3 V",
@@ -70,7 +70,7 @@ func TestGathered(t *testing.T) {
 // printed as it is.
 func TestOriginOf(t *testing.T) {
 	for kind, want := range map[string]string{
-		"measured": "measured", "datasheet": "data sheet", "geometry": "from dimensions", "given": "design file, no origin stated",
+		"measured": "measured", "datasheet": "data sheet", "geometry": "from dimensions", "given": "design file",
 		"catalogue": "cable table, needs confirmation", "assumed": "assumed, needs confirmation", "hearsay": "hearsay",
 	} {
 		if got := originOf(record.Pedigree{Kind: kind}); got != want {

@@ -17,7 +17,7 @@ var origins = map[string]string{
 	"catalogue": "cable table",
 	"geometry":  "from dimensions",
 	"assumed":   "assumed",
-	"given":     "design file, no origin stated",
+	"given":     "design file",
 }
 
 // unconfirmed reports whether somebody has yet to answer for a piece of data:
@@ -49,9 +49,11 @@ func (d *document) pedigree(kinds []lineKind) {
 	}
 	d.b.Subheading("Where the data of the lines come from", 70)
 	d.b.Table(t)
+	note := "Design file: it gives the value and does not say where that comes from."
 	if flagged {
-		d.b.Note("A flag marks what needs confirmation: values of the cable table are nominal and from memory, to be replaced by the sheet of the cable in hand; assumed values are defaults of the program.")
+		note += " A flag marks what needs confirmation: values of the cable table are nominal and from memory, to be replaced by the sheet of the cable in hand; assumed values are defaults of the program."
 	}
+	d.b.Note(note)
 }
 
 // pedigreeRows returns the rows of one line. A note that repeats that of the

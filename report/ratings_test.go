@@ -70,6 +70,17 @@ func TestRatedLimits(t *testing.T) {
 	}
 }
 
+func TestDistance(t *testing.T) {
+	for _, c := range []struct {
+		value, limit float64
+		want         string
+	}{{90, 100, "10 % below"}, {124, 100, "24 % above"}, {1, 1000, "60 dB below"}, {0, 10, "100 % below"}, {100, 100, "0 % below"}} {
+		if got := readable(distance(c.value, c.limit)); got != c.want {
+			t.Errorf("distance(%v, %v) = %q, want %q", c.value, c.limit, got, c.want)
+		}
+	}
+}
+
 // A requirement that names its section is about that one, whatever its words.
 func TestRequirementNamesItsSection(t *testing.T) {
 	m := reporttest.FeederNetwork().Model()

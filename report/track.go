@@ -115,6 +115,11 @@ func (t *track) shows(l limit) bool {
 	return l.value <= far*max(largestOf(t.phasor), largestOf(t.peak))
 }
 
+// showsMild reports whether a rating is drawn beside what it allows.
+func (t *track) showsMild() bool {
+	return slices.ContainsFunc(t.limits, func(l limit) bool { return l.mild && t.shows(l) })
+}
+
 // strip returns the panel of the error.
 func (t *track) strip(s span) *figure.Panel {
 	lo, hi := t.errorRange()

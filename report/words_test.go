@@ -117,6 +117,11 @@ func TestChanges(t *testing.T) {
 			t.Errorf("changes lack %q:\n%s", s, got)
 		}
 	}
+	b = a
+	b.Frequency *= 0.7
+	if got := changes(a.Model(), b.Model()); len(got) != 1 {
+		t.Errorf("another frequency alone gives %q", got)
+	}
 	if got := changes(a.Model(), a.Model()); got != nil {
 		t.Errorf("changes of a model to itself: %q", got)
 	}
