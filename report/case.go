@@ -74,10 +74,18 @@ func (d *document) sections(c *record.Case) {
 			x = c.Stress.Sections[i]
 		}
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: s.Name, Bold: true}, {Text: format.Complex(s.From.Impedance, "Ω")}, {Text: format.VSWR(s.From.VSWR)}, {Text: format.VSWR(s.To.VSWR)},
-			{Text: format.SI(s.VoltageMax.Value, "V")}, {Text: place(s.VoltageMax.At)}, {Text: format.SI(real(near.voltage(complex(s.VoltageMin.Value, 0))), "V")},
-			{Text: format.SI(s.CurrentMax.Value, "A")}, {Text: place(s.CurrentMax.At)}, {Text: format.SI(s.Loss, "W")},
-			{Text: format.SI(x.Voltage, "V")}, {Text: format.SI(x.Current, "A")},
+			{Text: s.Name, Bold: true},
+			{Text: format.Complex(s.From.Impedance, "Ω")},
+			{Text: format.VSWR(s.From.VSWR)},
+			{Text: format.VSWR(s.To.VSWR)},
+			{Text: format.SI(s.VoltageMax.Value, "V")},
+			{Text: place(s.VoltageMax.At)},
+			{Text: format.SI(real(near.voltage(complex(s.VoltageMin.Value, 0))), "V")},
+			{Text: format.SI(s.CurrentMax.Value, "A")},
+			{Text: place(s.CurrentMax.At)},
+			{Text: format.SI(s.Loss, "W")},
+			{Text: format.SI(x.Voltage, "V")},
+			{Text: format.SI(x.Current, "A")},
 		})
 	}
 	if len(t.Rows) == 0 {
@@ -96,14 +104,20 @@ func (d *document) loads(c *record.Case) {
 	}}
 	for _, l := range c.Phasor.Loads {
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: l.Name + " (load)", Bold: true}, {Text: format.Polar(near.voltage(l.V), "V")}, {Text: rms(near.voltage(l.V))},
-			{Text: format.Polar(near.current(l.I), "A")}, {Text: format.SI(near.power(l.Power), "W")},
+			{Text: l.Name + " (load)", Bold: true},
+			{Text: format.Polar(near.voltage(l.V), "V")},
+			{Text: rms(near.voltage(l.V))},
+			{Text: format.Polar(near.current(l.I), "A")},
+			{Text: format.SI(near.power(l.Power), "W")},
 		})
 	}
 	for _, j := range c.Phasor.Junctions {
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: j.Name}, {Text: format.Polar(near.voltage(j.V), "V")}, {Text: rms(near.voltage(j.V))},
-			{Text: format.Missing}, {Text: format.Missing},
+			{Text: j.Name},
+			{Text: format.Polar(near.voltage(j.V), "V")},
+			{Text: rms(near.voltage(j.V))},
+			{Text: format.Missing},
+			{Text: format.Missing},
 		})
 	}
 	d.b.Table(t)
@@ -135,8 +149,13 @@ func (d *document) grid(c *record.Case) {
 	}}
 	for _, s := range g.Sections {
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: s.Name, Bold: true}, {Text: format.Count(int64(s.Cells))}, {Text: format.SI(s.Cell, "m")}, {Text: format.Fixed(s.Courant, 5)},
-			{Text: format.Number(s.CellsPerWavelength)}, {Text: format.Count(int64(s.Points))}, {Text: format.Digits(s.PhaseErrorDegrees, 3) + "°"},
+			{Text: s.Name, Bold: true},
+			{Text: format.Count(int64(s.Cells))},
+			{Text: format.SI(s.Cell, "m")},
+			{Text: format.Fixed(s.Courant, 5)},
+			{Text: format.Number(s.CellsPerWavelength)},
+			{Text: format.Count(int64(s.Points))},
+			{Text: format.Digits(s.PhaseErrorDegrees, 3) + "°"},
 		})
 	}
 	d.b.Subheading("Grid of the time domain", 60)

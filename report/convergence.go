@@ -29,8 +29,10 @@ func (d *document) convergence(c *record.Case) {
 	}
 	label := d.figure()
 	entries := []figure.Entry{
-		{Style: ink.FDTDLine, Text: "change over a round trip"}, {Style: ink.PhasorLine, Text: "estimated error left"},
-		{Style: ink.MarkLine, Text: "multiples of the longest round trip"}, {Style: ink.LimitLine, Text: "tolerance"},
+		{Style: ink.FDTDLine, Text: "change over a round trip"},
+		{Style: ink.PhasorLine, Text: "estimated error left"},
+		{Style: ink.MarkLine, Text: "multiples of the longest round trip"},
+		{Style: ink.LimitLine, Text: "tolerance"},
 	}
 	d.b.Subheading("Steady state and spectrum", convergenceHeight+2*figure.KeyHeight+30)
 	d.key(entries)

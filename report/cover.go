@@ -105,7 +105,8 @@ func (d *document) cases() {
 	t.Columns = append(t.Columns, right("Solutions differ by"), right("Settled to 1"+format.Space+"% after"), right("Peak voltage"), right("Peak current"))
 	for _, c := range d.r.Cases {
 		row := []sheet.Cell{
-			{Text: c.Name, Bold: true}, {Text: string(c.Verdict), Mark: markOf(c.Verdict)},
+			{Text: c.Name, Bold: true},
+			{Text: string(c.Verdict), Mark: markOf(c.Verdict)},
 			{Text: count(c.Requirements).String()},
 		}
 		if rated {

@@ -76,9 +76,16 @@ func (d *document) lengths(m record.Model) {
 	}}
 	for _, s := range m.Sections {
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: s.Name, Bold: true}, {Text: s.From + ", " + s.To}, {Text: s.Line}, {Text: s.Given},
-			{Text: format.SI(s.Length, "m")}, {Text: format.Feet(s.Length)}, {Text: format.Wavelengths(s.Wavelengths)},
-			{Text: format.Electrical(s.Degrees)}, {Text: format.SI(s.Delay, "s")}, {Text: format.DB(s.LossDB)},
+			{Text: s.Name, Bold: true},
+			{Text: s.From + ", " + s.To},
+			{Text: s.Line},
+			{Text: s.Given},
+			{Text: format.SI(s.Length, "m")},
+			{Text: format.Feet(s.Length)},
+			{Text: format.Wavelengths(s.Wavelengths)},
+			{Text: format.Electrical(s.Degrees)},
+			{Text: format.SI(s.Delay, "s")},
+			{Text: format.DB(s.LossDB)},
 		})
 	}
 	d.b.Subheading("Sections: lengths", 70)
@@ -92,8 +99,13 @@ func (d *document) constants(m record.Model) {
 	}}
 	for _, s := range m.Sections {
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: s.Name, Bold: true}, {Text: format.Complex(s.Z0, "Ω")}, {Text: format.Number(s.VelocityFactor)},
-			{Text: format.SI(s.R, "Ω/m")}, {Text: format.SI(s.L, "H/m")}, {Text: format.SI(s.G, "S/m")}, {Text: format.SI(s.C, "F/m")},
+			{Text: s.Name, Bold: true},
+			{Text: format.Complex(s.Z0, "Ω")},
+			{Text: format.Number(s.VelocityFactor)},
+			{Text: format.SI(s.R, "Ω/m")},
+			{Text: format.SI(s.L, "H/m")},
+			{Text: format.SI(s.G, "S/m")},
+			{Text: format.SI(s.C, "F/m")},
 		})
 	}
 	d.b.Subheading("Sections: constants at the design frequency", 70)
@@ -115,8 +127,14 @@ func (d *document) parts(title string, parts []record.ModelPart) {
 			at += ", " + p.To
 		}
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: p.Name, Bold: true}, {Text: at}, {Text: format.Signed(p.Given)}, {Text: realised(p)},
-			{Text: absent(p.R, "Ω")}, {Text: absent(p.L, "H")}, {Text: absent(p.C, "F")}, {Text: impedance(p)},
+			{Text: p.Name, Bold: true},
+			{Text: at},
+			{Text: format.Signed(p.Given)},
+			{Text: realised(p)},
+			{Text: absent(p.R, "Ω")},
+			{Text: absent(p.L, "H")},
+			{Text: absent(p.C, "F")},
+			{Text: impedance(p)},
 		})
 	}
 	d.b.Subheading(title, 60)
@@ -157,10 +175,14 @@ func (d *document) source(m record.Model) {
 	s := m.Source
 	d.b.Subheading("Source", 50)
 	d.b.Fields([]sheet.Field{
-		{Label: "At junction", Value: s.At}, {Label: "Frequency", Value: format.SI(m.Frequency, "Hz")},
-		{Label: "As given", Value: format.Signed(s.Given)}, {Label: "EMF", Value: format.SI(s.EMF, "V") + " peak, " + format.SI(s.EMF/math.Sqrt2, "V") + " rms"},
-		{Label: "Impedance", Value: format.Complex(s.Impedance, "Ω")}, {Label: "Available power", Value: available(s.Available)},
-		{Label: "Start", Value: format.Signed(s.Start)}, {Label: "Stop", Value: orElse(s.Stop, "stays on")},
+		{Label: "At junction", Value: s.At},
+		{Label: "Frequency", Value: format.SI(m.Frequency, "Hz")},
+		{Label: "As given", Value: format.Signed(s.Given)},
+		{Label: "EMF", Value: format.SI(s.EMF, "V") + " peak, " + format.SI(s.EMF/math.Sqrt2, "V") + " rms"},
+		{Label: "Impedance", Value: format.Complex(s.Impedance, "Ω")},
+		{Label: "Available power", Value: available(s.Available)},
+		{Label: "Start", Value: format.Signed(s.Start)},
+		{Label: "Stop", Value: orElse(s.Stop, "stays on")},
 	})
 }
 

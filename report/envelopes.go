@@ -136,8 +136,10 @@ func (d *document) envelopes(c *record.Case) {
 func (d *document) envelopeKey(c *record.Case, sections [][]*track) {
 	note := "Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end."
 	key := []figure.Entry{
-		{Style: ink.PhasorLine, Text: "phasor; expected error"}, {Style: ink.FDTDLine, Text: "time domain; found error"},
-		{Style: ink.PeakLine, Text: "peak over all time"}, {Style: ink.LimitLine, Text: "limit, hatched beyond"},
+		{Style: ink.PhasorLine, Text: "phasor; expected error"},
+		{Style: ink.FDTDLine, Text: "time domain; found error"},
+		{Style: ink.PeakLine, Text: "peak over all time"},
+		{Style: ink.LimitLine, Text: "limit, hatched beyond"},
 	}
 	if len(c.Ratings) > 0 {
 		note += " Ratings hold for the amplitude and for the peak over all time; all lines are peak values. A limit far above the curves is not drawn; the caption has it."

@@ -85,8 +85,10 @@ func ratedLimits(r record.Rating) []limit {
 		return []limit{{label: "rated" + format.Space + rated + from, name: "the rated " + rated + from, value: r.Rated, upper: true, on: onBoth}}
 	}
 	return []limit{
-		{label: "allowed" + format.Space + allowed + from, name: "the allowed " + allowed + " (" + r.Text + " less " + format.DB(r.Derating) + ")",
-			value: r.Allowed, upper: true, on: onBoth},
+		{
+			label: "allowed" + format.Space + allowed + from, name: "the allowed " + allowed + " (" + r.Text + " less " + format.DB(r.Derating) + ")",
+			value: r.Allowed, upper: true, on: onBoth,
+		},
 		{label: "rated" + format.Space + rated + from, value: r.Rated, upper: true, on: onBoth, mild: true},
 	}
 }

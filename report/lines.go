@@ -64,7 +64,9 @@ func (d *document) lines() {
 func kindTable(kinds []lineKind) sheet.Table {
 	field := slices.ContainsFunc(kinds, func(k lineKind) bool { return k.FieldPerVolt > 0 })
 	t := sheet.Table{Columns: []sheet.Column{
-		left("Line"), {Head: "Data as given", Grow: 4}, left("Model"),
+		left("Line"),
+		{Head: "Data as given", Grow: 4},
+		left("Model"),
 		right("Residual, series"), right("Residual, shunt"),
 	}}
 	if field {
@@ -72,8 +74,11 @@ func kindTable(kinds []lineKind) sheet.Table {
 	}
 	for _, k := range kinds {
 		row := []sheet.Cell{
-			{Text: k.label, Bold: true}, {Text: format.Signed(k.Text)}, {Text: k.Model},
-			{Text: residual(k.SeriesResidual)}, {Text: residual(k.ShuntResidual)},
+			{Text: k.label, Bold: true},
+			{Text: format.Signed(k.Text)},
+			{Text: k.Model},
+			{Text: residual(k.SeriesResidual)},
+			{Text: residual(k.ShuntResidual)},
 		}
 		if field {
 			row = append(row, sheet.Cell{Text: absent(k.FieldPerVolt, "V/m")})
@@ -112,7 +117,10 @@ func (d *document) fit(k lineKind) {
 	}}
 	for _, p := range k.Fit {
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: format.SI(p.Frequency, "Hz")}, {Text: p.Text}, {Text: lossOf100(p.Given)}, {Text: lossOf100(p.Fitted)},
+			{Text: format.SI(p.Frequency, "Hz")},
+			{Text: p.Text},
+			{Text: lossOf100(p.Given)},
+			{Text: lossOf100(p.Fitted)},
 			{Text: format.Percent(fitResidual(p))},
 		})
 	}

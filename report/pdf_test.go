@@ -19,7 +19,8 @@ import (
 func write(t interface {
 	Helper()
 	Fatalf(string, ...any)
-}, r *record.Record, opt Options) []byte {
+}, r *record.Record, opt Options,
+) []byte {
 	t.Helper()
 	d, err := build(r, opt)
 	if err != nil {

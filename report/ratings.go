@@ -46,7 +46,7 @@ func (d *document) ratings() {
 		title = fmt.Sprintf("Ratings: the %d worst of %d", coverRatings, len(all))
 	}
 	d.b.Subheading(title, 80)
-	d.b.Table(ratingTable(all[:min(len(all), coverRatings)], true))
+	d.b.Table(ratingTable(all[:min(len(all), coverRatings)], true, fielded(all)))
 	note := ""
 	if len(all) > coverRatings {
 		note = fmt.Sprintf("All %d ratings stand with their cases. ", len(all))
@@ -65,7 +65,7 @@ func (d *document) caseRatings(c *record.Case) {
 		rows = append(rows, caseRating{c.Name, r})
 	}
 	d.b.Subheading("Ratings, worst first", 60)
-	d.b.Table(ratingTable(rows, false))
+	d.b.Table(ratingTable(rows, false, fielded(rows)))
 }
 
 // ratingNote says what the columns mean.
@@ -75,14 +75,18 @@ func ratingNote(all []caseRating) string {
 	if slices.ContainsFunc(all, func(r caseRating) bool { return r.Advisory }) {
 		s += " Not counted: ratings of the cable table are from memory; they warn and have no part in the verdict."
 	}
-	if slices.ContainsFunc(all, func(r caseRating) bool { return r.Field > 0 }) {
+	if fielded(all) {
 		s += " The field is the largest ever at the inner conductor, smooth and concentric."
 	}
 	return s
 }
 
-func ratingTable(rows []caseRating, named bool) sheet.Table {
-	field := slices.ContainsFunc(rows, func(r caseRating) bool { return r.Field > 0 })
+// fielded reports whether the field is known for any of the ratings.
+func fielded(rows []caseRating) bool {
+	return slices.ContainsFunc(rows, func(r caseRating) bool { return r.Field > 0 })
+}
+
+func ratingTable(rows []caseRating, named, field bool) sheet.Table {
 	t := sheet.Table{Size: 6.8}
 	if named {
 		t.Columns = append(t.Columns, left("Case"))

@@ -14,13 +14,23 @@ func (d *document) requirements() {
 	rows := d.requirementRows()
 	d.b.Subheading("Requirements", 60)
 	if len(rows) == 0 {
-		d.b.Paragraph("The design file states no requirement. The verdict then says only that the two solutions agree.")
+		rests := "on the agreement of the two solutions alone."
+		if d.rated() {
+			rests = "on the agreement of the two solutions and on the ratings."
+		}
+		d.b.Paragraph("The design file states no requirement. The verdict then rests " + rests)
 		return
 	}
 	d.b.Table(sheet.Table{Size: 7, Columns: []sheet.Column{
-		{Head: "Id"}, {Head: "Case"}, {Head: "Quantity, subject", Grow: 1}, {Head: "Limit"},
-		{Head: "Value", Align: typeset.Right}, {Head: "Uncertainty ±", Align: typeset.Right},
-		{Head: "Margin", Align: typeset.Right}, {Head: "Margin, relative", Align: typeset.Right}, {Head: "Verdict"},
+		{Head: "Id"},
+		{Head: "Case"},
+		{Head: "Quantity, subject", Grow: 1},
+		{Head: "Limit"},
+		{Head: "Value", Align: typeset.Right},
+		{Head: "Uncertainty ±", Align: typeset.Right},
+		{Head: "Margin", Align: typeset.Right},
+		{Head: "Margin, relative", Align: typeset.Right},
+		{Head: "Verdict"},
 	}, Rows: rows})
 	d.requirementTexts()
 	d.b.Note("Values are the worse of the two solutions; voltages and currents are peak. Met: value and uncertainty are inside the limit. " +
@@ -32,9 +42,14 @@ func (d *document) requirementRows() [][]sheet.Cell {
 	for _, c := range d.r.Cases {
 		for _, q := range c.Requirements {
 			rows = append(rows, []sheet.Cell{
-				{Text: q.ID, Bold: true}, {Text: c.Name}, {Text: quantityOf(q)}, {Text: format.Signed(q.Limit)},
-				{Text: format.Quantity(q.Value, q.Unit)}, {Text: format.Uncertainty(q.Uncertainty, q.Unit)},
-				{Text: format.Bare(q.Margin, q.Unit)}, {Text: relative(q)},
+				{Text: q.ID, Bold: true},
+				{Text: c.Name},
+				{Text: quantityOf(q)},
+				{Text: format.Signed(q.Limit)},
+				{Text: format.Quantity(q.Value, q.Unit)},
+				{Text: format.Uncertainty(q.Uncertainty, q.Unit)},
+				{Text: format.Bare(q.Margin, q.Unit)},
+				{Text: relative(q)},
 				{Text: string(q.Verdict), Mark: markOfRequirement(q.Verdict), Bold: q.Verdict != record.Met},
 			})
 		}

@@ -25,7 +25,8 @@ func (d *document) waveforms(c *record.Case) {
 	}
 	key := []figure.Entry{
 		{Style: ink.PhasorLine, Text: "phasor: its amplitude (left), its waveform (right)"},
-		{Style: ink.FDTDLine, Text: "time domain (right)"}, {Style: ink.TraceLine, Band: true, Text: "time domain, between its extremes where dense"},
+		{Style: ink.FDTDLine, Text: "time domain (right)"},
+		{Style: ink.TraceLine, Band: true, Text: "time domain, between its extremes where dense"},
 	}
 	d.b.Subheading("Waveforms", figure.KeyHeight+height+40)
 	d.b.Note(startNote(c.Stress, silent))

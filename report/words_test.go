@@ -32,11 +32,15 @@ func TestReason(t *testing.T) {
 		d    *document
 		want string
 	}{
-		{judged(map[string][]record.RequirementVerdict{"a": {met}}, "a"),
-			"Every requirement is met in every case that it applies to; the two solutions differ by at most 0 % of a section's largest value."},
+		{
+			judged(map[string][]record.RequirementVerdict{"a": {met}}, "a"),
+			"Every requirement is met in every case that it applies to; the two solutions differ by at most 0 % of a section's largest value.",
+		},
 		{judged(nil, "a"), "The design states no requirement; the two solutions differ by at most 0 % of a section's largest value."},
-		{judged(map[string][]record.RequirementVerdict{"a": {missed, met}, "b": {missed, open}}, "a", "b"),
-			"R1 is missed in a, b. R2 is not shown in b."},
+		{
+			judged(map[string][]record.RequirementVerdict{"a": {missed, met}, "b": {missed, open}}, "a", "b"),
+			"R1 is missed in a, b. R2 is not shown in b.",
+		},
 	} {
 		if got := readable(c.d.reason()); got != c.want {
 			t.Errorf("reason %q, want %q", got, c.want)
@@ -163,8 +167,10 @@ func TestRoundTrips(t *testing.T) {
 
 // The finding under a waveform is made of its data.
 func TestWaveformFinding(t *testing.T) {
-	w := record.Waveform{Name: "tee", Unit: "V", Step: 1e-9, Samples: []float64{0, 1, -1500, 990},
-		Tail: record.Tail{Samples: []float64{1001, -1000}, Phasor: []float64{1000, -1000}}}
+	w := record.Waveform{
+		Name: "tee", Unit: "V", Step: 1e-9, Samples: []float64{0, 1, -1500, 990},
+		Tail: record.Tail{Samples: []float64{1001, -1000}, Phasor: []float64{1000, -1000}},
+	}
 	want := "tee: largest 1.500 kV at 2.000 ns, 1.500 of the steady amplitude; last periods within 0.100 % of the phasor's waveform."
 	if got := readable(waveformFinding(&w)); got != want {
 		t.Errorf("%q, want %q", got, want)

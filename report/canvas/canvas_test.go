@@ -69,8 +69,10 @@ func TestOperators(t *testing.T) {
 			p.Arc(at(0, 0), vg.Points(10), 0, math.Pi/2)
 			c.Stroke(p)
 		}, "10 0 m\n10 5.52 5.52 10 0 10 c\nS\n"}, // 4/3 tan(pi/8) = 0.5523
-		"transform": {func(c *canvas.Canvas) { c.Translate(at(1, -2)); c.Scale(2, 3); c.Rotate(math.Pi) },
-			"1 0 0 1 1 -2 cm\n2 0 0 3 0 0 cm\n-1 0 0 -1 0 0 cm\n"},
+		"transform": {
+			func(c *canvas.Canvas) { c.Translate(at(1, -2)); c.Scale(2, 3); c.Rotate(math.Pi) },
+			"1 0 0 1 1 -2 cm\n2 0 0 3 0 0 cm\n-1 0 0 -1 0 0 cm\n",
+		},
 		"dash":     {func(c *canvas.Canvas) { c.SetLineDash([]vg.Length{2, 1}, 0.5) }, "[2 1] 0.5 d\n"},
 		"no dash":  {func(c *canvas.Canvas) { c.SetLineDash([]vg.Length{0, 0}, 3) }, "[] 0 d\n"},
 		"color":    {func(c *canvas.Canvas) { c.SetColor(color.NRGBA{R: 255, B: 51, A: 255}) }, "1 0 0.2 rg 1 0 0.2 RG\n"},

@@ -51,8 +51,10 @@ func TestTicksFindRoom(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		lo := rapid.Float64Range(-999, 999).Draw(t, "low")
 		hi := lo + math.Pow(10, rapid.Float64Range(-3, 3).Draw(t, "decades"))
-		axis := ticks{length: rapid.Float64Range(40, 500).Draw(t, "length"), wish: 46,
-			need: func(s string) float64 { return tickStyle.Width(s) }}
+		axis := ticks{
+			length: rapid.Float64Range(40, 500).Draw(t, "length"), wish: 46,
+			need: func(s string) float64 { return tickStyle.Width(s) },
+		}
 		last := math.Inf(-1)
 		for _, tick := range axis.Ticks(lo, hi) {
 			at, half := (tick.Value-lo)/(hi-lo)*axis.length, tickStyle.Width(tick.Label)/2
@@ -111,8 +113,13 @@ func TestPanelStaysInside(t *testing.T) {
 		p.Dots(xs, ys, ink.FDTDLine)
 		p.Trace(xs, ys, 1e4)
 		p.Level(nan, ink.LimitLine, "nowhere")
-		p.Limits([]Limit{{Value: 1.5, Above: true, Label: "limit"}, {Value: 1.6, Above: true, Mild: true, Label: "limit of " + strings.Repeat("a long name ", 9)},
-			{Value: nan, Above: true, Label: "nowhere"}, {Value: -1.5, Label: "lower limit"}, {Value: 1e9, Above: true, Label: "far off"}})
+		p.Limits([]Limit{
+			{Value: 1.5, Above: true, Label: "limit"},
+			{Value: 1.6, Above: true, Mild: true, Label: "limit of " + strings.Repeat("a long name ", 9)},
+			{Value: nan, Above: true, Label: "nowhere"},
+			{Value: -1.5, Label: "lower limit"},
+			{Value: 1e9, Above: true, Label: "far off"},
+		})
 		p.Upright([]float64{1, inf}, ink.MarkLine, "mark")
 		p.Spot(2, 2, "at the very corner")
 		p.Draw(c)

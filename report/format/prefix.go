@@ -10,9 +10,19 @@ type Prefix struct {
 
 // prefixes runs from atto to exa; prefixes[zeroth] is none.
 var prefixes = []Prefix{
-	{1e-18, "a"}, {1e-15, "f"}, {1e-12, "p"}, {1e-9, "n"}, {1e-6, "µ"}, {1e-3, "m"},
+	{1e-18, "a"},
+	{1e-15, "f"},
+	{1e-12, "p"},
+	{1e-9, "n"},
+	{1e-6, "µ"},
+	{1e-3, "m"},
 	{1, ""},
-	{1e3, "k"}, {1e6, "M"}, {1e9, "G"}, {1e12, "T"}, {1e15, "P"}, {1e18, "E"},
+	{1e3, "k"},
+	{1e6, "M"},
+	{1e9, "G"},
+	{1e12, "T"},
+	{1e15, "P"},
+	{1e18, "E"},
 }
 
 const zeroth = 6

@@ -21,7 +21,8 @@ func finish(t interface {
 	Helper()
 	Fatal(...any)
 	Fatalf(string, ...any)
-}, b *Book) []byte {
+}, b *Book,
+) []byte {
 	t.Helper()
 	var out bytes.Buffer
 	if err := b.Write(&out); err != nil {

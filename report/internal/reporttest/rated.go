@@ -80,13 +80,17 @@ func Lines() []record.ModelLine {
 		record.Pedigree{What: "model", Text: "dispersive", Kind: "assumed", Note: "resistance by skin effect, conductance by a constant loss tangent"})
 	return []record.ModelLine{
 		{Name: "RG-213", Text: "RG-213 of the cable table", Model: "dispersive", Pedigree: list, Fit: fit, SeriesResidual: 3.9e-4, ShuntResidual: 0.0021},
-		{Name: "hardline", Text: "coaxial, inner radius 2.4 mm, outer radius 7.1 mm, permittivity 1.38, loss tangent 2e-4, conductivity copper", Model: "dispersive",
+		{
+			Name: "hardline", Text: "coaxial, inner radius 2.4 mm, outer radius 7.1 mm, permittivity 1.38, loss tangent 2e-4, conductivity copper", Model: "dispersive",
 			SeriesResidual: 3.9e-4, ShuntResidual: 0.0021, FieldPerVolt: 384,
 			Pedigree: []record.Pedigree{
-				{What: "inner radius", Text: "2.4 mm", Kind: "geometry"}, {What: "outer radius", Text: "7.1 mm", Kind: "geometry"},
-				{What: "permittivity", Text: "1.38", Kind: "datasheet", Note: "sheet 4411, issue 3"}, {What: "loss tangent", Text: "2e-4", Kind: "measured", Note: "2026-02-11, 20 C"},
+				{What: "inner radius", Text: "2.4 mm", Kind: "geometry"},
+				{What: "outer radius", Text: "7.1 mm", Kind: "geometry"},
+				{What: "permittivity", Text: "1.38", Kind: "datasheet", Note: "sheet 4411, issue 3"},
+				{What: "loss tangent", Text: "2e-4", Kind: "measured", Note: "2026-02-11, 20 C"},
 				{What: "outer conductivity", Text: "the same", Kind: "assumed", Note: "as the other conductor"},
-			}},
+			},
+		},
 		{Name: "spare", Text: "z0 75 ohm, velocity factor 0.66, 2 dB/100m at 10 MHz", Model: "constant", Pedigree: []record.Pedigree{
 			{What: "z0", Text: "75 ohm", Kind: "given"}, {What: "velocity factor", Text: "0.66", Kind: "given"}, {What: "model", Text: "constant", Kind: "given"},
 		}},
