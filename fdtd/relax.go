@@ -120,13 +120,38 @@ func advanceCurrents(v, w []float64, c *coefs, r *relaxation, g *afterglow) {
 		}
 		return
 	}
+	blocks := len(w) / cellsPerBlock
+	if len(g.sum) < len(w) || len(g.j) != len(g.sum)*poles {
+		panic("fdtd: afterglow arrays do not match")
+	}
+	if blocks > 0 {
+		currentBlocks(v, w, c, r, g, blocks)
+	}
+	if done := blocks * cellsPerBlock; done < len(w) {
+		rest := afterglow{j: g.j[done*poles:], sum: g.sum[done:], u: g.u[done:]}
+		currentsSlow(v[done:], w[done:], c, &rest)
+		relaxSlow(&rest, &r.p, &r.b)
+	}
+}
+
+// currentsSlow is the update of w without the relaxation, which it leaves the
+// sums of the field before and after.
+func currentsSlow(v, w []float64, c *coefs, g *afterglow) {
 	sum, u := g.sum[:len(w)], g.u[:len(w)]
 	for i, old := range w {
 		now := c.wa*old - c.wb*(v[i+1]-v[i]) + sum[i]
 		w[i] = now
 		u[i] = old + now
 	}
-	r.relax(g)
+}
+
+// currentBlocksSlow is the loop that currentBlocks stands for: whole blocks of
+// cells and their relaxation.
+func currentBlocksSlow(v, w []float64, c *coefs, r *relaxation, g *afterglow, blocks int) {
+	n := blocks * cellsPerBlock
+	whole := afterglow{j: g.j[:n*poles], sum: g.sum[:n], u: g.u[:n]}
+	currentsSlow(v[:n+1], w[:n], c, &whole)
+	relaxSlow(&whole, &r.p, &r.b)
 }
 
 // advanceVoltages takes the inner edges of v over one step. The relaxation

@@ -54,3 +54,43 @@ func TestRelaxBlocks(t *testing.T) {
 		}
 	}
 }
+
+// TestAdvanceCurrents compares the fast update of currents and their
+// relaxation with the slow one, for every remainder of a block.
+func TestAdvanceCurrents(t *testing.T) {
+	const tolerance = 4e-15 // some roundings of numbers of size 1
+	random := rand.New(rand.NewPCG(5, 6))
+	fill := func(x []float64) {
+		for i := range x {
+			x[i] = random.Float64() - 0.5
+		}
+	}
+	for cells := 1; cells <= 41; cells++ {
+		r := &relaxation{}
+		fill(r.p[:])
+		fill(r.b[:])
+		c := newCoefs(0.9, 0.1, 0.02)
+		g, v, w := r.newAfterglow(cells), make([]float64, cells+1), make([]float64, cells+4)
+		fill(g.j)
+		fill(g.sum)
+		fill(v)
+		fill(w)
+		slow := afterglow{j: append([]float64(nil), g.j...), sum: append([]float64(nil), g.sum...), u: make([]float64, len(g.u))}
+		ws := append([]float64(nil), w...)
+		for range 3 {
+			advanceCurrents(v, w[:cells], &c, r, &g)
+			currentsSlow(v, ws[:cells], &c, &slow)
+			relaxSlow(&slow, &r.p, &r.b)
+		}
+		for i := range w {
+			if d := w[i] - ws[i]; d > tolerance || d < -tolerance {
+				t.Fatalf("%d cells: w[%d] is %v, want %v", cells, i, w[i], ws[i])
+			}
+		}
+		for i := range cells {
+			if d := g.sum[i] - slow.sum[i]; d > tolerance || d < -tolerance {
+				t.Fatalf("%d cells: sum %d is %v, want %v", cells, i, g.sum[i], slow.sum[i])
+			}
+		}
+	}
+}
