@@ -60,7 +60,7 @@ func (s *solved) verdict(reqs []record.Requirement, ratings []record.Rating) rec
 		all = append(all, r.Verdict)
 	}
 	for _, r := range ratings {
-		if r.Source != design.CableTable { // from memory: it warns and does not judge
+		if !r.Advisory {
 			all = append(all, r.Verdict)
 		}
 	}

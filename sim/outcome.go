@@ -14,7 +14,7 @@ func (j *judgement) record() record.Requirement {
 	s := scaleFor(j.limitUnit())
 	out := record.Requirement{
 		ID: j.req.ID, Text: j.req.Text, Source: j.req.Document,
-		Quantity: string(j.req.Quantity), Subject: j.subject,
+		Quantity: string(j.req.Quantity), Section: j.req.Section, Subject: j.subject,
 		Unit: s.unit, Limit: j.limitText(), Note: j.note,
 	}
 	out.Min, out.Max = scaled(j.min, s), scaled(j.max, s)

@@ -52,7 +52,7 @@ type rated struct {
 func (s *solved) rating(section, quantity, unit string, marginDB float64, l *design.Limit, source string) rated {
 	return rated{Rating: record.Rating{
 		Section: section, Quantity: quantity, Unit: unit,
-		Rated: l.SI, Text: l.Text, Source: source,
+		Rated: l.SI, Text: l.Text, Source: source, Advisory: source == design.CableTable,
 		Derating: marginDB, Allowed: l.SI * math.Pow(10, -marginDB/20),
 	}}
 }
