@@ -43,11 +43,19 @@ func TestProfile(t *testing.T) {
 		t    float64
 		want float64
 	}{
-		{"ramp before", ramp, -1, 0}, {"ramp at 0", ramp, 0, 0}, {"ramp quarter", ramp, 0.5, (1 - math.Sqrt2/2) / 2},
-		{"ramp half", ramp, 1, 0.5}, {"ramp top", ramp, 2, 1}, {"ramp on", ramp, 9.9, 1},
-		{"fall half", ramp, 12, 0.5}, {"fallen", ramp, 14, 0}, {"long after", ramp, 99, 0},
-		{"abrupt at 0", abrupt, 0, 0}, {"abrupt just after", abrupt, 1e-12, 1},
-		{"abrupt at the stop", abrupt, 10, 1}, {"abrupt after the stop", abrupt, 10.0001, 0},
+		{"ramp before", ramp, -1, 0},
+		{"ramp at 0", ramp, 0, 0},
+		{"ramp quarter", ramp, 0.5, (1 - math.Sqrt2/2) / 2},
+		{"ramp half", ramp, 1, 0.5},
+		{"ramp top", ramp, 2, 1},
+		{"ramp on", ramp, 9.9, 1},
+		{"fall half", ramp, 12, 0.5},
+		{"fallen", ramp, 14, 0},
+		{"long after", ramp, 99, 0},
+		{"abrupt at 0", abrupt, 0, 0},
+		{"abrupt just after", abrupt, 1e-12, 1},
+		{"abrupt at the stop", abrupt, 10, 1},
+		{"abrupt after the stop", abrupt, 10.0001, 0},
 	} {
 		if got := tt.s.Profile(tt.t); math.Abs(got-tt.want) > rounding {
 			t.Errorf("%s: r(%g) = %v, want %v", tt.name, tt.t, got, tt.want)
