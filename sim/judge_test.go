@@ -174,7 +174,7 @@ func TestBound(t *testing.T) {
 func TestPlanPredicts(t *testing.T) {
 	for name, demo := range demos {
 		f, r := demo(t)
-		plan, err := MakePlan(f)
+		plan, err := MakePlan(t.Context(), f)
 		if err != nil {
 			t.Fatal(err)
 		}

@@ -1,6 +1,7 @@
 package sim
 
 import (
+	"context"
 	"fmt"
 
 	"linewitness/sim/design"
@@ -55,8 +56,8 @@ func (c *PlanCase) Bound() error {
 
 // MakePlan plans every case of a design. It does not refuse a costly one; see
 // PlanCase and the bounds.
-func MakePlan(f *design.File) (*Plan, error) {
-	all, err := planAll(f)
+func MakePlan(ctx context.Context, f *design.File) (*Plan, error) {
+	all, err := planAll(ctx, f)
 	if err != nil {
 		return nil, err
 	}

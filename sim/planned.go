@@ -1,6 +1,7 @@
 package sim
 
 import (
+	"context"
 	"fmt"
 	"math"
 
@@ -21,9 +22,12 @@ type planned struct {
 }
 
 // planAll plans the nominal design and every case.
-func planAll(f *design.File) ([]*planned, error) {
+func planAll(ctx context.Context, f *design.File) ([]*planned, error) {
 	all := []*planned{}
 	for _, c := range append([]design.Case{{Name: Nominal, Design: f.Nominal}}, f.Cases...) {
+		if err := ctx.Err(); err != nil {
+			return nil, err
+		}
 		p, err := newPlanned(c.Name, c.Design)
 		if err != nil {
 			return nil, fmt.Errorf("case %s: %w", c.Name, err)

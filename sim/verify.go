@@ -30,7 +30,7 @@ type Options struct {
 // A run that the bounds refuse gives a *BoundError. An error from ctx is
 // returned as it is, within 100 ms of its cancellation.
 func Verify(ctx context.Context, f *design.File, opt Options) (*record.Record, error) {
-	all, err := planAll(f)
+	all, err := planAll(ctx, f)
 	if err != nil {
 		return nil, err
 	}
