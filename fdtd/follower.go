@@ -12,6 +12,7 @@ type follower struct {
 	n      int // steps per period
 	dt     float64
 	step   int
+	stop   int            // last step before the source stops, or 0: what comes later does not settle
 	turn   []complex128   // e^{-j 2 pi m/N}
 	final  [][]complex128 // [lane][junction]
 	sample [][]complex128 // likewise, of what is sampled: an average over the step where nothing is stored
@@ -26,7 +27,7 @@ type follower struct {
 
 func newFollower(m *model, final *Steady, phases []float64) *follower {
 	n := m.grid.StepsPerPeriod
-	f := &follower{n: n, dt: m.grid.Step}
+	f := &follower{n: n, dt: m.grid.Step, stop: lastStep(m)}
 	for k := range n {
 		f.turn = append(f.turn, cmplx.Rect(1, -2*math.Pi*float64(k)/float64(n)))
 	}
@@ -76,7 +77,7 @@ func (f *follower) look(lanes []*lane) {
 		for i, l := range lanes {
 			worst = math.Max(worst, f.take(l.j[j], i, j, at))
 		}
-		if f.step >= f.n {
+		if f.step >= f.n && (f.stop == 0 || f.step <= f.stop) {
 			f.errors[j] = f.errors[j].push(f.step-f.n+1, worst)
 		}
 	}
@@ -141,7 +142,11 @@ func (f *follower) settleTime(j int, fraction float64) float64 {
 			last = max(last, e.last(fraction))
 		}
 	}
-	if f.step < f.n || last >= f.step-f.n+1 {
+	end := f.step
+	if f.stop > 0 {
+		end = min(end, f.stop)
+	}
+	if end < f.n || last >= end-f.n+1 {
 		return math.NaN()
 	}
 	return float64(last) * f.dt

@@ -32,6 +32,36 @@ const unity = 1e-9
 // enough.
 const candidates = 8192
 
+// largestFactor bounds the prime factors of the steps per period: an FFT of n
+// points costs n times its largest prime factor.
+const largestFactor = 31
+
+// smooth reports whether n has no prime factor above largestFactor.
+func smooth(n int) bool {
+	for f := 2; f <= largestFactor; f++ {
+		for n%f == 0 {
+			n /= f
+		}
+	}
+	return n == 1
+}
+
+// stepNumbers are the numbers of steps from lo to a quarter more that NewGrid
+// tries, at least one.
+func stepNumbers(lo int) []int {
+	var all []int
+	for n := lo; n <= lo+lo/4 || len(all) == 0; n++ {
+		if smooth(n) {
+			all = append(all, n)
+		}
+	}
+	var out []int
+	for i := 0; i < len(all); i += 1 + len(all)/candidates {
+		out = append(out, all[i])
+	}
+	return out
+}
+
 // maxCells bounds the cells of a section, as a guard against overflow; the
 // cost of a run is the caller's to judge.
 const maxCells = 1e12
@@ -39,14 +69,15 @@ const maxCells = 1e12
 // NewGrid makes the best grid with at least cells cells per wavelength on
 // every section, and at least one cell. With N0 the least number of steps that
 // does so, it takes the N in [N0, 1.25 N0] with the smallest error of
-// propagation and of characteristic impedance, added up over the sections.
+// propagation and of characteristic impedance, added up over the sections, among
+// those that an FFT likes.
 func NewGrid(net *network.Network, cells float64) (Grid, error) {
 	lo, err := leastSteps(net, cells)
 	if err != nil {
 		return Grid{}, err
 	}
 	best, score := Grid{}, math.Inf(1)
-	for n := lo; n <= lo+lo/4; n += 1 + lo/candidates {
+	for _, n := range stepNumbers(lo) {
 		g := fixedGrid(net, n)
 		if s := g.score(net); s < score {
 			best, score = g, s

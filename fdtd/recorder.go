@@ -1,6 +1,7 @@
 package fdtd
 
 import (
+	"context"
 	"math"
 	"math/cmplx"
 
@@ -10,6 +11,7 @@ import (
 // A recorder keeps every recorded point of a lane over one period and turns
 // it into phasors by FFT. It is made once for a run.
 type recorder struct {
+	ctx    context.Context
 	m      *model
 	vi, wi [][]int // recorded edges and centres of each section
 	points int     // of all sections, voltages and currents
@@ -25,11 +27,11 @@ const maxSamples = 8 << 20
 
 // newRecorder records at most maxPoints voltages and currents a section,
 // evenly thinned, and fewer if a period has very many steps.
-func newRecorder(m *model, maxPoints int) *recorder {
+func newRecorder(ctx context.Context, m *model, maxPoints int) *recorder {
 	n := m.grid.StepsPerPeriod
 	room := maxSamples / n / (2 * max(1, len(m.grid.Cells)))
 	maxPoints = max(2, min(maxPoints, room))
-	r := &recorder{m: m, fft: fourier.NewFFT(n), seq: make([]float64, n)}
+	r := &recorder{ctx: ctx, m: m, fft: fourier.NewFFT(n), seq: make([]float64, n)}
 	for _, cells := range m.grid.Cells {
 		r.vi = append(r.vi, thin(cells+1, maxPoints))
 		r.wi = append(r.wi, thin(cells, maxPoints))
@@ -142,12 +144,19 @@ func scale(section, network float64) float64 {
 // An impurity is the largest fundamental, mean and harmonic of some points.
 type impurity struct{ top, mean, harmonic float64 }
 
+// columnsPerLook is how many columns are transformed between two looks at the
+// context.
+const columnsPerLook = 16
+
 // columns transforms the next count columns of the record and multiplies the
 // fundamental by f.
 func (r *recorder) columns(col *int, count int, f complex128) (p []complex128, found impurity) {
 	n := r.m.grid.StepsPerPeriod
 	p = make([]complex128, count)
 	for i := range p {
+		if i%columnsPerLook == 0 && r.ctx.Err() != nil {
+			return p, found // of no use; whoever gave ctx looks at it
+		}
 		for m := range n {
 			r.seq[m] = r.data[m*r.width+*col]
 		}

@@ -25,11 +25,27 @@ func (m *model) newRun(ctx context.Context, set Settings, drives ...*drive) *run
 // context: about 10 ms.
 const checkEvery = 4e6
 
+// work is about how many cell updates a step of one lane is worth: a relaxed
+// cell counts several times, and so does a junction or a branch with what
+// watches it.
+func (m *model) work() float64 {
+	w := 60 * float64(len(m.net.Junctions)+len(m.junction.branches))
+	for k, n := range m.grid.Cells {
+		w += float64(n)
+		for _, r := range []*relaxation{m.series[k], m.shunt[k]} {
+			if r != nil {
+				w += 4 * float64(n)
+			}
+		}
+	}
+	return w
+}
+
 // period takes all lanes over one period, calling after each step what each
 // gives, with the step's number in the period from 1 to N.
 func (r *run) period(each func(n int)) error {
 	steps := r.m.grid.StepsPerPeriod
-	work := float64(r.m.grid.TotalCells()*len(r.lanes)) + float64(50*len(r.m.junction.branches))
+	work := r.m.work() * float64(len(r.lanes))
 	since := checkEvery
 	for n := 1; n <= steps; n++ {
 		if since += work; since >= checkEvery {

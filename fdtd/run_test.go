@@ -26,7 +26,7 @@ func TestNoAllocation(t *testing.T) {
 	r := m.newRun(context.Background(), Settings{}, newDrive(net.Source, m.grid, 0), newDrive(net.Source, m.grid, -math.Pi/2))
 	s := &stresser{m: m, run: r, final: st, worst: true}
 	s.prepare([]float64{0, -math.Pi / 2})
-	rec := newRecorder(m, 4096)
+	rec := newRecorder(t.Context(), m, 4096)
 	look := func(n int) { s.look(); rec.sample(r.lanes[0], n) }
 	defer runtime.GOMAXPROCS(runtime.GOMAXPROCS(1)) // as testing.AllocsPerRun: nobody else allocates
 	// Room for the periods below is made at their beginning, as in a run.
@@ -131,7 +131,7 @@ func TestPlateau(t *testing.T) {
 	src := net.Source
 	src.Start.Rise = 2 / testFrequency
 	r := m.newRun(context.Background(), Settings{}, newDrive(src, g, 0))
-	rec := newRecorder(m, 4096)
+	rec := newRecorder(t.Context(), m, 4096)
 	var seen []complex128
 	for range 19 { // 2 for the ramp, 4 there and back, and on to just before the far echo at 22.25 + 2
 		if err := r.period(func(n int) { rec.sample(r.lanes[0], n) }); err != nil {

@@ -58,7 +58,7 @@ func Settle(ctx context.Context, net *network.Network, g Grid, set Settings) (*S
 	quiet.Stop = nil
 	s := &settler{
 		run:   m.newRun(ctx, set, newDrive(quiet, g, 0)),
-		rec:   newRecorder(m, set.MaxPoints),
+		rec:   newRecorder(ctx, m, set.MaxPoints),
 		watch: newWatch(net, set.Tolerance),
 	}
 	if err := s.settle(); err != nil {
@@ -92,8 +92,11 @@ func (s *settler) settle() error {
 		p++
 		prev := s.last
 		s.last = s.rec.window()
+		if err := s.run.ctx.Err(); err != nil {
+			return err
+		}
 		if s.watch.see(p, prev, s.last) || p >= s.run.set.MaxPeriods {
-			return s.run.ctx.Err()
+			return nil
 		}
 	}
 }

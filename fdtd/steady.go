@@ -83,27 +83,33 @@ func (s *settler) standing(k int) Standing {
 }
 
 // spectrumPeriods is the length of the record of a spectrum: it shows what
-// lies between the harmonics to an eighth of the source frequency.
-const spectrumPeriods = 8
+// lies between the harmonics to an eighth of the source frequency. Where a
+// period has very many steps the record has fewer periods, so that no more than
+// spectrumSamples are transformed at once.
+const (
+	spectrumPeriods = 8
+	spectrumSamples = 1 << 18
+)
 
 // spectrum goes on for some periods and transforms the source voltage.
 func (s *settler) spectrum() (Spectrum, error) {
 	r := s.run
 	at := r.m.net.Source.At
+	count := min(spectrumPeriods, max(1, spectrumSamples/r.m.grid.StepsPerPeriod))
 	var seq []float64
-	for range spectrumPeriods {
+	for range count {
 		if err := r.period(func(int) { seq = append(seq, r.lanes[0].j[at]) }); err != nil {
 			return Spectrum{}, err
 		}
 	}
 	n := float64(len(seq))
-	out := Spectrum{Periods: spectrumPeriods}
+	out := Spectrum{Periods: count}
 	for k, c := range fourier.NewFFT(len(seq)).Coefficients(nil, seq) {
 		a := 2 * cmplx.Abs(c) / n // one-sided, but for the mean and the highest
 		if k == 0 || 2*k == len(seq) {
 			a /= 2
 		}
-		out.Frequency = append(out.Frequency, float64(k)/spectrumPeriods*r.m.net.Frequency)
+		out.Frequency = append(out.Frequency, float64(k)/float64(count)*r.m.net.Frequency)
 		out.Amplitude = append(out.Amplitude, a)
 	}
 	return out, nil

@@ -108,6 +108,12 @@ func TestBurst(t *testing.T) {
 	if end := float64(s.Traces.TailEnd) * g.Step; math.Abs(end-net.Source.Stop.At) > g.Step {
 		t.Errorf("the tail ends at %.4g s, want at the stop", end)
 	}
+	if at := s.SettleTime(-1, 0.01) * testFrequency; !(at > 6 && at < 29) {
+		t.Errorf("settled after %.2f periods, want before the stop at 30", at)
+	}
+	if at := s.SettleTime(-1, 1e-9); !math.IsNaN(at) {
+		t.Errorf("settled to 1e-9 after %g s: the burst is too short for that", at)
+	}
 }
 
 // TestSettleTime: on a line with a matched source the load voltage is there

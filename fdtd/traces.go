@@ -90,10 +90,18 @@ func newTracer(m *model, lanes int) *tracer {
 	t.limit = max(t.rows, traceSamples/(t.width*lanes))
 	t.ring = make([]float64, t.rows*t.width*lanes)
 	t.row = make([]float64, t.width*lanes)
-	if s := m.net.Source.Stop; s != nil {
-		t.stop = int(s.At / m.grid.Step)
-	}
+	t.stop = lastStep(m)
 	return t
+}
+
+// lastStep is the last step before the source stops, at least 1, or 0 if it
+// does not stop.
+func lastStep(m *model) int {
+	s := m.net.Source.Stop
+	if s == nil {
+		return 0
+	}
+	return max(1, int(math.Min(s.At/m.grid.Step, math.MaxInt32)))
 }
 
 // reserve makes room for one more period, so that look does not allocate.

@@ -66,7 +66,7 @@ func TestOffset(t *testing.T) {
 	}
 	// A sine start gives the largest offset (the current is the integral).
 	r := m.newRun(context.Background(), Settings{}, newDrive(net.Source, g, -math.Pi/2))
-	rec := newRecorder(m, 4096)
+	rec := newRecorder(t.Context(), m, 4096)
 	var first *window
 	for range 2 {
 		if err := r.period(func(n int) { rec.sample(r.lanes[0], n) }); err != nil {
@@ -130,7 +130,7 @@ func TestRecorderScale(t *testing.T) {
 	if err != nil {
 		t.Fatal(err)
 	}
-	rec := newRecorder(m, 4096)
+	rec := newRecorder(t.Context(), m, 4096)
 	l := m.newLane()
 	signal := func(step float64) float64 {
 		a := 2 * math.Pi * step / 16

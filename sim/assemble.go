@@ -131,6 +131,10 @@ func (s *solved) settlingRecord() record.Settling {
 
 // decayText says what an unsettled run measured.
 func decayText(f fdtd.Settling) string {
+	if len(f.Curve) == 0 {
+		return fmt.Sprintf("the cap of %d periods ended the run before two windows one longest round trip (%.3g us) apart could be compared",
+			f.Periods, 2*f.LongPath*1e6)
+	}
 	last := f.Curve[len(f.Curve)-1]
 	if f.LoopFactor <= 0 || f.LoopFactor >= 1 {
 		return fmt.Sprintf("after %d periods the phasors still change by %.2g of their largest every %.3g us, and the change does not fall",

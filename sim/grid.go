@@ -1,6 +1,7 @@
 package sim
 
 import (
+	"context"
 	"math"
 
 	"linewitness/fdtd"
@@ -20,16 +21,32 @@ type gridding struct {
 	discrete *phasor.Solution
 	waves    []agree.Wave
 	error    float64 // expected error of the grid alone
+	floor    float64 // the part of it that no finer grid mends
+}
+
+// gridFloor is the error that is left on a far finer grid: that of the
+// rational forms of dispersive lines.
+func gridFloor(net *network.Network, g fdtd.Grid, exact *phasor.Solution) (float64, error) {
+	fine, err := newGridding(net, g.Refine(6), exact)
+	if err != nil {
+		return 0, err
+	}
+	return fine.error, nil
 }
 
 // chooseGrid makes a grid with at least cells cells per wavelength whose
-// expected error is within a share of the agreement limit: a resonant network needs far more cells than its wavelength says.
-func chooseGrid(net *network.Network, cells, agreement float64) (*gridding, error) {
+// expected error is within a share of the agreement limit, or near the error
+// that no grid mends: a resonant network needs far more cells than its wavelength says.
+func chooseGrid(ctx context.Context, net *network.Network, cells, agreement float64) (*gridding, error) {
 	exact, err := phasor.Solve(net)
 	if err != nil {
 		return nil, err
 	}
+	floor := -1.0
 	for {
+		if err := ctx.Err(); err != nil {
+			return nil, err
+		}
 		g, err := fdtd.NewGrid(net, cells)
 		if err != nil {
 			return nil, err
@@ -38,7 +55,13 @@ func chooseGrid(net *network.Network, cells, agreement float64) (*gridding, erro
 		if err != nil {
 			return nil, err
 		}
-		target := expectedShare * agreement
+		if floor < 0 {
+			if floor, err = gridFloor(net, g, exact); err != nil {
+				return nil, err
+			}
+		}
+		out.floor = floor
+		target := math.Max(expectedShare*agreement, 1.25*floor)
 		if out.error <= target || g.StepsPerPeriod > finest {
 			return out, nil
 		}

@@ -1,6 +1,7 @@
 package sim
 
 import (
+	"context"
 	"fmt"
 	"math"
 	"math/cmplx"
@@ -22,6 +23,9 @@ type judgement struct {
 	spread   float64 // uncertainty, SI
 	unit     string  // of limits given without one
 	note     string
+	// unfinished is set for a peak from a run that ended before the network was
+	// at rest: a larger one may come, so it can be missed but not met.
+	unfinished bool
 }
 
 // witnessed is a value and the witness who gave it.
@@ -39,12 +43,12 @@ const (
 )
 
 // judge judges the requirements of a design in one case; all holds every
-// solved case by name.
-func judge(c *solved, all map[string]*solved) []record.Requirement {
+// solved case by name. It is cut short if ctx ends.
+func judge(ctx context.Context, c *solved, all map[string]*solved) []record.Requirement {
 	var out []record.Requirement
 	b := newBudget(c.net, &c.compared)
 	for _, r := range c.design.Requirements {
-		if !slices.Contains(r.Cases, c.name) {
+		if !slices.Contains(r.Cases, c.name) || ctx.Err() != nil {
 			continue
 		}
 		for _, j := range c.judgements(r, b, all) {
@@ -65,7 +69,7 @@ func (s *solved) judgements(r design.Requirement, b *budget, all map[string]*sol
 		p := s.peak(r)
 		one.values = []witnessed{{p.value, fdtdOnly}}
 		one.spread = p.spread
-		one.note = s.stressNote()
+		one.note, one.unfinished = s.stressNote(), !s.finished()
 	case design.Overshoot:
 		s.overshoot(&one)
 	case design.SettleTime:
@@ -105,6 +109,14 @@ func (s *solved) steadyValues(j *judgement, b *budget, all map[string]*solved) {
 // witnesses'. An angle is followed from its own value, so that it does not
 // jump by a turn.
 func (s *solved) spreadOf(r design.Requirement, q quantity, b *budget) float64 {
+	if r.Section == "" && r.At == "" { // the largest anywhere cannot move further than its parts
+		switch r.Quantity {
+		case design.SteadyVoltage:
+			return b.largest(0)
+		case design.SteadyCurrent:
+			return b.largest(1)
+		}
+	}
 	worst := 0.0
 	for _, w := range []*state{s.exact, s.found} {
 		f := q
@@ -253,7 +265,7 @@ func (s *solved) overshoot(j *judgement) {
 	p := s.peak(r)
 	j.values = []witnessed{{p.value/steady - 1, fdtdOnly}}
 	j.spread = p.spread / steady
-	j.note = s.stressNote()
+	j.note, j.unfinished = s.stressNote(), !s.finished()
 }
 
 func (s *solved) settleTime(j *judgement) {
@@ -264,7 +276,9 @@ func (s *solved) settleTime(j *judgement) {
 	settled := s.stressed(func(run *fdtd.Stress) float64 { return run.SettleTime(at, j.req.Settled) })
 	j.values = []witnessed{{settled.value, fdtdOnly}}
 	j.spread = settled.spread
-	if math.IsNaN(settled.value) {
+	if math.IsNaN(settled.value) && s.net.Source.Stop != nil {
+		j.note = fmt.Sprintf("not within %.3g %% before the source stops", j.req.Settled*100)
+	} else if math.IsNaN(settled.value) {
 		j.note = fmt.Sprintf("not within %.3g %% when the run ended after %.3g us", j.req.Settled*100, s.stress.Duration*1e6)
 	}
 }

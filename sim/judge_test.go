@@ -84,7 +84,7 @@ func TestMargins(t *testing.T) {
 // to first order, of a phase the angle that the voltage's error subtends.
 func TestSpread(t *testing.T) {
 	f := load(t, "hilltop-fm-feeder")
-	p, err := newPlanned(Nominal, f.Nominal)
+	p, err := newPlanned(t.Context(), Nominal, f.Nominal)
 	if err != nil {
 		t.Fatal(err)
 	}
@@ -107,7 +107,7 @@ func TestSpread(t *testing.T) {
 // well above what the grid must cause is a disagreement inside the limit too.
 func TestDisagreement(t *testing.T) {
 	f := load(t, "reference-tree")
-	p, err := newPlanned(Nominal, f.Nominal)
+	p, err := newPlanned(t.Context(), Nominal, f.Nominal)
 	if err != nil {
 		t.Fatal(err)
 	}

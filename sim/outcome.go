@@ -37,6 +37,9 @@ func (j *judgement) record() record.Requirement {
 		}
 	}
 	out.Verdict = outcome(out.Value, out.Margin, out.Uncertainty)
+	if j.unfinished {
+		out.Verdict = atMostNotShown(out.Verdict)
+	}
 	return out
 }
 
@@ -51,6 +54,14 @@ func outcome(value, margin, uncertainty float64) record.RequirementVerdict {
 		return record.MissedReq
 	}
 	return record.NotShownReq
+}
+
+// atMostNotShown is the verdict on a value that may yet grow.
+func atMostNotShown(v record.RequirementVerdict) record.RequirementVerdict {
+	if v == record.Met {
+		return record.NotShownReq
+	}
+	return v
 }
 
 func (j *judgement) limitUnit() string {

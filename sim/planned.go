@@ -28,7 +28,7 @@ func planAll(ctx context.Context, f *design.File) ([]*planned, error) {
 		if err := ctx.Err(); err != nil {
 			return nil, err
 		}
-		p, err := newPlanned(c.Name, c.Design)
+		p, err := newPlanned(ctx, c.Name, c.Design)
 		if err != nil {
 			return nil, fmt.Errorf("case %s: %w", c.Name, err)
 		}
@@ -40,10 +40,10 @@ func planAll(ctx context.Context, f *design.File) ([]*planned, error) {
 // Nominal is the name of the design as it stands, beside its cases.
 const Nominal = "nominal"
 
-func newPlanned(name string, d *design.Design) (*planned, error) {
+func newPlanned(ctx context.Context, name string, d *design.Design) (*planned, error) {
 	p := &planned{name: name, design: d, net: Network(d)}
 	var err error
-	if p.grid, err = chooseGrid(p.net, d.Grid.CellsPerWavelength, d.Grid.Agreement); err != nil {
+	if p.grid, err = chooseGrid(ctx, p.net, d.Grid.CellsPerWavelength, d.Grid.Agreement); err != nil {
 		return nil, err
 	}
 	p.coarse = coarser(p.net, p.grid)
@@ -85,6 +85,11 @@ func (p *planned) predict() {
 		p.plan.Warnings = append(p.plan.Warnings, fmt.Sprintf(
 			"the settling run is predicted to reach its cap of %d periods: it may end as not settled", limit))
 	}
+	if floor := p.grid.floor; floor > p.design.Grid.Agreement {
+		p.plan.Warnings = append(p.plan.Warnings, fmt.Sprintf(
+			"the rational form of the dispersive lines alone makes a difference of %.2g %%, above the agreement limit: no grid mends that", 100*floor))
+	}
+	p.outlast(limit)
 	lanes := 1.0
 	if p.net.Source.Start.Worst {
 		lanes = 2
@@ -97,6 +102,20 @@ func (p *planned) predict() {
 	p.plan.Grid.Updates = settle + stress
 	p.plan.Seconds = (settle/settleRate + stress/stressRate) * p.slowdown()
 	p.plan.Bytes = p.bytes(lanes)
+}
+
+// outlast warns of a source that is still rising, or has not stopped, when the
+// cap on the runs is reached.
+func (p *planned) outlast(limit int) {
+	src := p.net.Source
+	end := src.Start.Rise
+	if src.Stop != nil {
+		end = math.Max(end, src.Stop.At+src.Stop.Fall)
+	}
+	if end > float64(limit)*p.net.Period() {
+		p.plan.Warnings = append(p.plan.Warnings, fmt.Sprintf(
+			"the source is not done rising or stopping (%.3g us) when the cap of %d periods is reached: peaks will not be shown; raise max_periods", end*1e6, limit))
+	}
 }
 
 // slowdown is how much longer a cell takes than one of a constant line, over
@@ -162,15 +181,23 @@ func clampInt(v float64) int {
 }
 
 // bytes predicts the memory of a case: the state and the running peaks of
-// every cell, one recorded period, and the traces.
+// every cell, the poles of dispersive ones, one recorded period, the traces and
+// what watches the junctions.
 func (p *planned) bytes(lanes float64) float64 {
 	g := p.grid.grid
-	cells := float64(g.TotalCells())
+	cells, steps := float64(g.TotalCells()), float64(g.StepsPerPeriod)
+	lumped := float64(len(p.net.Junctions) + len(p.net.Branches) + 1)
 	points := math.Min(2*cells, 2*4096*float64(len(g.Cells)))
-	recorder := math.Min(points*float64(g.StepsPerPeriod), 8<<20) * 8
+	points = math.Max(math.Min(points, (8<<20)/steps), math.Min(2*cells, 4*float64(len(g.Cells))))
 	poles := 0.0
 	for k, n := range g.Cells {
 		poles += float64(n*relaxations(p.net.Sections[k])) * 11 // nine poles, their sum and the field
 	}
-	return cells*(16+16*lanes+16) + poles*8*lanes + points*16*8 + recorder + 3*16<<20
+	const number = 8
+	state := cells*(4+4*lanes) + poles*lanes
+	recorder := (points+lumped)*steps + 10*points
+	ring := fdtd.TailPeriods * steps * lumped * lanes
+	whole := math.Max(ring, math.Min(2<<20, float64(p.plan.StressPeriods)*steps*lumped*lanes))
+	watch := steps * float64(len(p.net.Junctions)) * (lanes + 2)
+	return number * (state + recorder + 2*(ring+whole) + watch + 3*math.Min(8*steps, 1<<18))
 }

@@ -183,14 +183,13 @@ func (s *state) largestCurrentAt(j int) float64 {
 	if s.net.Source.At == j {
 		top = cmplx.Abs(s.source)
 	}
-	for b, br := range s.net.Branches {
-		if br.B == j {
-			top = math.Max(top, cmplx.Abs(s.branches[b]))
-		}
-	}
 	for p, part := range s.net.Parts {
-		if part.A == j {
-			top = math.Max(top, cmplx.Abs(s.partCurrent(p)))
+		i := cmplx.Abs(s.partCurrent(p))
+		switch j {
+		case part.A:
+			top = math.Max(top, i)
+		case part.B: // what flows in at A flows out at B, but for a transformer
+			top = math.Max(top, i/s.net.Branches[part.Branches[0]].Turns())
 		}
 	}
 	for k, sec := range s.net.Sections {

@@ -19,7 +19,7 @@ func (s *solved) ratings() []record.Rating {
 			r := s.rating(sec.Name, "voltage", "V", sec.Rating.MarginDB, l, sec.Rating.VoltageSource)
 			r.steady(s.exact.voltage[k].largest, s.found.voltage[k].largest, b.ends[k][0])
 			r.peak(peaks.Voltage, s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Voltage.Value }).spread)
-			r.judge()
+			r.judge(s.finished())
 			r.Field = math.Max(r.Steady, r.Peak) * s.fieldPerVolt(sec.Line)
 			out = append(out, r.Rating)
 		}
@@ -27,7 +27,7 @@ func (s *solved) ratings() []record.Rating {
 			r := s.rating(sec.Name, "current", "A", sec.Rating.MarginDB, l, sec.Rating.CurrentSource)
 			r.steady(s.exact.current[k].largest, s.found.current[k].largest, b.ends[k][1])
 			r.peak(peaks.Current, s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Current.Value }).spread)
-			r.judge()
+			r.judge(s.finished())
 			out = append(out, r.Rating)
 		}
 	}
@@ -71,8 +71,8 @@ func (r *rated) peak(p fdtd.Peak, spread float64) {
 }
 
 // judge compares the larger of the steady and the largest value ever with what
-// is allowed.
-func (r *rated) judge() {
+// is allowed; a run that is not finished can show a rating passed, not kept.
+func (r *rated) judge(finished bool) {
 	worst := math.Max(r.Steady, r.Peak)
 	r.Uncertainty = r.peakSpread
 	if r.Steady >= r.Peak {
@@ -82,6 +82,9 @@ func (r *rated) judge() {
 	r.MarginDB = 20 * math.Log10(r.Allowed/worst)
 	r.MarginPercent = 100 * r.Margin / r.Allowed
 	r.Verdict = outcome(worst, r.Margin, r.Uncertainty)
+	if !finished {
+		r.Verdict = atMostNotShown(r.Verdict)
+	}
 }
 
 // fieldPerVolt is that of a kind of line, by name.

@@ -52,7 +52,10 @@ func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, e
 	if p.coarse != nil {
 		again := *s.steady
 		again.Grid = p.coarse.grid
-		set.Rest += 2 * p.coarse.error // and that of this grid differs from it
+		again.Junctions = nil // of that grid, which is known exactly
+		for j := range p.net.Junctions {
+			again.Junctions = append(again.Junctions, p.coarse.discrete.Junction(j))
+		}
 		if s.coarse, err = fdtd.StressRun(ctx, p.net, &again, set); err != nil {
 			return nil, err
 		}
@@ -86,16 +89,24 @@ func (s *solved) stressed(pick func(*fdtd.Stress) float64) stressed {
 	if s.coarse != nil {
 		out.spread = math.Abs(v - pick(s.coarse))
 	}
+	// The run ends when it is this near to the steady state.
+	out.spread += atRest * v
 	if !s.stress.Worst {
 		out.spread += v * (1 - math.Cos(pi/float64(s.stress.Grid.StepsPerPeriod)))
 	}
 	return out
 }
 
+// finished reports whether the stress runs ended with the network at rest, so
+// that no later peak is possible.
+func (s *solved) finished() bool {
+	return s.stress.Complete && (s.coarse == nil || s.coarse.Complete)
+}
+
 // stressNote says what is to be known of the peaks of this case.
 func (s *solved) stressNote() string {
 	switch {
-	case !s.stress.Complete:
+	case !s.finished():
 		return "the run ended before the network was at rest"
 	case s.coarse == nil:
 		return "one grid only: no uncertainty of the peak but that between samples"

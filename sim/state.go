@@ -77,6 +77,10 @@ func fdtdState(net *network.Network, s *fdtd.Steady) *state {
 // its end is rounding: the current of an open end, the voltage of a short.
 const dust = 1e-12
 
+// dead is the part of the network's largest amplitude that a section must have
+// to be more than rounding itself: -240 dB.
+const dead = 1e-12
+
 // chop makes an exact zero of what is only rounding.
 func (s *state) chop() {
 	top := make([]float64, len(s.junctions))
@@ -85,8 +89,14 @@ func (s *state) chop() {
 			*p = 0
 		}
 	}
+	topV, topI := 0.0, 0.0
+	for k := range s.net.Sections {
+		topV = math.Max(topV, s.voltage[k].largest.value)
+		topI = math.Max(topI, s.current[k].largest.value)
+	}
 	for k, sec := range s.net.Sections {
-		v, i := s.voltage[k].largest.value, s.current[k].largest.value
+		v := math.Max(s.voltage[k].largest.value, dead*topV)
+		i := math.Max(s.current[k].largest.value, dead*topI)
 		for e, j := range []int{sec.From, sec.To} {
 			top[j] = math.Max(top[j], v)
 			cut(&s.ends[k][e].v, v)
@@ -95,6 +105,9 @@ func (s *state) chop() {
 	}
 	for j := range s.junctions {
 		cut(&s.junctions[j], top[j])
+	}
+	for b := range s.branches {
+		cut(&s.branches[b], dead*topI)
 	}
 }
 

@@ -49,6 +49,16 @@ func newBudget(net *network.Network, r *agree.Result) *budget {
 	return b
 }
 
+// largest is the largest budget of the voltages (0) or of the currents (1) of
+// all sections.
+func (b *budget) largest(kind int) float64 {
+	top := 0.0
+	for _, e := range b.ends {
+		top = math.Max(top, e[kind])
+	}
+	return top
+}
+
 // spread is how far q may be off when every phasor of s is off by its budget:
 // the sum over the phasors of the largest change that one of them makes, in
 // any of four directions. Errors of the witnesses are not random, so they add

@@ -48,7 +48,8 @@ func Verify(ctx context.Context, f *design.File, opt Options) (*record.Record, e
 		}
 		return nil, err
 	}
-	return newRecord(f, cases, opt.Version), nil
+	out := newRecord(ctx, f, cases, opt.Version)
+	return out, ctx.Err()
 }
 
 // solveAll solves the cases side by side, as many as there are processors.
@@ -75,8 +76,9 @@ func solveAll(ctx context.Context, all []*planned, progress func(float64)) ([]*s
 	return out, nil
 }
 
-// newRecord judges the solved cases and writes the record.
-func newRecord(f *design.File, cases []*solved, version string) *record.Record {
+// newRecord judges the solved cases and writes the record. If ctx ends it is
+// cut short and of no use.
+func newRecord(ctx context.Context, f *design.File, cases []*solved, version string) *record.Record {
 	byName := map[string]*solved{}
 	for _, c := range cases {
 		byName[c.name] = c
@@ -96,7 +98,10 @@ func newRecord(f *design.File, cases []*solved, version string) *record.Record {
 		Verdict: record.Verified,
 	}
 	for _, c := range cases {
-		rc := c.caseRecord(judge(c, byName))
+		if ctx.Err() != nil {
+			return nil
+		}
+		rc := c.caseRecord(judge(ctx, c, byName))
 		if rc.Verdict.Rank() > out.Verdict.Rank() {
 			out.Verdict = rc.Verdict
 		}

@@ -113,7 +113,7 @@ func (k *Kind) fill(z []float64, found, discrete []complex128, residual float64)
 		e := cmplx.Abs(discrete[i]-k.Exact[i])/k.Scale + residual + rounding
 		k.Allowed[i] = e * k.Scale
 		k.Expected = math.Max(k.Expected, e)
-		if d > k.Found || i == 0 {
+		if !(d <= k.Found) || i == 0 { // a NaN counts as the worst
 			k.Found, k.At = d, z[i]
 		}
 		sum += d * d
