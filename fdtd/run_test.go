@@ -205,3 +205,22 @@ func TestGridLimits(t *testing.T) {
 		t.Errorf("a section of a nanometre: %v", err)
 	}
 }
+
+// TestStepNumbers: an FFT of a length with a large prime factor costs that many
+// times more; the steps per period have none.
+func TestStepNumbers(t *testing.T) {
+	for _, lo := range []int{8, 40, 41, 997, 5003, 65537, 799530} {
+		all := stepNumbers(lo)
+		if len(all) == 0 || len(all) > 2*candidates {
+			t.Fatalf("from %d: %d numbers", lo, len(all))
+		}
+		for _, n := range all {
+			if n < lo || !smooth(n) {
+				t.Errorf("from %d: %d", lo, n)
+			}
+		}
+	}
+	if smooth(37) || smooth(2*41) || !smooth(31*31*2) || !smooth(49) {
+		t.Error("smooth does not tell numbers apart")
+	}
+}
