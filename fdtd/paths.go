@@ -1,8 +1,9 @@
 package fdtd
 
 import (
+	"cmp"
 	"math"
-	"sort"
+	"slices"
 
 	"linewitness/sim/network"
 )
@@ -32,35 +33,18 @@ type edge struct {
 
 func newTree(net *network.Network) *tree {
 	t := &tree{next: make([][]edge, len(net.Junctions))}
-	parent := make([]int, len(net.Junctions))
-	for j := range parent {
-		parent[j] = j
-	}
-	var root func(int) int
-	root = func(j int) int {
-		if parent[j] != j {
-			parent[j] = root(parent[j])
-		}
-		return parent[j]
-	}
+	sets := newSets(len(net.Junctions))
 	join := func(a, b int, d float64) bool {
-		if root(a) == root(b) {
+		if !sets.join(a, b) {
 			return false
 		}
-		parent[root(a)] = root(b)
 		t.next[a] = append(t.next[a], edge{b, d})
 		t.next[b] = append(t.next[b], edge{a, d})
 		return true
 	}
-	order := make([]int, len(net.Sections))
-	for k := range order {
-		order[k] = k
-	}
-	sort.SliceStable(order, func(i, j int) bool {
-		return net.Sections[order[i]].Delay() > net.Sections[order[j]].Delay()
-	})
-	for _, k := range order {
-		s := net.Sections[k]
+	order := slices.Clone(net.Sections)
+	slices.SortStableFunc(order, func(a, b network.Section) int { return cmp.Compare(b.Delay(), a.Delay()) })
+	for _, s := range order {
 		if !join(s.From, s.To, s.Delay()) {
 			t.closing += s.Delay()
 		}
@@ -71,6 +55,32 @@ func newTree(net *network.Network) *tree {
 		}
 	}
 	return t
+}
+
+// sets are disjoint sets of junctions, each known by a member.
+type sets []int
+
+func newSets(n int) sets {
+	s := make(sets, n)
+	for j := range s {
+		s[j] = j
+	}
+	return s
+}
+
+func (s sets) root(j int) int {
+	for s[j] != j {
+		s[j] = s[s[j]]
+		j = s[j]
+	}
+	return j
+}
+
+// join puts the sets of a and b together; it reports whether they were two.
+func (s sets) join(a, b int) bool {
+	a, b = s.root(a), s.root(b)
+	s[a] = b
+	return a != b
 }
 
 // farthest is the junction farthest from start and its delay.

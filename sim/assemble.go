@@ -35,8 +35,8 @@ func (s *solved) caseRecord(reqs []record.Requirement) record.Case {
 		},
 	}
 	c.Grid.Updates = s.steady.Updates + s.stress.Updates
-	if s.coarse != nil {
-		c.Grid.Updates += s.coarse.Updates
+	if s.second != nil {
+		c.Grid.Updates += s.second.Updates
 	}
 	for k := range c.Grid.Sections {
 		c.Grid.Sections[k].Points = len(s.steady.Sections[k].ZV)

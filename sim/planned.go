@@ -17,7 +17,7 @@ type planned struct {
 	design *design.Design
 	net    *network.Network
 	grid   *gridding
-	coarse *gridding // for the second stress run, nil if none is coarser
+	second *gridding // of the second stress run, nil if none is worth it
 	plan   PlanCase
 }
 
@@ -46,25 +46,35 @@ func newPlanned(ctx context.Context, name string, d *design.Design) (*planned, e
 	if p.grid, err = chooseGrid(ctx, p.net, d.Grid.CellsPerWavelength, d.Grid.Agreement); err != nil {
 		return nil, err
 	}
-	p.coarse = coarser(p.net, p.grid)
+	p.second = second(p.net, p.grid)
 	p.predict()
 	return p, nil
 }
 
-// coarser is a grid with about half the steps, or nil if short sections do not
-// allow one clearly coarser.
-func coarser(net *network.Network, fine *gridding) *gridding {
-	steps := fine.grid.StepsPerPeriod
+// second is the grid of the second stress run: about half the steps, or, where
+// short sections do not allow one clearly coarser, twice the steps if that is
+// cheap; else nil.
+func second(net *network.Network, first *gridding) *gridding {
+	steps := first.grid.StepsPerPeriod
 	g, err := fdtd.NewGrid(net, float64(steps)/2)
 	if err != nil || 4*g.StepsPerPeriod > 3*steps {
-		return nil
+		if g = first.grid.Refine(1); g.Updates(cheapPeriods) > cheapUpdates {
+			return nil
+		}
 	}
-	out, err := newGridding(net, g, fine.exact)
+	out, err := newGridding(net, g, first.exact)
 	if err != nil {
 		return nil
 	}
 	return out
 }
+
+// A finer grid for the second stress run is cheap if so many periods of it take
+// no more than so many cell updates, some seconds.
+const (
+	cheapPeriods = 200
+	cheapUpdates = 5e8
+)
 
 // predict fills the plan: how long the runs will be and what they will cost.
 func (p *planned) predict() {
@@ -96,8 +106,8 @@ func (p *planned) predict() {
 	}
 	settle := g.Updates(p.plan.SettlePeriods)
 	stress := g.Updates(p.plan.StressPeriods) * lanes
-	if p.coarse != nil {
-		stress += p.coarse.grid.Updates(p.plan.StressPeriods) * lanes
+	if p.second != nil {
+		stress += p.second.grid.Updates(p.plan.StressPeriods) * lanes
 	}
 	p.plan.Grid.Updates = settle + stress
 	p.plan.Seconds = (settle/settleRate + stress/stressRate) * p.slowdown()

@@ -21,7 +21,7 @@ type solved struct {
 	phasor   *phasor.Solution
 	steady   *fdtd.Steady
 	stress   *fdtd.Stress
-	coarse   *fdtd.Stress // the stress run again on a coarser grid, nil if there is none
+	second   *fdtd.Stress // the stress run again on another grid, nil if there is none
 	compared agree.Result
 	exact    *state // of the phasor witness
 	found    *state // of the time-domain witness
@@ -49,14 +49,14 @@ func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, e
 	if s.stress, err = fdtd.StressRun(ctx, p.net, s.steady, set); err != nil {
 		return nil, err
 	}
-	if p.coarse != nil {
+	if p.second != nil {
 		again := *s.steady
-		again.Grid = p.coarse.grid
+		again.Grid = p.second.grid
 		again.Junctions = nil // of that grid, which is known exactly
 		for j := range p.net.Junctions {
-			again.Junctions = append(again.Junctions, p.coarse.discrete.Junction(j))
+			again.Junctions = append(again.Junctions, p.second.discrete.Junction(j))
 		}
-		if s.coarse, err = fdtd.StressRun(ctx, p.net, &again, set); err != nil {
+		if s.second, err = fdtd.StressRun(ctx, p.net, &again, set); err != nil {
 			return nil, err
 		}
 	}
@@ -86,8 +86,8 @@ func (s *solved) compare() {
 func (s *solved) stressed(pick func(*fdtd.Stress) float64) stressed {
 	v := pick(s.stress)
 	out := stressed{value: v}
-	if s.coarse != nil {
-		out.spread = math.Abs(v - pick(s.coarse))
+	if s.second != nil {
+		out.spread = math.Abs(v - pick(s.second))
 	}
 	// The run ends when it is this near to the steady state.
 	out.spread += atRest * v
@@ -100,7 +100,7 @@ func (s *solved) stressed(pick func(*fdtd.Stress) float64) stressed {
 // finished reports whether the stress runs ended with the network at rest, so
 // that no later peak is possible.
 func (s *solved) finished() bool {
-	return s.stress.Complete && (s.coarse == nil || s.coarse.Complete)
+	return s.stress.Complete && (s.second == nil || s.second.Complete)
 }
 
 // stressNote says what is to be known of the peaks of this case.
@@ -108,7 +108,7 @@ func (s *solved) stressNote() string {
 	switch {
 	case !s.finished():
 		return "the run ended before the network was at rest"
-	case s.coarse == nil:
+	case s.second == nil:
 		return "one grid only: no uncertainty of the peak but that between samples"
 	}
 	return ""

@@ -62,12 +62,13 @@ func fdtdState(net *network.Network, s *fdtd.Steady) *state {
 	out := &state{net: net, junctions: s.Junctions, branches: s.Branches, source: s.Source}
 	for _, w := range s.Sections {
 		out.ends = append(out.ends, endPair{{w.VFrom, w.IFrom}, {w.VTo, w.ITo}})
-		out.voltage = append(out.voltage, gridExtremes(w.ZV, w.V))
-		// The ends carry the current of the half cells too.
 		k := len(out.ends) - 1
+		apart := net.Sections[k].At(net.Omega()).Wavelength(net.Frequency) / parabolaPoints
+		out.voltage = append(out.voltage, gridExtremes(w.ZV, w.V, apart))
+		// The ends carry the current of the half cells too.
 		z := append(append([]float64{0}, w.ZI...), net.Sections[k].Length)
 		i := append(append([]complex128{w.IFrom}, w.I...), w.ITo)
-		out.current = append(out.current, gridExtremes(z, i))
+		out.current = append(out.current, gridExtremes(z, i, apart))
 	}
 	out.chop()
 	return out
@@ -121,8 +122,10 @@ func ratio(v, i complex128) complex128 {
 
 // gridExtremes finds the extremes of |p| between the points of a grid. The
 // square of a standing wave is a sinusoid of twice the wavenumber, so a
-// parabola through three points of the square misses it in the fourth order.
-func gridExtremes(z []float64, p []complex128) extremes {
+// parabola through three points of the square misses it in the fourth order,
+// where they are no more than apart m from each other. On a thinned record they
+// are, and the extremes are those of the points.
+func gridExtremes(z []float64, p []complex128, apart float64) extremes {
 	sq := make([]float64, len(p))
 	for i, v := range p {
 		sq[i] = real(v)*real(v) + imag(v)*imag(v)
@@ -136,13 +139,18 @@ func gridExtremes(z []float64, p []complex128) extremes {
 			lo = i
 		}
 	}
-	return extremes{vertex(z, sq, hi), vertex(z, sq, lo)}
+	return extremes{vertex(z, sq, hi, apart), vertex(z, sq, lo, apart)}
 }
 
-// vertex is the extreme of the parabola through point i and its neighbours.
-func vertex(z, sq []float64, i int) extreme {
+// parabolaPoints is how many points a wavelength must have for a parabola
+// through three of them to stand for the wave.
+const parabolaPoints = 16
+
+// vertex is the extreme of the parabola through point i and its neighbours, or
+// point i itself.
+func vertex(z, sq []float64, i int, apart float64) extreme {
 	root := func(v float64) float64 { return math.Sqrt(math.Max(0, v)) }
-	if i == 0 || i == len(sq)-1 {
+	if i == 0 || i == len(sq)-1 || z[i+1]-z[i-1] > 2*apart {
 		return extreme{root(sq[i]), z[i]}
 	}
 	x0, x1 := z[i-1]-z[i], z[i+1]-z[i]

@@ -30,7 +30,7 @@ func newBudget(net *network.Network, r *agree.Result) *budget {
 		b.ends = append(b.ends, [2]float64{v, i})
 		for _, j := range []int{net.Sections[k].From, net.Sections[k].To} {
 			b.junctions[j] = math.Max(b.junctions[j], v)
-			currents[j] = math.Max(currents[j], i)
+			currents[j] += i // Kirchhoff's law: their errors may add up in a branch
 		}
 		topV, topI = math.Max(topV, v), math.Max(topI, i)
 	}

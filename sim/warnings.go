@@ -25,10 +25,11 @@ func (s *solved) warnings() []string {
 	if !s.stress.Complete {
 		say("the stress run ended after %.3g us before the network was at rest; a later peak is not excluded", s.stress.Duration*1e6)
 	}
-	if s.coarse == nil {
-		say("the stress peaks come from one grid: a section is too short for a coarser one")
-	} else if v, c := largestVoltage(s.stress), largestVoltage(s.coarse); math.Abs(v-c) > peakChange*v {
-		say("the largest voltage changed by %.2g %% from a grid half as fine (%.4g V to %.4g V)", 100*math.Abs(v-c)/v, c, v)
+	if s.second == nil {
+		say("the stress peaks come from one grid only: a section is too short for a coarser one, and a finer one would cost too much")
+	} else if v, c := largestVoltage(s.stress), largestVoltage(s.second); math.Abs(v-c) > peakChange*v {
+		say("the largest voltage differs by %.2g %% between two grids: %.4g V with %d steps a period, %.4g V with %d",
+			100*math.Abs(v-c)/v, v, s.stress.Grid.StepsPerPeriod, c, s.second.Grid.StepsPerPeriod)
 	}
 	if !s.stress.Traces.Full {
 		say("the waveforms are kept to %.3g us only", float64(len(s.stress.Traces.Source.A))*s.stress.Grid.Step*1e6)

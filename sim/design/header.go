@@ -95,8 +95,8 @@ func (w *walker) walkGrid(f *fields) {
 		g.MaxPeriods = int(v)
 	}
 	if q, n, ok := f.quantity("settle_tolerance", fraction); ok {
-		if q.value <= 0 || q.value > 0.1 {
-			w.problem(n.pos, say("1e-4 is the default"), "%s must be above 0 and at most 0.1, not %q", f.name("settle_tolerance"), n.text)
+		if q.value < 1e-9 || q.value > 0.1 { // below, only rounding is left
+			w.problem(n.pos, say("1e-4 is the default"), "%s must be from 1e-9 to 0.1, not %q", f.name("settle_tolerance"), n.text)
 		}
 		g.SettleTolerance = q.value
 	}
