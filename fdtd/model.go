@@ -81,12 +81,13 @@ func (m *model) companions() []companion {
 // A lane is the state of one solution on a model.
 type lane struct {
 	m    *model
-	v, w [][]float64 // of each section
-	gw   []afterglow // of each section\'s centres
-	gv   []afterglow // of its edges, the ends included
-	j    []float64   // junction voltages: at the step, or averaged over the last step where nothing is stored
-	mem  []memory    // of each companion
-	avg  []float64   // current of each companion averaged over the last step, A
+	v, w [][]float64  // of each section
+	gw   []afterglow  // of each section\'s centres
+	gv   []afterglow  // of its edges, the ends included
+	end  [][2]float64 // currents at the two ends of each section, averaged over the last step, A
+	j    []float64    // junction voltages: at the step, or averaged over the last step where nothing is stored
+	mem  []memory     // of each companion
+	avg  []float64    // current of each companion averaged over the last step, A
 	x    []float64
 	rhs  []float64
 	e0   float64 // EMF at the step, V
@@ -111,6 +112,7 @@ func (m *model) newLane() *lane {
 		l.gw = append(l.gw, m.series[k].newAfterglow(n))
 		l.gv = append(l.gv, m.shunt[k].newAfterglow(n+1))
 	}
+	l.end = make([][2]float64, len(m.net.Sections))
 	return l
 }
 
@@ -137,13 +139,22 @@ func (l *lane) step(e1 float64) {
 	l.e0 = e1
 }
 
-// ends sets the voltages of the two end edges of section k, and relaxes its
-// edges.
+// ends sets the voltages of the two end edges of section k, relaxes its edges
+// and works out the currents at its ends: those of the end cells and of the half
+// cells beyond them.
 func (l *lane) ends(k int, from, to float64) {
-	v := l.v[k]
+	v, w, m := l.v[k], l.w[k], l.m
 	last := len(v) - 1
-	if r := l.m.shunt[k]; r != nil {
+	held := m.store[k] * m.coefs[k].onePlusG()
+	lost := held * m.coefs[k].va
+	l.end[k] = [2]float64{
+		w[0]/m.z[k] + held*from - lost*v[0],
+		w[last-1]/m.z[k] - held*to + lost*v[last],
+	}
+	if r := m.shunt[k]; r != nil {
 		g := &l.gv[k]
+		l.end[k][0] -= m.relaxed(k) * g.sum[0]
+		l.end[k][1] += m.relaxed(k) * g.sum[last]
 		g.u[0], g.u[last] = v[0]+from, v[last]+to
 		r.relax(g)
 	}

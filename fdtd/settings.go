@@ -10,6 +10,8 @@ type Settings struct {
 	// count as at rest; default 1e-3. It must be above the error of that
 	// steady state on the grid of the run.
 	Rest float64
+	// Sharp keeps a jump of the source in a stress run as it is, see edgeSteps.
+	Sharp bool
 	// Progress, if not nil, is called after every period with the number of
 	// cell updates done since the last call.
 	Progress func(updates float64)

@@ -24,8 +24,10 @@ type Stress struct {
 	// follows, stays within a fraction of its final value; NaN if that was not
 	// reached.
 	SettleTime func(junction int, fraction float64) float64
-	Traces     Traces
-	Updates    float64
+	// Edge is the rise that a jump of the source was given, s; 0 if it has none.
+	Edge    float64
+	Traces  Traces
+	Updates float64
 }
 
 // Peaks are the running peaks of one section: the largest |v| and |i| that
@@ -35,7 +37,7 @@ type Peaks struct {
 	ZI, I   []float64
 	Voltage Peak
 	Current Peak
-	// The largest |i| in the first and in the last cell.
+	// The largest |i| at the two ends, in Current and I too.
 	FromCurrent, ToCurrent float64
 }
 
@@ -70,9 +72,13 @@ func StressRun(ctx context.Context, net *network.Network, final *Steady, set Set
 	if s.worst {
 		phases = []float64{0, -math.Pi / 2} // cos and sin
 	}
+	source := net.Source
+	if !set.Sharp {
+		source, s.edge = resolved(net.Source, final.Grid)
+	}
 	var drives []*drive
 	for _, p := range phases {
-		drives = append(drives, newDrive(net.Source, final.Grid, p))
+		drives = append(drives, newDrive(source, final.Grid, p))
 	}
 	s.run = m.newRun(ctx, set.withDefaults(), drives...)
 	s.prepare(phases)
@@ -82,16 +88,40 @@ func StressRun(ctx context.Context, net *network.Network, final *Steady, set Set
 	return s.result(), nil
 }
 
+// edgeSteps is the rise, in steps, of a jump that the source makes. A jump has
+// frequencies that no grid carries: at Courant numbers below 1 they lag behind
+// and swing over by a fifth and more of the jump, however fine the grid is. A
+// rise of some steps has hardly any of them, and shrinks with the grid.
+const edgeSteps = 6
+
+// resolved gives a source that jumps a rise, or a fall, of edgeSteps, and tells
+// which. A start at a zero of the EMF does not jump.
+func resolved(src network.Source, g Grid) (network.Source, float64) {
+	edge := edgeSteps * g.Step
+	found := 0.0
+	if src.StartJumps() {
+		src.Start.Rise, found = edge, edge
+	}
+	if src.Stop != nil && src.Stop.Fall == 0 {
+		stop := *src.Stop
+		stop.Fall, found = edge, edge
+		src.Stop = &stop
+	}
+	return src, found
+}
+
 type stresser struct {
 	m      *model
 	run    *run
 	final  *Steady
 	worst  bool
 	peaks  []sectionPeaks
-	nodes  []held // junctions
-	parts  []held // network parts, and the source last
+	nodes  []held    // junctions
+	ends   [][2]held // of each section, currents
+	parts  []held    // network parts, and the source last
 	follow *follower
 	traces *tracer
+	edge   float64
 	done   bool
 }
 
@@ -100,6 +130,7 @@ func (s *stresser) prepare(phases []float64) {
 		s.peaks = append(s.peaks, newSectionPeaks(s.m.grid.Cells[k]))
 	}
 	s.nodes = make([]held, len(s.m.net.Junctions))
+	s.ends = make([][2]held, len(s.m.net.Sections))
 	s.parts = make([]held, len(s.m.net.Parts)+1)
 	s.follow = newFollower(s.m, s.final, phases)
 	s.traces = newTracer(s.m, len(phases))
@@ -156,6 +187,22 @@ func (s *stresser) look() {
 	s.traces.look(s.run.lanes, n)
 }
 
+// addEnds takes the peaks of the currents at the ends of section k into its
+// peaks.
+func (q *Peaks) addEnds(ends [2]held, k int, dx float64, g Grid) {
+	gain := averageGain(g.StepsPerPeriod)
+	from := ends[0].peak(k, dx, 0, g.Step, 0.5, gain)
+	to := ends[1].peak(k, dx, 0, g.Step, 0.5, gain)
+	q.FromCurrent, q.ToCurrent = from.Value, to.Value
+	for _, p := range []Peak{from, to} {
+		if p.Value > q.Current.Value {
+			q.Current = p
+		}
+	}
+	q.ZI = append(append([]float64{from.At}, q.ZI...), float64(g.Cells[k])*dx)
+	q.I = append(append([]float64{from.Value}, q.I...), to.Value)
+}
+
 // lumped takes in the junction voltages and the branch currents.
 func (s *stresser) lumped(a, b *lane, n int) {
 	second := 0.0
@@ -164,6 +211,11 @@ func (s *stresser) lumped(a, b *lane, n int) {
 	}
 	for j := range s.nodes {
 		s.nodes[j].see(a.j[j], second*b.j[j], j, n)
+	}
+	for k := range s.ends {
+		for e := range s.ends[k] {
+			s.ends[k][e].see(a.end[k][e], second*b.end[k][e], e*s.m.grid.Cells[k], n)
+		}
 	}
 	for p := range s.m.net.Parts {
 		s.parts[p].see(s.m.partCurrent(a, p), second*s.m.partCurrent(b, p), p, n)
@@ -191,6 +243,7 @@ func (s *stresser) result() *Stress {
 		Traces:     s.traces.traces(),
 		Updates:    s.run.updates,
 		SettleTime: s.follow.settleTime,
+		Edge:       s.edge,
 	}
 	for k, p := range s.peaks {
 		dx := net.Sections[k].Length / float64(g.Cells[k])
@@ -200,8 +253,7 @@ func (s *stresser) result() *Stress {
 		}
 		q.ZV, q.V = p.v.envelope(dx, 0, 1)
 		q.ZI, q.I = p.w.envelope(dx, 0.5, 1/s.m.z[k])
-		q.FromCurrent = math.Sqrt(p.w.square[0]) / s.m.z[k]
-		q.ToCurrent = math.Sqrt(p.w.square[len(p.w.square)-1]) / s.m.z[k]
+		q.addEnds(s.ends[k], k, dx, g)
 		out.Sections = append(out.Sections, q)
 		if q.Voltage.Value > out.Voltage.Value {
 			out.Voltage = q.Voltage

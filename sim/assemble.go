@@ -35,8 +35,10 @@ func (s *solved) caseRecord(reqs []record.Requirement) record.Case {
 		},
 	}
 	c.Grid.Updates = s.steady.Updates + s.stress.Updates
-	if s.second != nil {
-		c.Grid.Updates += s.second.Updates
+	for _, again := range []*fdtd.Stress{s.sharp, s.second} {
+		if again != nil {
+			c.Grid.Updates += again.Updates
+		}
 	}
 	for k := range c.Grid.Sections {
 		c.Grid.Sections[k].Points = len(s.steady.Sections[k].ZV)

@@ -148,3 +148,33 @@ loads: {short: {at: b, impedance: short}, l: {at: c, r: 50 ohm}}
 		t.Errorf("verdict %s", c.Verdict)
 	}
 }
+
+// TestJump: the peak of an abrupt start is known no better than its jump. On a
+// matched line without loss nothing exceeds half the EMF, and a limit just above
+// must not be missed; at an inductive load an ideal jump doubles, and the
+// uncertainty must reach there.
+func TestJump(t *testing.T) {
+	for _, tt := range []struct {
+		load string
+		top  float64 // V, of the ideal jump
+	}{
+		{"r: 50 ohm", 316},
+		{"impedance: 30 + j40 ohm", 632},
+	} {
+		c := verified(t, text(t, `
+source: {at: a, frequency: 50 MHz, emf: 632 V peak, impedance: 50 ohm, start: {profile: abrupt, phase: 0 deg}}
+lines: {k: {z0: 50 ohm, velocity_factor: 0.9}}
+sections: {m: {from: a, to: b, length: 10 m, line: k}, n: {from: b, to: c, length: 3.33 m, line: k}}
+loads: {l: {at: c, `+tt.load+`}}
+requirements:
+  - {id: P, quantity: peak_voltage, max: 320 V peak}
+`)).Cases[0]
+		r := requirement(t, c, "P")
+		if math.Abs(r.Value-tt.top) > r.Uncertainty {
+			t.Errorf("%s: peak %.1f V with uncertainty %.1f V, an ideal jump gives %.0f V", tt.load, r.Value, r.Uncertainty, tt.top)
+		}
+		if tt.top < 320 && r.Verdict == record.MissedReq {
+			t.Errorf("%s: %s", tt.load, r.Verdict)
+		}
+	}
+}

@@ -106,6 +106,9 @@ func (p *planned) predict() {
 	}
 	settle := g.Updates(p.plan.SettlePeriods)
 	stress := g.Updates(p.plan.StressPeriods) * lanes
+	if p.net.Source.Jumps() {
+		stress *= 2
+	}
 	if p.second != nil {
 		stress += p.second.grid.Updates(p.plan.StressPeriods) * lanes
 	}

@@ -4,6 +4,8 @@ import (
 	"context"
 	"math"
 
+	"golang.org/x/sync/errgroup"
+
 	"linewitness/fdtd"
 	"linewitness/phasor"
 	"linewitness/sim/agree"
@@ -21,7 +23,8 @@ type solved struct {
 	phasor   *phasor.Solution
 	steady   *fdtd.Steady
 	stress   *fdtd.Stress
-	second   *fdtd.Stress // the stress run again on another grid, nil if there is none
+	sharp    *fdtd.Stress // the stress run again with the source's jump as it is, nil if it has none
+	second   *fdtd.Stress // the last of these again on another grid, nil if there is none
 	compared agree.Result
 	exact    *state // of the phasor witness
 	found    *state // of the time-domain witness
@@ -46,22 +49,40 @@ func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, e
 	if s.steady.Settling.Settled {
 		set.Rest += 3 * s.steady.Settling.Residual
 	}
-	if s.stress, err = fdtd.StressRun(ctx, p.net, s.steady, set); err != nil {
+	if err := s.stressRuns(ctx, p.second, set); err != nil {
 		return nil, err
-	}
-	if p.second != nil {
-		again := *s.steady
-		again.Grid = p.second.grid
-		again.Junctions = nil // of that grid, which is known exactly
-		for j := range p.net.Junctions {
-			again.Junctions = append(again.Junctions, p.second.discrete.Junction(j))
-		}
-		if s.second, err = fdtd.StressRun(ctx, p.net, &again, set); err != nil {
-			return nil, err
-		}
 	}
 	s.compare()
 	return s, nil
+}
+
+// stressRuns makes the stress run, the one with a jump as it is if the source
+// jumps, and the last of these on the second grid, side by side.
+func (s *solved) stressRuns(ctx context.Context, second *gridding, set fdtd.Settings) error {
+	g, ctx := errgroup.WithContext(ctx)
+	run := func(out **fdtd.Stress, steady *fdtd.Steady, sharp bool) {
+		set := set
+		set.Sharp = sharp
+		g.Go(func() (err error) {
+			*out, err = fdtd.StressRun(ctx, s.net, steady, set)
+			return err
+		})
+	}
+	jumps := s.net.Source.Jumps()
+	run(&s.stress, s.steady, false)
+	if jumps {
+		run(&s.sharp, s.steady, true)
+	}
+	if second != nil {
+		again := *s.steady
+		again.Grid = second.grid
+		again.Junctions = nil // of that grid, which is known exactly
+		for j := range s.net.Junctions {
+			again.Junctions = append(again.Junctions, second.discrete.Junction(j))
+		}
+		run(&s.second, &again, jumps)
+	}
+	return g.Wait()
 }
 
 // atRest is the part of the largest amplitude within which a waveform counts as
@@ -86,8 +107,18 @@ func (s *solved) compare() {
 func (s *solved) stressed(pick func(*fdtd.Stress) float64) stressed {
 	v := pick(s.stress)
 	out := stressed{value: v}
+	last := s.stress
+	if s.sharp != nil {
+		// The truth of an ideal jump lies between the run with an edge and
+		// the one without, whose ripple it has not, or beyond by what the
+		// grids tell.
+		last = s.sharp
+		out.spread = math.Abs(v - pick(last))
+	}
 	if s.second != nil {
-		out.spread = math.Abs(v - pick(s.second))
+		// What is left of an error of first order in the step.
+		h, h2 := last.Grid.Step, s.second.Grid.Step
+		out.spread += math.Abs(pick(last)-pick(s.second)) * h / math.Abs(h-h2)
 	}
 	// The run ends when it is this near to the steady state.
 	out.spread += atRest * v
@@ -100,7 +131,12 @@ func (s *solved) stressed(pick func(*fdtd.Stress) float64) stressed {
 // finished reports whether the stress runs ended with the network at rest, so
 // that no later peak is possible.
 func (s *solved) finished() bool {
-	return s.stress.Complete && (s.second == nil || s.second.Complete)
+	for _, r := range []*fdtd.Stress{s.stress, s.sharp, s.second} {
+		if r != nil && !r.Complete {
+			return false
+		}
+	}
+	return true
 }
 
 // stressNote says what is to be known of the peaks of this case.

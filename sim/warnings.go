@@ -19,15 +19,15 @@ func (s *solved) warnings() []string {
 	if !s.compared.Explained() {
 		say("the methods differ by more than the grid and the settling residual explain")
 	}
-	if s.abrupt() {
-		say("the source switches without a rise time: peaks are those of an ideal step on this grid, and need not converge with it; give the real rise of the source")
+	if e := s.stress.Edge; e > 0 {
+		say("the source jumps: the peaks are those of an edge of %.3g ns, some steps of the grid, and their uncertainty reaches to those of the jump itself; give the real rise (or fall) of the source", e*1e9)
 	}
 	if !s.stress.Complete {
 		say("the stress run ended after %.3g us before the network was at rest; a later peak is not excluded", s.stress.Duration*1e6)
 	}
 	if s.second == nil {
 		say("the stress peaks come from one grid only: a section is too short for a coarser one, and a finer one would cost too much")
-	} else if v, c := largestVoltage(s.stress), largestVoltage(s.second); math.Abs(v-c) > peakChange*v {
+	} else if v, c := largestVoltage(s.stress), largestVoltage(s.second); s.sharp == nil && math.Abs(v-c) > peakChange*v {
 		say("the largest voltage differs by %.2g %% between two grids: %.4g V with %d steps a period, %.4g V with %d",
 			100*math.Abs(v-c)/v, v, s.stress.Grid.StepsPerPeriod, c, s.second.Grid.StepsPerPeriod)
 	}
@@ -56,11 +56,6 @@ func exceeded(ratings []record.Rating) []string {
 		}
 	}
 	return out
-}
-
-func (s *solved) abrupt() bool {
-	src := s.net.Source
-	return src.Start.Rise == 0 || src.Stop != nil && src.Stop.Fall == 0
 }
 
 func (s *solved) thinned(say func(string, ...any)) {

@@ -134,6 +134,17 @@ type Source struct {
 // Available is the available power |EMF|^2/(8 R), W, or +Inf if R is zero.
 func (s Source) Available() float64 { return s.EMF * s.EMF / (8 * s.R) }
 
+// StartJumps reports whether the EMF jumps at the start: abrupt, and not at a
+// zero of the carrier.
+func (s Source) StartJumps() bool {
+	return s.Start.Rise == 0 && (s.Start.Worst || math.Abs(math.Cos(s.Start.Phase)) > 1e-9)
+}
+
+// Jumps reports whether the EMF jumps, at the start or at an abrupt stop.
+func (s Source) Jumps() bool {
+	return s.StartJumps() || s.Stop != nil && s.Stop.Fall == 0
+}
+
 // Start is how the source is switched on at t = 0.
 type Start struct {
 	Rise  float64 // s, raised-cosine rise; 0 is an abrupt start
