@@ -30,9 +30,11 @@ func (d *document) convergence(c *record.Case) {
 	label := d.figure()
 	entries := []figure.Entry{
 		{Style: ink.FDTDLine, Text: "change over a round trip"},
-		{Style: ink.PhasorLine, Text: "estimated error left"},
 		{Style: ink.MarkLine, Text: "multiples of the longest round trip"},
 		{Style: ink.LimitLine, Text: "tolerance"},
+	}
+	if estimated(c.Settling, d.r.Design.Tolerance) {
+		entries = slices.Insert(entries, 1, figure.Entry{Style: ink.PhasorLine, Text: "estimated error left"})
 	}
 	d.b.Subheading("Steady state and spectrum", convergenceHeight+2*figure.KeyHeight+30)
 	d.key(entries)
@@ -43,6 +45,21 @@ func (d *document) convergence(c *record.Case) {
 		}
 	})
 	d.b.Caption(label, trimmed(finding))
+}
+
+// settlingDepth is how far below the tolerance the settling panel may reach.
+const settlingDepth = 1e-4
+
+// estimated reports whether two estimates or more are inside the panel, so that
+// there is a line to see.
+func estimated(s record.Settling, tolerance float64) bool {
+	seen := 0
+	for _, p := range s.Curve {
+		if p.Estimate > tolerance*settlingDepth && !math.IsInf(p.Estimate, 0) {
+			seen++
+		}
+	}
+	return seen > 1
 }
 
 // settlingPanel returns nil if no window was compared.
@@ -56,7 +73,7 @@ func settlingPanel(s record.Settling, tolerance float64) *figure.Panel {
 		return nil
 	}
 	hi := math.Pow(10, math.Ceil(math.Log10(max(top, largestOf(estimate), tolerance)*1.2)))
-	lo := math.Pow(10, math.Floor(math.Log10(max(min(smallestOf(change), tolerance)/1.5, tolerance*1e-4, hi*1e-12))))
+	lo := math.Pow(10, math.Floor(math.Log10(max(min(smallestOf(change), tolerance)/1.5, tolerance*settlingDepth, hi*1e-12))))
 	last := max(s.Time, ts[len(ts)-1])
 	p := figure.New("Settling run", "relative to the section's largest value",
 		figure.Axis{Label: "time", Unit: "s", Max: last}, figure.Axis{Min: lo, Max: hi, Log: true})

@@ -31,7 +31,7 @@ func (d *document) validity() []string {
 	if len(m.dispersive) > 0 {
 		out = append(out, m.say(m.dispersive, "The two laws of a dispersive line")+" are those of solid smooth conductors much thicker than the skin depth and of one loss tangent; roughness counts as it is at the design frequency. Where the skin depth nears the thickness of a conductor, and far from the frequencies at which the loss was given, a real line differs. From a tenth to ten times the design frequency the time domain follows the laws within the residual in the table of the kinds of line; beyond, less closely.")
 	}
-	return append(out, "The peak of an abrupt start is that of an ideal step of the source. A real source rises in a finite time and may peak lower.")
+	return append(out, "The jump of an abrupt start or stop is given an edge of a few steps of the grid; the peak is that of this edge, and its uncertainty reaches to the peak of the jump itself. A real source rises in a finite time.")
 }
 
 // uncovered lists what this record leaves out.

@@ -182,7 +182,10 @@ func waveformFinding(w *record.Waveform) string {
 	if i < 0 {
 		return s + "; the source has stopped, so there is no steady waveform to compare with."
 	}
-	amplitude := math.Abs(w.Tail.Phasor[i])
+	amplitude := w.Steady
+	if amplitude == 0 { // not given: the largest sample stands for it
+		amplitude = math.Abs(w.Tail.Phasor[i])
+	}
 	if amplitude > 0 && most > 0 {
 		s += ", " + format.Number(most/amplitude) + " of the steady amplitude"
 	}

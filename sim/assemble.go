@@ -284,7 +284,7 @@ func (s *solved) waveform(t fdtd.Trace, p complex128, name, where, unit string) 
 		quantity = "current"
 	}
 	return record.Waveform{
-		Name: name, Where: where, Quantity: quantity, Unit: unit,
+		Name: name, Where: where, Quantity: quantity, Unit: unit, Steady: cmplx.Abs(p),
 		Start: (float64(s.stress.Traces.First) - t.Early) * dt, Step: dt, Samples: whole,
 		Tail: record.Tail{
 			Start: s.tailStart(t), Step: dt, Samples: tail, Phasor: s.tailPhasor(t, p),

@@ -394,6 +394,7 @@ type Waveform struct {
 	Start    float64
 	Step     float64 // s between samples
 	Samples  []float64
+	Steady   float64 // amplitude of the closed form's phasor
 	Tail     Tail
 }
 
