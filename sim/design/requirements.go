@@ -26,18 +26,29 @@ func (w *walker) walkRequirements(file *fields, cases []string) (demands []*dema
 	}
 	first := map[string]int{}
 	for _, item := range n.items {
-		d := w.walkRequirement(item, cases)
-		if d == nil {
-			continue
+		w.takeID(item, first)
+		if d := w.walkRequirement(item, cases); d != nil {
+			demands = append(demands, d)
 		}
-		if line := first[d.ID]; line > 0 && d.ID != "" {
-			w.problem(d.fields.node("id").pos, say("number each requirement"), "the id %q is taken by the requirement on line %d", d.ID, line)
-		} else {
-			first[d.ID] = d.Pos.Line
-		}
-		demands = append(demands, d)
 	}
 	return demands
+}
+
+// takeID reports an id that another requirement has, whatever else is wrong
+// with this one; first holds the lines of the ids so far.
+func (w *walker) takeID(item *node, first map[string]int) {
+	if item.kind != mapping {
+		return
+	}
+	id := item.get("id")
+	if id == nil || id.kind != scalar || id.text == "" {
+		return
+	}
+	if line := first[id.text]; line > 0 {
+		w.problem(id.pos, say("number each requirement"), "the id %q is taken by the requirement on line %d", id.text, line)
+		return
+	}
+	first[id.text] = item.pos.Line
 }
 
 // walkRequirement reads one requirement. Which keys it has depends on its
@@ -55,14 +66,19 @@ func (w *walker) walkRequirement(n *node, cases []string) *demand {
 		w.problem(n.pos, say("one of %s", rawText(strings.Join(quantityNames, ", "))), "missing %q in %s", "quantity", what)
 		return nil
 	}
-	kind, ok := quantities[Quantity(q.text)]
+	name := Quantity(q.text)
+	kind, ok := quantities[name]
 	if !ok {
 		w.problem(q.pos, didYouMean(q.text, quantityNames), "there is no quantity %q", q.text)
-		return nil
+		// The other mistakes are looked for as if the nearest were meant.
+		name = Quantity(nearest(q.text, quantityNames))
+		if kind, ok = quantities[name]; !ok {
+			return nil
+		}
 	}
 	f := w.fields(n, n.pos, what, kind.table)
 	d := &demand{fields: f, Requirement: Requirement{
-		Pos: n.pos, ID: f.id(), Text: f.prose("text"), Document: f.line("source"), Quantity: Quantity(q.text),
+		Pos: n.pos, ID: f.id(), Text: f.prose("text"), Document: f.line("source"), Quantity: name,
 		Section: f.text("section"), End: f.oneOf("end", "from", "to"),
 		At: f.text("at"), Load: f.text("load"), RelativeTo: f.text("relative_to"),
 	}}
