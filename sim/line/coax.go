@@ -47,7 +47,7 @@ func (x Coax) check() error {
 	checks := []check{
 		positiveLength("Inner", "inner radius", x.Inner),
 		positiveLength("Outer", "outer radius", x.Outer),
-		{"Outer", x.Outer > x.Inner, "the outer conductor's inner radius must be above that of the inner conductor"},
+		{"Outer", x.Outer > x.Inner, "the outer conductor must be wider inside than the inner conductor"},
 		{"Wall", x.Wall >= 0 && !math.IsInf(x.Wall, 1), "the wall of the outer conductor must not be below 0"},
 	}
 	checks = append(checks, dielectric(x.Permittivity, x.LossTangent)...)

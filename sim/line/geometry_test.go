@@ -124,7 +124,7 @@ func TestNoGeometry(t *testing.T) {
 	}{
 		{Coax{0, 1, 0, 1, 0, copper, copper}, "Inner", "the inner radius must be above 0"},
 		{Coax{1, nan, 0, 1, 0, copper, copper}, "Outer", "the outer radius must be above 0"},
-		{Coax{2, 1, 0, 1, 0, copper, copper}, "Outer", "the outer conductor's inner radius must be above that of the inner conductor"},
+		{Coax{2, 1, 0, 1, 0, copper, copper}, "Outer", "the outer conductor must be wider inside than the inner conductor"},
 		{Coax{1, 2, -1, 1, 0, copper, copper}, "Wall", "the wall of the outer conductor must not be below 0"},
 		{Coax{1, 2, 0, 0.5, 0, copper, copper}, "Permittivity", "the permittivity must be at least 1: it is relative to vacuum"},
 		{Coax{1, 2, 0, 1, -1, copper, copper}, "LossTangent", "the loss tangent must be at least 0 and below 1"},
