@@ -53,6 +53,9 @@ type Peak struct {
 // StressRun runs a network from its own start, and through its own stop, and
 // keeps the largest |v| and |i| of every place.
 //
+// A jump of the EMF is given an edge of some steps, see Stress.Edge, unless
+// Settings.Sharp is set.
+//
 // If every start phase is possible (network.Start.Worst) the run carries two
 // lanes with the EMF r cos(wt) and r sin(wt). A start at phase p gives
 // v = vc cos p - vs sin p, so the largest |v| over all p is hypot(vc, vs) at

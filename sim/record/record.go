@@ -280,7 +280,7 @@ type Peak struct {
 	Time    float64 // s
 	Phase   float64 // degrees: the start phase that gives it
 
-	Uncertainty float64 // change from a grid about half as fine, and what samples may miss
+	Uncertainty float64 // change from grid to grid and from an edge to the bare jump, what samples may miss, what the end of the run leaves open
 }
 
 // StressSection is the largest value along one section.
