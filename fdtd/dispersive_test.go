@@ -1,7 +1,6 @@
 package fdtd
 
 import (
-	"context"
 	"math"
 	"math/cmplx"
 	"math/rand/v2"
@@ -186,15 +185,7 @@ func TestDispersiveRingsDown(t *testing.T) {
 	net := dispersiveCascade()
 	net.Source.Start.Rise = 3 / testFrequency
 	net.Source.Stop = &network.Stop{At: 20 / testFrequency, Fall: 3 / testFrequency}
-	st, err := Settle(context.Background(), net, fixedGrid(net, 40), Settings{})
-	if err != nil {
-		t.Fatal(err)
-	}
-	s, err := StressRun(context.Background(), net, st, Settings{})
-	if err != nil {
-		t.Fatal(err)
-	}
-	if !s.Complete {
+	if s := stressed(t, net, fixedGrid(net, 40)); !s.Complete {
 		t.Error("the network did not come to rest")
 	}
 }

@@ -24,6 +24,13 @@ func matchedLine(length float64) *network.Network {
 
 func stressed(t testing.TB, net *network.Network, g Grid) *Stress {
 	t.Helper()
+	_, s := bothRuns(t, net, g)
+	return s
+}
+
+// bothRuns are the settling run and the stress run of a network.
+func bothRuns(t testing.TB, net *network.Network, g Grid) (*Steady, *Stress) {
+	t.Helper()
 	st, err := Settle(context.Background(), net, g, Settings{})
 	if err != nil {
 		t.Fatal(err)
@@ -32,7 +39,7 @@ func stressed(t testing.TB, net *network.Network, g Grid) *Stress {
 	if err != nil {
 		t.Fatal(err)
 	}
-	return s
+	return st, s
 }
 
 // TestNoFalseOvershoot: an averaged source that had already jumped at t = 0
@@ -155,14 +162,7 @@ func TestTracesAgreeWithPhasor(t *testing.T) {
 	net := lossyCascade()
 	net.Source.Start = network.Start{Rise: 3 / testFrequency, Phase: 0.7}
 	g := fixedGrid(net, 60)
-	st, err := Settle(context.Background(), net, g, Settings{})
-	if err != nil {
-		t.Fatal(err)
-	}
-	s, err := StressRun(context.Background(), net, st, Settings{})
-	if err != nil {
-		t.Fatal(err)
-	}
+	st, s := bothRuns(t, net, g)
 	check := func(what string, tr Trace, p complex128) {
 		start := float64(s.Traces.TailEnd-len(tr.Tail)+1) - tr.Early
 		for i, v := range tr.Tail {
@@ -232,14 +232,7 @@ func TestPeakCurrentAtTheEnds(t *testing.T) {
 	for _, net := range []*network.Network{lossyCascade(), dispersiveCascade()} {
 		net.Source.Start = network.Start{Rise: 200 / testFrequency, Worst: true}
 		g := fixedGrid(net, 48)
-		st, err := Settle(context.Background(), net, g, Settings{})
-		if err != nil {
-			t.Fatal(err)
-		}
-		s, err := StressRun(context.Background(), net, st, Settings{})
-		if err != nil {
-			t.Fatal(err)
-		}
+		st, s := bothRuns(t, net, g)
 		for k, q := range s.Sections {
 			for end, pair := range [][2]float64{{q.FromCurrent, cmplx.Abs(st.Sections[k].IFrom)}, {q.ToCurrent, cmplx.Abs(st.Sections[k].ITo)}} {
 				// A rise of 200 periods overshoots by a few parts in a thousand.

@@ -320,7 +320,7 @@ func (s *solved) model() record.Model {
 			Given: d.Sections[k].Length.Text, Length: sec.Length,
 			Wavelengths: w, Degrees: 360 * w, Delay: sec.Delay(),
 			LossDB: real(g) * sec.Length * line.NeperDB,
-			Z0:     at.Impedance(net.Omega()), VelocityFactor: net.Omega() / imag(g) / line.C0,
+			Z0:     at.Impedance(net.Omega()), VelocityFactor: at.PhaseVelocity(net.Omega()) / line.C0,
 			R: at.R, L: at.L, G: at.G, C: at.C,
 		})
 	}
