@@ -59,6 +59,7 @@ type Design struct {
 	Elements     []Part        // in file order
 	Junctions    []string      // in the order in which sections, loads, elements and the source name them: source first
 	Requirements []Requirement // of the nominal design; the same in every case
+	Claims       []Claim       // likewise
 	Grid         Grid
 	Warnings     []string // of the source, the lines and the parts, each with what it is about
 }

@@ -11,6 +11,7 @@ type Verdict string
 const (
 	Verified Verdict = "verified"
 	NotShown Verdict = "not shown"
+	Doubted  Verdict = "claim contradicted" // a figure of the designer's own is not what both witnesses find
 	Missed   Verdict = "requirement missed"
 	Disagree Verdict = "methods disagree"
 	Unsettle Verdict = "not settled"
@@ -23,12 +24,14 @@ func (v Verdict) Rank() int {
 		return 0
 	case NotShown:
 		return 1
-	case Missed:
+	case Doubted:
 		return 2
-	case Disagree:
+	case Missed:
 		return 3
-	default:
+	case Disagree:
 		return 4
+	default:
+		return 5
 	}
 }
 
@@ -38,6 +41,7 @@ type Record struct {
 	Design  Design
 	Verdict Verdict
 	Cases   []Case // nominal first, then in the order of the file
+	Matrix  Matrix // the cases side by side
 }
 
 // Tool says what program made the record.
@@ -75,6 +79,10 @@ type Case struct {
 	Grid         Grid
 	Requirements []Requirement
 	Ratings      []Rating // worst first; empty where nothing is rated
+	Claims       []Claim  // those made of this case, in the order of the file
+	Convergence  Convergence
+	Fidelity     []Fidelity
+	Power        Power
 	Warnings     []string
 
 	// What only the figures and the CSV files need.
@@ -233,32 +241,6 @@ type SteadyLoad struct {
 type SteadyJunction struct {
 	Name string
 	V    complex128
-}
-
-// Settling is how the settling run came to steady state.
-type Settling struct {
-	Settled    bool
-	Time       float64 // s, end of the settling run
-	Periods    int
-	Residual   float64 // estimated remaining error, relative to section maxima
-	LoopFactor float64 // amplitude kept per longest round trip, as measured
-	LongPath   float64 // s, longest one-way path
-	RoundTrip  float64 // s, 2 LongPath
-	Ramp       float64 // s, rise of the settling run
-	Mean       float64 // largest mean over the largest fundamental, last window
-	Harmonic   float64 // likewise the largest of the second and third harmonics
-	Curve      []SettlingPoint
-	Decay      string // for a run that did not settle: what was measured
-
-	// From the stress run, which starts as the design starts.
-	To1Percent float64 // s from switch-on until every junction stays within 1 % of its final phasor; NaN if not reached
-}
-
-// SettlingPoint is one comparison of two windows one round trip apart.
-type SettlingPoint struct {
-	Time     float64 // s, end of the later window
-	Change   float64 // largest change between the windows, relative to section maxima
-	Estimate float64 // estimated remaining error, Change rho/(1-rho); NaN before three windows
 }
 
 // Stress is what happened over all time, from the design's own start.
