@@ -11,11 +11,11 @@ import (
 	"linewitness/sim/record"
 )
 
-// convergenceHeight is the height of the settling and spectrum panels.
-const convergenceHeight = 112.0
+// settlingHeight is the height of the settling and spectrum panels.
+const settlingHeight = 112.0
 
-// convergence draws the settling curve and the spectrum side by side.
-func (d *document) convergence(c *record.Case) {
+// settling draws the settling curve and the spectrum side by side.
+func (d *document) settling(c *record.Case) {
 	var panels []*figure.Panel
 	finding := ""
 	if p := settlingPanel(c.Settling, d.r.Design.Tolerance); p != nil {
@@ -36,10 +36,10 @@ func (d *document) convergence(c *record.Case) {
 	if estimated(c.Settling, d.r.Design.Tolerance) {
 		entries = slices.Insert(entries, 1, figure.Entry{Style: ink.PhasorLine, Text: "estimated error left"})
 	}
-	d.b.Subheading("Steady state and spectrum", convergenceHeight+2*figure.KeyHeight+30)
+	d.b.Subheading("Steady state and spectrum", settlingHeight+2*figure.KeyHeight+30)
 	d.key(entries)
-	d.b.Need(convergenceHeight + d.b.CaptionHeight(label, finding))
-	d.b.Block(convergenceHeight, func(cv draw.Canvas) {
+	d.b.Need(settlingHeight + d.b.CaptionHeight(label, finding))
+	d.b.Block(settlingHeight, func(cv draw.Canvas) {
 		for i, p := range panels {
 			p.Draw(column(cv, i, len(panels)))
 		}
@@ -144,63 +144,4 @@ func settlingFinding(s record.Settling, tolerance float64) string {
 		text += " The upright lines are " + format.Count(int64(every)) + " round trips apart."
 	}
 	return text
-}
-
-// spectrumPanel returns nil if there is no spectrum. Amplitudes are relative
-// to the largest.
-func spectrumPanel(c *record.Case) *figure.Panel {
-	s := c.Spectrum
-	top := largestOf(s.Amplitude)
-	if len(s.Frequency) == 0 || top <= 0 {
-		return nil
-	}
-	const floor = 1e-8
-	last := s.Frequency[len(s.Frequency)-1]
-	if c.Model.Frequency > 0 {
-		last = min(last, harmonics*c.Model.Frequency)
-	}
-	p := figure.New("Spectrum at "+s.Where, "relative to the largest line",
-		figure.Axis{Label: "frequency", Unit: "Hz", Max: last}, figure.Axis{Min: floor, Max: 2, Log: true})
-	xs, ys := span{0, last}.in(s.Frequency, s.Amplitude)
-	if len(ys) > spectrumLines {
-		t := figure.Extremes(xs, ys, spectrumLines)
-		xs, ys = t.X, t.Hi
-	}
-	for i := range min(len(xs), len(ys)) {
-		if ys[i] > floor*top {
-			p.Line([]float64{xs[i], xs[i]}, []float64{floor, ys[i] / top}, ink.TraceLine)
-		}
-	}
-	if i := largestAt(s.Amplitude); i >= 0 {
-		p.Spot(s.Frequency[i], 1, format.SI(s.Frequency[i], "Hz"))
-	}
-	return p
-}
-
-// harmonics is how far the spectrum is drawn, in units of the frequency.
-const harmonics = 8.2
-
-// spectrumLines is how many lines a panel shows apart.
-const spectrumLines = 200
-
-func spectrumFinding(c *record.Case) string {
-	s := c.Spectrum
-	k := largestAt(s.Amplitude)
-	rest := slices.Clone(s.Amplitude)
-	for i := range rest {
-		if i == k {
-			rest[i] = 0
-		}
-	}
-	next := largestAt(rest)
-	text := "Right: the last " + format.Plural(int64(s.Periods), "period") + " at " + s.Where + " hold " + format.SI(s.Amplitude[k], "V") + " at " + format.SI(s.Frequency[k], "Hz")
-	const silence = 1e-10
-	switch {
-	case next < 0:
-	case rest[next] < silence*s.Amplitude[k]:
-		text += "; no other line reaches " + format.Fixed(20*math.Log10(silence), 0) + format.Space + "dB to it"
-	default:
-		text += "; the next largest line, at " + format.SI(s.Frequency[next], "Hz") + ", is " + format.DB(20*math.Log10(rest[next]/s.Amplitude[k])) + " to it"
-	}
-	return text + "."
 }
