@@ -30,6 +30,8 @@ func (d *document) solved(c *record.Case) {
 	d.waveforms(c)
 	d.envelopes(c)
 	d.settling(c)
+	d.gridStudy(c)
+	d.fidelity(c)
 	d.grid(c)
 	d.warnings(c)
 }
@@ -41,7 +43,7 @@ func (d *document) verdictLine(c *record.Case) {
 	if len(c.Ratings) > 0 {
 		s += " Ratings: " + countRatings(c.Ratings).String() + "."
 	}
-	s += " The two solutions differ by " + format.Percent(largest(a)) +
+	s += claimsOfCase(c) + " The two solutions differ by " + format.Percent(largest(a)) +
 		" at most; " + format.Percent(a.Expected) + " was expected and the limit is " + format.Percent(a.Limit) + "."
 	if a.Worst.Section != "" {
 		s += " The largest difference is in the " + a.Worst.Quantity + " of " + a.Worst.Section + " at " + place(a.Worst.At) + "."

@@ -38,6 +38,8 @@ func build(r *record.Record, opt Options) (*document, error) {
 	d := &document{r: cleaned(r)}
 	d.b = sheet.New(meta(d.r), paper)
 	d.cover()
+	d.sideBySide()
+	d.claims()
 	d.design()
 	for i := range d.r.Cases {
 		d.solved(&d.r.Cases[i])

@@ -18,7 +18,7 @@ func markOf(v record.Verdict) sheet.Mark {
 		return sheet.Holds
 	case record.NotShown:
 		return sheet.Open
-	case record.Missed:
+	case record.Doubted, record.Missed:
 		return sheet.Fails
 	case record.Disagree:
 		return sheet.Differs

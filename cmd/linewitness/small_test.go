@@ -115,7 +115,7 @@ func TestStatusOf(t *testing.T) {
 		verdict record.Verdict
 		want    int
 	}{
-		{record.Verified, 0}, {record.NotShown, 1}, {record.Missed, 1}, {record.Disagree, 3}, {record.Unsettle, 4},
+		{record.Verified, 0}, {record.NotShown, 1}, {record.Doubted, 1}, {record.Missed, 1}, {record.Disagree, 3}, {record.Unsettle, 4},
 	} {
 		if got := statusOf(tt.verdict); got != tt.want {
 			t.Errorf("statusOf(%q) = %d, want %d", tt.verdict, got, tt.want)

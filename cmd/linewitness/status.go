@@ -5,7 +5,7 @@ import "linewitness/sim/record"
 // The exit statuses. A run over several designs ends with the highest.
 const (
 	statusVerified    = 0   // all is as it should be
-	statusMissed      = 1   // a requirement is missed, or is not shown to be met
+	statusMissed      = 1   // a requirement is missed or not shown to be met, or a claim contradicted
 	statusUsage       = 2   // the command line or a design file is wrong
 	statusDisagree    = 3   // the two methods disagree
 	statusUnsettled   = 4   // there is no steady state
@@ -17,7 +17,7 @@ func statusOf(v record.Verdict) int {
 	switch v {
 	case record.Verified:
 		return statusVerified
-	case record.Missed, record.NotShown:
+	case record.Missed, record.Doubted, record.NotShown:
 		return statusMissed
 	case record.Disagree:
 		return statusDisagree

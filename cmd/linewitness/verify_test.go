@@ -58,7 +58,7 @@ func TestVerifyFails(t *testing.T) {
 // The files are written whatever the verdict is: a design that fails is filed
 // too.
 func TestVerifyVerdicts(t *testing.T) {
-	for _, verdict := range []record.Verdict{record.Verified, record.NotShown, record.Missed, record.Disagree, record.Unsettle} {
+	for _, verdict := range []record.Verdict{record.Verified, record.NotShown, record.Doubted, record.Missed, record.Disagree, record.Unsettle} {
 		t.Run(string(verdict), func(t *testing.T) {
 			r := sampleRecord()
 			r.Verdict = verdict

@@ -64,6 +64,10 @@ type Design struct {
 	Agreement  float64
 	Tolerance  float64 // settle tolerance
 	MaxPeriods int
+
+	// The choices that the standard of the feature selective validation leaves
+	// open, one a line.
+	FSVChoices []string
 }
 
 // A Case is the nominal design or one of its variants, solved and judged.

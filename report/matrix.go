@@ -1,0 +1,4 @@
+package report
+
+// sideBySide writes the cases beside each other.
+func (d *document) sideBySide() {}
