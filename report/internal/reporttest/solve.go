@@ -12,7 +12,8 @@ type Options struct {
 	Error     float64 // size of the difference between the witnesses
 	Loop      float64 // amplitude kept per round trip
 	Unsettled bool
-	MaxPoints int // points of a profile at most; 0 means 600
+	MaxPoints int    // points of a profile at most; 0 means 600
+	Stop      string // of the source, in words; empty if it stays on
 }
 
 // Case returns the network as a solved case, without requirements.
@@ -33,6 +34,9 @@ func (n Network) Case(name string, opt Options) record.Case {
 	c.Grid = n.grid()
 	c.Waveforms = n.waveforms(c, opt)
 	c.Spectrum = n.spectrum(v)
+	c.Model.Source.Stop = opt.Stop
+	n.prove(&c, opt)
+	c.Power = n.power(c, v, opt)
 	if opt.Unsettled {
 		c.Verdict = record.Unsettle
 	}
