@@ -36,6 +36,30 @@
 // times the design frequency. An advisory rating rests on the cable table: it
 // warns and has no part in the verdict of the case.
 //
+// # Settling and power
+//
+// Beyond what the settling run reached, "settling" has what the closed form
+// predicts of it, every comparison of two windows, and, from the stress run,
+// how each place comes to its final phasor:
+//
+//	"settling": {..., "long_path_s", "ramp_s", "earliest_s", "passes",
+//	          "predicted": {"loop_factor", "q", "time_constant_s", "to_10_percent_s",
+//	                        "to_1_percent_s", "to_0_1_percent_s", "ring_down_60_db_s", "settled_s"},
+//	          "windows": [{"time_s", "gap_s", "change", "estimate", "mean", "harmonic", "passed"}],
+//	          "places": [{"name", "kind": "junction | load", "quantity": "voltage | current",
+//	                      "to_10_percent_s", "to_1_percent_s", "to_0_1_percent_s"}],
+//	          "echoes": [{"name", "time_s"}],
+//	          "ring_down": {JUNCTION: {"to_minus_20_db_s", "to_minus_40_db_s", "to_minus_60_db_s"}}}
+//	"power": {"phasor": AUDIT, "fdtd": AUDIT}
+//	AUDIT  = {"available_w", "delivered_w", "reflected_w", "dissipated_w", "in_loads_w",
+//	          "balance_w", "balance_relative", "balance_allowed", "closed", "stored_j", "q",
+//	          "sections": {NAME: {"in_w", "out_w", "dissipated_w", "stored_j"}},
+//	          "elements": {NAME: {"power_w"}}, "loads": {NAME: {"power_w"}}}
+//
+// Times are from switch-on, those of "ring_down" from the stop of the source,
+// and the predicted ones from the end of the source's own rise or from its stop.
+// A time that the run did not show is null. An audit is null where none was made.
+//
 // # Size
 //
 // The waveform file holds every sample that the record has, one a row: some

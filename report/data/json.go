@@ -72,18 +72,27 @@ func caseObject(c *record.Case) (object, error) {
 	if err != nil {
 		return nil, err
 	}
+	settling, err := settlingObject(c.Settling)
+	if err != nil {
+		return nil, fmt.Errorf("settling: %w", err)
+	}
+	power, err := powerObject(c.Power)
+	if err != nil {
+		return nil, fmt.Errorf("power: %w", err)
+	}
 	return object{
 		{"verdict", string(c.Verdict)},
 		{"frequency_hz", c.Model.Frequency},
 		{"lines", lines},
 		{"phasor", phasor},
 		{"fdtd", fdtd},
-		{"settling", settlingObject(c.Settling)},
+		{"settling", settling},
 		{"stress", stress},
 		{"agreement", agreement},
 		{"grid", grid},
 		{"requirements", requirementList(c.Requirements)},
 		{"ratings", ratingList(c.Ratings)},
+		{"power", power},
 		{"warnings", stringList(c.Warnings)},
 	}, nil
 }

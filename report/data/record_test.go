@@ -38,15 +38,13 @@ func golden(t *testing.T, name string, got []byte) {
 func sample() *record.Record {
 	limit, low := 1.5, 1.0
 	nominal := record.Case{
-		Name:    "nominal",
-		Verdict: record.Missed,
-		Model:   record.Model{Frequency: 100e6, Lines: sampleLines()},
-		Phasor:  sampleSteady(1),
-		FDTD:    sampleSteady(1.0001),
-		Settling: record.Settling{
-			Settled: true, Time: 600e-9, Periods: 60, Residual: 2.5e-5, LoopFactor: 0.25,
-			RoundTrip: 5e-9, Mean: 1e-9, Harmonic: 2e-9, To1Percent: 31e-9,
-		},
+		Name:      "nominal",
+		Verdict:   record.Missed,
+		Model:     record.Model{Frequency: 100e6, Lines: sampleLines()},
+		Phasor:    sampleSteady(1),
+		FDTD:      sampleSteady(1.0001),
+		Settling:  sampleSettling(),
+		Power:     samplePower(),
 		Stress:    sampleStress(),
 		Agreement: sampleAgreement(),
 		Grid: record.Grid{
@@ -74,7 +72,7 @@ func sample() *record.Record {
 	}
 	lost := record.Case{
 		Name: "ring, lossless", Verdict: record.Unsettle,
-		Settling: record.Settling{Periods: 20000, LoopFactor: 1, Residual: math.NaN(), To1Percent: math.NaN(), Decay: "no decay over 20000 periods"},
+		Settling: record.Settling{Periods: 20000, LoopFactor: 1, Residual: math.NaN(), To1Percent: math.NaN(), Decay: "no decay over 20000 periods", Predicted: unpredicted()},
 	}
 	return &record.Record{
 		Tool: record.Tool{Version: "v0.0.0", Go: "go1.26.0 any/any"},

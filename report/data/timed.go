@@ -2,21 +2,6 @@ package data
 
 import "linewitness/sim/record"
 
-func settlingObject(s record.Settling) object {
-	return object{
-		{"settled", s.Settled},
-		{"time_s", s.Time},
-		{"periods", s.Periods},
-		{"residual", s.Residual},
-		{"loop_factor", s.LoopFactor},
-		{"round_trip_s", s.RoundTrip},
-		{"mean", s.Mean},
-		{"harmonic", s.Harmonic},
-		{"to_1_percent_s", s.To1Percent},
-		{"decay", s.Decay},
-	}
-}
-
 func stressObject(s record.Stress) (object, error) {
 	var sections named
 	for _, x := range s.Sections {
