@@ -60,8 +60,8 @@ func (l *layout) natural() (natural, least []float64) {
 				mark = markRoom
 			}
 			st := l.style(i, row[i])
-			n = max(n, st.Width(row[i].Text)+mark)
-			w = max(w, widestWord(row[i].Text, st.Width)+mark)
+			n = max(n, st.Width(row[i].Text)+mark, l.noteStyle().Width(row[i].Note)+mark)
+			w = max(w, widestWord(row[i].Text, st.Width)+mark, widestWord(row[i].Note, l.noteStyle().Width)+mark)
 		}
 		natural = append(natural, n+2*cellPad+0.1)
 		least = append(least, w+2*cellPad+0.1)

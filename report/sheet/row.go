@@ -18,7 +18,7 @@ func (l *layout) head() {
 		for i, lines := range l.headLines {
 			// Heads stand on the lower edge, next to their numbers.
 			drop := l.headHeight - 2*rowPad - float64(len(lines))*l.lineHeight()
-			l.text(c, x, drop, l.widths[i], l.t.Columns[i].Align, l.headStyle(), lines)
+			l.text(c, x, drop, l.lineHeight(), l.widths[i], l.t.Columns[i].Align, l.headStyle(), lines)
 			x += l.widths[i]
 		}
 	})
@@ -38,14 +38,17 @@ func (l *layout) row(row []wrapped, shaded bool) {
 				cell.Mark.Draw(c, x+cellPad+l.t.Size*0.45, middle, l.t.Size*0.95)
 				at += markRoom
 			}
-			l.text(c, at, 0, l.room(i, cell.Cell)+2*cellPad, l.t.Columns[i].Align, cell.style, cell.lines)
+			width := l.room(i, cell.Cell) + 2*cellPad
+			l.text(c, at, 0, l.lineHeight(), width, l.t.Columns[i].Align, cell.style, cell.lines)
+			l.text(c, at, float64(len(cell.lines))*l.lineHeight(), l.lineHeight()*noteSize, width, l.t.Columns[i].Align, l.noteStyle(), cell.notes)
 			x += l.widths[i]
 		}
 	})
 }
 
 // text draws the lines of a cell that starts at x, drop below its upper edge.
-func (l *layout) text(c draw.Canvas, x, drop, width float64, align typeset.Align, st typeset.Style, lines []string) {
+// Its baselines are step apart.
+func (l *layout) text(c draw.Canvas, x, drop, step, width float64, align typeset.Align, st typeset.Style, lines []string) {
 	y := c.Max.Y.Points() - rowPad - drop - st.Size*0.92
 	for _, line := range lines {
 		room := width - 2*cellPad
@@ -54,7 +57,7 @@ func (l *layout) text(c draw.Canvas, x, drop, width float64, align typeset.Align
 			at += room - st.Width(line)
 		}
 		l.b.Draw(c, st, at, y, room, line)
-		y -= l.lineHeight()
+		y -= step
 	}
 }
 

@@ -110,6 +110,7 @@ func TestTableFits(t *testing.T) {
 			for range columns {
 				row = append(row, Cell{
 					Text: rapid.StringMatching(`[A-Za-z0-9_ ]{0,60}`).Draw(t, "text"),
+					Note: rapid.StringMatching(`[A-Za-z0-9_ ]{0,40}`).Draw(t, "note"),
 					Mark: Mark(rapid.IntRange(0, 3).Draw(t, "mark")), Bold: rapid.Bool().Draw(t, "bold"),
 				})
 			}
@@ -137,6 +138,23 @@ func TestTallRow(t *testing.T) {
 	file := finish(t, b)
 	if len(file) == 0 {
 		t.Error("empty file")
+	}
+}
+
+// The note of a cell is longer than a page and is continued too; a short one
+// makes its row less than a line higher.
+func TestNoteOfCell(t *testing.T) {
+	b := book()
+	b.Table(Table{Columns: []Column{{Head: "A"}}, Rows: [][]Cell{{{Text: "x", Note: strings.Repeat("w ", 24000)}}}})
+	if b.Pages() < 2 {
+		t.Errorf("%d pages", b.Pages())
+	}
+	finish(t, b)
+	b = book()
+	l := b.layout(Table{Columns: []Column{{Head: "A"}}, Rows: [][]Cell{{{Text: "x"}}, {{Text: "x", Note: "n"}}}})
+	bare, noted := l.height(l.wrap(l.t.Rows[0])), l.height(l.wrap(l.t.Rows[1]))
+	if !(noted > bare && noted < bare+l.lineHeight()) {
+		t.Errorf("a row is %v high, with a note %v", bare, noted)
 	}
 }
 

@@ -24,7 +24,8 @@ type Column struct {
 // A Cell is a cell of a table.
 type Cell struct {
 	Text string
-	Mark Mark // drawn before the text
+	Note string // in small type below the text
+	Mark Mark   // drawn before the text
 	Bold bool
 	Span bool // the text runs over the rest of the row
 }
@@ -34,6 +35,8 @@ const (
 	rowPad    = 2.2 // above and below the text of a row
 	markRoom  = 11  // width that a mark takes before its text
 	tableSize = 7.5
+	lineStep  = 1.22 // distance of the lines over the size of the text
+	noteSize  = 0.84 // of the notes of cells, over that of their text
 )
 
 // Row makes cells of texts.
@@ -80,6 +83,7 @@ type wrapped struct {
 	Cell
 	style typeset.Style
 	lines []string
+	notes []string // lines of the note
 }
 
 func (b *Book) layout(t Table) *layout {
@@ -98,7 +102,7 @@ func (b *Book) layout(t Table) *layout {
 	return l
 }
 
-func (l *layout) lineHeight() float64 { return l.t.Size * 1.22 }
+func (l *layout) lineHeight() float64 { return l.t.Size * lineStep }
 
 func (l *layout) headStyle() typeset.Style {
 	return typeset.Style{Face: typeset.Bold, Size: l.t.Size - 0.3, Color: ink.Accent}
@@ -112,11 +116,18 @@ func (l *layout) style(i int, c Cell) typeset.Style {
 	return st
 }
 
+func (l *layout) noteStyle() typeset.Style {
+	return typeset.Style{Size: l.t.Size * noteSize, Color: ink.Soft}
+}
+
 func (l *layout) wrap(row []Cell) []wrapped {
 	out := make([]wrapped, len(row))
 	for i, c := range row {
 		st := l.style(i, c)
 		out[i] = wrapped{Cell: c, style: st, lines: st.Wrap(c.Text, l.room(i, c))}
+		if c.Note != "" {
+			out[i].notes = l.noteStyle().Wrap(c.Note, l.room(i, c))
+		}
 	}
 	return out
 }
@@ -136,11 +147,11 @@ func (l *layout) room(i int, c Cell) float64 {
 }
 
 func (l *layout) height(row []wrapped) float64 {
-	most := 1
+	most := l.lineHeight()
 	for _, c := range row {
-		most = max(most, len(c.lines))
+		most = max(most, float64(len(c.lines))*l.lineHeight()+float64(len(c.notes))*l.lineHeight()*noteSize)
 	}
-	return float64(most)*l.lineHeight() + 2*rowPad
+	return most + 2*rowPad
 }
 
 // heightOfFirst returns the height of the first n rows, so that a head is not
@@ -162,9 +173,10 @@ func (l *layout) split(row []wrapped) [][]wrapped {
 		rest = false
 		for i, c := range row {
 			n := min(most, len(c.lines))
-			part[i] = wrapped{Cell: c.Cell, style: c.style, lines: c.lines[:n]}
-			row[i].lines, row[i].Mark = c.lines[n:], NoMark
-			rest = rest || len(row[i].lines) > 0
+			m := min(most-n, len(c.notes))
+			part[i] = wrapped{Cell: c.Cell, style: c.style, lines: c.lines[:n], notes: c.notes[:m]}
+			row[i].lines, row[i].notes, row[i].Mark = c.lines[n:], c.notes[m:], NoMark
+			rest = rest || len(row[i].lines)+len(row[i].notes) > 0
 		}
 		parts = append(parts, part)
 	}
