@@ -19,6 +19,38 @@ func LongestPath(net *network.Network) float64 {
 	return d + t.closing
 }
 
+// Arrivals is the delay, s, after which a wave front from junction from first
+// reaches each junction, on the shortest way; +Inf where none leads. Branches
+// between junctions pass it on at once.
+func Arrivals(net *network.Network, from int) []float64 {
+	out := make([]float64, len(net.Junctions))
+	for j := range out {
+		out[j] = math.Inf(1)
+	}
+	out[from] = 0
+	// Relaxation to a fixed point: a network has some tens of sections.
+	for changed := true; changed; {
+		changed = false
+		join := func(a, b int, d float64) {
+			if out[a]+d < out[b] {
+				out[b], changed = out[a]+d, true
+			}
+			if out[b]+d < out[a] {
+				out[a], changed = out[b]+d, true
+			}
+		}
+		for _, s := range net.Sections {
+			join(s.From, s.To, s.Delay())
+		}
+		for _, b := range net.Branches {
+			if b.B != network.Ground && !b.Open {
+				join(b.A, b.B, 0)
+			}
+		}
+	}
+	return out
+}
+
 // A tree spans the junctions of a network, longest sections first so that
 // what closes a loop is short. Bridging branches join without delay.
 type tree struct {

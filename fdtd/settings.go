@@ -10,6 +10,14 @@ type Settings struct {
 	// count as at rest; default 1e-3. It must be above the error of that
 	// steady state on the grid of the run.
 	Rest float64
+	// Phasor is how near, relative to its own amplitude, the phasor of every
+	// junction must have come to that of the steady state before a stress run
+	// counts as at rest; 0 leaves that to Rest. Junctions with less than a tenth
+	// of the largest amplitude are not waited for.
+	Phasor float64
+	// Exactly, if not 0, is the length of a settling run in periods, whatever
+	// the rule says: runs on several grids compare the same moment.
+	Exactly int
 	// Sharp keeps a jump of the source in a stress run as it is, see edgeSteps.
 	Sharp bool
 	// Progress, if not nil, is called after every period with the number of

@@ -19,6 +19,8 @@ type Settling struct {
 	LoopFactor float64 // last measured factor per longest round trip; 1 or more if the changes do not fall, 0 if nothing was left to measure
 	Mean       float64 // largest mean, relative likewise, in the last window
 	Harmonic   float64 // largest second or third harmonic, relative likewise
+	Earliest   float64 // s, no window that begins before this counts
+	Passes     int     // windows in a row, up to the last, that passed every test
 	Curve      []Comparison
 }
 
@@ -28,6 +30,9 @@ type Comparison struct {
 	Gap      float64 // s between the windows
 	Change   float64 // largest change of a phasor, relative to the section's largest
 	Estimate float64 // remaining error, Change rho/(1-rho); +Inf while it does not fall
+	Mean     float64 // as of Settling, in the later window
+	Harmonic float64
+	Passed   bool // the later window passed every test
 }
 
 // Settle runs a network from rest to steady state, whatever start its source
@@ -78,6 +83,9 @@ type settler struct {
 
 // settle runs from window to window until the watch is content.
 func (s *settler) settle() error {
+	if n := s.run.set.Exactly; n > 0 {
+		return s.exactly(n)
+	}
 	for p := 0; ; {
 		next := min(p+s.watch.gap, s.run.set.MaxPeriods)
 		for ; p < next-1; p++ {
@@ -101,6 +109,23 @@ func (s *settler) settle() error {
 	}
 }
 
+// exactly runs n periods and looks at the last.
+func (s *settler) exactly(n int) error {
+	for range n - 1 {
+		if err := s.run.period(nil); err != nil {
+			return err
+		}
+	}
+	l := s.run.lanes[0]
+	if err := s.run.period(func(n int) { s.rec.sample(l, n) }); err != nil {
+		return err
+	}
+	s.last = s.rec.window()
+	s.watch.Periods, s.watch.Time = n, float64(n)*s.watch.period
+	s.watch.Mean, s.watch.Harmonic = s.last.mean, s.last.harmonic
+	return s.run.ctx.Err()
+}
+
 // A watch judges the windows of a settling run.
 type watch struct {
 	Settling
@@ -111,7 +136,6 @@ type watch struct {
 	gap       int // periods between windows
 	seen      int // windows since the gap was last changed
 	at        int
-	passes    int
 	changes   []float64 // with the present gap
 }
 
@@ -119,6 +143,9 @@ type watch struct {
 // slow decay changes too little from one round trip to the next, and looking
 // costs time.
 const windowsPerGap = 24
+
+// passesNeeded is how many windows in a row must pass.
+const passesNeeded = 2
 
 // rounding is the change below which only rounding is left.
 const rounding = 1e-11
@@ -128,6 +155,7 @@ func newWatch(net *network.Network, tolerance float64) *watch {
 	w := &watch{period: net.Period(), tolerance: tolerance}
 	w.LongPath = path
 	w.earliest = RampPeriods + periods(2*path, w.period)
+	w.Earliest = float64(w.earliest) * w.period
 	w.trip = max(1, periods(2*path, w.period))
 	w.gap = w.trip
 	return w
@@ -142,7 +170,11 @@ func (w *watch) see(p int, prev, now *window) bool {
 		w.at = p
 		return false
 	}
-	c := Comparison{Time: w.Time, Gap: float64(p-w.at) * w.period, Change: change(prev, now), Estimate: math.Inf(1)}
+	c := Comparison{
+		Time: w.Time, Gap: float64(p-w.at) * w.period,
+		Change: change(prev, now), Estimate: math.Inf(1),
+		Mean: now.mean, Harmonic: now.harmonic,
+	}
 	// While the ramp rises the changes are those of the ramp, and how they
 	// fall says nothing of how the network decays.
 	if w.at > RampPeriods {
@@ -151,13 +183,14 @@ func (w *watch) see(p int, prev, now *window) bool {
 	}
 	w.at = p
 	w.Residual = c.Estimate
+	c.Passed = p-1 >= w.earliest && c.Estimate <= w.tolerance && now.mean <= w.tolerance && now.harmonic <= w.tolerance
 	w.Curve = append(w.Curve, c)
-	if p-1 >= w.earliest && c.Estimate <= w.tolerance && now.mean <= w.tolerance && now.harmonic <= w.tolerance {
-		w.passes++
+	if c.Passed {
+		w.Passes++
 	} else {
-		w.passes = 0
+		w.Passes = 0
 	}
-	w.Settled = w.passes >= 2
+	w.Settled = w.Passes >= passesNeeded
 	if w.seen++; w.seen == windowsPerGap {
 		w.gap, w.seen, w.changes = 2*w.gap, 0, nil
 	}

@@ -24,6 +24,16 @@ type Stress struct {
 	// follows, stays within a fraction of its final value; NaN if that was not
 	// reached.
 	SettleTime func(junction int, fraction float64) float64
+	// PartTime is likewise that of the current into a part.
+	PartTime func(part int, fraction float64) float64
+	// RingDown is the time from the stop of the source after which the voltage
+	// phasor of a junction, taken over the period that follows, stays below a
+	// fraction of what it was at the stop; NaN if that was not reached, or there
+	// is no stop.
+	RingDown func(junction int, fraction float64) float64
+	// Departures are the departures of the voltage phasors of the junctions from
+	// their final values against time.
+	Departures []Departure
 	// Edge is the rise that a jump of the source was given, s; 0 if it has none.
 	Edge    float64
 	Traces  Traces
@@ -39,6 +49,13 @@ type Peaks struct {
 	Current Peak
 	// The largest |i| at the two ends, in Current and I too.
 	FromCurrent, ToCurrent float64
+}
+
+// A Departure is how far the phasor of a junction, taken over the period that
+// begins at Time, is from its final value, relative to that; the larger of the
+// lanes'.
+type Departure struct {
+	Time, Error []float64 // s
 }
 
 // A Peak is a largest absolute value and when and where it was.
@@ -154,9 +171,9 @@ func (s *stresser) stress() error {
 		if err := s.run.period(func(int) { s.look() }); err != nil {
 			return err
 		}
-		rest := s.follow.rest(stop >= 0 && p > stop)
+		rest, phasor := s.follow.rest(stop >= 0 && p > stop)
 		quiet++
-		if rest > s.run.set.Rest {
+		if rest > s.run.set.Rest || stop < 0 && s.run.set.Phasor > 0 && phasor > s.run.set.Phasor {
 			quiet = 0
 		}
 		if quiet >= trip+1 && p >= max(start, stop)+trip+1 {
@@ -246,6 +263,9 @@ func (s *stresser) result() *Stress {
 		Traces:     s.traces.traces(),
 		Updates:    s.run.updates,
 		SettleTime: s.follow.settleTime,
+		PartTime:   s.follow.partTime,
+		RingDown:   s.follow.ringDown,
+		Departures: s.follow.departures(),
 		Edge:       s.edge,
 	}
 	for k, p := range s.peaks {

@@ -40,6 +40,9 @@ func (s *solved) caseRecord(reqs []record.Requirement) record.Case {
 			c.Grid.Updates += again.Updates
 		}
 	}
+	for _, again := range s.coarser {
+		c.Grid.Updates += again.Updates
+	}
 	for k := range c.Grid.Sections {
 		c.Grid.Sections[k].Points = len(s.steady.Sections[k].ZV)
 	}

@@ -21,55 +21,78 @@ type gridding struct {
 	discrete *phasor.Solution
 	waves    []agree.Wave
 	error    float64 // expected error of the grid alone
-	floor    float64 // the part of it that no finer grid mends
+	// limit is the same on a grid so fine that only what no grid mends is left
+	// of the error: that of the rational forms of dispersive lines.
+	limit *gridding
 }
 
-// gridFloor is the error that is left on a far finer grid: that of the
-// rational forms of dispersive lines.
-func gridFloor(net *network.Network, g fdtd.Grid, exact *phasor.Solution) (float64, error) {
-	fine, err := newGridding(net, g.Refine(6), exact)
-	if err != nil {
-		return 0, err
-	}
-	return fine.error, nil
-}
+// floor is the part of the error that no grid mends.
+func (g *gridding) floor() float64 { return g.limit.error }
 
-// chooseGrid makes a grid with at least cells cells per wavelength whose
-// expected error is within a share of the agreement limit, or near the error
-// that no grid mends: a resonant network needs far more cells than its wavelength says.
-func chooseGrid(ctx context.Context, net *network.Network, cells, agreement float64) (*gridding, error) {
+// limitSteps is how many times a grid is halved to stand for one without a
+// step: its own error is smaller by 4^limitSteps.
+const limitSteps = 6
+
+// A ladder is the grids of one case, finest first; each has twice the cells and
+// twice the steps of the next, so every Courant number stays what it is.
+type ladder []*gridding
+
+// chooseGrids makes a ladder of so many grids. The finest has at least cells
+// cells per wavelength, and an expected error within a share of the agreement
+// limit, or near the error that no grid mends: a resonant network needs far more
+// cells than its wavelength says.
+func chooseGrids(ctx context.Context, net *network.Network, rungs int, cells, agreement float64) (ladder, error) {
 	exact, err := phasor.Solve(net)
 	if err != nil {
 		return nil, err
 	}
-	floor := -1.0
+	scale := float64(int(1) << (rungs - 1)) // of the finest against the coarsest
+	coarse := cells / scale
+	var limit *gridding
 	for {
 		if err := ctx.Err(); err != nil {
 			return nil, err
 		}
-		g, err := fdtd.NewGrid(net, cells)
+		base, err := fdtd.NewGrid(net, coarse)
 		if err != nil {
 			return nil, err
 		}
-		out, err := newGridding(net, g, exact)
+		out, err := newGridding(net, base.Refine(rungs-1), exact)
 		if err != nil {
 			return nil, err
 		}
-		if floor < 0 {
-			if floor, err = gridFloor(net, g, exact); err != nil {
+		if limit == nil {
+			if limit, err = newGridding(net, out.grid.Refine(limitSteps), exact); err != nil {
 				return nil, err
 			}
 		}
-		out.floor = floor
-		target := math.Max(expectedShare*agreement, 1.25*floor)
-		if out.error <= target || g.StepsPerPeriod > finest {
-			return out, nil
+		out.limit = limit
+		target := math.Max(expectedShare*agreement, 1.25*limit.error)
+		if out.error <= target || out.grid.StepsPerPeriod > finest {
+			return out.down(net, base, rungs)
 		}
-		// The error falls as the square of the step; where it is already
-		// saturated that guess would jump too far.
-		factor := math.Sqrt(out.error / target)
-		cells = float64(g.StepsPerPeriod) * math.Min(2, 1.05*factor)
+		// The error falls as the square of the step, but jumps with the
+		// Courant numbers of short sections: a good number of steps is not to
+		// be leapt over.
+		factor := math.Min(2, math.Max(smallStep, 0.7*math.Sqrt(out.error/target)))
+		coarse = math.Max(coarse+1, coarse*factor)
 	}
+}
+
+// smallStep is the least factor by which the number of steps is raised.
+const smallStep = 1.05
+
+// down is the ladder below its finest grid, which is base refined.
+func (g *gridding) down(net *network.Network, base fdtd.Grid, rungs int) (ladder, error) {
+	out := ladder{g}
+	for r := rungs - 2; r >= 0; r-- {
+		next, err := newGridding(net, base.Refine(r), g.exact)
+		if err != nil {
+			return nil, err
+		}
+		out = append(out, next)
+	}
+	return out, nil
 }
 
 // finest is the number of steps per period beyond which the grid is taken as

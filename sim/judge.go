@@ -66,10 +66,11 @@ func (s *solved) judgements(r design.Requirement, b *budget, all map[string]*sol
 	case design.InputImpedance:
 		return s.impedance(one, b)
 	case design.PeakVoltage, design.PeakCurrent:
-		p := s.peak(r)
+		pick, unit := s.peak(r)
+		p := s.stressed(pick)
 		one.values = []witnessed{{p.value, fdtdOnly}}
 		one.spread = p.spread
-		one.note, one.unfinished = s.stressNote(), !s.finished()
+		one.note, one.unfinished = s.stressNote(pick, unit), !s.finished()
 	case design.Overshoot:
 		s.overshoot(&one)
 	case design.SettleTime:
@@ -196,11 +197,15 @@ func (s *solved) impedance(one judgement, b *budget) []judgement {
 // A stressed value is a peak with its uncertainty.
 type stressed struct{ value, spread float64 }
 
-// peak is the largest voltage or current along a section, at a junction, or
-// anywhere.
-func (s *solved) peak(r design.Requirement) stressed {
+// peak picks the largest voltage or current along a section, at a junction, or
+// anywhere, and tells its unit.
+func (s *solved) peak(r design.Requirement) (pick func(*fdtd.Stress) float64, unit string) {
 	f := finder{s.net}
-	pick := func(run *fdtd.Stress) float64 {
+	unit = "V"
+	if r.Quantity == design.PeakCurrent {
+		unit = "A"
+	}
+	return func(run *fdtd.Stress) float64 {
 		v := r.Quantity == design.PeakVoltage
 		switch {
 		case r.Section != "" && v:
@@ -219,8 +224,7 @@ func (s *solved) peak(r design.Requirement) stressed {
 			top = math.Max(top, peakCurrentAt(s, run, j))
 		}
 		return top
-	}
-	return s.stressed(pick)
+	}, unit
 }
 
 func largestVoltage(s *fdtd.Stress) float64 {
@@ -262,10 +266,11 @@ func (s *solved) overshoot(j *judgement) {
 	r.Quantity = design.SteadyVoltage
 	steady := f.steady(r)(s.exact)
 	r.Quantity = design.PeakVoltage
-	p := s.peak(r)
+	pick, unit := s.peak(r)
+	p := s.stressed(pick)
 	j.values = []witnessed{{p.value/steady - 1, fdtdOnly}}
 	j.spread = p.spread / steady
-	j.note, j.unfinished = s.stressNote(), !s.finished()
+	j.note, j.unfinished = s.stressNote(pick, unit), !s.finished()
 }
 
 func (s *solved) settleTime(j *judgement) {

@@ -84,11 +84,11 @@ func TestMargins(t *testing.T) {
 // to first order, of a phase the angle that the voltage's error subtends.
 func TestSpread(t *testing.T) {
 	f := load(t, "hilltop-fm-feeder")
-	p, err := newPlanned(t.Context(), Nominal, f.Nominal)
+	p, err := newPlanned(t.Context(), Nominal, f.Nominal, DefaultGrids)
 	if err != nil {
 		t.Fatal(err)
 	}
-	s := phasorState(p.net, p.grid.exact)
+	s := phasorState(p.net, p.grids[0].exact)
 	b := &budget{junctions: make([]float64, len(p.net.Junctions)), branches: make([]float64, len(p.net.Branches)), ends: make([][2]float64, len(p.net.Sections))}
 	at := p.net.Branches[0].A
 	v := s.junctions[at]
@@ -107,7 +107,7 @@ func TestSpread(t *testing.T) {
 // well above what the grid must cause is a disagreement inside the limit too.
 func TestDisagreement(t *testing.T) {
 	f := load(t, "reference-tree")
-	p, err := newPlanned(t.Context(), Nominal, f.Nominal)
+	p, err := newPlanned(t.Context(), Nominal, f.Nominal, DefaultGrids)
 	if err != nil {
 		t.Fatal(err)
 	}
@@ -174,7 +174,7 @@ func TestBound(t *testing.T) {
 func TestPlanPredicts(t *testing.T) {
 	for name, demo := range demos {
 		f, r := demo(t)
-		plan, err := MakePlan(t.Context(), f)
+		plan, err := MakePlan(t.Context(), f, DefaultGrids)
 		if err != nil {
 			t.Fatal(err)
 		}

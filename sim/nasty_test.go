@@ -67,7 +67,7 @@ grid: {max_periods: 200}
 	if c.Verdict != record.NotShown {
 		t.Errorf("verdict %s", c.Verdict)
 	}
-	plan, err := MakePlan(t.Context(), f)
+	plan, err := MakePlan(t.Context(), f, DefaultGrids)
 	if err != nil || len(plan.Cases[0].Warnings) == 0 {
 		t.Errorf("the plan does not warn: %+v, %v", plan, err)
 	}
@@ -111,15 +111,15 @@ grid: {agreement: 0.1 %}
 sections: {m: {from: a, to: b, length: 50 m, line: k}}
 loads: {l: {at: b, r: 100 ohm}}
 `)
-	p, err := newPlanned(t.Context(), Nominal, f.Nominal)
+	p, err := newPlanned(t.Context(), Nominal, f.Nominal, DefaultGrids)
 	if err != nil {
 		t.Fatal(err)
 	}
-	if n := p.grid.grid.StepsPerPeriod; n > 400 {
-		t.Errorf("%d steps per period for an error of %.3g", n, p.grid.error)
+	if n := p.grids[0].grid.StepsPerPeriod; n > 400 {
+		t.Errorf("%d steps per period for an error of %.3g", n, p.grids[0].error)
 	}
-	if p.grid.error > 0.001 {
-		t.Errorf("expected error %.3g, above the limit", p.grid.error)
+	if p.grids[0].error > 0.001 {
+		t.Errorf("expected error %.3g, above the limit", p.grids[0].error)
 	}
 }
 

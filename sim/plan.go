@@ -54,10 +54,10 @@ func (c *PlanCase) Bound() error {
 	return nil
 }
 
-// MakePlan plans every case of a design. It does not refuse a costly one; see
-// PlanCase and the bounds.
-func MakePlan(ctx context.Context, f *design.File) (*Plan, error) {
-	all, err := planAll(ctx, f)
+// MakePlan plans every case of a design for a study on so many grids, 3 or 1. It
+// does not refuse a costly one; see PlanCase and the bounds.
+func MakePlan(ctx context.Context, f *design.File, grids int) (*Plan, error) {
+	all, err := planAll(ctx, f, grids)
 	if err != nil {
 		return nil, err
 	}

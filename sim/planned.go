@@ -16,19 +16,26 @@ type planned struct {
 	name   string
 	design *design.Design
 	net    *network.Network
-	grid   *gridding
-	second *gridding // of the second stress run, nil if none is worth it
+	grids  ladder // finest first
+	study  bool   // the settling solution runs on all of them, not only on the first
 	plan   PlanCase
 }
 
-// planAll plans the nominal design and every case.
-func planAll(ctx context.Context, f *design.File) ([]*planned, error) {
+// Nominal is the name of the design as it stands, beside its cases.
+const Nominal = "nominal"
+
+// DefaultGrids is the number of grids of the convergence study.
+const DefaultGrids = 3
+
+// planAll plans the nominal design and every case, for the convergence study on
+// so many grids.
+func planAll(ctx context.Context, f *design.File, grids int) ([]*planned, error) {
 	all := []*planned{}
 	for _, c := range append([]design.Case{{Name: Nominal, Design: f.Nominal}}, f.Cases...) {
 		if err := ctx.Err(); err != nil {
 			return nil, err
 		}
-		p, err := newPlanned(ctx, c.Name, c.Design)
+		p, err := newPlanned(ctx, c.Name, c.Design, grids)
 		if err != nil {
 			return nil, fmt.Errorf("case %s: %w", c.Name, err)
 		}
@@ -37,48 +44,20 @@ func planAll(ctx context.Context, f *design.File) ([]*planned, error) {
 	return all, nil
 }
 
-// Nominal is the name of the design as it stands, beside its cases.
-const Nominal = "nominal"
-
-func newPlanned(ctx context.Context, name string, d *design.Design) (*planned, error) {
-	p := &planned{name: name, design: d, net: Network(d)}
+func newPlanned(ctx context.Context, name string, d *design.Design, grids int) (*planned, error) {
+	p := &planned{name: name, design: d, net: Network(d), study: grids > 1}
+	// The stress run needs a second grid in any case.
 	var err error
-	if p.grid, err = chooseGrid(ctx, p.net, d.Grid.CellsPerWavelength, d.Grid.Agreement); err != nil {
+	if p.grids, err = chooseGrids(ctx, p.net, max(2, grids), d.Grid.CellsPerWavelength, d.Grid.Agreement); err != nil {
 		return nil, err
 	}
-	p.second = second(p.net, p.grid)
 	p.predict()
 	return p, nil
 }
 
-// second is the grid of the second stress run: about half the steps, or, where
-// short sections do not allow one clearly coarser, twice the steps if that is
-// cheap; else nil.
-func second(net *network.Network, first *gridding) *gridding {
-	steps := first.grid.StepsPerPeriod
-	g, err := fdtd.NewGrid(net, float64(steps)/2)
-	if err != nil || 4*g.StepsPerPeriod > 3*steps {
-		if g = first.grid.Refine(1); g.Updates(cheapPeriods) > cheapUpdates {
-			return nil
-		}
-	}
-	out, err := newGridding(net, g, first.exact)
-	if err != nil {
-		return nil
-	}
-	return out
-}
-
-// A finer grid for the second stress run is cheap if so many periods of it take
-// no more than so many cell updates, some seconds.
-const (
-	cheapPeriods = 200
-	cheapUpdates = 5e8
-)
-
 // predict fills the plan: how long the runs will be and what they will cost.
 func (p *planned) predict() {
-	g, path := p.grid.grid, fdtd.LongestPath(p.net)
+	g, path := p.grids[0].grid, fdtd.LongestPath(p.net)
 	rate := phasor.Decay(p.net)
 	p.plan = PlanCase{
 		Name:          p.name,
@@ -86,7 +65,7 @@ func (p *planned) predict() {
 		Cells:         g.TotalCells(),
 		LongPath:      path,
 		LoopFactor:    math.Exp(-rate * 2 * path),
-		ExpectedError: p.grid.error,
+		ExpectedError: p.grids[0].error,
 	}
 	limit := p.design.Grid.MaxPeriods
 	p.plan.SettlePeriods = min(limit, p.settlePeriods(rate, path))
@@ -95,11 +74,12 @@ func (p *planned) predict() {
 		p.plan.Warnings = append(p.plan.Warnings, fmt.Sprintf(
 			"the settling run is predicted to reach its cap of %d periods: it may end as not settled", limit))
 	}
-	if floor := p.grid.floor; floor > p.design.Grid.Agreement {
+	if floor := p.grids[0].floor(); floor > p.design.Grid.Agreement {
 		p.plan.Warnings = append(p.plan.Warnings, fmt.Sprintf(
 			"the rational form of the dispersive lines alone makes a difference of %.2g %%, above the agreement limit: no grid mends that", 100*floor))
 	}
 	p.outlast(limit)
+	p.cramped()
 	lanes := 1.0
 	if p.net.Source.Start.Worst {
 		lanes = 2
@@ -109,13 +89,33 @@ func (p *planned) predict() {
 	if p.net.Source.Jumps() {
 		stress *= 2
 	}
-	if p.second != nil {
-		stress += p.second.grid.Updates(p.plan.StressPeriods) * lanes
+	stress += p.grids[1].grid.Updates(p.plan.StressPeriods) * lanes
+	if p.study {
+		for _, coarse := range p.grids[1:] {
+			settle += coarse.grid.Updates(p.plan.SettlePeriods)
+		}
 	}
 	p.plan.Grid.Updates = settle + stress
 	p.plan.Seconds = (settle/settleRate + stress/stressRate) * p.slowdown()
 	p.plan.Bytes = p.bytes(lanes)
 }
+
+// cramped warns of a section that is so short that it alone makes the grid fine.
+func (p *planned) cramped() {
+	asked := p.design.Grid.CellsPerWavelength
+	for k, n := range p.grids[len(p.grids)-1].grid.Cells {
+		if steps := p.grids[0].grid.StepsPerPeriod; n == 1 && float64(steps) > crampedSteps*asked {
+			p.plan.Warnings = append(p.plan.Warnings, fmt.Sprintf(
+				"section %s is so short that it takes %d steps a period to divide it; leave it out if it does not matter, or study fewer grids (--grids 1)",
+				p.net.Sections[k].Name, steps))
+			return
+		}
+	}
+}
+
+// crampedSteps is how many times more steps than asked for a short section may
+// cost before it is told.
+const crampedSteps = 8
 
 // outlast warns of a source that is still rising, or has not stopped, when the
 // cap on the runs is reached.
@@ -136,7 +136,7 @@ func (p *planned) outlast(limit int) {
 // BenchmarkStep of package fdtd).
 func (p *planned) slowdown() float64 {
 	cells, work := 0.0, 0.0
-	for k, n := range p.grid.grid.Cells {
+	for k, n := range p.grids[0].grid.Cells {
 		cells += float64(n)
 		work += float64(n) * (1 + 3*float64(relaxations(p.net.Sections[k])))
 	}
@@ -197,7 +197,7 @@ func clampInt(v float64) int {
 // every cell, the poles of dispersive ones, one recorded period, the traces and
 // what watches the junctions.
 func (p *planned) bytes(lanes float64) float64 {
-	g := p.grid.grid
+	g := p.grids[0].grid
 	cells, steps := float64(g.TotalCells()), float64(g.StepsPerPeriod)
 	lumped := float64(len(p.net.Junctions) + len(p.net.Branches) + 1)
 	points := math.Min(2*cells, 2*4096*float64(len(g.Cells)))

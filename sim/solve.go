@@ -2,6 +2,7 @@ package sim
 
 import (
 	"context"
+	"fmt"
 	"math"
 
 	"golang.org/x/sync/errgroup"
@@ -21,13 +22,16 @@ type solved struct {
 	net      *network.Network
 	grid     *gridding
 	phasor   *phasor.Solution
+	plan     *PlanCase
 	steady   *fdtd.Steady
+	coarser  []*fdtd.Steady // the settling solution on the other grids of the study, finest first
 	stress   *fdtd.Stress
 	sharp    *fdtd.Stress // the stress run again with the source's jump as it is, nil if it has none
-	second   *fdtd.Stress // the last of these again on another grid, nil if there is none
+	second   *fdtd.Stress // the last of these again with half the steps
 	compared agree.Result
 	exact    *state // of the phasor witness
 	found    *state // of the time-domain witness
+	levels   []*state
 }
 
 // solve runs both witnesses on a planned case.
@@ -37,19 +41,17 @@ func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, e
 		MaxPeriods: p.design.Grid.MaxPeriods,
 		Progress:   progress,
 	}
-	s := &solved{name: p.name, design: p.design, net: p.net, grid: p.grid, phasor: p.grid.exact}
+	s := &solved{name: p.name, design: p.design, net: p.net, grid: p.grids[0], phasor: p.grids[0].exact, plan: &p.plan}
 	var err error
-	if s.steady, err = fdtd.Settle(ctx, p.net, p.grid.grid, set); err != nil {
+	if s.steady, err = fdtd.Settle(ctx, p.net, s.grid.grid, set); err != nil {
 		return nil, err
 	}
-	// The steady state is off by what is left of the settling. Without a
-	// steady state nothing tells when the network is at rest: the run goes on
-	// to its cap.
-	set.Rest = atRest
-	if s.steady.Settling.Settled {
-		set.Rest += 3 * s.steady.Settling.Residual
+	g, ctx := errgroup.WithContext(ctx)
+	s.stressRuns(ctx, g, p.grids[1], set)
+	if p.study && s.steady.Settling.Settled {
+		s.studyRuns(ctx, g, p.grids[1:], set)
 	}
-	if err := s.stressRuns(ctx, p.second, set); err != nil {
+	if err := g.Wait(); err != nil {
 		return nil, err
 	}
 	s.compare()
@@ -58,8 +60,16 @@ func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, e
 
 // stressRuns makes the stress run, the one with a jump as it is if the source
 // jumps, and the last of these on the second grid, side by side.
-func (s *solved) stressRuns(ctx context.Context, second *gridding, set fdtd.Settings) error {
-	g, ctx := errgroup.WithContext(ctx)
+//
+// The steady state that they run to is off by what is left of the settling.
+// Without a steady state nothing tells when the network is at rest: the runs go
+// on to their cap.
+func (s *solved) stressRuns(ctx context.Context, g *errgroup.Group, second *gridding, set fdtd.Settings) {
+	set.Rest = atRest
+	if s.steady.Settling.Settled {
+		set.Rest += 3 * s.steady.Settling.Residual
+		set.Phasor = math.Max(resolved, 15*s.steady.Settling.Residual)
+	}
 	run := func(out **fdtd.Stress, steady *fdtd.Steady, sharp bool) {
 		set := set
 		set.Sharp = sharp
@@ -73,16 +83,37 @@ func (s *solved) stressRuns(ctx context.Context, second *gridding, set fdtd.Sett
 	if jumps {
 		run(&s.sharp, s.steady, true)
 	}
-	if second != nil {
-		again := *s.steady
-		again.Grid = second.grid
-		again.Junctions = nil // of that grid, which is known exactly
-		for j := range s.net.Junctions {
-			again.Junctions = append(again.Junctions, second.discrete.Junction(j))
-		}
-		run(&s.second, &again, jumps)
+	run(&s.second, second.steady(s.net), jumps)
+}
+
+// resolved is the departure from the final phasors within which the stress run
+// goes on, so that times to 0.1 % are known.
+const resolved = 0.95e-3
+
+// steady is the steady state on a grid, which is known exactly, as far as a
+// stress run asks for it.
+func (g *gridding) steady(net *network.Network) *fdtd.Steady {
+	out := &fdtd.Steady{Grid: g.grid, Source: g.discrete.Source()}
+	for j := range net.Junctions {
+		out.Junctions = append(out.Junctions, g.discrete.Junction(j))
 	}
-	return g.Wait()
+	for b := range net.Branches {
+		out.Branches = append(out.Branches, g.discrete.Branch(b))
+	}
+	return out
+}
+
+// studyRuns makes the settling solution on the coarser grids, for as long as on
+// the finest, so that what is left of the settling is the same on all.
+func (s *solved) studyRuns(ctx context.Context, g *errgroup.Group, grids ladder, set fdtd.Settings) {
+	set.Exactly = s.steady.Settling.Periods
+	s.coarser = make([]*fdtd.Steady, len(grids))
+	for i, coarse := range grids {
+		g.Go(func() (err error) {
+			s.coarser[i], err = fdtd.Settle(ctx, s.net, coarse.grid, set)
+			return err
+		})
+	}
 }
 
 // atRest is the part of the largest amplitude within which a waveform counts as
@@ -98,6 +129,10 @@ func (s *solved) compare() {
 	s.compared = agree.Compare(samples, g.exact, g.discrete, g.waves, residual)
 	s.exact = phasorState(s.net, s.phasor)
 	s.found = fdtdState(s.net, s.steady)
+	s.levels = []*state{s.found}
+	for _, c := range s.coarser {
+		s.levels = append(s.levels, fdtdState(s.net, c))
+	}
 }
 
 // jumpOrder is the order at which a peak behind a jump is taken to converge. The
@@ -119,11 +154,9 @@ func (s *solved) stressed(pick func(*fdtd.Stress) float64) stressed {
 		last, order = s.sharp, jumpOrder
 		out.spread = math.Abs(v - pick(last))
 	}
-	if s.second != nil {
-		// What is left of an error that falls with the step as its order says.
-		h, h2 := math.Pow(last.Grid.Step, order), math.Pow(s.second.Grid.Step, order)
-		out.spread += math.Abs(pick(last)-pick(s.second)) * h / math.Abs(h-h2)
-	}
+	// What is left of an error that falls with the step as its order says.
+	h, h2 := math.Pow(last.Grid.Step, order), math.Pow(s.second.Grid.Step, order)
+	out.spread += math.Abs(pick(last)-pick(s.second)) * h / math.Abs(h-h2)
 	// The run ends when it is this near to the steady state.
 	out.spread += atRest * v
 	if !s.stress.Worst {
@@ -136,20 +169,21 @@ func (s *solved) stressed(pick func(*fdtd.Stress) float64) stressed {
 // that no later peak is possible.
 func (s *solved) finished() bool {
 	for _, r := range []*fdtd.Stress{s.stress, s.sharp, s.second} {
-		if r != nil && !r.Complete {
+		if r != nil && !r.Complete { // sharp may not be there
 			return false
 		}
 	}
 	return true
 }
 
-// stressNote says what is to be known of the peaks of this case.
-func (s *solved) stressNote() string {
+// stressNote says what is to be known of a peak of this case.
+func (s *solved) stressNote(pick func(*fdtd.Stress) float64, unit string) string {
 	switch {
 	case !s.finished():
 		return "the run ended before the network was at rest"
-	case s.second == nil:
-		return "one grid only: no uncertainty of the peak but that between samples"
+	case s.sharp != nil:
+		return fmt.Sprintf("the source jumps: %.4g %s with an edge of %.3g ns, %.4g %s with the bare jump and %.4g %s with that on half the steps",
+			pick(s.stress), unit, s.stress.Edge*1e9, pick(s.sharp), unit, pick(s.second), unit)
 	}
 	return ""
 }

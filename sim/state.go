@@ -63,12 +63,12 @@ func fdtdState(net *network.Network, s *fdtd.Steady) *state {
 	for _, w := range s.Sections {
 		out.ends = append(out.ends, endPair{{w.VFrom, w.IFrom}, {w.VTo, w.ITo}})
 		k := len(out.ends) - 1
-		apart := net.Sections[k].At(net.Omega()).Wavelength(net.Frequency) / parabolaPoints
-		out.voltage = append(out.voltage, gridExtremes(w.ZV, w.V, apart))
+		beta := imag(net.Sections[k].At(net.Omega()).Propagation(net.Omega()))
+		out.voltage = append(out.voltage, gridExtremes(w.ZV, w.V, beta))
 		// The ends carry the current of the half cells too.
 		z := append(append([]float64{0}, w.ZI...), net.Sections[k].Length)
 		i := append(append([]complex128{w.IFrom}, w.I...), w.ITo)
-		out.current = append(out.current, gridExtremes(z, i, apart))
+		out.current = append(out.current, gridExtremes(z, i, beta))
 	}
 	out.chop()
 	return out
@@ -121,11 +121,10 @@ func ratio(v, i complex128) complex128 {
 }
 
 // gridExtremes finds the extremes of |p| between the points of a grid. The
-// square of a standing wave is a sinusoid of twice the wavenumber, so a
-// parabola through three points of the square misses it in the fourth order,
-// where they are no more than apart m from each other. On a thinned record they
-// are, and the extremes are those of the points.
-func gridExtremes(z []float64, p []complex128, apart float64) extremes {
+// square of a standing wave with the phase constant beta is A + B cos 2 beta x +
+// C sin 2 beta x (times what the loss does, which is little from point to
+// point), so three points of it tell the rest.
+func gridExtremes(z []float64, p []complex128, beta float64) extremes {
 	sq := make([]float64, len(p))
 	for i, v := range p {
 		sq[i] = real(v)*real(v) + imag(v)*imag(v)
@@ -139,29 +138,42 @@ func gridExtremes(z []float64, p []complex128, apart float64) extremes {
 			lo = i
 		}
 	}
-	return extremes{vertex(z, sq, hi, apart), vertex(z, sq, lo, apart)}
+	return extremes{crest(z, sq, hi, 2*beta, 1), crest(z, sq, lo, 2*beta, -1)}
 }
 
-// parabolaPoints is how many points a wavelength must have for a parabola
-// through three of them to stand for the wave.
-const parabolaPoints = 16
+// widest is the phase of the squared wave, rad, that three points may span for
+// it to be drawn through them.
+const widest = 2.5
 
-// vertex is the extreme of the parabola through point i and its neighbours, or
-// point i itself.
-func vertex(z, sq []float64, i int, apart float64) extreme {
-	root := func(v float64) float64 { return math.Sqrt(math.Max(0, v)) }
-	if i == 0 || i == len(sq)-1 || z[i+1]-z[i-1] > 2*apart {
-		return extreme{root(sq[i]), z[i]}
+// crest is the largest (sign 1) or smallest (sign -1) value of the wave through
+// point i and its neighbours, or point i itself: at the ends, and on a record
+// that was thinned too far.
+func crest(z, sq []float64, i int, kappa, sign float64) extreme {
+	at := extreme{math.Sqrt(sq[i]), z[i]}
+	if i == 0 || i == len(sq)-1 {
+		return at
 	}
 	x0, x1 := z[i-1]-z[i], z[i+1]-z[i]
-	d0, d1 := (sq[i-1]-sq[i])/x0, (sq[i+1]-sq[i])/x1
-	a := (d1 - d0) / (x1 - x0)
-	b := d0 - a*x0
-	if a == 0 {
-		return extreme{root(sq[i]), z[i]}
+	if kappa*(x1-x0) > widest {
+		return at
 	}
-	x := math.Max(x0, math.Min(x1, -b/(2*a)))
-	return extreme{root(sq[i] + b*x + a*x*x), z[i] + x}
+	// sq - sq[i] = B (cos kx - 1) + C sin kx at the two neighbours.
+	s0, c0 := math.Sincos(kappa * x0)
+	s1, c1 := math.Sincos(kappa * x1)
+	d0, d1 := sq[i-1]-sq[i], sq[i+1]-sq[i]
+	det := (c0-1)*s1 - (c1-1)*s0
+	if det == 0 {
+		return at
+	}
+	b, c := (d0*s1-d1*s0)/det, ((c0-1)*d1-(c1-1)*d0)/det
+	x := math.Atan2(sign*c, sign*b) / kappa
+	x = math.Max(x0, math.Min(x1, x))
+	sin, cos := math.Sincos(kappa * x)
+	v := sq[i] + b*(cos-1) + c*sin
+	if sign*v < sign*sq[i] {
+		return at
+	}
+	return extreme{math.Sqrt(math.Max(0, v)), z[i] + x}
 }
 
 // partVoltage is VA - VB of a part.

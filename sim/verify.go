@@ -21,6 +21,9 @@ type Options struct {
 	Progress func(fraction float64)
 	// NoBound lets a run pass the bounds MaxUpdates and MaxBytes.
 	NoBound bool
+	// Grids is the number of grids of the convergence study: 0 for DefaultGrids,
+	// or 1 to leave it out.
+	Grids int
 	// Version is the version of the program, for the record.
 	Version string
 }
@@ -30,7 +33,11 @@ type Options struct {
 // A run that the bounds refuse gives a *BoundError. An error from ctx is
 // returned as it is, within 100 ms of its cancellation.
 func Verify(ctx context.Context, f *design.File, opt Options) (*record.Record, error) {
-	all, err := planAll(ctx, f)
+	grids := opt.Grids
+	if grids == 0 {
+		grids = DefaultGrids
+	}
+	all, err := planAll(ctx, f, grids)
 	if err != nil {
 		return nil, err
 	}

@@ -19,17 +19,17 @@ func (s *solved) warnings() []string {
 	if !s.compared.Explained() {
 		say("the methods differ by more than the grid and the settling residual explain")
 	}
+	v := largestVoltage
 	if e := s.stress.Edge; e > 0 {
-		say("the source jumps: the peaks are those of an edge of %.3g ns, some steps of the grid, and their uncertainty reaches to those of the jump itself; give the real rise (or fall) of the source", e*1e9)
+		say("the source jumps, and the peak of an ideal jump does not converge with the grid: the peaks are those of an edge of %.3g ns (%.4g V at most), and their uncertainty reaches to those of the bare jump (%.4g V with %d steps a period, %.4g V with %d); give the real rise (or fall) of the source",
+			e*1e9, v(s.stress), v(s.sharp), s.stress.Grid.StepsPerPeriod, v(s.second), s.second.Grid.StepsPerPeriod)
 	}
 	if !s.stress.Complete {
 		say("the stress run ended after %.3g us before the network was at rest; a later peak is not excluded", s.stress.Duration*1e6)
 	}
-	if s.second == nil {
-		say("the stress peaks come from one grid only: a section is too short for a coarser one, and a finer one would cost too much")
-	} else if v, c := largestVoltage(s.stress), largestVoltage(s.second); s.sharp == nil && math.Abs(v-c) > peakChange*v {
+	if a, b := v(s.stress), v(s.second); s.sharp == nil && math.Abs(a-b) > peakChange*a {
 		say("the largest voltage differs by %.2g %% between two grids: %.4g V with %d steps a period, %.4g V with %d",
-			100*math.Abs(v-c)/v, v, s.stress.Grid.StepsPerPeriod, c, s.second.Grid.StepsPerPeriod)
+			100*math.Abs(a-b)/a, a, s.stress.Grid.StepsPerPeriod, b, s.second.Grid.StepsPerPeriod)
 	}
 	if !s.stress.Traces.Full {
 		say("the waveforms are kept to %.3g us only", float64(len(s.stress.Traces.Source.A))*s.stress.Grid.Step*1e6)

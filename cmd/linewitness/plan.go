@@ -34,7 +34,7 @@ func (a *app) planCommand() *cobra.Command {
 			if err != nil {
 				return err
 			}
-			plan, err := sim.MakePlan(cmd.Context(), file)
+			plan, err := sim.MakePlan(cmd.Context(), file, sim.DefaultGrids)
 			if err != nil {
 				return verifyError(file.Name, err)
 			}
