@@ -34,6 +34,7 @@ var whyNot = map[string]string{
 	"record":       "the record is about all cases",
 	"convention":   "the convention is that of the file",
 	"requirements": "give a requirement the cases it is judged in, cases: [nominal, iced]",
+	"claims":       "give a claim the case it is made of, case: iced",
 	"cases":        "a case is a change of the nominal design, not of another case",
 	"grid":         "all cases are solved and compared alike",
 }

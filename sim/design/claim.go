@@ -15,9 +15,11 @@ type Claim struct {
 	Complex     bool       // both parts are claimed: an impedance, or a phasor or a reflection coefficient with its angle
 	Level       bool       // the quantity is a level in dB: return loss, loss, power split
 	Unit        string     // as of Limit
-	Of          string     // the text of the value as written
+	Of          string     // the text of the value as written, in the convention of the file
 	// Tolerance is the largest |witness - Value| that confirms, in SI units:
 	// of a percentage that part of |Value|, of a complex value a radius.
-	Tolerance     float64
+	Tolerance float64
+	// ToleranceText is the tolerance as written, but for a percentage that says
+	// by itself not what of: "1 percentage point" of a value in %, "5 % of 0.85 dB".
 	ToleranceText string
 }

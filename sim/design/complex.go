@@ -26,6 +26,13 @@ func (c Convention) sign() float64 {
 	return 1
 }
 
+// A complexQuantity is a complex number with its unit.
+type complexQuantity struct {
+	value complex128 // in SI units, engineering convention
+	unit  unit
+	both  bool // an imaginary part or an angle is written, be it zero
+}
+
 // parseComplex reads an impedance or an admittance, as d says, in one of its
 // three written forms and returns it in the engineering convention:
 //
@@ -33,42 +40,48 @@ func (c Convention) sign() float64 {
 //
 // Either part may be missing. Under the physics convention the letter is i.
 func parseComplex(text string, d *dimension, c Convention) (complex128, *fault) {
+	q, f := parseBoth(text, d, c)
+	return q.value, f
+}
+
+// parseBoth is parseComplex for any dimension with units that are linear.
+func parseBoth(text string, d *dimension, c Convention) (q complexQuantity, f *fault) {
 	if size, at, polar := strings.Cut(text, " at "); polar {
 		return parsePolar(strings.TrimSpace(size), strings.TrimSpace(at), d, c)
 	}
 	s := complexScanner{rest: text}
 	re, im, f := s.parts()
 	if f != nil {
-		return 0, f
+		return q, f
 	}
 	if s.letter != "" && s.letter != c.letter() {
-		return 0, wrongLetter(text, s, c)
+		return q, wrongLetter(text, s, c)
 	}
 	u, f := d.unit(strings.Join(strings.Fields(s.rest), " "), text)
 	if f != nil {
-		return 0, f
+		return q, f
 	}
-	r, f := inRange(re.float(u.exp), re, text)
+	r, f := inRange(re.float(u.exp)*u.factor, re, text)
 	if f != nil {
-		return 0, f
+		return q, f
 	}
-	x, f := inRange(im.float(u.exp), im, text)
-	return complex(r, c.sign()*x+0), f
+	x, f := inRange(im.float(u.exp)*u.factor, im, text)
+	return complexQuantity{complex(r, c.sign()*x+0), u, s.letter != ""}, f
 }
 
-func parsePolar(size, at string, d *dimension, c Convention) (complex128, *fault) {
+func parsePolar(size, at string, d *dimension, c Convention) (complexQuantity, *fault) {
 	q, f := parseQuantity(size, d)
 	if f != nil {
-		return 0, f
+		return complexQuantity{}, f
 	}
 	phase, f := parseQuantity(at, angle)
 	if f != nil {
-		return 0, f
+		return complexQuantity{}, f
 	}
 	if q.value < 0 {
-		return 0, newFault(say("turn the angle by 180 deg instead"), "the size %q of a complex value is negative", size)
+		return complexQuantity{}, newFault(say("turn the angle by 180 deg instead"), "the size %q of a complex value is negative", size)
 	}
-	return rect(q.value, c.sign()*phase.value), nil
+	return complexQuantity{rect(q.value, c.sign()*phase.value), q.unit, true}, nil
 }
 
 // rect is cmplx.Rect, exact on the axes: a quarter turn has no real part, not

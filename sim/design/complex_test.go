@@ -49,6 +49,39 @@ func TestComplex(t *testing.T) {
 	}
 }
 
+// Any dimension has complex values, amplitudes with the factor of their unit;
+// both says whether more than a size is written.
+func TestBoth(t *testing.T) {
+	for _, tt := range []struct {
+		text string
+		d    *dimension
+		want complex128
+		unit string
+		both bool
+	}{
+		{"120 V peak at -90 deg", voltage, -120i, "V peak", true},
+		{"85 V rms", voltage, 85 * math.Sqrt2, "V rms", false},
+		{"85 V rms at 0 deg", voltage, 85 * math.Sqrt2, "V rms", true},
+		{"3 - j4 kV pp", voltage, 1500 - 2000i, "kV pp", true},
+		{"3-4j A rms", current, (3 - 4i) * math.Sqrt2, "A rms", true},
+		{"0.45", reflected, 0.45, "", false},
+		{"0.3 - j0.2", reflected, 0.3 - 0.2i, "", true},
+		{"-j0.2", reflected, -0.2i, "", true},
+		{"0.3 + 0j", reflected, 0.3, "", true},
+		{"30 - 20j %", reflected, 0.3 - 0.2i, "%", true},
+		{"0.45 at 180 deg", reflected, -0.45, "", true},
+	} {
+		got, f := parseBoth(tt.text, tt.d, Engineering)
+		if f != nil {
+			t.Errorf("%q: %s", tt.text, f.message)
+			continue
+		}
+		if cmplx.Abs(got.value-tt.want) > polarTol*cmplx.Abs(tt.want) || got.unit.name != tt.unit || got.both != tt.both {
+			t.Errorf("%q = %+v, want %v in %q, both %v", tt.text, got, tt.want, tt.unit, tt.both)
+		}
+	}
+}
+
 func TestComplexRefused(t *testing.T) {
 	for _, text := range []string{
 		"", "ohm", "j ohm", "50 + j ohm", "50 + ohm", "50", "50 j", "50 + 3 ohm", "j5 + 3 ohm", "j5 + j3 ohm", "50 + j3 + 2 ohm",
@@ -125,16 +158,20 @@ func TestWrongLetter(t *testing.T) {
 }
 
 func FuzzComplex(f *testing.F) {
-	for _, seed := range []string{"36.5 - j61.1 ohm", "36.5-61.1j ohm", "71.2 ohm at -59.1 deg", "-j3 kohm", "i5 ohm", "5 at 3 at 2"} {
+	for _, seed := range []string{"36.5 - j61.1 ohm", "36.5-61.1j ohm", "71.2 ohm at -59.1 deg", "-j3 kohm", "i5 ohm", "5 at 3 at 2", "0.3 - j0.2", "30 - j20 %", "85 V rms at 12 deg", "1 - 2j A pp"} {
 		f.Add(seed)
 	}
 	f.Fuzz(func(t *testing.T, text string) {
-		for _, c := range []Convention{Engineering, Physics} {
-			z, fault := parseComplex(text, resistance, c)
+		for _, d := range []*dimension{resistance, reflected, voltage, current} {
+			z, fault := parseBoth(text, d, Engineering)
 			if fault != nil {
 				fault.hint()
-			} else if cmplx.IsNaN(z) || cmplx.Abs(z) > 2*largest {
+			} else if cmplx.IsNaN(z.value) || cmplx.Abs(z.value) > 2*largest {
 				t.Errorf("%q = %v", text, z)
+			}
+			w, other := parseBoth(text, d, Physics)
+			if fault == nil && other == nil && w.value != cmplx.Conj(z.value) && w.value != z.value {
+				t.Errorf("%q = %v and %v", text, z, w)
 			}
 		}
 	})

@@ -16,8 +16,9 @@
 // that conjugation touches is turned on reading: complex impedances, the centre
 // of a within circle, the angle of "71.2 ohm at -59 deg", the phase of the
 // start, and the limits on phase, phase_difference and the x of an input
-// impedance, whose min and max change places. Their texts say so. Series parts
-// r, l and c mean the same in both conventions.
+// impedance, whose min and max change places. Their texts say so. The values of
+// claims are turned likewise, and their texts stay as written. Series parts r, l
+// and c mean the same in both conventions.
 //
 // # Lines
 //
@@ -70,10 +71,18 @@
 // permittivity and delay, and the kinds of geometry; and profile: abrupt drops
 // rise. A list is replaced as a whole.
 //
+// # Claims
+//
+// A claim is a figure of the designer's own, made of one case. A percentage as
+// its tolerance is of the size of the value, of the power where that is in dBm,
+// of the dB where it is a level; it is percentage points where the value itself
+// is in %. A phase has none. Requirements and claims have one set of ids. Times
+// in periods are in those of the case that is claimed of.
+//
 // # Limits
 //
-// A file has at most 1 MiB, 32 levels, 500 lines, sections, loads, elements and
-// requirements each, and 100 cases; names have at most 40 characters. A
+// A file has at most 1 MiB, 32 levels, 500 lines, sections, loads, elements,
+// requirements and claims each, and 100 cases; names have at most 40 characters. A
 // combination has at most 64 parts and 8 levels, a table of impedances 500 rows, a
 // loss table 100; the files of a design have at most 16 MiB together.
 package design

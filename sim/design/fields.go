@@ -133,6 +133,9 @@ func (w *walker) missingHint(t *table, key string) hint {
 // example hints at what a missing key looks like.
 func example(t *table, key string) hint {
 	e := examples[t.def+"."+key]
+	if q, of := strings.CutPrefix(t.def, claimPrefix); of && e == "" {
+		e = claimable[Quantity(q)].example(key)
+	}
 	if e == "" {
 		return noHint
 	}

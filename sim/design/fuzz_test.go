@@ -3,6 +3,7 @@ package design
 import (
 	"errors"
 	"fmt"
+	"math/cmplx"
 	"path/filepath"
 	"strings"
 	"testing"
@@ -47,6 +48,11 @@ func checkLoaded(t *testing.T, f *File) {
 		d := c.Design
 		if d.Source.Frequency.SI <= 0 || d.Source.EMF.SI <= 0 || len(d.Sections) == 0 || d.Junctions[0] != d.Source.At {
 			t.Errorf("%s: source %+v, junctions %v", c.Name, d.Source, d.Junctions)
+		}
+		for _, x := range d.Claims {
+			if !(x.Tolerance > 0) || cmplx.IsNaN(x.Value) || cmplx.IsInf(x.Value) || len(x.Cases) != 1 || x.Unit == "" || x.ToleranceText == "" {
+				t.Errorf("%s: claim %+v", c.Name, x)
+			}
 		}
 		for _, s := range d.Sections {
 			k := s.Constants
@@ -111,7 +117,8 @@ func heavy(part int) map[string]string {
 	return map[string]string{
 		"full": chain + "loads:\n" + repeat("  a%d: {at: j%d, r: 1 ohm}\n", 500) + "elements:\n" + repeat("  e%d: {at: j%d, r: 1 ohm}\n", 500) +
 			"cases:\n" + repeat("  c%d: {sections: {s%d: null}, loads: null, elements: null}\n", 100) +
-			"requirements:\n" + repeat("  - {id: r%d, quantity: steady_voltage, at: j%d, max: 1 V peak, cases: all}\n", 500),
+			"requirements:\n" + repeat("  - {id: r%d, quantity: steady_voltage, at: j%d, max: 1 V peak, cases: all}\n", 500) +
+			"claims:\n" + repeat("  - {id: c%d, quantity: voltage, at: j%d, value: 1 V peak, tolerance: 1 %%}\n", 500),
 		"unknown keys":  head + repeat("k%d%d: 1\n", 70000/part),
 		"long sections": head + "sections:\n" + repeat("  s%d: {from: j0, to: j%d, length: 1 m, line: l}\n", 16000/part),
 		"long cases":    chain + "cases:\n" + repeat("  c%d: {sections: {s%d: null}}\n", 24000/part),

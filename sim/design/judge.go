@@ -76,23 +76,30 @@ func takeInventory(w *walker) *inventory {
 	return inv
 }
 
-// judge checks what the requirements name against every design they are
-// judged in, and returns them.
-func judge(nominal *walker, demands []*demand, walkers []*walker) (out []Requirement) {
-	stock := map[string]*inventory{}
-	var order []*inventory
+// A stock is the inventories of all designs of a file.
+type stock struct {
+	of    map[string]*inventory // by case
+	order []*inventory          // the nominal design first
+}
+
+func takeStock(walkers []*walker) stock {
+	s := stock{of: map[string]*inventory{}}
 	for i, w := range walkers {
 		name := nominalName
 		if i > 0 {
 			name = w.patch.name
 		}
-		stock[name] = takeInventory(w)
-		order = append(order, stock[name])
+		s.of[name] = takeInventory(w)
+		s.order = append(s.order, s.of[name])
 	}
+	return s
+}
+
+// judge checks what the requirements name against every design they are
+// judged in, and returns them.
+func (s stock) judge(demands []*demand) (out []Requirement) {
 	for _, d := range demands {
-		for _, s := range d.subjects() {
-			d.checkSubject(s, stock, order)
-		}
+		s.checkSubjects(d, say("keep it, or leave the case out of cases: in the requirement on line %d", d.Pos.Line))
 		out = append(out, d.Requirement)
 	}
 	return out
@@ -135,28 +142,35 @@ func (s subject) isIn(i *inventory) bool {
 	return slices.ContainsFunc(s.in(i), func(m map[string]bool) bool { return m[s.node.text] })
 }
 
+// checkSubjects checks the names of a demand; lost hints at what to do about
+// one that a case of it has lost.
+func (s stock) checkSubjects(d *demand, lost hint) {
+	for _, x := range d.subjects() {
+		s.checkSubject(d, x, lost)
+	}
+}
+
 // checkSubject tells of a name that no design knows at the name, and of one
 // that a case has lost at the case.
-func (d *demand) checkSubject(s subject, stock map[string]*inventory, order []*inventory) {
-	nominal := order[0].w
-	if !nominal.whole && s.kind != "section" && s.kind != "load" {
+func (s stock) checkSubject(d *demand, x subject, lost hint) {
+	nominal := s.order[0].w
+	if !nominal.whole && x.kind != "section" && x.kind != "load" {
 		return // a junction may be missing because of what has been told
 	}
-	if !slices.ContainsFunc(order, s.isIn) {
-		nominal.problem(s.node.pos, s.nearest(order[0]), "there is no %s %q", s.kind, s.node.text)
+	if !slices.ContainsFunc(s.order, x.isIn) {
+		nominal.problem(x.node.pos, x.nearest(s.order[0]), "there is no %s %q", x.kind, x.node.text)
 		return
 	}
-	for _, i := range order {
-		d.checkClear(s, i)
+	for _, i := range s.order {
+		d.checkClear(x, i)
 	}
 	judgedIn := d.Cases
-	if d.RelativeTo != "" && stock[d.RelativeTo] != nil {
+	if d.RelativeTo != "" && s.of[d.RelativeTo] != nil {
 		judgedIn = append(slices.Clone(judgedIn), d.RelativeTo)
 	}
 	for _, c := range judgedIn {
-		if i := stock[c]; i != nil && i.w.whole && !s.isIn(i) {
-			i.w.problem(s.node.pos, say("keep it, or leave the case out of cases: in the requirement on line %d", d.Pos.Line),
-				"%s needs %s %q, which is not there", d.fields.what, s.kind, s.node.text)
+		if i := s.of[c]; i != nil && i.w.whole && !x.isIn(i) {
+			i.w.problem(x.node.pos, lost, "%s needs %s %q, which is not there", d.fields.what, x.kind, x.node.text)
 		}
 	}
 }

@@ -45,7 +45,8 @@ func read(src []byte, text *source, d *folder, p *problems) *File {
 		return nil
 	}
 	patches := nominal.readCases(file, root)
-	requirements := nominal.walkRequirements(file, caseNames(patches))
+	taken := ids{}
+	requirements := nominal.walkRequirements(file, caseNames(patches), taken)
 	walkers := []*walker{nominal}
 	out := &File{Nominal: nominal.design}
 	for _, patch := range patches {
@@ -54,9 +55,11 @@ func read(src []byte, text *source, d *folder, p *problems) *File {
 		walkers = append(walkers, w)
 		out.Cases = append(out.Cases, Case{patch.name, w.design})
 	}
-	judged := judge(nominal, requirements, walkers)
+	stock := takeStock(walkers)
+	claims := nominal.walkClaims(file, stock, taken)
+	judged, claimed := stock.judge(requirements), stock.check(claims)
 	for _, w := range walkers {
-		w.design.Requirements = judged
+		w.design.Requirements, w.design.Claims = judged, claimed
 		if w.flawed && len(p.list) == 0 {
 			panic("design: a flaw was met and not told of")
 		}
@@ -64,6 +67,7 @@ func read(src []byte, text *source, d *folder, p *problems) *File {
 	return out
 }
 
+// caseNames lists what requirements and claims call the cases.
 func caseNames(patches []*patch) []string {
 	names := []string{nominalName}
 	for _, p := range patches {

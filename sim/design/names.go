@@ -13,7 +13,7 @@ func isName(s string) bool {
 	return s != "" && isLetter(s[0]) && isMadeOf(s, "_-")
 }
 
-// isID reports an id of a requirement, which may begin with a digit and may
+// isID reports an id of a requirement or claim, which may begin with a digit and may
 // be divided as documents number their clauses: 4.2/1.
 func isID(s string) bool {
 	return s != "" && (isLetter(s[0]) || isDigit(s[0])) && isMadeOf(s, "_-./")
@@ -34,7 +34,7 @@ func isDigit(c byte) bool  { return c >= '0' && c <= '9' }
 // The most entries of each mapping. A case is solved with dense matrices, so
 // a design near these bounds is far beyond what can be run; the bounds keep
 // the checks of all cases together well under a second.
-var most = map[string]int{"lines": 500, "sections": 500, "loads": 500, "elements": 500, "cases": 100, "requirements": 500}
+var most = map[string]int{"lines": 500, "sections": 500, "loads": 500, "elements": 500, "cases": 100, "requirements": 500, "claims": 500}
 
 // checkName tells of a name that breaks the rules of names.
 func (w *walker) checkName(n *node, what string) bool {

@@ -198,6 +198,7 @@ var prose = map[string]bool{
 var allDimensions = []*dimension{
 	frequency, length, timeSpan, voltage, current, power, resistance, inductance, capacity, angle,
 	seriesR, seriesL, shuntG, shuntC, fading, admittance, slowing, size, conductivity, plain, percentage, fraction, vswrRatio, reflected, level, spread,
+	watts, bands[vswrRatio], bands[resistance], bands[voltage], bands[power], bands[timeSpan], bands[level], bands[percentage], bands[angle],
 }
 
 // FuzzQuantity: no text makes the parser panic or return what is not finite,

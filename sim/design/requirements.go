@@ -5,7 +5,8 @@ import (
 	"strings"
 )
 
-// A demand is a requirement with the nodes that later checks point at.
+// A demand is a requirement, or what a claim is about, with the nodes that
+// later checks point at.
 type demand struct {
 	Requirement
 	fields   *fields
@@ -15,18 +16,9 @@ type demand struct {
 }
 
 // walkRequirements reads the requirements of the nominal design.
-func (w *walker) walkRequirements(file *fields, cases []string) (demands []*demand) {
-	n := file.node("requirements")
-	if n == nil || !w.isKind(n, file.name("requirements"), list) {
-		return nil
-	}
-	if len(n.items) > most["requirements"] {
-		w.problem(n.items[most["requirements"]].pos, say("split the design"), "more than %d %s", most["requirements"], "requirements")
-		return nil
-	}
-	first := map[string]int{}
-	for _, item := range n.items {
-		w.takeID(item, first)
+func (w *walker) walkRequirements(file *fields, cases []string, taken ids) (demands []*demand) {
+	for _, item := range w.entries(file, "requirements") {
+		w.takeID(item, "requirement", taken)
 		if d := w.walkRequirement(item, cases); d != nil {
 			demands = append(demands, d)
 		}
@@ -34,9 +26,26 @@ func (w *walker) walkRequirements(file *fields, cases []string) (demands []*dema
 	return demands
 }
 
-// takeID reports an id that another requirement has, whatever else is wrong
-// with this one; first holds the lines of the ids so far.
-func (w *walker) takeID(item *node, first map[string]int) {
+// entries returns the items of a list of the file.
+func (w *walker) entries(file *fields, key string) []*node {
+	n := file.node(key)
+	if n == nil || !w.isKind(n, file.name(key), list) {
+		return nil
+	}
+	if len(n.items) > most[key] {
+		w.problem(n.items[most[key]].pos, say("split the design"), "more than %d %s", most[key], key)
+		return nil
+	}
+	return n.items
+}
+
+// ids are the ids that requirements and claims have, each with who has it. No
+// two may be the same: the record speaks of both by their ids.
+type ids map[string]string
+
+// takeID reports an id that another requirement or claim has, whatever else is
+// wrong with this one.
+func (w *walker) takeID(item *node, kind string, taken ids) {
 	if item.kind != mapping {
 		return
 	}
@@ -44,50 +53,79 @@ func (w *walker) takeID(item *node, first map[string]int) {
 	if id == nil || id.kind != scalar || id.text == "" {
 		return
 	}
-	if line := first[id.text]; line > 0 {
-		w.problem(id.pos, say("number each requirement"), "the id %q is taken by the requirement on line %d", id.text, line)
+	if owner := taken[id.text]; owner != "" {
+		w.problem(id.pos, say("number each %s", kind), "the id %q is taken by the %s", id.text, owner)
 		return
 	}
-	first[id.text] = item.pos.Line
+	taken[id.text] = sprintf("%s on line %d", kind, item.pos.Line)
 }
 
 // walkRequirement reads one requirement. Which keys it has depends on its
 // quantity, so that is read first.
 func (w *walker) walkRequirement(n *node, cases []string) *demand {
-	if !w.isKind(n, "a requirement", mapping) {
+	what, name, ok := w.quantityOf(n, "requirement", quantityNames)
+	if !ok {
 		return nil
 	}
-	what := "a requirement"
+	kind := quantities[name]
+	d := w.demand(n, what, name, kind.table)
+	d.RelativeTo = d.fields.text("relative_to")
+	w.walkLimits(d, kind)
+	w.resolveCases(d, cases)
+	return d
+}
+
+// quantityOf reads the quantity of a requirement or claim, one of the known
+// ones; what is how diagnostics call it.
+func (w *walker) quantityOf(n *node, kind string, known []string) (what string, name Quantity, ok bool) {
+	what = withArticle(kind)
+	if !w.isKind(n, what, mapping) {
+		return "", "", false
+	}
 	if id := n.get("id"); id != nil && id.text != "" {
-		what = `requirement "` + id.text + `"`
+		what = kind + ` "` + id.text + `"`
 	}
 	q := n.get("quantity")
 	if q == nil || q.kind != scalar {
-		w.problem(n.pos, say("one of %s", rawText(strings.Join(quantityNames, ", "))), "missing %q in %s", "quantity", what)
-		return nil
+		w.problem(n.pos, say("one of %s", rawText(strings.Join(known, ", "))), "missing %q in %s", "quantity", what)
+		return "", "", false
 	}
-	name := Quantity(q.text)
-	kind, ok := quantities[name]
-	if !ok {
-		w.problem(q.pos, didYouMean(q.text, quantityNames), "there is no quantity %q", q.text)
-		// The other mistakes are looked for as if the nearest were meant.
-		name = Quantity(nearest(q.text, quantityNames))
-		if kind, ok = quantities[name]; !ok {
-			return nil
-		}
+	if contains(known, q.text) {
+		return what, Quantity(q.text), true
 	}
-	f := w.fields(n, n.pos, what, kind.table)
+	w.noQuantity(q, known)
+	// The other mistakes are looked for as if the nearest were meant.
+	meant := nearest(q.text, known)
+	return what, Quantity(meant), meant != ""
+}
+
+// noQuantity tells of a quantity that cannot be named where it is.
+func (w *walker) noQuantity(q *node, known []string) {
+	switch name := Quantity(q.text); {
+	case name == Agreement:
+		w.problem(q.pos, say("a requirement can limit it"), "%q cannot be claimed: it is how far this program's two solutions are apart, no figure of a hand calculation", q.text)
+	case name == Voltage || name == Current:
+		w.problem(q.pos, didYouMean("steady_"+q.text, known), "there is no quantity %q in requirements; it can be claimed", q.text)
+	default:
+		w.problem(q.pos, didYouMean(q.text, known), "there is no quantity %q", q.text)
+	}
+}
+
+// demand reads what a requirement or claim is about.
+func (w *walker) demand(n *node, what string, name Quantity, t *table) *demand {
+	f := w.fields(n, n.pos, what, t)
 	d := &demand{fields: f, Requirement: Requirement{
 		Pos: n.pos, ID: f.id(), Text: f.prose("text"), Document: f.line("source"), Quantity: name,
 		Section: f.text("section"), End: f.oneOf("end", "from", "to"),
-		At: f.text("at"), Load: f.text("load"), RelativeTo: f.text("relative_to"),
+		At: f.text("at"), Load: f.text("load"),
 	}}
 	d.Between, d.between, _ = f.pair("between")
 	if v, ok := f.value("reference", resistance, positive); ok {
 		d.Reference = &v
 	}
-	w.walkLimits(d, kind)
-	w.resolveCases(d, cases)
+	if name == SettleTime {
+		d.Settled = f.settled("within")
+	}
 	return d
 }
 
@@ -97,7 +135,7 @@ func (f *fields) id() string {
 		return ""
 	}
 	if !isID(n.text) {
-		f.w.problem(n.pos, say("an id is made of letters, digits, _, -, . and /, at most %d in all", longestName), "%q is not an id for a requirement", n.text)
+		f.w.problem(n.pos, say("an id is made of letters, digits, _, -, . and /, at most %d in all", longestName), "%q is not an id for a requirement or claim", n.text)
 	}
 	return n.text
 }
@@ -105,13 +143,10 @@ func (f *fields) id() string {
 // walkLimits reads what the quantity is limited to.
 func (w *walker) walkLimits(d *demand, kind judged) {
 	f := d.fields
-	switch {
-	case d.Quantity == InputImpedance:
+	if d.Quantity == InputImpedance {
 		d.R, d.X = f.window("r", false), f.window("x", true)
 		d.Within = f.circle("within")
 		return
-	case d.Quantity == SettleTime:
-		d.Settled = f.settled("within")
 	}
 	dim := kind.limits
 	if d.RelativeTo != "" {
@@ -158,17 +193,23 @@ func (f *fields) limit(key string, d *dimension) *Limit {
 	if !ok {
 		return nil
 	}
-	l := &Limit{SI: q.value, Unit: q.unit.name, Text: n.text, Pos: n.pos}
-	switch {
-	case q.unit.of == bare:
-		l.Unit = "1"
-	case q.unit.of == periods:
-		l.SI = 0
-		if s := f.w.design.Source.Frequency.SI; s > 0 {
-			l.SI = q.value / s
+	l := &Limit{SI: q.value, Unit: q.unit.label(), Text: n.text, Pos: n.pos}
+	if q.unit.of == periods {
+		s := f.w.design.Source.Frequency.SI
+		if s == 0 {
+			return nil // the frequency has been told of
 		}
+		l.SI = q.value / s
 	}
 	return l
+}
+
+// label is the unit as Limit names it.
+func (u unit) label() string {
+	if u.of == bare {
+		return "1"
+	}
+	return u.name
 }
 
 // window reads the bounds of a part of an impedance.

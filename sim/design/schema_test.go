@@ -131,6 +131,9 @@ func TestSchemaKeys(t *testing.T) {
 	for _, q := range quantities {
 		tables = append(tables, q.table)
 	}
+	for _, q := range claimable {
+		tables = append(tables, q.table)
+	}
 	for _, table := range tables {
 		properties, required := doc.Properties, doc.Required
 		if table.def != "" {
@@ -161,20 +164,26 @@ func requiredOf(t *table) (names []string) {
 }
 
 func TestQuantityNames(t *testing.T) {
-	var got []string
-	for q := range quantities {
-		got = append(got, string(q))
+	sorted := func(names []string) []Quantity {
+		var q []Quantity
+		for _, n := range names {
+			q = append(q, Quantity(n))
+		}
+		slices.Sort(q)
+		return q
 	}
-	slices.Sort(got)
-	if diff := cmp.Diff(slices.Sorted(slices.Values(quantityNames)), got); diff != "" {
+	if diff := cmp.Diff(sorted(quantityNames), slices.Sorted(maps.Keys(quantities))); diff != "" {
 		t.Errorf("names in hints (-) and quantities (+):\n%s", diff)
+	}
+	if diff := cmp.Diff(sorted(claimNames), slices.Sorted(maps.Keys(claimable))); diff != "" {
+		t.Errorf("names in hints (-) and quantities of claims (+):\n%s", diff)
 	}
 }
 
 func TestStarterLoads(t *testing.T) {
 	f := mustLoad(t, "starter.yaml", Starter())
-	if len(f.Cases) == 0 || len(f.Nominal.Requirements) == 0 {
-		t.Error("the starter shows no cases or no requirements")
+	if len(f.Cases) == 0 || len(f.Nominal.Requirements) == 0 || len(f.Nominal.Claims) == 0 {
+		t.Error("the starter shows no cases, no requirements or no claims")
 	}
 	written, err := os.ReadFile("starter.yaml")
 	if err != nil || !bytes.Equal(written, Starter()) {

@@ -54,7 +54,7 @@ func (t *table) has(name string) bool {
 var (
 	fileTable = &table{
 		keys: slices.Concat(must("format", "record"), may("convention"), must("source", "lines", "sections"),
-			may("loads", "elements", "cases", "requirements", "grid")),
+			may("loads", "elements", "cases", "requirements", "claims", "grid")),
 	}
 	recordTable = &table{
 		def: "record",
