@@ -28,6 +28,7 @@ func (d *document) cover() {
 	}
 	d.cases()
 	d.requirements()
+	d.coverClaims()
 	d.ratings()
 	d.toConfirm()
 }

@@ -18,6 +18,7 @@ func (d *document) method() {
 	d.b.Paragraph("Continuity of voltage at both ends of every section and Kirchhoff's current law at every junction give one linear system for P and M of all sections and the junction voltages.")
 	d.methodTime()
 	d.methodComparison()
+	d.methodEvidence()
 }
 
 // methodLine writes how a line is modelled.

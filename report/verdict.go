@@ -46,6 +46,26 @@ func markOfRequirement(v record.RequirementVerdict) sheet.Mark {
 	return sheet.Open
 }
 
+func markOfClaim(v record.ClaimVerdict) sheet.Mark {
+	switch v {
+	case record.Confirmed:
+		return sheet.Holds
+	case record.Contradicted:
+		return sheet.Fails
+	}
+	return sheet.Open
+}
+
+func colorOfClaim(v record.ClaimVerdict) color.Color {
+	switch v {
+	case record.Confirmed:
+		return ink.Good
+	case record.Contradicted:
+		return ink.Bad
+	}
+	return ink.Doubt
+}
+
 // tally counts requirements by their verdict.
 type tally struct{ met, missed, open int }
 
@@ -90,12 +110,16 @@ func (d *document) reason() string {
 		if !c.Settling.Settled {
 			parts = append(parts, "Case "+c.Name+" reached no steady state within "+format.Plural(int64(c.Settling.Periods), "period")+".")
 		}
-		if c.Verdict == record.Disagree {
+		if c.Verdict == record.Disagree && largest(c.Agreement) > c.Agreement.Limit {
 			parts = append(parts, "In case "+c.Name+" the two solutions differ by "+format.Percent(largest(c.Agreement))+"; the limit is "+format.Percent(c.Agreement.Limit)+".")
+		} else if c.Verdict == record.Disagree {
+			parts = append(parts, unexplained(&c))
 		}
 	}
 	parts = append(parts, d.named(record.MissedReq, "missed")...)
+	parts = append(parts, d.disputed(record.Contradicted)...)
 	parts = append(parts, d.named(record.NotShownReq, "not shown")...)
+	parts = append(parts, d.disputed(record.ClaimOpen)...)
 	counted, advised := d.broken()
 	parts = append(parts, counted...)
 	if len(parts) == 0 {
@@ -116,6 +140,21 @@ func (d *document) named(v record.RequirementVerdict, word string) []string {
 		}
 	}
 	return list.sentences("further requirements are " + word)
+}
+
+// disputed names the claims of one verdict, a sentence for each case.
+func (d *document) disputed(v record.ClaimVerdict) (parts []string) {
+	for _, c := range d.r.Cases {
+		ids := claimsOf(c.Claims, v)
+		switch len(ids) {
+		case 0:
+		case 1:
+			parts = append(parts, "Claim "+ids[0]+" is "+string(v)+" in "+c.Name+".")
+		default:
+			parts = append(parts, "Claims "+among(ids, mostNames)+" are "+string(v)+" in "+c.Name+".")
+		}
+	}
+	return parts
 }
 
 // casesOf collects statements and the cases in which each holds.
@@ -166,6 +205,9 @@ func (d *document) allMet() string {
 		worst = max(worst, largest(c.Agreement))
 	}
 	agree := "the two solutions differ by at most " + format.Percent(worst) + " of a section's largest value."
+	if len(d.allClaims()) > 0 {
+		agree = "every claim is confirmed; " + agree
+	}
 	switch {
 	case n == 0 && kept == 0:
 		return "The design states no requirement; " + agree

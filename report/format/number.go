@@ -57,6 +57,16 @@ func Pow10(n int) string {
 	return "10" + string(Sup) + sign(strconv.Itoa(n)) + string(End)
 }
 
+// Short returns a number of few digits as it is, up to three significant ones:
+// 1.25, 3.
+func Short(v float64) string {
+	s := Digits(v, 3)
+	if strings.Contains(s, ".") && !strings.Contains(s, Space) {
+		s = strings.TrimRight(strings.TrimRight(s, "0"), ".")
+	}
+	return s
+}
+
 // Count returns a whole number with its digits in groups of three.
 func Count(n int64) string {
 	digits, negative := strings.CutPrefix(strconv.FormatInt(n, 10), "-")

@@ -42,7 +42,7 @@ func PrefixFor(v float64) Prefix {
 // prefixed holds the units that take a prefix.
 var prefixed = map[string]bool{
 	"V": true, "A": true, "W": true, "s": true, "m": true, "Hz": true, "Ω": true,
-	"S": true, "H": true, "F": true, "Ω/m": true, "S/m": true, "H/m": true, "F/m": true, "V/m": true,
+	"S": true, "H": true, "F": true, "J": true, "Ω/m": true, "S/m": true, "H/m": true, "F/m": true, "V/m": true,
 }
 
 // Factor returns the factor of an engineering prefix by its symbol, "" for

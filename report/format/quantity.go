@@ -109,6 +109,27 @@ func Percent(fraction float64) string {
 	return Digits(100*fraction, 3) + Space + "%"
 }
 
+// Measure returns a difference measure of the feature selective validation,
+// whose best grade ends at 0.1, with three decimals.
+func Measure(v float64) string {
+	if v > 0 && v < 0.0005 {
+		return "<" + Space + "0.001"
+	}
+	return Fixed(v, 3)
+}
+
+// Index returns a percentage, as a grid convergence index is given, with two
+// significant digits.
+func Index(percent float64) string {
+	if math.IsNaN(percent) {
+		return Missing
+	}
+	if a := math.Abs(percent); a > 0 && a < 1e-6 {
+		return "<" + Space + Pow10(-6) + Space + "%"
+	}
+	return Digits(percent, 2) + Space + "%"
+}
+
 // rounding is the size below which a relative difference of two numbers is
 // the rounding of their arithmetic; its digits mean nothing.
 const rounding = 1e-12

@@ -73,14 +73,17 @@ func decimalsOf(size, step float64) int {
 	return min(decimals, mostDigits)
 }
 
-// Number returns v in the scale. What is not zero and would print as zero is
-// printed as less than the last digit.
+// Number returns v in the scale; zero as "0", and what is not zero but would
+// print as zero as less than the last digit.
 func (s Scale) Number(v float64) string {
 	if t, special := notFinite(v); special {
 		return t
 	}
+	if v == 0 {
+		return "0"
+	}
 	t := plain(v/s.Factor, s.decimals)
-	if v != 0 && strings.Trim(t, "0.") == "" {
+	if strings.Trim(t, "0.") == "" {
 		return "<" + Space + plain(math.Pow10(-s.decimals), s.decimals)
 	}
 	return t

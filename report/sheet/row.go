@@ -35,7 +35,7 @@ func (l *layout) row(row []wrapped, shaded bool) {
 			at := x
 			if cell.Mark != NoMark {
 				middle := c.Max.Y.Points() - rowPad - l.lineHeight()/2
-				cell.Mark.Draw(c, x+cellPad+l.t.Size*0.45, middle, l.t.Size*0.95)
+				cell.Mark.Draw(c, x+l.markIndent(i, cell)+cellPad+l.t.Size*0.45, middle, l.t.Size*0.95)
 				at += markRoom
 			}
 			width := l.room(i, cell.Cell) + 2*cellPad
@@ -44,6 +44,15 @@ func (l *layout) row(row []wrapped, shaded bool) {
 			x += l.widths[i]
 		}
 	})
+}
+
+// markIndent is how far from the left of a cell its mark stands: at the left,
+// or before a text that is set to the right.
+func (l *layout) markIndent(i int, c wrapped) float64 {
+	if l.t.Columns[i].Align != typeset.Right {
+		return 0
+	}
+	return max(l.room(i, c.Cell)-c.style.Width(c.lines[0]), 0)
 }
 
 // text draws the lines of a cell that starts at x, drop below its upper edge.

@@ -76,6 +76,13 @@ func (b *Book) Item(s string) {
 	b.hanging(BodyStyle, "•", indent, s)
 }
 
+// Step writes a paragraph with its number in an ordered list before it.
+func (b *Book) Step(number, s string) {
+	const indent = 14 // as of Verdict
+	b.Space(2.5)
+	b.hanging(BodyStyle, number, indent, s)
+}
+
 // Term writes a paragraph with a bold term before it.
 func (b *Book) Term(term, s string) {
 	const indent = 118

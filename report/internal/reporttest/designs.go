@@ -28,7 +28,9 @@ func Feeder() *record.Record {
 	}
 	for i := range r.Cases {
 		judgeFeeder(&r.Cases[i])
+		r.Cases[i].Convergence = study(&r.Cases[i], opt)
 	}
+	claimFeeder(r)
 	finish(r)
 	return r
 }
@@ -65,12 +67,17 @@ func newRecord(title string, n Network) *record.Record {
 			PreparedBy: "M. Okafor", CheckedBy: "L. Lindqvist", Date: "2026-05-14",
 			File: "feeder.yaml", SHA256: strings.Repeat("0123456789abcdef", 4), Source: []byte(source),
 			Convention: "engineering", Agreement: 5e-3, Tolerance: 1e-4, MaxPeriods: 20000,
+			FSVChoices: []string{
+				"the lowest 4 bins of the transform are the offset", "the break is 5 bins above the one at which 40 % of the magnitudes are reached",
+				"derivatives are differences over 1 point to either side",
+			},
 		},
 	}
 }
 
-// finish sets the verdict of the record.
+// finish sets the verdict of the record and its cases side by side.
 func finish(r *record.Record) {
+	r.Matrix = sideBySide(r)
 	r.Verdict = record.Verified
 	for _, c := range r.Cases {
 		if c.Verdict.Rank() > r.Verdict.Rank() {

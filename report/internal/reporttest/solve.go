@@ -40,6 +40,7 @@ func (n Network) Case(name string, opt Options) record.Case {
 	if opt.Unsettled {
 		c.Verdict = record.Unsettle
 	}
+	c.Convergence, c.Fidelity = study(&c, opt), fidelity(&c, opt)
 	return c
 }
 

@@ -1,0 +1,81 @@
+package report
+
+import (
+	"math/cmplx"
+	"slices"
+	"strings"
+
+	"linewitness/report/format"
+	"linewitness/sim/record"
+)
+
+// claimFinding writes what was found on a claim that is not confirmed, and the
+// slips that would explain it, most likely first.
+func (d *document) claimFinding(q *record.Claim) {
+	if q.Verdict == record.Confirmed {
+		return
+	}
+	word := capital(string(q.Verdict)) + "."
+	text := q.ID + ", " + words(q.Quantity) + subject(q.Subject) + ", case " + q.Case + ". " + q.Finding
+	if q.Verdict == record.Contradicted && len(q.Slips) == 0 && !strings.Contains(strings.ToLower(q.Finding), noSlip) {
+		text += " " + capital(noSlip) + "."
+	}
+	d.b.Space(5)
+	d.b.Need(slipRoom)
+	d.b.Verdict(markOfClaim(q.Verdict), colorOfClaim(q.Verdict), word, trimmed(text))
+	for i := range q.Slips {
+		d.b.Step(format.Count(int64(i+1))+".", slipText(q, &q.Slips[i]))
+	}
+}
+
+const (
+	noSlip   = "no single known slip explains it"
+	slipRoom = 44.0 // what a claim needs to begin on a page: its finding and the first slip
+)
+
+// slipText says what a slip makes of the claim, what cannot be told from it,
+// and what else it explains.
+func slipText(q *record.Claim, s *record.Slip) string {
+	text := slipName(s)
+	if !cmplx.IsNaN(s.Value) {
+		text += ": " + claimed(q, s.Value)
+	}
+	if len(s.Also) > 0 {
+		text += "; cannot be told from " + listed(s.Also)
+	}
+	others := slices.DeleteFunc(slices.Clone(s.Explains), func(id string) bool { return id == q.ID })
+	if len(others) > 0 {
+		text += "; explains " + listed(others) + " too"
+	}
+	return text + "."
+}
+
+// slipName is a slip and where it was made.
+func slipName(s *record.Slip) string {
+	switch {
+	case s.Where == "":
+		return s.Name
+	case strings.HasPrefix(s.Where, "load") || strings.HasPrefix(s.Where, "junction") || strings.HasPrefix(s.Where, "element"):
+		return s.Name + " at " + s.Where
+	}
+	return s.Name + " on " + s.Where
+}
+
+// together says which slip explains several claims at once, each set of claims
+// by its most likely slip.
+func together(all []record.Claim) []string {
+	var out []string
+	seen := map[string]bool{}
+	for i := range all {
+		for k := range all[i].Slips {
+			s := &all[i].Slips[k]
+			set := strings.Join(s.Explains, "\x00")
+			if len(s.Explains) < 2 || seen[set] {
+				continue
+			}
+			seen[set] = true
+			out = append(out, "One slip explains "+listed(s.Explains)+" together: "+slipName(s)+".")
+		}
+	}
+	return out
+}
