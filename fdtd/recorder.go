@@ -6,6 +6,7 @@ import (
 	"math/cmplx"
 
 	"gonum.org/v1/gonum/dsp/fourier"
+	"gonum.org/v1/gonum/floats"
 )
 
 // A recorder keeps every recorded point of a lane over one period and turns
@@ -17,6 +18,7 @@ type recorder struct {
 	points int     // of all sections, voltages and currents
 	width  int     // points + junctions + companions
 	data   []float64
+	square [][2]float64 // of each section, the sums of v^2 and w^2 over all its cells and the steps so far
 	fft    *fourier.FFT
 	seq    []float64
 	coef   []complex128
@@ -39,6 +41,7 @@ func newRecorder(ctx context.Context, m *model, maxPoints int) *recorder {
 	}
 	r.width = r.points + len(m.net.Junctions) + len(m.junction.branches)
 	r.data = make([]float64, r.width*n)
+	r.square = make([][2]float64, len(m.grid.Cells))
 	return r
 }
 
@@ -59,6 +62,7 @@ func thin(n, limit int) []int {
 // N.
 func (r *recorder) sample(l *lane, n int) {
 	row := r.data[(n-1)*r.width : n*r.width]
+	r.addSquares(l, n)
 	for k := range l.v {
 		v, w := l.v[k], l.w[k]
 		for i, at := range r.vi[k] {
@@ -72,6 +76,30 @@ func (r *recorder) sample(l *lane, n int) {
 	}
 	copy(row, l.j)
 	copy(row[len(l.j):], l.avg)
+}
+
+// addSquares adds the squares of the fields of every cell, recorded or not, and
+// starts anew at the first step of a period. An end edge has half a cell.
+func (r *recorder) addSquares(l *lane, n int) {
+	if n == 1 {
+		clear(r.square)
+	}
+	for k := range l.v {
+		v, w := l.v[k], l.w[k]
+		from, to := v[0], v[len(v)-1]
+		r.square[k][0] += floats.Dot(v, v) - (from*from+to*to)/2
+		r.square[k][1] += floats.Dot(w, w)
+	}
+}
+
+// integrals turns the sums of the squares on section k over a period into the
+// integrals of |V|^2, V^2 m, and of |I|^2, A^2 m, along it: the mean of a
+// sinusoid's square is half that of its amplitude, over N steps exactly.
+func (r *recorder) integrals(k int) (v2, i2 float64) {
+	dx := r.m.net.Sections[k].Length / float64(r.m.grid.Cells[k])
+	unit := 2 * dx / float64(r.m.grid.StepsPerPeriod)
+	z := r.m.z[k]
+	return unit * r.square[k][0], unit * r.square[k][1] / (z * z)
 }
 
 // A window is what the recorder finds in one period.

@@ -29,6 +29,11 @@ type Standing struct {
 	// At the two ends, where the current is that of the first or last cell
 	// centre and of the half cell between.
 	VFrom, IFrom, VTo, ITo complex128
+	// The integrals of |V|^2, V^2 m, and of |I|^2, A^2 m, along the section, from
+	// all its cells whether recorded or not: the trapezoidal rule over the edges
+	// and the midpoint rule over the centres, of the squares averaged over the
+	// last window. See Grid.Loss for what they are good for.
+	SquareV, SquareI float64
 }
 
 // Spectrum is a one-sided amplitude spectrum of the source voltage.
@@ -79,6 +84,7 @@ func (s *settler) standing(k int) Standing {
 	half, cos := yd/2, math.Cos(math.Pi/float64(g.StepsPerPeriod))
 	out.IFrom = (out.I[0] + half*out.VFrom) / complex(cos, 0)
 	out.ITo = (out.I[len(out.I)-1] - half*out.VTo) / complex(cos, 0)
+	out.SquareV, out.SquareI = s.rec.integrals(k)
 	return out
 }
 
