@@ -4,6 +4,7 @@ import (
 	"math"
 	"slices"
 
+	"gonum.org/v1/plot/vg"
 	"gonum.org/v1/plot/vg/draw"
 	"linewitness/report/figure"
 	"linewitness/report/format"
@@ -11,137 +12,128 @@ import (
 	"linewitness/sim/record"
 )
 
-// settlingHeight is the height of the settling and spectrum panels.
-const settlingHeight = 112.0
+// The heights of the panels about the settling.
+const (
+	settlingHeight  = 112.0 // of the window changes and the spectrum
+	departureHeight = 138.0 // of the departures over the full width
+	ruleRoom        = 190.0 // of the table of the rule, which is not broken
+)
 
-// settling draws the settling curve and the spectrum side by side.
+// settling writes how steady state was shown: the rule, the times, and the
+// figures with the spectrum of what is left.
 func (d *document) settling(c *record.Case) {
+	s := c.Settling
+	proof := len(s.Curve) > 0 || len(s.Places) > 0
+	if !proof && spectrumPanel(c) == nil {
+		return
+	}
+	title, keep := "Proof of settling", ruleRoom
+	if !proof {
+		title, keep = "Spectrum", settlingHeight+2*figure.KeyHeight
+	}
+	d.b.Subheading(title, keep)
+	if proof {
+		d.b.Table(d.settlingRule(c))
+		d.settlingTimes(c)
+		d.resonance(c)
+	}
+	if c == d.nominal() {
+		d.departures(c)
+		d.settlingPanels(c, nil)
+		return
+	}
+	d.settlingPanels(c, d.departurePanel(c))
+}
+
+// resonance says what the network holds and how fast it fills and empties.
+func (d *document) resonance(c *record.Case) {
+	p, a, f := c.Settling.Predicted, c.Power.Phasor, c.Power.FDTD
+	text := ""
+	if a.Stored > 0 {
+		text = "In steady state the network holds " + format.SI(a.Stored, "J") + " (time domain " + format.SI(f.Stored, "J") +
+			"), which is " + format.Number(a.Q) + " times the energy that it takes in over a radian."
+	}
+	if p.TimeConstant > 0 {
+		text += " Its slowest mode near the frequency of the source has the loaded Q " + format.Number(p.Q) + ", fills and empties with the time constant " +
+			format.SI(p.TimeConstant, "s") + ", and falls by 60" + format.Space + "dB within " + format.SI(p.RingDown60, "s") + " of a stop (predicted)."
+	}
+	if text = trimmed(text); text != "" {
+		d.b.Note(text)
+	}
+}
+
+// settlingPanels draws the changes from window to window and the spectrum side
+// by side, and before them the departures where these have no figure of their
+// own.
+func (d *document) settlingPanels(c *record.Case, first *figure.Panel) {
 	var panels []*figure.Panel
-	finding := ""
-	if p := settlingPanel(c.Settling, d.r.Design.Tolerance); p != nil {
-		panels, finding = append(panels, p), settlingFinding(c.Settling, d.r.Design.Tolerance)
+	var entries []figure.Entry
+	finding, tolerance := "", d.r.Design.Tolerance
+	if first != nil {
+		panels, finding = append(panels, first), "Left: "+departureFinding(c)
+	}
+	if p := settlingPanel(c.Settling, tolerance); p != nil {
+		finding = trimmed(finding + " " + where(len(panels), first != nil) + settlingFinding(c.Settling, tolerance))
+		panels, entries = append(panels, p), settlingKey(c.Settling, tolerance)
 	}
 	if p := spectrumPanel(c); p != nil {
-		panels, finding = append(panels, p), finding+" "+spectrumFinding(c)
+		finding = trimmed(finding + " Right: " + spectrumFinding(c))
+		panels = append(panels, p)
 	}
 	if len(panels) == 0 {
 		return
 	}
 	label := d.figure()
-	entries := []figure.Entry{
-		{Style: ink.FDTDLine, Text: "change over a round trip"},
-		{Style: ink.MarkLine, Text: "multiples of the longest round trip"},
-		{Style: ink.LimitLine, Text: "tolerance"},
+	d.b.Need(settlingHeight + figure.KeyRoom(entries, d.b.Width()) + d.b.CaptionHeight(label, finding))
+	if len(entries) > 0 {
+		d.key(entries)
 	}
-	if estimated(c.Settling, d.r.Design.Tolerance) {
-		entries = slices.Insert(entries, 1, figure.Entry{Style: ink.PhasorLine, Text: "estimated error left"})
-	}
-	d.b.Subheading("Steady state and spectrum", settlingHeight+2*figure.KeyHeight+30)
-	d.key(entries)
-	d.b.Need(settlingHeight + d.b.CaptionHeight(label, finding))
 	d.b.Block(settlingHeight, func(cv draw.Canvas) {
 		for i, p := range panels {
-			p.Draw(column(cv, i, len(panels)))
+			p.Draw(share(cv, i, len(panels), first != nil))
 		}
 	})
-	d.b.Caption(label, trimmed(finding))
+	d.b.Caption(label, finding)
 }
 
-// settlingDepth is how far below the tolerance the settling panel may reach.
-const settlingDepth = 1e-4
-
-// estimated reports whether two estimates or more are inside the panel, so that
-// there is a line to see.
-func estimated(s record.Settling, tolerance float64) bool {
-	seen := 0
-	for _, p := range s.Curve {
-		if p.Estimate > tolerance*settlingDepth && !math.IsInf(p.Estimate, 0) {
-			seen++
-		}
+// where names the place of the settling run's panel in its row.
+func where(before int, first bool) string {
+	if first && before > 0 {
+		return "Middle: "
 	}
-	return seen > 1
+	return "Left: "
 }
 
-// settlingPanel returns nil if no window was compared.
-func settlingPanel(s record.Settling, tolerance float64) *figure.Panel {
-	var ts, change, estimate []float64
-	for _, p := range s.Curve {
-		ts, change, estimate = append(ts, p.Time), append(change, p.Change), append(estimate, p.Estimate)
+// share is a column of n, of which the first is wider if it is a departure
+// panel, whose curves carry names.
+func share(c draw.Canvas, i, n int, first bool) draw.Canvas {
+	if !first || n < 2 {
+		return column(c, i, n)
 	}
-	top := largestOf(change)
-	if top <= 0 {
-		return nil
+	const wide = 0.44
+	split := c.Size().X * vg.Length(wide)
+	if i == 0 {
+		return draw.Crop(c, 0, split-c.Size().X, 0, 0)
 	}
-	hi := math.Pow(10, math.Ceil(math.Log10(max(top, largestOf(estimate), tolerance)*1.2)))
-	lo := math.Pow(10, math.Floor(math.Log10(max(min(smallestOf(change), tolerance)/1.5, tolerance*settlingDepth, hi*1e-12))))
-	last := max(s.Time, ts[len(ts)-1])
-	p := figure.New("Settling run", "relative to the section's largest value",
-		figure.Axis{Label: "time", Unit: "s", Max: last}, figure.Axis{Min: lo, Max: hi, Log: true})
-	p.Upright(roundTrips(s.RoundTrip, last), ink.MarkLine, "")
-	p.Level(tolerance, ink.LimitLine, "tolerance")
-	p.Line(ts, estimate, ink.PhasorLine)
-	p.Line(ts, change, ink.FDTDLine)
-	p.Dots(ts, change, ink.FDTDLine)
-	return p
+	return column(draw.Crop(c, split, 0, 0, 0), i-1, n-1)
 }
 
-// smallestOf returns the smallest value above zero, 1 if there is none.
-func smallestOf(ys []float64) float64 {
-	least := math.Inf(1)
-	for _, y := range ys {
-		if y > 0 && y < least {
-			least = y
-		}
+func settlingKey(s record.Settling, tolerance float64) []figure.Entry {
+	entries := []figure.Entry{
+		{Style: ink.FDTDLine, Text: "change over a round trip, of the section's largest value"},
+		{Style: ink.MarkLine, Text: "multiples of the longest round trip"},
 	}
-	if math.IsInf(least, 1) {
-		return 1
+	if estimated(s, tolerance) {
+		entries = slices.Insert(entries, 1, figure.Entry{Style: ink.PhasorLine, Text: "estimated error left"})
 	}
-	return least
+	return entries
 }
 
-// roundTrips returns multiples of the round trip up to last: each one, or
-// every second, fifth, tenth, ... if they would stand too close.
-func roundTrips(trip, last float64) []float64 {
-	every := roundTripsApart(last / trip)
-	if every == 0 {
-		return nil
+// measuredTime returns the time constant that the measured loop factor stands
+// for; NaN if nothing was measured or nothing decays.
+func measuredTime(s record.Settling) float64 {
+	if !(s.LoopFactor > 0 && s.LoopFactor < 1 && s.RoundTrip > 0) {
+		return math.NaN()
 	}
-	var out []float64
-	for k := 1.0; k*every*trip < last; k++ {
-		out = append(out, k*every*trip)
-	}
-	return out
-}
-
-// mostMarks is how many round trips are marked at most.
-const mostMarks = 16
-
-// roundTripsApart returns the smallest of 1, 2, 5, 10, ... that leaves at most
-// mostMarks marks of n, or 0 if n is not a number of marks.
-func roundTripsApart(n float64) float64 {
-	if !(n > 0) || math.IsInf(n, 0) {
-		return 0
-	}
-	for power := 1.0; ; power *= 10 {
-		for _, m := range []float64{1, 2, 5} {
-			if n/(m*power) <= mostMarks {
-				return m * power
-			}
-		}
-	}
-}
-
-func settlingFinding(s record.Settling, tolerance float64) string {
-	last := s.Curve[len(s.Curve)-1]
-	text := "Left: after " + format.SI(s.Time, "s") + " (" + format.Plural(int64(s.Periods), "period") + ") the change over a round trip of " +
-		format.SI(s.RoundTrip, "s") + " is " + format.Percent(last.Change)
-	if s.Settled {
-		text += " and the estimated remaining error " + format.Percent(s.Residual) + ", inside the tolerance of " + format.Percent(tolerance) + "."
-	} else {
-		text += "; the tolerance of " + format.Percent(tolerance) + " was not reached."
-	}
-	if every := roundTripsApart(s.Time / s.RoundTrip); every > 1 {
-		text += " The upright lines are " + format.Count(int64(every)) + " round trips apart."
-	}
-	return text
+	return s.RoundTrip / -math.Log(s.LoopFactor)
 }

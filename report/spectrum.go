@@ -23,7 +23,7 @@ func spectrumPanel(c *record.Case) *figure.Panel {
 	if c.Model.Frequency > 0 {
 		last = min(last, harmonics*c.Model.Frequency)
 	}
-	p := figure.New("Spectrum at "+s.Where, "relative to the largest line",
+	p := figure.New("Spectrum", "at "+s.Where+", relative",
 		figure.Axis{Label: "frequency", Unit: "Hz", Max: last}, figure.Axis{Min: floor, Max: 2, Log: true})
 	xs, ys := span{0, last}.in(s.Frequency, s.Amplitude)
 	if len(ys) > spectrumLines {
@@ -57,7 +57,7 @@ func spectrumFinding(c *record.Case) string {
 		}
 	}
 	next := largestAt(rest)
-	text := "Right: the last " + format.Plural(int64(s.Periods), "period") + " at " + s.Where + " hold " + format.SI(s.Amplitude[k], "V") + " at " + format.SI(s.Frequency[k], "Hz")
+	text := "the last " + format.Plural(int64(s.Periods), "period") + " at " + s.Where + " hold " + format.SI(s.Amplitude[k], "V") + " at " + format.SI(s.Frequency[k], "Hz")
 	const silence = 1e-10
 	switch {
 	case next < 0:

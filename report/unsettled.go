@@ -1,6 +1,8 @@
 package report
 
 import (
+	"math"
+
 	"linewitness/report/format"
 	"linewitness/sim/record"
 )
@@ -14,6 +16,30 @@ func (d *document) unsettled(c *record.Case) {
 	if s.Decay != "" {
 		d.b.Paragraph("Measured: " + s.Decay + ".")
 	}
+	if text := predictedEnd(c); text != "" {
+		d.b.Paragraph(text)
+	}
 	d.b.Paragraph("The amplitude kept over the longest round trip (" + format.SI(s.RoundTrip, "s") + ") is " + format.Number(s.LoopFactor) +
 		", the estimated remaining error " + format.Percent(s.Residual) + " against a tolerance of " + format.Percent(d.r.Design.Tolerance) + ".")
+}
+
+// predictedEnd says when the closed form expects steady state; empty if it was
+// not predicted.
+func predictedEnd(c *record.Case) string {
+	p := c.Settling.Predicted
+	if !(p.LoopFactor > 0) {
+		return ""
+	}
+	text := "Predicted by the closed form: the slowest mode near the frequency of the source keeps " + format.Number(p.LoopFactor) +
+		" of its amplitude over the longest round trip"
+	switch {
+	case p.Settled > 0 && !math.IsInf(p.Settled, 0):
+		text += "; steady state would be shown after " + format.SI(p.Settled, "s")
+		if n := p.Settled * c.Model.Frequency; n < math.MaxInt32 {
+			text += ", " + format.Plural(int64(math.Ceil(n)), "period")
+		}
+	case p.LoopFactor >= 1:
+		text += ", so that it never settles"
+	}
+	return text + "."
 }

@@ -72,13 +72,17 @@ func tagAt(c draw.Canvas, x, y float64, s string, style draw.LineStyle) {
 	}
 	y = math.Min(math.Max(y, c.Min.Y.Points()+1.8), c.Max.Y.Points()-tagStyle.Size+0.5)
 	x = math.Max(x, c.Min.X.Points()+2)
-	box := vg.Rectangle{
+	c.SetColor(ink.White)
+	c.Fill(tagBox(x, y, s).Path())
+	tagStyle.Of(style.Color).Draw(c, x, y, s, typeset.Left)
+}
+
+// tagBox is the area of a label whose baseline begins at (x, y).
+func tagBox(x, y float64, s string) vg.Rectangle {
+	return vg.Rectangle{
 		Min: vg.Point{X: vg.Points(x - 1.2), Y: vg.Points(y - 1.5)},
 		Max: vg.Point{X: vg.Points(x + tagStyle.Width(s) + 1.2), Y: vg.Points(y + tagStyle.Size*0.8)},
 	}
-	c.SetColor(ink.White)
-	c.Fill(box.Path())
-	tagStyle.Of(style.Color).Draw(c, x, y, s, typeset.Left)
 }
 
 func circle(at vg.Point, r vg.Length) vg.Path {

@@ -26,6 +26,7 @@ type Panel struct {
 	p              *plot.Plot
 	x, y           scale
 	over           []plot.Plotter // what is drawn last, so that no curve runs through it
+	tags           []vg.Rectangle // labels of marks, which names of curves keep clear of
 }
 
 // scale maps SI values to the coordinates of an axis.

@@ -54,7 +54,21 @@ var (
 	GridLine   = style(Grid, 0.4)
 	HatchLine  = style(Limit, 0.25)
 	BandEdge   = style(Phasor, 0.9)
+	LevelLine  = style(Soft, 0.5, 5, 2)
+	BarEdge    = style(Accent, 0.6)
+	BarLine    = style(Accent, 0.45)
 )
+
+// Series are styles of curves that are named where they run: told apart by
+// their dashes and widths, in grey too.
+var Series = []draw.LineStyle{
+	style(Accent, 1.1),
+	style(FDTD, 0.9, 5, 1.8),
+	style(Peak, 0.9, 1, 1.5),
+	style(Accent, 0.8, 8, 1.6, 1, 1.6),
+	style(FDTD, 0.55),
+	style(Peak, 1.5, 2.4, 2.4),
+}
 
 func style(c color.Color, width float64, dashes ...float64) draw.LineStyle {
 	s := draw.LineStyle{Color: c, Width: vg.Points(width)}

@@ -23,6 +23,9 @@ func (n Network) prove(c *record.Case, opt Options) {
 	}
 	s.Predicted = n.predict(*s, opt)
 	s.Places = n.places(*c, opt)
+	if s.Settled {
+		s.To1Percent = slowest(s.Places)
+	}
 	s.Echoes = n.echoes()
 	if c.Model.Source.Stop != "" {
 		s.RingDown = n.ringDown(s.Predicted)
@@ -67,7 +70,7 @@ func (n Network) delays() map[string]float64 {
 const departurePoints = 300
 
 // places makes departures that fall by the loop factor with every round trip
-// after the first wave has come, and ripple with the second harmonic.
+// after the first wave has come, and a little more in the first periods.
 func (n Network) places(c record.Case, opt Options) []record.SettlingPlace {
 	var out []record.SettlingPlace
 	delays := n.delays()
@@ -77,7 +80,7 @@ func (n Network) places(c record.Case, opt Options) []record.SettlingPlace {
 			t := c.Stress.Duration * float64(k) / departurePoints
 			d := 1.0
 			if after := t - delays[name]; after > 0 {
-				d = math.Pow(opt.Loop, 1+math.Floor(after/c.Settling.RoundTrip)) + 0.3*math.Exp(-after*n.Frequency)
+				d = 0.12*math.Pow(opt.Loop, math.Floor(after/c.Settling.RoundTrip)) + 0.3*math.Exp(-after*n.Frequency)
 			}
 			p.Time, p.Departure = append(p.Time, t), append(p.Departure, d)
 		}
@@ -99,6 +102,17 @@ func (n Network) places(c record.Case, opt Options) []record.SettlingPlace {
 		out = append(out, p)
 	}
 	return out
+}
+
+// slowest returns the longest time to 1 % of any junction, NaN if one did not
+// get there.
+func slowest(places []record.SettlingPlace) (longest float64) {
+	for _, p := range places {
+		if p.Kind == "junction" {
+			longest = math.Max(longest, p.To1Percent)
+		}
+	}
+	return longest
 }
 
 // stays returns the time after which a departure stays within a limit; NaN if
