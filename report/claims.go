@@ -43,10 +43,16 @@ func (d *document) allClaims() []record.Claim {
 
 func claimTable(all []record.Claim) sheet.Table {
 	t := sheet.Table{Size: 6.8, Columns: []sheet.Column{
-		{Head: "Id"}, {Head: "Quantity, subject", Grow: 1}, {Head: "Case"},
-		{Head: "Claimed", Align: rightAlign}, {Head: "Tolerance ±", Align: rightAlign},
-		{Head: "Phasor", Align: rightAlign}, {Head: "Time domain", Align: rightAlign},
-		{Head: "Difference", Align: rightAlign}, {Head: "Uncertainty ±", Align: rightAlign}, {Head: "Verdict"},
+		{Head: "Id"},
+		{Head: "Quantity, subject", Grow: 1},
+		{Head: "Case"},
+		{Head: "Claimed", Align: rightAlign},
+		{Head: "Tolerance ±", Align: rightAlign},
+		{Head: "Phasor", Align: rightAlign},
+		{Head: "Time domain", Align: rightAlign},
+		{Head: "Difference", Align: rightAlign},
+		{Head: "Uncertainty ±", Align: rightAlign},
+		{Head: "Verdict"},
 	}}
 	for i := range all {
 		q := &all[i]

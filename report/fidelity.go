@@ -18,7 +18,7 @@ func (d *document) fidelity(c *record.Case) {
 		{Head: "Curve", Grow: 1}, {Head: "Points", Align: rightAlign},
 	}}
 	for _, name := range []string{"amplitude, ADM", "feature, FDM", "global, GDM"} {
-		t.Columns = append(t.Columns, sheet.Column{Head: capital(name), Align: rightAlign}, sheet.Column{Head: "Word"}, sheet.Column{Head: "Grade, spread"})
+		t.Columns = append(t.Columns, sheet.Column{Head: capital(name), Align: rightAlign}, sheet.Column{Head: "Word", Grow: 0.2}, sheet.Column{Head: "Grade, spread", Grow: 0.1})
 	}
 	for i := range c.Fidelity {
 		t.Rows = append(t.Rows, fidelityRow(&c.Fidelity[i]))
@@ -26,13 +26,13 @@ func (d *document) fidelity(c *record.Case) {
 	d.b.Subheading("Feature selective validation", 90)
 	d.b.Paragraph(fidelityFinding(c.Fidelity))
 	d.b.Table(t)
-	d.b.Note("ADM, FDM, GDM: mean difference of amplitude, of feature and of both together, with its word. Grade, spread: how many of the six grades hold 85 % of the points, counted from the best one and around the fullest one. For the choices see Method.")
+	d.b.Note("ADM, FDM, GDM: mean difference of amplitude, of feature and of both together, with its word. Grade, spread: how many of the six grades hold 85" + format.Space + "% of the points, counted from the best one and around the fullest one. For the choices see Method.")
 }
 
 func fidelityRow(f *record.Fidelity) []sheet.Cell {
 	row := []sheet.Cell{{Text: f.Subject + ", " + f.Curve}, {Text: format.Count(int64(f.Points))}}
 	if f.Note != "" {
-		return append(row, sheet.Cell{Text: f.Note, Span: true})
+		return append(row, sheet.Cell{Text: format.Missing}, sheet.Cell{Text: f.Note, Span: true})
 	}
 	for _, x := range []record.Difference{f.ADM, f.FDM, f.GDM} {
 		row = append(row, sheet.Cell{Text: format.Measure(x.Value)}, sheet.Cell{Text: x.Word}, sheet.Cell{Text: grades(x)})

@@ -9,10 +9,10 @@ import (
 	"linewitness/sim/record"
 )
 
-// claimFinding writes what was found on a claim that is not confirmed, and the
-// slips that would explain it, most likely first.
+// claimFinding writes what was found of a claim that is not simply confirmed,
+// and the slips that would explain it, most likely first.
 func (d *document) claimFinding(q *record.Claim) {
-	if q.Verdict == record.Confirmed {
+	if q.Verdict == record.Confirmed && q.Finding == "" {
 		return
 	}
 	word := capital(string(q.Verdict)) + "."
@@ -55,10 +55,10 @@ func slipName(s *record.Slip) string {
 	switch {
 	case s.Where == "":
 		return s.Name
-	case strings.HasPrefix(s.Where, "load") || strings.HasPrefix(s.Where, "junction") || strings.HasPrefix(s.Where, "element"):
-		return s.Name + " at " + s.Where
+	case strings.HasPrefix(s.Where, "section ") || s.Where == "every section":
+		return s.Name + " on " + s.Where
 	}
-	return s.Name + " on " + s.Where
+	return s.Name + " at " + s.Where
 }
 
 // together says which slip explains several claims at once, each set of claims

@@ -5,9 +5,9 @@
 //
 // Amplitudes are peak, units are SI, and a key or a column ends in its unit
 // where it has one (at_m, time_s, power_w, phase_deg). Phases are relative to
-// the EMF of the source under e^{+jwt}. The fields of a requirement alone are
-// in the unit that the design file gave its limit in, and "unit" names it; the
-// difference of two levels in dBm is in dB. The amplitudes of a rating are in
+// the EMF of the source under e^{+jwt}. The fields of a requirement are in the
+// unit that the design file gave its limit in, and "unit" names it, as it does
+// for the figures under Evidence; the difference of two levels in dBm is in dB. The amplitudes of a rating are in
 // its "unit", V or A, and peak like all others; "rated_text" is the limit as
 // the design file has it.
 //
@@ -59,6 +59,37 @@
 // Times are from switch-on, those of "ring_down" from the stop of the source,
 // and the predicted ones from the end of the source's own rise or from its stop.
 // A time that the run did not show is null. An audit is null where none was made.
+//
+// # Evidence
+//
+// "convergence" has every figure that a requirement or the summary uses on the
+// grids of the study, finest first, and its error against its uncertainty;
+// "fidelity" the feature selective validation (IEEE Std 1597.1) of the curves;
+// "claims" the designer's own figures; and "matrix", beside "cases", the cases
+// side by side:
+//
+//	"convergence": {"grids": [{"steps_per_period", "cells", "step_s"}], "skipped",
+//	          "figures": [{"id", "quantity", "subject", "unit", "values": [..],
+//	                       "behaviour": "converging | converging off order | oscillatory | diverging |
+//	                                     exact | two grids | one grid",
+//	                       "order", "extrapolated", "factor", "gci", "gci_percent",
+//	                       "phasor", "error", "uncertainty",
+//	                       "uncertainty_parts": {"grid", "settling", "form", "rounding"}, "explained"}]}
+//	"fidelity": [{"subject", "curve", "points", "note", "adm": MEASURE, "fdm": MEASURE, "gdm": MEASURE}]
+//	MEASURE = {"value", "word", "histogram": [6 parts], "grade", "spread"}
+//	"claims": [{"id", "quantity", "subject", "unit", "complex", "claimed", "phasor", "fdtd",
+//	          "tolerance", "difference", "uncertainty",
+//	          "verdict": "confirmed | contradicted | not shown", "finding",
+//	          "slips": [{"name", "where", "text", "value", "also": [..], "explains": [..]}],
+//	          "claimed_text", "tolerance_text", "text", "source"}]
+//	"matrix": {"cases": [..], "rows": [{"id", "label", "unit", "limit_text",
+//	          "cells": [{"present", "value", "difference", "verdict", "worst"}]}]}
+//
+// A figure, a claim and a row of the matrix are in their "unit". "skipped" says
+// why the study was left out, and is empty where it was made. The values of a
+// claim, "claimed", "phasor", "fdtd" and the "value" of its slips, are complex
+// where "complex" is true, else plain numbers; a slip "explains" the claims
+// whose ids it has. A key figure has an empty "id", and in the matrix no verdict.
 //
 // # Size
 //

@@ -30,6 +30,7 @@ func JSON(r *record.Record) ([]byte, error) {
 		{"design", designObject(r.Design)},
 		{"verdict", string(r.Verdict)},
 		{"cases", all},
+		{"matrix", matrixObject(r.Matrix)},
 	}), nil
 }
 
@@ -44,6 +45,7 @@ func designObject(d record.Design) object {
 		{"agreement_limit", d.Agreement},
 		{"settle_tolerance", d.Tolerance},
 		{"max_periods", d.MaxPeriods},
+		{"fsv_choices", stringList(d.FSVChoices)},
 	}
 }
 
@@ -93,6 +95,9 @@ func caseObject(c *record.Case) (object, error) {
 		{"requirements", requirementList(c.Requirements)},
 		{"ratings", ratingList(c.Ratings)},
 		{"power", power},
+		{"convergence", convergenceObject(c.Convergence)},
+		{"fidelity", fidelityList(c.Fidelity)},
+		{"claims", claimList(c.Claims)},
 		{"warnings", stringList(c.Warnings)},
 	}, nil
 }

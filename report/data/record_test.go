@@ -65,13 +65,14 @@ func sample() *record.Record {
 				Uncertainty: 0.001, Verdict: record.MissedReq, Method: "phasor",
 			},
 		},
-		Ratings:   sampleRatings(),
+		Ratings:     sampleRatings(),
+		Convergence: sampleConvergence(), Fidelity: sampleFidelity(), Claims: sampleClaims(),
 		Warnings:  []string{"the source is ideal: it has no available power"},
 		Profiles:  []record.Profile{sampleProfile()},
 		Waveforms: sampleWaveforms(),
 	}
 	lost := record.Case{
-		Name: "ring, lossless", Verdict: record.Unsettle,
+		Name: "ring, lossless", Verdict: record.Unsettle, Convergence: record.Convergence{Skipped: "no steady state"},
 		Settling: record.Settling{Periods: 20000, LoopFactor: 1, Residual: math.NaN(), To1Percent: math.NaN(), Decay: "no decay over 20000 periods", Predicted: unpredicted()},
 	}
 	return &record.Record{
@@ -79,9 +80,11 @@ func sample() *record.Record {
 		Design: record.Design{
 			Title: "Sample", Number: "X-1", Revision: "B", File: "sample.yaml", SHA256: "00ff", Convention: "engineering",
 			Agreement: 0.005, Tolerance: 1e-4, MaxPeriods: 20000,
+			FSVChoices: []string{"four bins"},
 		},
 		Verdict: record.Unsettle,
 		Cases:   []record.Case{nominal, lost},
+		Matrix:  sampleMatrix(),
 	}
 }
 
