@@ -99,11 +99,11 @@ func resample(x, y []float64, low, high float64, n int) []float64 {
 // thin interpolates evenly spaced values at n evenly spaced points.
 func thin(y []float64, n int) []float64 {
 	out := make([]float64, n)
-	last := len(y) - 1
+	last, to := int64(len(y)-1), int64(n-1)
 	for i := range out {
 		// whole numbers, so that points that coincide do so exactly
-		k, rest := i*last/(n-1), i*last%(n-1)
-		out[i] = between(y[k], y[min(k+1, last)], float64(rest)/float64(n-1))
+		at := int64(i) * last
+		out[i] = between(y[at/to], y[min(at/to+1, last)], float64(at%to)/float64(to))
 	}
 	return out
 }
