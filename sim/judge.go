@@ -21,7 +21,8 @@ type judgement struct {
 	min, max *design.Limit
 	values   []witnessed
 	spread   float64 // uncertainty, SI
-	unit     string  // of limits given without one
+	figure   *measured
+	unit     string // of limits given without one
 	note     string
 	// unfinished is set for a peak from a run that ended before the network was
 	// at rest: a larger one may come, so it can be missed but not met.
@@ -42,68 +43,77 @@ const (
 	byBoth   = "both"
 )
 
-// judge judges the requirements of a design in one case; all holds every
-// solved case by name. It is cut short if ctx ends.
-func judge(ctx context.Context, c *solved, all map[string]*solved) []record.Requirement {
-	var out []record.Requirement
-	b := newBudget(c.net, &c.compared)
+// judge judges the requirements of a design in one case, and studies the figure
+// of each; all holds every solved case by name. It is cut short if ctx ends.
+func judge(ctx context.Context, c *solved, all map[string]*solved) ([]record.Requirement, []record.Study) {
+	var reqs []record.Requirement
+	var studies []record.Study
 	for _, r := range c.design.Requirements {
 		if !slices.Contains(r.Cases, c.name) || ctx.Err() != nil {
 			continue
 		}
-		for _, j := range c.judgements(r, b, all) {
-			out = append(out, j.record())
+		for _, j := range c.judgements(r, all) {
+			study := c.study(j.label())
+			reqs = append(reqs, j.record(study.Uncertainty))
+			studies = append(studies, study)
 		}
 	}
-	return out
+	return reqs, studies
+}
+
+// label is what a study is to know of a judgement.
+func (j *judgement) label() studied {
+	return studied{
+		id: j.req.ID, quantity: string(j.req.Quantity), subject: j.subject,
+		scale: scaleFor(j.limitUnit()), figure: j.figure, spread: j.spread,
+	}
 }
 
 // judgements is one judgement for most requirements, and one for each window
 // of an impedance.
-func (s *solved) judgements(r design.Requirement, b *budget, all map[string]*solved) []judgement {
+func (s *solved) judgements(r design.Requirement, all map[string]*solved) []judgement {
 	one := judgement{req: r, subject: subject(r), min: r.Min, max: r.Max}
 	switch r.Quantity {
 	case design.InputImpedance:
-		return s.impedance(one, b)
+		return s.impedance(one)
 	case design.PeakVoltage, design.PeakCurrent:
 		pick, unit := s.peak(r)
 		p := s.stressed(pick)
 		one.values = []witnessed{{p.value, fdtdOnly}}
-		one.spread = p.spread
+		one.spread, one.figure = p.spread, &measured{pick: pick}
 		one.note, one.unfinished = s.stressNote(pick, unit), !s.finished()
 	case design.Overshoot:
 		s.overshoot(&one)
 	case design.SettleTime:
 		s.settleTime(&one)
 	case design.Agreement:
+		one.figure = s.agreementFigure()
 		one.values = []witnessed{{s.compared.Found(), byBoth}}
 	default:
-		s.steadyValues(&one, b, all)
+		s.steadyValues(&one, all)
 	}
 	return []judgement{one}
 }
 
 // steadyValues fills a judgement of the steady state, or of its change from
 // another case.
-func (s *solved) steadyValues(j *judgement, b *budget, all map[string]*solved) {
-	q := finder{s.net}.steady(j.req)
-	j.values = []witnessed{{q(s.exact), byPhasor}, {q(s.found), byFDTD}}
-	j.spread = s.spreadOf(j.req, q, b)
+func (s *solved) steadyValues(j *judgement, all map[string]*solved) {
+	f := s.measure(j.req, finder{s.net}.steady(j.req))
 	if j.req.RelativeTo != "" {
 		ref := all[j.req.RelativeTo]
-		p := finder{ref.net}.steady(j.req)
-		exact, found := p(ref.exact), p(ref.found)
-		j.values[0].value = relative(j.req, j.values[0].value, exact)
-		j.values[1].value = relative(j.req, j.values[1].value, found)
-		refSpread := ref.spreadOf(j.req, p, newBudget(ref.net, &ref.compared))
-		j.spread = relativeSpread(j.req, q(s.exact), j.spread) + relativeSpread(j.req, exact, refSpread)
+		f = f.relativeTo(ref.measure(j.req, finder{ref.net}.steady(j.req)), j.req)
 	}
 	if angular(j.req.Quantity) {
-		centre := j.centre()
-		for i := range j.values {
-			j.values[i].value = centre + math.Remainder(j.values[i].value-centre, 2*pi)
-		}
+		f = f.near(j.centre())
 	}
+	j.take(f)
+}
+
+// take makes a figure of the steady state the one that is judged.
+func (j *judgement) take(f *measured) {
+	j.figure = f
+	j.values = []witnessed{{f.at(closedForm), byPhasor}, {f.at(fdtdView(0)), byFDTD}}
+	j.spread = f.spread(foundOrExpected)
 }
 
 // spreadOf is the uncertainty of a quantity, the larger of the two
@@ -169,7 +179,7 @@ func (j *judgement) centre() float64 {
 }
 
 // impedance makes a judgement of each window on an input impedance.
-func (s *solved) impedance(one judgement, b *budget) []judgement {
+func (s *solved) impedance(one judgement) []judgement {
 	f := finder{s.net}
 	var out []judgement
 	add := func(what string, min, max *design.Limit, part func(complex128) float64) {
@@ -177,8 +187,7 @@ func (s *solved) impedance(one judgement, b *budget) []judgement {
 		j := one
 		j.subject += ", " + what
 		j.min, j.max, j.unit = min, max, "ohm"
-		j.values = []witnessed{{q(s.exact), byPhasor}, {q(s.found), byFDTD}}
-		j.spread = s.spreadOf(one.req, q, b)
+		j.take(s.measure(one.req, q))
 		out = append(out, j)
 	}
 	if w := one.req.R; w != nil {
@@ -270,6 +279,7 @@ func (s *solved) overshoot(j *judgement) {
 	p := s.stressed(pick)
 	j.values = []witnessed{{p.value/steady - 1, fdtdOnly}}
 	j.spread = p.spread / steady
+	j.figure = &measured{pick: func(t *fdtd.Stress) float64 { return pick(t)/steady - 1 }}
 	j.note, j.unfinished = s.stressNote(pick, unit), !s.finished()
 }
 
@@ -278,7 +288,9 @@ func (s *solved) settleTime(j *judgement) {
 	if j.req.At != "" {
 		at = finder{s.net}.junction(j.req.At)
 	}
-	settled := s.stressed(func(run *fdtd.Stress) float64 { return run.SettleTime(at, j.req.Settled) })
+	pick := func(run *fdtd.Stress) float64 { return run.SettleTime(at, j.req.Settled) }
+	settled := s.stressed(pick)
+	j.figure = &measured{pick: pick}
 	j.values = []witnessed{{settled.value, fdtdOnly}}
 	j.spread = settled.spread
 	if math.IsNaN(settled.value) && s.net.Source.Stop != nil {

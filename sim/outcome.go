@@ -9,8 +9,9 @@ import (
 
 // record judges and writes down: the value is that of the worse witness, met
 // if value and uncertainty are inside the limits, missed if both are outside,
-// not shown if the uncertainty straddles a limit.
-func (j *judgement) record() record.Requirement {
+// not shown if the uncertainty straddles a limit. The uncertainty is no less than
+// least, in the unit of the requirement.
+func (j *judgement) record(least float64) record.Requirement {
 	s := scaleFor(j.limitUnit())
 	out := record.Requirement{
 		ID: j.req.ID, Text: j.req.Text, Source: j.req.Document,
@@ -29,6 +30,9 @@ func (j *judgement) record() record.Requirement {
 			// The scale may bend (dBm): the larger of the two sides.
 			out.Uncertainty = math.Max(math.Abs(s.from(w.value+j.spread)-v), math.Abs(v-s.from(w.value-j.spread)))
 		}
+	}
+	if least > out.Uncertainty {
+		out.Uncertainty = least
 	}
 	if math.IsNaN(out.Uncertainty) || math.IsInf(out.Uncertainty, 0) {
 		out.Uncertainty = 0

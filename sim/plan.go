@@ -26,6 +26,7 @@ type PlanCase struct {
 	Grid          record.Grid // Updates is the predicted number
 	Cells         int         // of all sections
 	LongPath      float64     // s, longest one-way path
+	Rate          float64     // 1/s, decay of the slowest natural mode near the source frequency; NaN if it was not predicted
 	LoopFactor    float64     // amplitude kept per longest round trip, predicted; NaN if it was not
 	SettlePeriods int         // predicted length of the settling run
 	StressPeriods int         // predicted length of the stress run

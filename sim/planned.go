@@ -64,6 +64,7 @@ func (p *planned) predict() {
 		Grid:          gridRecord(p.net, g),
 		Cells:         g.TotalCells(),
 		LongPath:      path,
+		Rate:          rate,
 		LoopFactor:    math.Exp(-rate * 2 * path),
 		ExpectedError: p.grids[0].error,
 	}

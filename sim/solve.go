@@ -17,21 +17,25 @@ import (
 // A solved case has both witnesses' answers and their comparison, not yet
 // judged.
 type solved struct {
-	name     string
-	design   *design.Design
-	net      *network.Network
-	grid     *gridding
-	phasor   *phasor.Solution
-	plan     *PlanCase
-	steady   *fdtd.Steady
-	coarser  []*fdtd.Steady // the settling solution on the other grids of the study, finest first
-	stress   *fdtd.Stress
-	sharp    *fdtd.Stress // the stress run again with the source's jump as it is, nil if it has none
-	second   *fdtd.Stress // the last of these again with half the steps
-	compared agree.Result
-	exact    *state // of the phasor witness
-	found    *state // of the time-domain witness
-	levels   []*state
+	name    string
+	design  *design.Design
+	net     *network.Network
+	grid    *gridding
+	phasor  *phasor.Solution
+	plan    *PlanCase
+	steady  *fdtd.Steady
+	coarser []*fdtd.Steady // the settling solution on the other grids of the study, finest first
+
+	coarseGrids ladder // those grids
+	stress      *fdtd.Stress
+	sharp       *fdtd.Stress // the stress run again with the source's jump as it is, nil if it has none
+	second      *fdtd.Stress // the last of these again with half the steps
+	compared    agree.Result
+	exact       *state   // of the phasor witness
+	found       *state   // of the time-domain witness
+	levels      []*state // found, and that of the coarser grids
+
+	predicted, limit *state // see view
 }
 
 // solve runs both witnesses on a planned case.
@@ -107,7 +111,7 @@ func (g *gridding) steady(net *network.Network) *fdtd.Steady {
 // the finest, so that what is left of the settling is the same on all.
 func (s *solved) studyRuns(ctx context.Context, g *errgroup.Group, grids ladder, set fdtd.Settings) {
 	set.Exactly = s.steady.Settling.Periods
-	s.coarser = make([]*fdtd.Steady, len(grids))
+	s.coarser, s.coarseGrids = make([]*fdtd.Steady, len(grids)), grids
 	for i, coarse := range grids {
 		g.Go(func() (err error) {
 			s.coarser[i], err = fdtd.Settle(ctx, s.net, coarse.grid, set)
@@ -120,19 +124,24 @@ func (s *solved) studyRuns(ctx context.Context, g *errgroup.Group, grids ladder,
 // that of the steady state. Peaks come long before.
 const atRest = 1e-3
 
-func (s *solved) compare() {
+// compareOn compares the steady state found on a grid with the closed form.
+func compareOn(g *gridding, found *fdtd.Steady, residual float64) agree.Result {
 	var samples []agree.Samples
-	for _, w := range s.steady.Sections {
+	for _, w := range found.Sections {
 		samples = append(samples, agree.Samples{ZV: w.ZV, V: w.V, ZI: w.ZI, I: w.I})
 	}
-	g, residual := s.grid, s.steady.Settling.Residual
-	s.compared = agree.Compare(samples, g.exact, g.discrete, g.waves, residual)
+	return agree.Compare(samples, g.exact, g.discrete, g.waves, residual)
+}
+
+func (s *solved) compare() {
+	s.compared = compareOn(s.grid, s.steady, s.steady.Settling.Residual)
 	s.exact = phasorState(s.net, s.phasor)
 	s.found = fdtdState(s.net, s.steady)
 	s.levels = []*state{s.found}
 	for _, c := range s.coarser {
 		s.levels = append(s.levels, fdtdState(s.net, c))
 	}
+	s.views()
 }
 
 // jumpOrder is the order at which a peak behind a jump is taken to converge. The

@@ -18,15 +18,21 @@ type budget struct {
 }
 
 func newBudget(net *network.Network, r *agree.Result) *budget {
+	return budgetOf(net, r, foundOrExpected)
+}
+
+// budgetOf is a budget with errors of a size of one's own, relative to the
+// section's largest.
+func budgetOf(net *network.Network, r *agree.Result, size errorSize) *budget {
 	b := &budget{
 		junctions: make([]float64, len(net.Junctions)),
 		branches:  make([]float64, len(net.Branches)),
 	}
 	currents := make([]float64, len(net.Junctions))
 	topV, topI := 0.0, 0.0
-	for k, s := range r.Sections {
-		v := math.Max(s.Voltage.Found, s.Voltage.Expected) * s.Voltage.Scale
-		i := math.Max(s.Current.Found, s.Current.Expected) * s.Current.Scale
+	for k := range r.Sections {
+		s := &r.Sections[k]
+		v, i := size(&s.Voltage)*s.Voltage.Scale, size(&s.Current)*s.Current.Scale
 		b.ends = append(b.ends, [2]float64{v, i})
 		for _, j := range []int{net.Sections[k].From, net.Sections[k].To} {
 			b.junctions[j] = math.Max(b.junctions[j], v)

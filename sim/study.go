@@ -1,0 +1,129 @@
+package sim
+
+import (
+	"math"
+
+	"linewitness/fdtd"
+	"linewitness/sim/agree"
+	"linewitness/sim/gci"
+	"linewitness/sim/record"
+)
+
+// A studied is a figure to be studied on the grids.
+type studied struct {
+	id, quantity, subject string
+	scale                 scale
+	figure                *measured
+	spread                float64 // of a figure of the time domain only: its uncertainty, SI
+}
+
+// residualSlack is how many times too small the estimate of what the settling
+// leaves may be: as of package agree.
+const residualSlack = 3
+
+// arithmetic is the relative error that rounding may leave in a phasor, and
+// what the crest of a wave through the points of a grid may miss.
+const arithmetic = 1e-9
+
+// settlingFloor is the part of what the settling leaves that may differ from
+// grid to grid, since all run for the same time: changes below it are no changes.
+const settlingFloor = 0.1
+
+// study compares what the grids make of a figure, and that with the closed
+// form, in the sense of ASME V&V 20: the error of the finest grid against the
+// uncertainty that grid, settling, rational forms and rounding give it.
+func (s *solved) study(f studied) record.Study {
+	out := record.Study{ID: f.id, Quantity: f.quantity, Subject: f.subject, Unit: f.scale.unit, Phasor: math.NaN()}
+	if f.figure.pick != nil {
+		s.studyRun(&out, f)
+		return out
+	}
+	at := func(v view) float64 { return f.scale.from(f.figure.at(v)) }
+	finest := at(fdtdView(0))
+	per := s.sensitivity(f, at)
+	residual := residualSlack * s.steady.Settling.Residual
+	out.Settling, out.Rounding = per*residual, arithmetic*(per+math.Abs(finest))
+	for level := range f.figure.levels {
+		out.Values = append(out.Values, at(fdtdView(level)))
+	}
+	s.index(&out, out.Rounding+settlingFloor*out.Settling)
+	out.Phasor = at(closedForm)
+	out.Form = math.Abs(at(limitOfGrids) - out.Phasor)
+	out.Grid = atLeast(out.GCI, math.Abs(at(gridPredicted)-at(limitOfGrids)))
+	out.Error = finest - out.Phasor
+	out.Uncertainty = out.Grid + out.Settling + out.Form + out.Rounding
+	// A figure that is infinite (the VSWR of a total reflection) has no error;
+	// the comparison along the sections has it.
+	out.Explained = !(math.Abs(out.Error) > out.Uncertainty)
+	return out
+}
+
+// sensitivity is the change of a figure, in its unit, for a relative error of
+// the phasors of 1, from a small one.
+func (s *solved) sensitivity(f studied, at func(view) float64) float64 {
+	const small = 1e-6
+	d := f.figure.spread(uniform(small))
+	base := f.figure.at(fdtdView(0))
+	up, down := f.scale.from(base+d)-at(fdtdView(0)), at(fdtdView(0))-f.scale.from(base-d)
+	return atLeast(math.Abs(up), math.Abs(down)) / small
+}
+
+// atLeast is the larger of two numbers; one that is NaN does not count.
+func atLeast(a, b float64) float64 {
+	if math.IsNaN(a) || a < b {
+		return b
+	}
+	return a
+}
+
+// index fills the grid convergence index from the values.
+func (s *solved) index(out *record.Study, floor float64) {
+	var h []float64
+	for i := range out.Values {
+		h = append(h, math.Pow(2, float64(i)))
+	}
+	if math.IsNaN(floor) || math.IsInf(floor, 0) {
+		floor = 0
+	}
+	g := gci.Study(h, out.Values, floor)
+	out.Behaviour, out.Order, out.Extrapolated = g.Behaviour, g.Order, g.Extrapolated
+	out.Factor, out.GCI, out.GCIPercent = g.Factor, g.GCI, 100*g.Relative
+}
+
+// studyRun studies a figure of the stress runs, which are made on two grids. A
+// source that jumps is compared with its bare jump on both.
+func (s *solved) studyRun(out *record.Study, f studied) {
+	last := s.stress
+	if s.sharp != nil {
+		last = s.sharp
+		out.Subject += ", bare jump"
+	}
+	for _, run := range []*fdtd.Stress{last, s.second} {
+		out.Values = append(out.Values, f.scale.from(f.figure.pick(run)))
+	}
+	s.index(out, 0)
+	out.Error = math.NaN()
+	out.Uncertainty = f.scale.from(f.spread) - f.scale.from(0)
+	out.Settling = atRest * math.Abs(out.Values[0])
+	out.Grid = atLeast(out.Uncertainty-out.Settling, 0)
+	out.Explained = true
+}
+
+// agreementFigure is the largest difference of the witnesses as a figure, on
+// each grid at its own points.
+func (s *solved) agreementFigure() *measured {
+	found := []float64{s.compared.Found()}
+	for i, c := range s.coarser {
+		found = append(found, compareOn(s.coarseGrids[i], c, 0).Found())
+	}
+	return &measured{
+		levels: len(found),
+		at: func(v view) float64 {
+			if v < 0 {
+				return math.NaN()
+			}
+			return found[v]
+		},
+		spread: func(size errorSize) float64 { return size(&agree.Kind{}) },
+	}
+}
