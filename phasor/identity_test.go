@@ -291,3 +291,29 @@ func TestDecay(t *testing.T) {
 		}
 	}
 }
+
+// TestExtremesAmongCrests: on a line with a little loss the crests differ by
+// less than a coarse scan misses them by, and the largest is still found: not
+// below any of a very fine scan.
+func TestExtremesAmongCrests(t *testing.T) {
+	for _, length := range []float64{1.37, 4.11, 12.03} {
+		c := vacuum(50)
+		c.R = 0.2 // 0.002 Np/m
+		s := solved(t, &network.Network{
+			Frequency: 100e6, Junctions: []string{"a", "b"},
+			Sections: []network.Section{{From: 0, To: 1, Length: length, Line: c}},
+			Source:   network.Source{EMF: 2, Series: network.Series{R: 30}},
+		})
+		hi, lo := s.VoltageExtremes(0)
+		const points = 200000
+		for i := range points + 1 {
+			v := cmplx.Abs(s.Voltage(0, length*float64(i)/points))
+			if v > hi.Value*(1+1e-9) { // the crest is found to the square root of rounding in place, to rounding in size
+				t.Fatalf("%g m: %.9g V at %.4f m, above the largest %.9g at %.4f", length, v, length*float64(i)/points, hi.Value, hi.At)
+			}
+			if v < lo.Value-1e-9*hi.Value {
+				t.Fatalf("%g m: %.9g V at %.4f m, below the smallest %.9g at %.4f", length, v, length*float64(i)/points, lo.Value, lo.At)
+			}
+		}
+	}
+}

@@ -3,6 +3,7 @@ package phasor
 import (
 	"math"
 	"math/cmplx"
+	"slices"
 )
 
 // A Solution is the steady state of a network. All phasors are peak, relative
@@ -59,22 +60,45 @@ func (s *Solution) CurrentExtremes(k int) (largest, smallest Extreme) {
 // extreme is refined; the extremes lie a quarter wavelength apart.
 const scanPerWavelength = 32
 
+// missed is the part of the largest amplitude by which points so far apart may
+// miss a crest, 1 - cos(2 pi/64), or a null, sin(2 pi/64), with some to spare.
+const (
+	missedCrest = 0.006
+	missedNull  = 0.11
+)
+
+// extremes refines every crest and every null that may be the extreme: with
+// loss they differ by less than the points of a scan miss them by.
 func (w wave) extremes(f func(float64) complex128) (largest, smallest Extreme) {
 	n := int(math.Ceil(scanPerWavelength*math.Abs(imag(w.gamma))*w.length/(2*math.Pi))) + 2
 	h := w.length / float64(n)
 	size := func(z float64) float64 { return cmplx.Abs(f(z)) }
-	largest, smallest = Extreme{size(0), 0}, Extreme{size(0), 0}
-	for i := 1; i <= n; i++ {
-		z := float64(i) * h
-		v := size(z)
-		if v > largest.Value {
-			largest = Extreme{v, z}
+	scan := make([]float64, n+1)
+	for i := range scan {
+		scan[i] = size(float64(i) * h)
+	}
+	top, bottom := slices.Max(scan), slices.Min(scan)
+	largest, smallest = Extreme{-1, 0}, Extreme{math.Inf(1), 0}
+	for i, v := range scan {
+		at := Extreme{v, float64(i) * h}
+		if v >= top*(1-missedCrest) && turns(scan, i, 1) {
+			if e := w.sharpen(at, h, 1, size); e.Value > largest.Value {
+				largest = e
+			}
 		}
-		if v < smallest.Value {
-			smallest = Extreme{v, z}
+		if v <= bottom+missedNull*top && turns(scan, i, -1) {
+			if e := w.sharpen(at, h, -1, size); e.Value < smallest.Value {
+				smallest = e
+			}
 		}
 	}
-	return w.sharpen(largest, h, 1, size), w.sharpen(smallest, h, -1, size)
+	return largest, smallest
+}
+
+// turns reports whether point i is not below (sign 1), or not above (sign -1),
+// its neighbours.
+func turns(y []float64, i int, sign float64) bool {
+	return (i == 0 || sign*y[i] >= sign*y[i-1]) && (i == len(y)-1 || sign*y[i] >= sign*y[i+1])
 }
 
 // sharpen moves an extreme found on a grid of step h to its true place by

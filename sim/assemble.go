@@ -14,7 +14,7 @@ import (
 )
 
 // caseRecord writes down a solved case.
-func (s *solved) caseRecord(reqs []record.Requirement) record.Case {
+func (s *solved) caseRecord(reqs []record.Requirement, studies []record.Study) record.Case {
 	c := record.Case{
 		Name:         s.name,
 		Model:        s.model(),
@@ -25,6 +25,7 @@ func (s *solved) caseRecord(reqs []record.Requirement) record.Case {
 		Agreement:    s.agreementRecord(),
 		Grid:         gridRecord(s.net, s.steady.Grid),
 		Requirements: reqs,
+		Convergence:  s.convergence(studies),
 		Profiles:     s.profiles(),
 		Waveforms:    s.waveforms(),
 		Spectrum: record.Spectrum{
@@ -47,32 +48,38 @@ func (s *solved) caseRecord(reqs []record.Requirement) record.Case {
 		c.Grid.Sections[k].Points = len(s.steady.Sections[k].ZV)
 	}
 	c.Ratings = s.ratings()
-	c.Verdict = s.verdict(reqs, c.Ratings)
-	c.Warnings = append(s.warnings(), exceeded(c.Ratings)...)
+	c.Verdict = s.verdict(&c)
+	c.Warnings = append(s.warnings(&c), exceeded(c.Ratings)...)
 	return c
 }
 
-// verdict is the worst of settling, agreement, requirements and ratings.
-func (s *solved) verdict(reqs []record.Requirement, ratings []record.Rating) record.Verdict {
+// verdict is the worst of settling, agreement, validation, requirements,
+// ratings and claims.
+func (s *solved) verdict(c *record.Case) record.Verdict {
 	switch {
 	case !s.steady.Settling.Settled:
 		return record.Unsettle
-	case s.compared.Found() > s.design.Grid.Agreement || !s.compared.Explained():
+	case s.compared.Found() > s.design.Grid.Agreement || !s.compared.Explained() || unexplained(c.Convergence.Studies) > 0:
 		return record.Disagree
 	}
 	var all []record.RequirementVerdict
-	for _, r := range reqs {
+	for _, r := range c.Requirements {
 		all = append(all, r.Verdict)
 	}
-	for _, r := range ratings {
+	for _, r := range c.Ratings {
 		if !r.Advisory {
 			all = append(all, r.Verdict)
 		}
 	}
+	claimed := func(v record.ClaimVerdict) bool {
+		return slices.ContainsFunc(c.Claims, func(c record.Claim) bool { return c.Verdict == v })
+	}
 	switch {
 	case slices.Contains(all, record.MissedReq):
 		return record.Missed
-	case slices.Contains(all, record.NotShownReq):
+	case claimed(record.Contradicted):
+		return record.Doubted
+	case slices.Contains(all, record.NotShownReq), claimed(record.ClaimOpen):
 		return record.NotShown
 	}
 	return record.Verified

@@ -45,7 +45,7 @@ func TestOutcome(t *testing.T) {
 		for i, v := range tt.values {
 			j.values = append(j.values, witnessed{v, []string{phasor, fdtd}[i]})
 		}
-		got := j.record()
+		got := j.record(0)
 		const rounding = 1e-12
 		same := func(a, b float64) bool {
 			return a == b || math.IsNaN(a) && math.IsNaN(b) || math.Abs(a-b) <= rounding*math.Max(1, math.Abs(b))
@@ -115,7 +115,7 @@ func TestDisagreement(t *testing.T) {
 	if err != nil {
 		t.Fatal(err)
 	}
-	if v := c.verdict(nil, nil); v != record.Verified {
+	if v := c.verdict(&record.Case{}); v != record.Verified {
 		t.Fatalf("untouched: %s", v)
 	}
 	section := &c.steady.Sections[2]
@@ -124,16 +124,16 @@ func TestDisagreement(t *testing.T) {
 	if c.compared.Found() > c.design.Grid.Agreement {
 		t.Fatal("the planted error is meant to be inside the limit")
 	}
-	if v := c.verdict(nil, nil); v != record.Disagree {
+	if v := c.verdict(&record.Case{}); v != record.Disagree {
 		t.Errorf("an unexplained difference of 0.2 %%: %s", v)
 	}
 	section.V[7] += complex(0.02*c.compared.Sections[2].Voltage.Scale, 0)
 	c.compare()
-	if v := c.verdict(nil, nil); v != record.Disagree {
+	if v := c.verdict(&record.Case{}); v != record.Disagree {
 		t.Errorf("a difference of 2 %%: %s", v)
 	}
 	c.steady.Settling.Settled = false
-	if v := c.verdict(nil, nil); v != record.Unsettle {
+	if v := c.verdict(&record.Case{}); v != record.Unsettle {
 		t.Errorf("not settled: %s", v)
 	}
 }

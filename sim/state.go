@@ -129,16 +129,28 @@ func gridExtremes(z []float64, p []complex128, beta float64) extremes {
 	for i, v := range p {
 		sq[i] = real(v)*real(v) + imag(v)*imag(v)
 	}
-	hi, lo := 0, 0
+	// Loss, or the place of the points between the crests, decides which crest
+	// is the largest: all are looked at.
+	out := extremes{extreme{0, 0}, extreme{math.Inf(1), 0}}
 	for i := range sq {
-		if sq[i] > sq[hi] {
-			hi = i
+		if turns(sq, i, 1) {
+			if e := crest(z, sq, i, 2*beta, 1); e.value > out.largest.value || i == 0 {
+				out.largest = e
+			}
 		}
-		if sq[i] < sq[lo] {
-			lo = i
+		if turns(sq, i, -1) {
+			if e := crest(z, sq, i, 2*beta, -1); e.value < out.smallest.value {
+				out.smallest = e
+			}
 		}
 	}
-	return extremes{crest(z, sq, hi, 2*beta, 1), crest(z, sq, lo, 2*beta, -1)}
+	return out
+}
+
+// turns reports whether point i is not below (sign 1), or not above (sign -1),
+// its neighbours.
+func turns(sq []float64, i int, sign float64) bool {
+	return (i == 0 || sign*sq[i] >= sign*sq[i-1]) && (i == len(sq)-1 || sign*sq[i] >= sign*sq[i+1])
 }
 
 // widest is the phase of the squared wave, rad, that three points may span for

@@ -48,8 +48,8 @@ func (s *solved) study(f studied) record.Study {
 	}
 	s.index(&out, out.Rounding+settlingFloor*out.Settling)
 	out.Phasor = at(closedForm)
-	out.Form = math.Abs(at(limitOfGrids) - out.Phasor)
-	out.Grid = atLeast(out.GCI, math.Abs(at(gridPredicted)-at(limitOfGrids)))
+	out.Form = atLeast(math.Abs(at(limitOfGrids)-out.Phasor), 0)
+	out.Grid = atLeast(out.GCI, atLeast(math.Abs(at(gridPredicted)-at(limitOfGrids)), 0))
 	out.Error = finest - out.Phasor
 	out.Uncertainty = out.Grid + out.Settling + out.Form + out.Rounding
 	// A figure that is infinite (the VSWR of a total reflection) has no error;
@@ -114,7 +114,8 @@ func (s *solved) studyRun(out *record.Study, f studied) {
 func (s *solved) agreementFigure() *measured {
 	found := []float64{s.compared.Found()}
 	for i, c := range s.coarser {
-		found = append(found, compareOn(s.coarseGrids[i], c, 0).Found())
+		r := compareOn(s.coarseGrids[i], c, 0)
+		found = append(found, r.Found())
 	}
 	return &measured{
 		levels: len(found),

@@ -108,7 +108,8 @@ func newRecord(ctx context.Context, f *design.File, cases []*solved, version str
 		if ctx.Err() != nil {
 			return nil
 		}
-		rc := c.caseRecord(judge(ctx, c, byName))
+		reqs, studies := judge(ctx, c, byName)
+		rc := c.caseRecord(reqs, studies)
 		if rc.Verdict.Rank() > out.Verdict.Rank() {
 			out.Verdict = rc.Verdict
 		}

@@ -10,7 +10,7 @@ import (
 
 // warnings are what a reader of the record must know to trust the numbers no
 // further than they go.
-func (s *solved) warnings() []string {
+func (s *solved) warnings(c *record.Case) []string {
 	var out []string
 	say := func(format string, args ...any) { out = append(out, fmt.Sprintf(format, args...)) }
 	if !s.steady.Settling.Settled {
@@ -18,6 +18,9 @@ func (s *solved) warnings() []string {
 	}
 	if !s.compared.Explained() {
 		say("the methods differ by more than the grid and the settling residual explain")
+	}
+	if n := unexplained(c.Convergence.Studies); n > 0 {
+		say("the error of %d of %d figures is more than the uncertainty that grid, settling, rational forms and rounding give it: see the validation table", n, len(c.Convergence.Studies))
 	}
 	v := largestVoltage
 	if e := s.stress.Edge; e > 0 {
