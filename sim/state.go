@@ -63,12 +63,15 @@ func fdtdState(net *network.Network, s *fdtd.Steady) *state {
 	for _, w := range s.Sections {
 		out.ends = append(out.ends, endPair{{w.VFrom, w.IFrom}, {w.VTo, w.ITo}})
 		k := len(out.ends) - 1
+		l := net.Sections[k].Length
 		beta := imag(net.Sections[k].At(net.Omega()).Propagation(net.Omega()))
-		out.voltage = append(out.voltage, gridExtremes(w.ZV, w.V, beta))
-		// The ends carry the current of the half cells too.
-		z := append(append([]float64{0}, w.ZI...), net.Sections[k].Length)
-		i := append(append([]complex128{w.IFrom}, w.I...), w.ITo)
-		out.current = append(out.current, gridExtremes(z, i, beta))
+		out.voltage = append(out.voltage, gridExtremes(w.ZV, w.V, beta, l))
+		// The ends carry the current of the half cells too: another wave than
+		// that between the centres, which goes on up to them.
+		i := gridExtremes(w.ZI, w.I, beta, l)
+		i.take(extreme{cmplx.Abs(w.IFrom), 0})
+		i.take(extreme{cmplx.Abs(w.ITo), l})
+		out.current = append(out.current, i)
 	}
 	out.chop()
 	return out
@@ -124,27 +127,33 @@ func ratio(v, i complex128) complex128 {
 // square of a standing wave with the phase constant beta is A + B cos 2 beta x +
 // C sin 2 beta x (times what the loss does, which is little from point to
 // point), so three points of it tell the rest.
-func gridExtremes(z []float64, p []complex128, beta float64) extremes {
+func gridExtremes(z []float64, p []complex128, beta, length float64) extremes {
 	sq := make([]float64, len(p))
 	for i, v := range p {
 		sq[i] = real(v)*real(v) + imag(v)*imag(v)
 	}
 	// Loss, or the place of the points between the crests, decides which crest
 	// is the largest: all are looked at.
-	out := extremes{extreme{0, 0}, extreme{math.Inf(1), 0}}
+	out := extremes{extreme{-1, 0}, extreme{math.Inf(1), 0}}
 	for i := range sq {
 		if turns(sq, i, 1) {
-			if e := crest(z, sq, i, 2*beta, 1); e.value > out.largest.value || i == 0 {
-				out.largest = e
-			}
+			out.take(crest(z, sq, i, 2*beta, length, 1))
 		}
 		if turns(sq, i, -1) {
-			if e := crest(z, sq, i, 2*beta, -1); e.value < out.smallest.value {
-				out.smallest = e
-			}
+			out.take(crest(z, sq, i, 2*beta, length, -1))
 		}
 	}
 	return out
+}
+
+// take takes in a value.
+func (e *extremes) take(v extreme) {
+	if v.value > e.largest.value {
+		e.largest = v
+	}
+	if v.value < e.smallest.value {
+		e.smallest = v
+	}
 }
 
 // turns reports whether point i is not below (sign 1), or not above (sign -1),
@@ -158,34 +167,43 @@ func turns(sq []float64, i int, sign float64) bool {
 const widest = 2.5
 
 // crest is the largest (sign 1) or smallest (sign -1) value of the wave through
-// point i and its neighbours, or point i itself: at the ends, and on a record
-// that was thinned too far.
-func crest(z, sq []float64, i int, kappa, sign float64) extreme {
+// three points, next to point i: between its neighbours, of the first and the
+// last point between the other neighbour and the end of the section. On a record that was thinned too
+// far, or that has fewer points, it is point i itself.
+func crest(z, sq []float64, i int, kappa, length, sign float64) extreme {
 	at := extreme{math.Sqrt(sq[i]), z[i]}
-	if i == 0 || i == len(sq)-1 {
+	if len(sq) < 3 {
 		return at
 	}
-	x0, x1 := z[i-1]-z[i], z[i+1]-z[i]
+	m := min(max(i, 1), len(sq)-2) // the middle of the three
+	x0, x1 := z[m-1]-z[m], z[m+1]-z[m]
 	if kappa*(x1-x0) > widest {
 		return at
 	}
-	// sq - sq[i] = B (cos kx - 1) + C sin kx at the two neighbours.
+	// sq - sq[m] = B (cos kx - 1) + C sin kx at the two neighbours.
 	s0, c0 := math.Sincos(kappa * x0)
 	s1, c1 := math.Sincos(kappa * x1)
-	d0, d1 := sq[i-1]-sq[i], sq[i+1]-sq[i]
+	d0, d1 := sq[m-1]-sq[m], sq[m+1]-sq[m]
 	det := (c0-1)*s1 - (c1-1)*s0
 	if det == 0 {
 		return at
 	}
 	b, c := (d0*s1-d1*s0)/det, ((c0-1)*d1-(c1-1)*d0)/det
+	lo, hi := x0, x1
+	switch i {
+	case 0:
+		lo, hi = -z[m], 0
+	case len(sq) - 1:
+		lo, hi = 0, length-z[m]
+	}
 	x := math.Atan2(sign*c, sign*b) / kappa
-	x = math.Max(x0, math.Min(x1, x))
+	x = math.Max(lo, math.Min(hi, x))
 	sin, cos := math.Sincos(kappa * x)
-	v := sq[i] + b*(cos-1) + c*sin
-	if sign*v < sign*sq[i] {
+	v := sq[m] + b*(cos-1) + c*sin
+	if !(sign*v > sign*sq[i]) {
 		return at
 	}
-	return extreme{math.Sqrt(math.Max(0, v)), z[i] + x}
+	return extreme{math.Sqrt(math.Max(0, v)), z[m] + x}
 }
 
 // partVoltage is VA - VB of a part.
