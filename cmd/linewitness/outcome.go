@@ -9,17 +9,18 @@ import (
 )
 
 // writeOutcome writes the short form of a record: the verdict, and for each
-// case the agreement, the settling and the requirements.
+// case the agreement, the settling, the evidence, the requirements and the claims.
 func writeOutcome(w io.Writer, r *record.Record) {
 	fmt.Fprintf(w, "%s: %s\n", heading(r.Design), r.Verdict)
 	for i := range r.Cases {
 		c := &r.Cases[i]
 		fmt.Fprintf(w, "\n%s: %s\n", c.Name, c.Verdict)
-		writeTable(w, [][]string{
+		writeTable(w, append([][]string{
 			{"agreement", agreementText(c.Agreement)},
 			{"settling", settlingText(c.Settling)},
-		})
+		}, evidenceRows(c)...))
 		writeTable(w, requirementRows(c.Requirements))
+		writeTable(w, claimRows(c.Claims))
 		writeTable(w, ratingRows(c.Ratings))
 	}
 	if ws := warnings(r.Cases); len(ws) > 0 {

@@ -2,6 +2,7 @@ package main
 
 import (
 	"math"
+	"math/cmplx"
 	"runtime/debug"
 	"strings"
 	"testing"
@@ -151,16 +152,25 @@ func TestWriteOutcome(t *testing.T) {
 	const want = `Short line (T-1 revision A): not settled
 
 nominal: requirement missed
-  agreement  0.0200 % found, 0.0300 % expected, limit 0.500 %
-  settling   600.0 ns, 60 periods, remaining error 0.00250 %, loop factor 0.2500
+  agreement    0.0200 % found, 0.0300 % expected, limit 0.500 %
+  settling     600.0 ns, 60 periods, remaining error 0.00250 %, loop factor 0.2500
+  convergence  3 figures: 2 converging with order 1.95 to 2.02, 1 on two grids; largest index 0.024 % (R1)
+  validation   every error is explained by its uncertainty, at most 0.41 of it (source_power source)
+  curves       2 curves: largest global difference 0.034, excellent (main, |V| along the section)
   id    quantity             value          limit              margin        uncertainty  verdict
   R1    vswr main, from end  1.750          at most 1.5        -0.2500       0.0010       missed
   R2.1  peak_voltage main    1.900 kV peak  at most 2 kV peak  100.0 V peak  5.0 V        met
   R3    load_power aerial    3.353 dBm      at least 3 dBm     0.35 dB       0.010 dB     met
+  id  quantity                        claimed                   found                     verdict       first slip
+  C1  vswr main, from end             1.750                     1.750                     confirmed
+  C2  input_impedance main, from end  18.68 - j14.84 ohm        36.50 - j61.10 ohm        contradicted  velocity factor left out, every section
+  C3  voltage at mast                 5.000 V rms at 90.00 deg  7.000 V rms at 89.00 deg  contradicted  no single known slip explains it
+  C4  peak_voltage main               1.890 kV peak             1.900 kV peak             not shown
 
 lossless: not settled
-  agreement  0 % found, 0 % expected, limit 0.500 %
-  settling   no steady state: decay of 0 % a round trip
+  agreement    0 % found, 0 % expected, limit 0.500 %
+  settling     no steady state: decay of 0 % a round trip
+  convergence  left out: no steady state
 
 warning: an ideal step
 warning in nominal: mind the gap
@@ -204,14 +214,60 @@ func sampleRecord() *record.Record {
 						Limit: "at least 3 dBm", Margin: 0.353, Uncertainty: 0.01, Verdict: record.Met,
 					},
 				},
+				Convergence: record.Convergence{Studies: []record.Study{
+					{ID: "R1", Behaviour: record.Converging, Order: 1.95, Factor: 1.25, GCIPercent: 0.024, Phasor: 1.75, Error: 1, Uncertainty: 4, Explained: true},
+					{
+						Quantity: "source_power", Subject: "source", Behaviour: record.Converging, Order: 2.02, Factor: 1.25, GCIPercent: 0.01,
+						Phasor: 1, Error: -0.41, Uncertainty: 1, Explained: true,
+					},
+					{ID: "R2", Behaviour: record.TwoGrids, Order: math.NaN(), Phasor: math.NaN(), Explained: true},
+				}},
+				Fidelity: []record.Fidelity{
+					{Subject: "main", Curve: "|V| along the section", GDM: record.Difference{Value: 0.034, Word: "excellent"}},
+					{Subject: "main", Curve: "|I| along the section", GDM: record.Difference{Value: 0.012, Word: "excellent"}},
+					{Subject: "aerial", Curve: "waveform", GDM: record.Difference{Value: math.NaN()}},
+				},
+				Claims:   sampleClaims(),
 				Warnings: []string{"an ideal step", "mind the gap"},
 			},
 			{
 				Name: "lossless", Verdict: record.Unsettle,
 				Agreement: record.Agreement{Limit: 0.005},
 				Settling:  record.Settling{Decay: "decay of 0 % a round trip"},
-				Warnings:  []string{"an ideal step"},
+
+				Convergence: record.Convergence{Skipped: "no steady state"},
+				Warnings:    []string{"an ideal step"},
 			},
 		},
+	}
+}
+
+func sampleClaims() []record.Claim {
+	return []record.Claim{
+		{ID: "C1", Quantity: "vswr", Subject: "main, from end", Unit: "1", Claimed: 1.75, Phasor: 1.75, FDTD: 1.75, Verdict: record.Confirmed},
+		{
+			ID: "C2", Quantity: "input_impedance", Subject: "main, from end", Unit: "ohm", Complex: true, Claimed: 18.68 - 14.84i, Phasor: 36.5 - 61.1i,
+			Verdict: record.Contradicted, Slips: []record.Slip{{Name: "velocity factor left out", Where: "every section"}, {Name: "feet for metres"}},
+		},
+		{
+			ID: "C3", Quantity: "voltage", Subject: "at mast", Unit: "V rms", Complex: true, Claimed: 5i, Phasor: cmplx.Rect(7, 89*math.Pi/180),
+			Verdict: record.Contradicted,
+		},
+		{
+			ID: "C4", Quantity: "peak_voltage", Subject: "main", Unit: "V peak", Claimed: 1890, Phasor: complex(math.NaN(), 0), FDTD: 1900,
+			Verdict: record.ClaimOpen,
+		},
+	}
+}
+
+// An error without an explanation is named, and only so many of them.
+func TestValidationText(t *testing.T) {
+	c := record.Convergence{}
+	for _, id := range []string{"R1", "R2", "", "R4", "R5"} {
+		c.Studies = append(c.Studies, record.Study{ID: id, Quantity: "loss", Phasor: 1, Error: 3, Uncertainty: 2})
+	}
+	const want = "not explained: R1, 1.5 of its uncertainty; R2, 1.5 of its uncertainty; loss, 1.5 of its uncertainty; and 2 more"
+	if got := validationText(c.Tally()); got != want {
+		t.Errorf("got %q, want %q", got, want)
 	}
 }
