@@ -19,11 +19,11 @@ type PowerAudit struct {
 	Dissipated float64 // in all sections and elements
 	InLoads    float64
 	Balance    float64 // Delivered less Dissipated less InLoads
-	Relative   float64 // |Balance| over Delivered
-	Allowed    float64 // what Relative may be
+	Relative   float64 // |Balance| over the larger of Delivered and Dissipated plus InLoads, or over what is allowed where that is larger still
+	Allowed    float64 // what Relative may be; 1 where the network takes no power that can be told from nothing
 	Closed     bool
 	Stored     float64 // J, mean energy stored in sections and lumped parts
-	Q          float64 // w Stored/Delivered
+	Q          float64 // w Stored/Delivered, +Inf where no power can be told from nothing
 }
 
 // SectionPower is the power of one section.
