@@ -21,7 +21,7 @@ func (s *solved) claims(ctx context.Context, b *budget) []record.Claim {
 		steps:  s.grid.grid.StepsPerPeriod,
 		quotes: quotes(s.design),
 		spread: func(r design.Requirement, q quantity) float64 { return s.spreadOf(r, q, b) },
-		timed:  func(r design.Requirement) *timedFigure { return s.timed(r, b) },
+		timed:  s.timed,
 	}
 	var mine []design.Claim
 	for _, c := range s.design.Claims {
@@ -51,11 +51,11 @@ type timedFigure struct {
 
 // timed gives a figure of the stress runs, judged as a requirement of the same
 // quantity would be, or nil for one of the steady state.
-func (s *solved) timed(r design.Requirement, b *budget) *timedFigure {
+func (s *solved) timed(r design.Requirement) *timedFigure {
 	if !timeOnly(r.Quantity) {
 		return nil
 	}
-	j := s.judgements(r, b, nil)[0]
+	j := s.judgements(r, nil)[0]
 	return &timedFigure{j.values[0].value, j.spread, j.note, j.unfinished}
 }
 

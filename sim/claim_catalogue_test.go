@@ -1,9 +1,11 @@
 package sim
 
 import (
+	"math"
 	"testing"
 
 	"linewitness/sim/design"
+	"linewitness/sim/line"
 	"linewitness/sim/network"
 	"linewitness/sim/record"
 	"linewitness/sim/slip"
@@ -102,8 +104,8 @@ func TestReferenceSlips(t *testing.T) {
 		{14, vswrIn, 3.194, slip.OneWayLoss, main},
 		{16, zin, 139.97 - 30.09i, slip.TowardLoad, main},
 		{17, zin, 147.10 + 5.44i, slip.CurrentReflection, ""},
-		{23, vswrEnd, 2.947, slip.OtherEnd, main},
-		{23, vswrIn, 3.494, slip.OtherEnd, main},
+		{23, vswrEnd, 2.947, slip.OtherEnd, "from end of section main"},
+		{23, vswrIn, 3.494, slip.OtherEnd, "to end of section main"},
 		{27, vEnd, 10.464 * 200, slip.RawSpectrum, ""}, // N = 400
 		{27, vEnd, 10.464 * 0.5, slip.HalfSpectrum, ""},
 		{27, vEnd, 10.464 * 0.54, slip.WindowGain, ""},
@@ -116,5 +118,63 @@ func TestReferenceSlips(t *testing.T) {
 		if got.Verdict != record.Contradicted || !firstNamed(got, tt.id, tt.where) {
 			t.Errorf("row %d, %s %v (%s): %s, slips %+v", tt.row, tt.about.Quantity, tt.value, tt.id.Name(), got.Verdict, got.Slips)
 		}
+	}
+}
+
+// stubbed is a lossless line of 50 ohm with a stub in shunt, at a distance in
+// wavelengths from a load of 28 + j18 ohm, that adds the normalised admittance
+// jb. The stub is shorted and shorter than half a wave.
+func stubbed(distance, b float64) *network.Network {
+	f := newFeeder(100e6, 20, 50, "source", "tee", "antenna", "stub end")
+	wave := line.C0 / f.Frequency
+	length := math.Mod(math.Atan2(1, -b)+2*pi, pi) / (2 * pi) // tan(beta l) = -1/b
+	f.line("main", 0, 1, 50, 1, 0, 3*wave).line("tail", 1, 2, 50, 1, 0, distance*wave).line("stub", 1, 3, 50, 1, 0, length*wave)
+	return &f.load("antenna", 2, 28+18i).part("end", network.Load, 3, network.Branch{}).Network
+}
+
+// TestStubSlips: what slips make of a shunt stub that matches 28 + j18 ohm, as
+// computed independently of this program, rows 18 to 22 of the catalogue: at
+// 0.3313 or 0.0235 wavelength the line has y = 1 + j0.7598 or its conjugate, at a
+// quarter wave from there its z is that.
+func TestStubSlips(t *testing.T) {
+	const b = 0.75976
+	vswr := design.Requirement{Quantity: design.VSWR, Section: "main", End: "from"}
+	for _, tt := range []struct {
+		row         int
+		distance, b float64 // of the design
+		value       complex128
+		id          slip.ID
+		where       string
+	}{
+		{18, 0.0813, 1 / b, 1, slip.StubOnImpedance, "section stub"},                  // its impedance is that wanted: the design reads 2.97
+		{18, 0.0813, -b, 1, slip.StubOnImpedance, "stub stub by way of section tail"}, // its admittance is: 4.42
+		{19, 0.3313, -b, 4.06, slip.StubSign, "section stub"},
+		{19, 0.3313, b, 1, slip.StubSign, "section stub"}, // the design itself reads 4.06
+		{20, 0.3313, -b, 3.65, slip.TowardLoad, "section tail"},
+		{20, 0.0235, b, 1.60, slip.TowardLoad, "section tail"},
+		{21, 0.3313, -b, 6.15, slip.ShortForOpen, "load end"},
+		{22, 0.3313, -b, 4.42, slip.StubOnImpedance, "section stub"},
+		{22, 0.3313, -b, 2.97, slip.StubInSeries, "section stub"},
+	} {
+		got := assessOne(t, assessorOf(t, stubbed(tt.distance, tt.b)), claimOf(vswr, tt.value, printedTol))
+		if got.Verdict != record.Contradicted || !firstNamed(got, tt.id, tt.where) {
+			t.Errorf("row %d, %v: %s, %v by phasor, slips %+v", tt.row, tt.value, got.Verdict, got.Phasor, got.Slips)
+		}
+	}
+}
+
+// TestOtherEndOfTheLine: the hilltop feeder without its stub has a VSWR of
+// 1.826 at the transmitter and of 2.102 at the antenna, two sections away
+// (computed independently of this program).
+func TestOtherEndOfTheLine(t *testing.T) {
+	f := newFeeder(98.1e6, 2000, 50, "transmitter", "tee", "antenna")
+	f.line("main", 0, 1, 50, 0.921, 0.007, 120).line("tail", 1, 2, 50, 0.921, 0.007, 0.932).load("antenna", 2, 28+18i)
+	a := assessorOf(t, &f.Network)
+	at := design.Requirement{Quantity: design.VSWR, Section: "tail", End: "to"}
+	if got := assessOne(t, a, claimOf(at, 2.102, printedTol)); got.Verdict != record.Confirmed {
+		t.Errorf("2.102 at the antenna: %s, %v", got.Verdict, got.Phasor)
+	}
+	if got := assessOne(t, a, claimOf(at, 1.826, printedTol)); !firstNamed(got, slip.OtherEnd, "from end of section main") {
+		t.Errorf("1.826 at the antenna: %s, slips %+v", got.Verdict, got.Slips)
 	}
 }

@@ -78,7 +78,7 @@ func claimOf(r design.Requirement, value complex128, part float64) design.Claim 
 		c.Unit = "W"
 	case design.Phase, design.PhaseDifference:
 		c.Unit = "deg"
-		c.Tolerance = part * 57.3 * pi / 180 // of a radian
+		c.Tolerance = part // rad
 	case design.ReturnLoss, design.Loss, design.PowerSplit:
 		c.Unit, c.Level = "dB", true
 	default:
@@ -90,16 +90,7 @@ func claimOf(r design.Requirement, value complex128, part float64) design.Claim 
 // firstNamed reports whether a slip leads the list, or cannot be told from the
 // leader.
 func firstNamed(c record.Claim, id slip.ID, where string) bool {
-	if len(c.Slips) == 0 {
-		return false
-	}
-	want := slip.Slip{ID: id, Where: where}.Label()
-	for _, label := range append([]string{label(c.Slips[0])}, c.Slips[0].Also...) {
-		if label == want {
-			return true
-		}
-	}
-	return false
+	return led(c, slip.Slip{ID: id, Where: where}.Label())
 }
 
 func assessOne(t testing.TB, a *assessor, c design.Claim) record.Claim {

@@ -1,10 +1,12 @@
 package sim
 
 import (
+	"fmt"
 	"math"
 	"math/cmplx"
 
 	"linewitness/sim/design"
+	"linewitness/sim/network"
 	"linewitness/sim/slip"
 )
 
@@ -16,9 +18,7 @@ func (a *assessor) places(c *claimed) []slip.Misreading {
 	}
 	switch {
 	case c.End != "":
-		other := c.Claim
-		other.End = map[string]string{"from": "to", "to": "from"}[c.End]
-		return []slip.Misreading{one(slip.OtherEnd, "section "+c.Section, figureOf(other, a.exact))}
+		return a.otherEnds(c)
 	case c.Quantity == design.LoadPower:
 		return append(a.waves(c),
 			one(slip.AvailableForDelivered, "", complex(a.available(), 0)),
@@ -31,6 +31,34 @@ func (a *assessor) places(c *claimed) []slip.Misreading {
 	}
 	return nil
 }
+
+// otherEnds reads a quantity of a section's end at the other one, and at the
+// ends of sections where one is wont to measure: at the source and at loads.
+func (a *assessor) otherEnds(c *claimed) (out []slip.Misreading) {
+	measured := map[int]bool{a.net.Source.At: true}
+	for _, p := range a.net.Parts {
+		if p.Kind == network.Load {
+			measured[p.A] = true
+		}
+	}
+	for _, s := range a.net.Sections {
+		for end, j := range []int{s.From, s.To} {
+			other := c.Claim
+			other.Section, other.End = s.Name, endNames[end]
+			same := s.Name == c.Section
+			if same && other.End == c.End || !same && !measured[j] {
+				continue
+			}
+			out = append(out, slip.Misreading{
+				Slip:    slip.Slip{ID: slip.OtherEnd, Where: fmt.Sprintf("%s end of section %s", other.End, s.Name), Single: !same},
+				Figures: []complex128{figureOf(other, a.exact)},
+			})
+		}
+	}
+	return out
+}
+
+var endNames = [2]string{"from", "to"}
 
 // available is the available power of the source, W, or what it delivers if
 // that has no limit.

@@ -17,7 +17,7 @@ var catalogue = [slips]entry{
 	SourceForced:           {"matched voltage forced at the source", "Half the EMF stands at the source junction whatever the load, as without a source impedance."},
 	SourceOmitted:          {"source impedance left out", "The EMF stands at the source junction whatever the load."},
 	SourceSign:             {"sign of the source reactance", "The reactance of the source has the other sign."},
-	OtherEnd:               {"read at the other end of the section", "The figure is that of the other end."},
+	OtherEnd:               {"read at another end", "The figure is that of another end of a line."},
 	LoadSign:               {"sign of a load reactance", "The reactance has the other sign, as in the other sign convention."},
 	ResultSign:             {"sign convention of the result", "The figure is the complex conjugate, that of the other sign convention."},
 	MetresForFeet:          {"metres taken for feet", "Length and loss are 0.3048 times as large: the number of metres is used as one of feet."},

@@ -13,6 +13,11 @@ const (
 	OtherEnd
 	LoadSign
 	ResultSign
+	StubOnImpedance
+	StubInSeries
+	StubSign
+	OpenForShort
+	ShortForOpen
 	MetresForFeet
 	FeetForMetres
 	LossUnscaled
@@ -37,11 +42,6 @@ const (
 	HalfTurn
 	AngleInRadians
 	AngleInDegrees
-	OpenForShort
-	ShortForOpen
-	StubOnImpedance
-	StubInSeries
-	StubSign
 	VelocityTwice
 	NeperForDecibel
 	DecibelForNeper

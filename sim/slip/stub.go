@@ -86,7 +86,11 @@ func (c Catalogue) stubs() []Change {
 		}
 		z := c.impedance(t)
 		add(StubInSeries, name, func() *network.Network { return c.inSeries(t, near, z) })
+		// On impedance either the impedance of the stub or its admittance, as a
+		// number without a unit, is added to the impedance of the line, or the
+		// line is read a quarter wave away.
 		z0 := c.reference(t, near)
+		add(StubOnImpedance, name, func() *network.Network { return c.inSeries(t, near, z) })
 		add(StubOnImpedance, name, func() *network.Network { return c.inSeries(t, near, z0*z0/z) })
 		for _, k := range c.beyond(t, near) {
 			add(StubOnImpedance, "stub "+c.Net.Sections[t.section].Name+" by way of section "+c.Net.Sections[k].Name, func() *network.Network {
