@@ -159,7 +159,7 @@ func departureFinding(c *record.Case) string {
 		if len(slow) == 0 {
 			return "not every junction came within 1" + format.Space + "% in the run."
 		}
-		return "not within 1" + format.Space + "% in the run of " + format.SI(c.Stress.Duration, "s") + ": " + among(slow, mostNames) + "."
+		return "not within 1" + format.Space + "% in the run of " + format.SI(c.Stress.Duration, "s") + ": " + among(slow, 3) + "."
 	}
 	text := "every junction within 1" + format.Space + "% " + format.SI(s.To1Percent, "s") + " after switch-on, " + inTrips(s.To1Percent, s.RoundTrip, c.Model.Frequency)
 	if p := shownPlaces(c); len(p) > 1 {

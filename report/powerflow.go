@@ -71,16 +71,22 @@ func gatheredParts(parts []flowPart, most int) []flowPart {
 	if len(parts) <= most {
 		return parts
 	}
-	order := slices.Clone(parts)
-	slices.SortStableFunc(order, func(a, b flowPart) int { return cmp.Compare(b.power, a.power) })
-	least := order[most-1].power
+	order := make([]int, len(parts))
+	for i := range order {
+		order[i] = i
+	}
+	slices.SortStableFunc(order, func(a, b int) int { return cmp.Compare(parts[b].power, parts[a].power) })
+	shown := make([]bool, len(parts))
+	for _, i := range order[:most] {
+		shown[i] = true
+	}
 	var out []flowPart
 	for _, kind := range []string{"section", "element", "load"} {
 		rest, n := flowPart{kind: kind}, 0
-		for _, p := range parts {
+		for i, p := range parts {
 			switch {
 			case p.kind != kind:
-			case p.power >= least:
+			case shown[i]:
 				out = append(out, p)
 			default:
 				rest.power += p.power
