@@ -90,8 +90,12 @@ func powerTable(c *record.Case) sheet.Table {
 		o := sectionPower(f.Sections, i)
 		t.Rows = append(t.Rows, []sheet.Cell{
 			{Text: s.Name, Bold: true},
-			{Text: watts(s.In)}, {Text: watts(s.Out)}, {Text: watts(s.Dissipated)},
-			{Text: watts(o.In)}, {Text: watts(o.Out)}, {Text: watts(o.Dissipated)},
+			{Text: watts(s.In)},
+			{Text: watts(s.Out)},
+			{Text: watts(s.Dissipated)},
+			{Text: watts(o.In)},
+			{Text: watts(o.Out)},
+			{Text: watts(o.Dissipated)},
 			{Text: format.Percent(near.power(s.Dissipated) / whole)},
 		})
 	}
@@ -103,7 +107,12 @@ func powerTable(c *record.Case) sheet.Table {
 			}
 			t.Rows = append(t.Rows, []sheet.Cell{
 				{Text: s.Name + " (" + kind + ")", Bold: true},
-				{}, {}, {Text: watts(s.Power)}, {}, {}, {Text: watts(o)},
+				{},
+				{},
+				{Text: watts(s.Power)},
+				{},
+				{},
+				{Text: watts(o)},
 				{Text: format.Percent(near.power(s.Power) / whole)},
 			})
 		}

@@ -17,8 +17,10 @@ func TestBars(t *testing.T) {
 	long := strings.Repeat("a long name ", 20)
 	for name, list := range map[string][]Bar{
 		"plain": {
-			{Name: "available", To: 10, Text: "10 W"}, {Name: "lost", From: 7, To: 10, Text: "3 W", Fill: Rising},
-			{Name: "choke", From: 6.999, To: 7, Text: "1 mW", Fill: Upright}, {Name: "load", To: 6.999, Text: "6.999 W", Fill: Solid},
+			{Name: "available", To: 10, Text: "10 W"},
+			{Name: "lost", From: 7, To: 10, Text: "3 W", Fill: Rising},
+			{Name: "choke", From: 6.999, To: 7, Text: "1 mW", Fill: Upright},
+			{Name: "load", To: 6.999, Text: "6.999 W", Fill: Solid},
 		},
 		"long":       {{Name: long, To: 10, Text: long, Fill: Falling}, {Name: "b", Text: "c"}, {Name: "d", Text: "e"}},
 		"not finite": {{Name: "a", From: nan, To: inf, Text: "b"}, {Name: "c", From: -3, To: nan, Text: "d"}, {Name: "e", From: 4, To: -inf, Text: "f"}},
