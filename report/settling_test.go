@@ -24,7 +24,7 @@ func textOf(t *testing.T, r *record.Record) string {
 func TestSettlingText(t *testing.T) {
 	all := textOf(t, reporttest.Feeder())
 	for _, s := range []string{
-		"Proof of settling", "from 980.9 ns on (rise 101.9 ns, then a round trip)", "the longest round trip, 879.0 ns; path 439.5 ns",
+		"Proof of settling", "from 980.9 ns on (rise 101.9 ns, then a round trip)", "at least the longest round trip, 879.0 ns; path 439.5 ns",
 		"Loop factor, amplitude a round trip", "0.3501", "0.3500", "837.5 ns", "837.3 ns", "258.1", "258.0",
 		"at most 0.0100 %", "Second and third harmonic", "8.694 µs", "11.53 µs, 1130 periods", "within 203.9 µs",
 		"2 windows in a row", "passed, 2 in a row",

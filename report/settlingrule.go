@@ -45,7 +45,7 @@ func (d *document) ruleRows(c *record.Case, before, last record.SettlingPoint) [
 	tau := measuredTime(s)
 	return []ruleRow{
 		{"Window begins", "from " + format.SI(s.Earliest, "s") + " on (rise " + format.SI(s.Ramp, "s") + ", then a round trip)", none, format.SI(before.Time-period, "s"), format.SI(last.Time-period, "s")},
-		{"Windows compared, apart", "the longest round trip, " + format.SI(s.RoundTrip, "s") + "; path " + format.SI(s.LongPath, "s"), none, format.SI(before.Gap, "s"), format.SI(last.Gap, "s")},
+		{"Windows compared, apart", "at least the longest round trip, " + format.SI(s.RoundTrip, "s") + "; path " + format.SI(s.LongPath, "s"), none, format.SI(before.Gap, "s"), format.SI(last.Gap, "s")},
 		{"Change between them", none, none, format.Percent(before.Change), format.Percent(last.Change)},
 		{"Loop factor, amplitude a round trip", "below 1", format.Number(p.LoopFactor), none, format.Number(s.LoopFactor)},
 		{"Time constant", none, format.SI(p.TimeConstant, "s"), none, format.SI(tau, "s")},
