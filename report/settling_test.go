@@ -195,3 +195,28 @@ func TestTimeRows(t *testing.T) {
 		t.Errorf("rows %+v", rows)
 	}
 }
+
+// The rule says of each of the last two windows whether it passed, and nothing
+// where that was not kept.
+func TestSettlingRule(t *testing.T) {
+	d := &document{r: &record.Record{Design: record.Design{Tolerance: 1e-4, MaxPeriods: 100}}}
+	window := func(time float64, passed bool) record.SettlingPoint {
+		return record.SettlingPoint{Time: time, Passed: passed}
+	}
+	for name, c := range map[string]struct {
+		s    record.Settling
+		want [2]string
+	}{
+		"settled":    {record.Settling{Settled: true, Passes: 2, Curve: []record.SettlingPoint{window(1, false), window(2, true), window(3, true)}}, [2]string{"passed", "passed, 2 in a row"}},
+		"one passed": {record.Settling{Passes: 1, Curve: []record.SettlingPoint{window(1, false), window(2, true)}}, [2]string{"not passed", "passed, 1 in a row"}},
+		"one window": {record.Settling{Curve: []record.SettlingPoint{window(1, false)}}, [2]string{"–", "not passed"}},
+		"none":       {record.Settling{}, [2]string{"–", "–"}},
+		"not kept":   {record.Settling{Settled: true, Curve: []record.SettlingPoint{window(1, false), window(2, false)}}, [2]string{"–", "–"}},
+	} {
+		rows := d.settlingRule(&record.Case{Model: record.Model{Frequency: 1e6}, Settling: c.s}).Rows
+		last := rows[len(rows)-1]
+		if got := [2]string{last[3].Text, last[4].Text}; got != c.want {
+			t.Errorf("%s: %q, want %q", name, got, c.want)
+		}
+	}
+}

@@ -27,8 +27,8 @@ func (d *document) settlingRule(c *record.Case) sheet.Table {
 		{Text: "Every test passed", Bold: true},
 		{Text: format.Plural(passesNeeded, "window") + " in a row"},
 		{Text: format.Missing},
-		passed(before, ""),
-		passed(last, inARow(s)),
+		passed(s, before, ""),
+		passed(s, last, inARow(s)),
 	})
 	return t
 }
@@ -72,9 +72,11 @@ func lastWindows(s record.Settling) (before, last record.SettlingPoint) {
 	return before, last
 }
 
-func passed(p record.SettlingPoint, more string) sheet.Cell {
+// passed says whether a window passed. A settled run without a window that
+// passed is one whose tests were not kept.
+func passed(s record.Settling, p record.SettlingPoint, more string) sheet.Cell {
 	switch {
-	case math.IsNaN(p.Time):
+	case math.IsNaN(p.Time), s.Settled && s.Passes == 0:
 		return sheet.Cell{Text: format.Missing}
 	case p.Passed:
 		return sheet.Cell{Text: "passed" + more}
