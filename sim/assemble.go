@@ -1,7 +1,7 @@
 package sim
 
 import (
-	"fmt"
+	"context"
 	"math"
 	"math/cmplx"
 	"slices"
@@ -13,8 +13,8 @@ import (
 	"linewitness/sim/record"
 )
 
-// caseRecord writes down a solved case.
-func (s *solved) caseRecord(reqs []record.Requirement, studies []record.Study) record.Case {
+// caseRecord writes down a solved case; the claims are cut short if ctx ends.
+func (s *solved) caseRecord(ctx context.Context, reqs []record.Requirement, studies []record.Study) record.Case {
 	c := record.Case{
 		Name:         s.name,
 		Model:        s.model(),
@@ -47,6 +47,9 @@ func (s *solved) caseRecord(reqs []record.Requirement, studies []record.Study) r
 	for k := range c.Grid.Sections {
 		c.Grid.Sections[k].Points = len(s.steady.Sections[k].ZV)
 	}
+	c.Power = s.power()
+	c.Claims = s.claims(ctx, newBudget(s.net, &s.compared))
+	c.Fidelity = s.fidelity()
 	c.Ratings = s.ratings()
 	c.Verdict = s.verdict(&c)
 	c.Warnings = append(s.warnings(&c), exceeded(c.Ratings)...)
@@ -59,7 +62,7 @@ func (s *solved) verdict(c *record.Case) record.Verdict {
 	switch {
 	case !s.steady.Settling.Settled:
 		return record.Unsettle
-	case s.compared.Found() > s.design.Grid.Agreement || !s.compared.Explained() || unexplained(c.Convergence.Studies) > 0:
+	case s.compared.Found() > s.design.Grid.Agreement || !s.compared.Explained() || unexplained(c.Convergence.Studies) > 0, open(c.Power):
 		return record.Disagree
 	}
 	var all []record.RequirementVerdict
@@ -83,6 +86,12 @@ func (s *solved) verdict(c *record.Case) record.Verdict {
 		return record.NotShown
 	}
 	return record.Verified
+}
+
+// open reports whether a power balance does not close. One that was not made
+// does not count.
+func open(p record.Power) bool {
+	return p.Phasor.Delivered != 0 && !p.Phasor.Closed || p.FDTD.Delivered != 0 && !p.FDTD.Closed
 }
 
 func (s *solved) steadyRecord(st *state) record.Steady {
@@ -120,40 +129,6 @@ func (s *state) end(k, e int, z0 complex128) record.End {
 	t := s.ends[k][e]
 	g := reflectionAt(s, k, e, z0)
 	return record.End{V: t.v, I: t.i, Impedance: ratio(t.v, t.i), Reflection: g, VSWR: vswrOf(g)}
-}
-
-func (s *solved) settlingRecord() record.Settling {
-	f := s.steady.Settling
-	out := record.Settling{
-		Settled: f.Settled, Time: f.Time, Periods: f.Periods,
-		Residual: f.Residual, LoopFactor: f.LoopFactor,
-		LongPath: f.LongPath, RoundTrip: 2 * f.LongPath,
-		Ramp: fdtd.RampPeriods * s.net.Period(),
-		Mean: f.Mean, Harmonic: f.Harmonic,
-		To1Percent: s.stress.SettleTime(-1, 0.01),
-	}
-	for _, c := range f.Curve {
-		out.Curve = append(out.Curve, record.SettlingPoint{Time: c.Time, Change: c.Change, Estimate: c.Estimate})
-	}
-	if !f.Settled {
-		out.Decay = decayText(f)
-	}
-	return out
-}
-
-// decayText says what an unsettled run measured.
-func decayText(f fdtd.Settling) string {
-	if len(f.Curve) == 0 {
-		return fmt.Sprintf("the cap of %d periods ended the run before two windows one longest round trip (%.3g us) apart could be compared",
-			f.Periods, 2*f.LongPath*1e6)
-	}
-	last := f.Curve[len(f.Curve)-1]
-	if f.LoopFactor <= 0 || f.LoopFactor >= 1 {
-		return fmt.Sprintf("after %d periods the phasors still change by %.2g of their largest every %.3g us, and the change does not fall",
-			f.Periods, last.Change, last.Gap*1e6)
-	}
-	return fmt.Sprintf("after %d periods the phasors still change by %.2g of their largest every %.3g us; each longest round trip (%.3g us) keeps %.4g of the amplitude",
-		f.Periods, last.Change, last.Gap*1e6, 2*f.LongPath*1e6, f.LoopFactor)
 }
 
 func (s *solved) stressRecord() record.Stress {
@@ -252,22 +227,38 @@ func (s *solved) phase() float64 {
 	return s.net.Source.Start.Phase
 }
 
-func (s *solved) waveforms() []record.Waveform {
+// A probe is a quantity whose waveform is kept.
+type probe struct {
+	trace             fdtd.Trace
+	phasor            complex128 // of the closed form
+	name, where, unit string
+}
+
+// probes are the source, the junctions and the loads.
+func (s *solved) probes() []probe {
 	t, src := s.stress.Traces, s.net.Source
 	name := s.net.Junctions[src.At]
-	out := []record.Waveform{
-		s.waveform(t.Junctions[src.At], s.exact.junctions[src.At], "source voltage", name, "V"),
-		s.waveform(t.Source, s.exact.source, "source current", name, "A"),
+	out := []probe{
+		{t.Junctions[src.At], s.exact.junctions[src.At], "source voltage", name, "V"},
+		{t.Source, s.exact.source, "source current", name, "A"},
 	}
 	for j, n := range s.net.Junctions[:s.net.NamedJunctions()] {
 		if j != src.At {
-			out = append(out, s.waveform(t.Junctions[j], s.exact.junctions[j], n+" voltage", n, "V"))
+			out = append(out, probe{t.Junctions[j], s.exact.junctions[j], n + " voltage", n, "V"})
 		}
 	}
 	for p, part := range s.net.Parts {
 		if part.Kind == network.Load && !s.net.Branches[part.Branches[0]].Open {
-			out = append(out, s.waveform(s.partTrace(p), s.exact.partCurrent(p), part.Name+" current", part.Name, "A"))
+			out = append(out, probe{s.partTrace(p), s.exact.partCurrent(p), part.Name + " current", part.Name, "A"})
 		}
+	}
+	return out
+}
+
+func (s *solved) waveforms() []record.Waveform {
+	var out []record.Waveform
+	for _, p := range s.probes() {
+		out = append(out, s.waveform(p))
 	}
 	return out
 }
@@ -282,22 +273,27 @@ func (s *solved) partTrace(p int) fdtd.Trace {
 	return sum
 }
 
-func (s *solved) waveform(t fdtd.Trace, p complex128, name, where, unit string) record.Waveform {
-	dt := s.stress.Traces.Step
-	// At mixes the lanes; a fixed start phase is in its one lane already.
-	whole, tail := t.At(s.phase())
+// shown is a trace at the start phase that is shown. At mixes the lanes; a fixed
+// start phase is in its one lane already.
+func (s *solved) shown(t fdtd.Trace) (whole, tail []float64) {
 	if !s.stress.Worst {
-		whole, tail = t.A, t.Tail
+		return t.A, t.Tail
 	}
+	return t.At(s.phase())
+}
+
+func (s *solved) waveform(p probe) record.Waveform {
+	t, dt := p.trace, s.stress.Traces.Step
+	whole, tail := s.shown(t)
 	quantity := "voltage"
-	if unit == "A" {
+	if p.unit == "A" {
 		quantity = "current"
 	}
 	return record.Waveform{
-		Name: name, Where: where, Quantity: quantity, Unit: unit, Steady: cmplx.Abs(p),
+		Name: p.name, Where: p.where, Quantity: quantity, Unit: p.unit, Steady: cmplx.Abs(p.phasor),
 		Start: (float64(s.stress.Traces.First) - t.Early) * dt, Step: dt, Samples: whole,
 		Tail: record.Tail{
-			Start: s.tailStart(t), Step: dt, Samples: tail, Phasor: s.tailPhasor(t, p),
+			Start: s.tailStart(t), Step: dt, Samples: tail, Phasor: s.steadyWave(p.phasor, s.tailStart(t), len(tail)),
 		},
 	}
 }
@@ -306,10 +302,9 @@ func (s *solved) tailStart(t fdtd.Trace) float64 {
 	return (float64(s.stress.Traces.TailEnd-len(t.Tail)+1) - t.Early) * s.stress.Traces.Step
 }
 
-// tailPhasor is Re(p e^{j(wt + phase)}) at the samples of the tail.
-func (s *solved) tailPhasor(t fdtd.Trace, p complex128) []float64 {
-	out := make([]float64, len(t.Tail))
-	start := s.tailStart(t)
+// steadyWave is Re(p e^{j(wt + phase)}) at n samples from a start, s, on.
+func (s *solved) steadyWave(p complex128, start float64, n int) []float64 {
+	out := make([]float64, n)
 	for i := range out {
 		at := start + float64(i)*s.stress.Traces.Step
 		out[i] = real(p * cmplx.Rect(1, s.net.Omega()*at+s.phase()))

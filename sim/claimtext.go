@@ -125,8 +125,7 @@ func (c *claimed) turned(r record.Claim) string {
 	if !angular(c.Quantity) || math.Abs(real(c.Value)) <= pi*(1+1e-9) {
 		return ""
 	}
-	at := real(r.Claimed)
-	return fmt.Sprintf("An angle of %.6g deg is the same as one of %.6g deg.", at, math.Remainder(at, 360))
+	return fmt.Sprintf("%s is the same angle as %.4g deg.", c.Of, math.Remainder(real(r.Claimed), 360))
 }
 
 // open says why a claim is neither confirmed nor contradicted.

@@ -10,10 +10,13 @@ import (
 
 // A measured is a figure of the steady state, in SI units.
 type measured struct {
-	at     func(view) float64             // what a view makes of it
-	spread func(size errorSize) float64   // how far it may be off for errors of the phasors of that size
-	levels int                            // how many grids have it
-	pick   func(run *fdtd.Stress) float64 // of the time domain only: then the fields above are not there
+	at     func(view) float64           // what a view makes of it
+	spread func(size errorSize) float64 // how far it may be off for errors of the phasors of that size
+	levels int                          // how many grids have it
+	// difference is set for a figure that is a difference of the witnesses
+	// itself: it is known as it is on its grid, and falls to nothing with it.
+	difference bool
+	pick       func(run *fdtd.Stress) float64 // of the time domain only: then the fields above are not there
 }
 
 // An errorSize is the error of the phasors of one kind on a section, relative

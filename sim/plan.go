@@ -24,6 +24,7 @@ type Plan struct {
 type PlanCase struct {
 	Name          string
 	Grid          record.Grid // Updates is the predicted number
+	Grids         []int       // steps per period of the grids of the convergence study, finest first
 	Cells         int         // of all sections
 	LongPath      float64     // s, longest one-way path
 	Rate          float64     // 1/s, decay of the slowest natural mode near the source frequency; NaN if it was not predicted

@@ -68,8 +68,13 @@ func (p *planned) predict() {
 		LoopFactor:    math.Exp(-rate * 2 * path),
 		ExpectedError: p.grids[0].error,
 	}
+	for i, g := range p.grids {
+		if i == 0 || p.study {
+			p.plan.Grids = append(p.plan.Grids, g.grid.StepsPerPeriod)
+		}
+	}
 	limit := p.design.Grid.MaxPeriods
-	p.plan.SettlePeriods = min(limit, p.settlePeriods(rate, path))
+	p.plan.SettlePeriods = min(limit, settlePeriods(p.net, p.design.Grid.SettleTolerance, rate, path))
 	p.plan.StressPeriods = min(limit, p.stressPeriods(rate, path))
 	if p.plan.SettlePeriods == limit {
 		p.plan.Warnings = append(p.plan.Warnings, fmt.Sprintf(
@@ -159,12 +164,11 @@ func relaxations(s network.Section) int {
 
 // settlePeriods predicts the settling run: the rule of fdtd.Settle with
 // changes that fall as e^{-rate t} after the ramp.
-func (p *planned) settlePeriods(rate, path float64) int {
-	t := p.net.Period()
-	tol := p.design.Grid.SettleTolerance
+func settlePeriods(net *network.Network, tolerance, rate, path float64) int {
+	t := net.Period()
 	trip := math.Max(1, math.Ceil(2*path/t-1e-9))
 	least := math.Max(fdtd.RampPeriods+trip+1, 4*trip)
-	decay := math.Log(1/tol) / rate / t
+	decay := math.Log(1/tolerance) / rate / t
 	if math.IsNaN(decay) { // not predicted
 		decay = 20 * trip
 	}

@@ -98,6 +98,7 @@ func newRecord(ctx context.Context, f *design.File, cases []*solved, version str
 			PreparedBy: r.PreparedBy, CheckedBy: r.CheckedBy, ApprovedBy: r.ApprovedBy,
 			Notes: r.Notes, Date: r.Date,
 			File: filepath.Base(f.Name), SHA256: f.SHA256, Source: f.Source,
+			FSVChoices: choices(),
 			Convention: conventionName(f.Nominal.Convention),
 			Agreement:  f.Nominal.Grid.Agreement,
 			Tolerance:  f.Nominal.Grid.SettleTolerance, MaxPeriods: f.Nominal.Grid.MaxPeriods,
@@ -109,12 +110,13 @@ func newRecord(ctx context.Context, f *design.File, cases []*solved, version str
 			return nil
 		}
 		reqs, studies := judge(ctx, c, byName)
-		rc := c.caseRecord(reqs, studies)
+		rc := c.caseRecord(ctx, reqs, studies)
 		if rc.Verdict.Rank() > out.Verdict.Rank() {
 			out.Verdict = rc.Verdict
 		}
 		out.Cases = append(out.Cases, rc)
 	}
+	out.Matrix = matrix(out.Cases)
 	return out
 }
 

@@ -14,13 +14,21 @@ func (s *solved) warnings(c *record.Case) []string {
 	var out []string
 	say := func(format string, args ...any) { out = append(out, fmt.Sprintf(format, args...)) }
 	if !s.steady.Settling.Settled {
-		say("steady state was not reached: %s", decayText(s.steady.Settling))
+		say("steady state was not reached: %s", s.decayText())
 	}
 	if !s.compared.Explained() {
 		say("the methods differ by more than the grid and the settling residual explain")
 	}
 	if n := unexplained(c.Convergence.Studies); n > 0 {
 		say("the error of %d of %d figures is more than the uncertainty that grid, settling, rational forms and rounding give it: see the validation table", n, len(c.Convergence.Studies))
+	}
+	for _, a := range []struct {
+		who   string
+		audit record.PowerAudit
+	}{{"the closed form", c.Power.Phasor}, {"the time domain", c.Power.FDTD}} {
+		if a.audit.Delivered != 0 && !a.audit.Closed {
+			say("the power balance of %s does not close: %.2g of what is delivered is left over, %.2g may be", a.who, a.audit.Relative, a.audit.Allowed)
+		}
 	}
 	v := largestVoltage
 	if e := s.stress.Edge; e > 0 {

@@ -15,6 +15,9 @@ time-domain runs of every case, and solves nothing.
 
   linewitness plan DESIGN        - is standard input
 
+      --grids N              grids of the convergence study, 3 or 1  (default 3)
+  -h, --help                 this text
+
 verify refuses a case that is over the bounds on work and memory; plan shows it.
 The time is for one core at a nominal rate of cell updates.
 
@@ -23,7 +26,8 @@ Example:
 `
 
 func (a *app) planCommand() *cobra.Command {
-	return &cobra.Command{
+	grids := newGrids()
+	cmd := &cobra.Command{
 		Use:               "plan DESIGN",
 		Short:             "the grid and the predicted cost",
 		Long:              planHelp,
@@ -34,7 +38,7 @@ func (a *app) planCommand() *cobra.Command {
 			if err != nil {
 				return err
 			}
-			plan, err := sim.MakePlan(cmd.Context(), file, sim.DefaultGrids)
+			plan, err := sim.MakePlan(cmd.Context(), file, gridCount(grids))
 			if err != nil {
 				return verifyError(file.Name, err)
 			}
@@ -42,6 +46,8 @@ func (a *app) planCommand() *cobra.Command {
 			return nil
 		},
 	}
+	addGrids(cmd, grids)
+	return cmd
 }
 
 func writePlan(w io.Writer, plan *sim.Plan) {
@@ -58,6 +64,7 @@ func writePlanCase(w io.Writer, c *sim.PlanCase) {
 	writeTable(w, gridRows(c))
 	writeTable(w, [][]string{
 		{"step", fmt.Sprintf("%s, %d a period", inSI(c.Grid.Step, "s"), c.Grid.StepsPerPeriod)},
+		{"grids", gridsText(c.Grids)},
 		{"longest path", inSI(c.LongPath, "s")},
 		{"loop factor", plainNumber(c.LoopFactor) + " a round trip"},
 		{"settling run", counted(c.SettlePeriods, "period")},

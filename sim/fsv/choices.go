@@ -57,6 +57,7 @@ type method struct {
 	dcBins, breakOffset, halfWidth, loSpan, hiSpan int
 	breakShare                                     float64
 	sumOfSquares, offsetTerm                       bool
+	floor                                          float64 // see CurvesAbove
 }
 
 var chosen = method{

@@ -41,7 +41,13 @@ func Compare(x1, y1, x2, y2 []float64) (Result, error) {
 // Curves compares curves that have their evenly spaced abscissae in common. It
 // gives an error for curves of different lengths, of fewer than 16 points or
 // with values that are not finite.
-func Curves(y1, y2 []float64) (Result, error) {
+func Curves(y1, y2 []float64) (Result, error) { return CurvesAbove(y1, y2, 0) }
+
+// CurvesAbove is Curves without the bins of the Fourier transform that are no
+// larger, in both curves, than a part floor of the largest of either. A curve
+// that is known to floor only, as a waveform that is near its steady state, has
+// no features below it, and what is there would be compared with itself.
+func CurvesAbove(y1, y2 []float64, floor float64) (Result, error) {
 	if len(y1) != len(y2) {
 		return Result{}, fmt.Errorf("the curves have %d and %d points; give their abscissae", len(y1), len(y2))
 	}
@@ -49,7 +55,9 @@ func Curves(y1, y2 []float64) (Result, error) {
 		return Result{}, err
 	}
 	n := points(len(y1))
-	return chosen.compare(thin(y1, n), thin(y2, n)), nil
+	m := chosen
+	m.floor = floor
+	return m.compare(thin(y1, n), thin(y2, n)), nil
 }
 
 // compare compares two curves of equal length, which it scales.

@@ -138,3 +138,31 @@ func TestChoicesMatter(t *testing.T) {
 		}
 	}
 }
+
+// TestFloor: noise beside a sinusoid is a feature until it is below the floor;
+// a difference above the floor counts as before.
+func TestFloor(t *testing.T) {
+	pure, noisy := make([]float64, 512), make([]float64, 512)
+	for i := range pure {
+		x := 2 * math.Pi * float64(i) / 512
+		pure[i] = math.Sin(16 * x)
+		noisy[i] = pure[i] + 1e-4*math.Sin(97*x)
+	}
+	above := func(y1, y2 []float64, floor float64) float64 {
+		r, err := CurvesAbove(y1, y2, floor)
+		if err != nil {
+			t.Fatal(err)
+		}
+		return r.GDM.Value
+	}
+	if got := above(pure, noisy, 0); got < 0.1 {
+		t.Errorf("noise compared with nothing: GDM %.3g", got)
+	}
+	if got := above(pure, noisy, 1e-3); got > identityTolerance {
+		t.Errorf("noise below the floor: GDM %.3g", got)
+	}
+	larger := apply(pure, times(1.2))
+	if a, b := above(pure, larger, 0), above(pure, larger, 1e-3); math.Abs(a-b) > identityTolerance || a < 0.05 {
+		t.Errorf("a larger curve: GDM %.6g and %.6g", a, b)
+	}
+}

@@ -23,19 +23,19 @@ const rounding = 1e-12
 func (m *method) split(y1, y2 []float64) (p1, p2 parts) {
 	fft := fourier.NewFFT(len(y1))
 	c1, c2 := fft.Coefficients(nil, y1), fft.Coefficients(nil, y2)
-	clean(c1, c2)
+	clean(c1, c2, math.Max(rounding, m.floor))
 	window := m.window(len(c1), m.breakPoint(c1, c2))
 	return m.apart(fft, c1, window), m.apart(fft, c2, window)
 }
 
-// clean empties the bins that hold nothing but rounding in both.
-func clean(c1, c2 []complex128) {
+// clean empties the bins that are no larger than a part of the largest in both.
+func clean(c1, c2 []complex128, part float64) {
 	top := 0.0
 	for k := range c1 {
 		top = math.Max(top, math.Max(cmplx.Abs(c1[k]), cmplx.Abs(c2[k])))
 	}
 	for k := range c1 {
-		if math.Max(cmplx.Abs(c1[k]), cmplx.Abs(c2[k])) <= rounding*top {
+		if math.Max(cmplx.Abs(c1[k]), cmplx.Abs(c2[k])) <= part*top {
 			c1[k], c2[k] = 0, 0
 		}
 	}
