@@ -146,8 +146,8 @@ func TestStubSlips(t *testing.T) {
 		id          slip.ID
 		where       string
 	}{
-		{18, 0.0813, 1 / b, 1, slip.StubOnImpedance, "section stub"},                  // its impedance is that wanted: the design reads 2.97
-		{18, 0.0813, -b, 1, slip.StubOnImpedance, "stub stub by way of section tail"}, // its admittance is: 4.42
+		{18, 0.0813, 1 / b, 1, slip.StubOnImpedance, "section stub"},                     // its impedance is that wanted: the design reads 2.97
+		{18, 0.0813, -b, 1, slip.StubOnImpedance, "section stub by way of section tail"}, // its admittance is: 4.42
 		{19, 0.3313, -b, 4.06, slip.StubSign, "section stub"},
 		{19, 0.3313, b, 1, slip.StubSign, "section stub"}, // the design itself reads 4.06
 		{20, 0.3313, -b, 3.65, slip.TowardLoad, "section tail"},

@@ -44,7 +44,9 @@ func (e *explanation) slips(i int) []record.Slip {
 	var leaders []*candidate
 	for _, k := range mine {
 		if l := slices.IndexFunc(leaders, func(l *candidate) bool { return e.alike(l, k) }); l >= 0 {
-			out[l].Also = append(out[l].Also, k.Label())
+			if also := k.Label(); also != leaders[l].Label() && !slices.Contains(out[l].Also, also) {
+				out[l].Also = append(out[l].Also, also)
+			}
 			continue
 		}
 		if len(leaders) < mostSlips {

@@ -9,9 +9,7 @@ import (
 	"slices"
 
 	"linewitness/phasor"
-	"linewitness/sim/design"
 	"linewitness/sim/line"
-	"linewitness/sim/network"
 	"linewitness/sim/record"
 	"linewitness/sim/slip"
 )
@@ -157,50 +155,13 @@ func (a *assessor) valuer(change slip.Change) func(*claimed) (v complex128, ok b
 	if err != nil {
 		return nil
 	}
-	ends := terminalState(n, solution)
-	var whole *state // with the crests along sections, which take far longer
+	st := shortState(n, solution)
 	return func(c *claimed) (complex128, bool) {
-		switch {
-		case c.timed != nil, change.Reflected && !reflective(c.Quantity):
+		if c.timed != nil || change.Reflected && !reflective(c.Quantity) {
 			return 0, false
-		case !crested(c.Requirement):
-			return figureOf(c.Claim, ends), true
-		case whole == nil:
-			whole = phasorState(n, solution)
 		}
-		return figureOf(c.Claim, whole), true
+		return figureOf(c.Claim, st), true
 	}
-}
-
-// crested reports whether a quantity is the largest along sections.
-func crested(r design.Requirement) bool {
-	return r.At == "" && (r.Quantity == design.SteadyVoltage || r.Quantity == design.SteadyCurrent)
-}
-
-// terminalState is the state of a solution at the ends of sections only. The
-// larger of two ends stands for the crest between them.
-func terminalState(net *network.Network, s *phasor.Solution) *state {
-	out := &state{net: net, source: s.Source()}
-	for j := range net.Junctions {
-		out.junctions = append(out.junctions, s.Junction(j))
-	}
-	for b := range net.Branches {
-		out.branches = append(out.branches, s.Branch(b))
-	}
-	for k, sec := range net.Sections {
-		e := endPair{
-			{s.Voltage(k, 0), s.Current(k, 0)},
-			{s.Voltage(k, sec.Length), s.Current(k, sec.Length)},
-		}
-		larger := func(a, b complex128) extremes {
-			return extremes{largest: extreme{value: math.Max(cmplx.Abs(a), cmplx.Abs(b))}}
-		}
-		out.ends = append(out.ends, e)
-		out.voltage = append(out.voltage, larger(e[0].v, e[1].v))
-		out.current = append(out.current, larger(e[0].i, e[1].i))
-	}
-	out.chop()
-	return out
 }
 
 // solveWork bounds what is spent on changed networks: the sum of the cubes of
@@ -250,7 +211,7 @@ func (a *assessor) weight(e *explanation, k int) float64 {
 	if err != nil {
 		return 0
 	}
-	st := terminalState(&n, solution)
+	st := shortState(&n, solution)
 	sum := 0.0
 	for _, c := range e.claims {
 		if !doubted(c) || c.timed != nil {

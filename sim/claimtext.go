@@ -4,6 +4,8 @@ import (
 	"fmt"
 	"math"
 	"math/cmplx"
+	"strconv"
+	"strings"
 
 	"linewitness/sim/design"
 	"linewitness/sim/record"
@@ -54,26 +56,62 @@ func (c *claimed) slip(k *candidate, v complex128) record.Slip {
 	}
 }
 
-// words is a figure with the claim's unit, to four figures.
+// words is a figure in the claim's unit, to four figures.
 func (c *claimed) words(in complex128) string {
-	unit := scaleFor(c.Unit).unit
-	if unit == "1" {
-		unit = ""
-	} else {
-		unit = " " + unit
-	}
-	if !c.Complex {
-		return fmt.Sprintf("%.4g%s", real(in), unit)
-	}
-	switch c.Quantity {
-	case design.InputImpedance:
+	size := cmplx.Abs(in)
+	factor, unit := prefixed(scaleFor(c.Unit).unit, size)
+	switch {
+	case !c.Complex:
+		return figures(real(in)/factor, 4) + unit
+	case c.Quantity == design.InputImpedance:
 		sign := "+"
 		if math.Signbit(imag(in)) {
 			sign = "-"
 		}
-		return fmt.Sprintf("%.4g %s j%.4g%s", real(in), sign, math.Abs(imag(in)), unit)
+		return fmt.Sprintf("%s %s j%s%s", figures(real(in)/factor, 4), sign, figures(math.Abs(imag(in))/factor, 4), unit)
 	}
-	return fmt.Sprintf("%.4g%s at %.4g deg", cmplx.Abs(in), unit, cmplx.Phase(in)*180/pi)
+	return fmt.Sprintf("%s%s at %s deg", figures(size/factor, 4), unit, figures(cmplx.Phase(in)*180/pi, 4))
+}
+
+// size is a difference in the claim's unit, to three figures.
+func (c *claimed) size(d float64) string {
+	unit := scaleFor(c.Unit).unit
+	if unit == "dBm" {
+		unit = "dB"
+	}
+	factor, unit := prefixed(unit, d)
+	return figures(d/factor, 3) + unit
+}
+
+// figures is a number rounded to n figures, without an exponent where it has
+// no more than six digits before or after the point.
+func figures(v float64, n int) string {
+	text := strconv.FormatFloat(v, 'g', n, 64)
+	rounded, err := strconv.ParseFloat(text, 64)
+	if size := math.Abs(v); err != nil || size >= 1e6 || size < 1e-6 {
+		return text
+	}
+	return strconv.FormatFloat(rounded, 'f', -1, 64)
+}
+
+// prefixed is the prefix of a unit, as a factor, that suits a size, and the unit
+// with it and a space before, or nothing for a plain number.
+func prefixed(unit string, size float64) (factor float64, with string) {
+	switch {
+	case unit == "1":
+		return 1, ""
+	case unit != "W" && unit != "s" && unit != "ohm" && !strings.HasPrefix(unit, "V ") && !strings.HasPrefix(unit, "A "):
+		return 1, " " + unit // levels, angles and parts of a whole have none
+	}
+	for _, p := range []struct {
+		factor float64
+		name   string
+	}{{1e6, "M"}, {1e3, "k"}, {1, ""}, {1e-3, "m"}, {1e-6, "u"}, {1e-9, "n"}} {
+		if size >= p.factor && !math.IsInf(size, 0) {
+			return p.factor, " " + p.name + unit
+		}
+	}
+	return 1, " " + unit
 }
 
 // finding is what was found of a claim, in a sentence or two; nothing of one
@@ -108,24 +146,13 @@ func label(s record.Slip) string {
 	return s.Name + ", " + s.Where
 }
 
-// size is a difference with its unit.
-func (c *claimed) size(d float64) string {
-	unit := scaleFor(c.Unit).unit
-	switch unit {
-	case "1":
-		return fmt.Sprintf("%.3g", d)
-	case "dBm":
-		unit = "dB"
-	}
-	return fmt.Sprintf("%.3g %s", d, unit)
-}
-
 // turned says of a confirmed angle that the record gives it a turn away.
 func (c *claimed) turned(r record.Claim) string {
 	if !angular(c.Quantity) || math.Abs(real(c.Value)) <= pi*(1+1e-9) {
 		return ""
 	}
-	return fmt.Sprintf("%s is the same angle as %.4g deg.", c.Of, math.Remainder(real(r.Claimed), 360))
+	at := real(r.Claimed)
+	return fmt.Sprintf("An angle of %.6g deg is the same as one of %.6g deg.", at, math.Remainder(at, 360))
 }
 
 // open says why a claim is neither confirmed nor contradicted.

@@ -93,7 +93,7 @@ func (c Catalogue) stubs() []Change {
 		add(StubOnImpedance, name, func() *network.Network { return c.inSeries(t, near, z) })
 		add(StubOnImpedance, name, func() *network.Network { return c.inSeries(t, near, z0*z0/z) })
 		for _, k := range c.beyond(t, near) {
-			add(StubOnImpedance, "stub "+c.Net.Sections[t.section].Name+" by way of section "+c.Net.Sections[k].Name, func() *network.Network {
+			add(StubOnImpedance, name+" by way of section "+c.Net.Sections[k].Name, func() *network.Network {
 				return c.with([]int{k}, func(k int) wave {
 					w := waveOf(c.Net.Sections[k], c.Net.Omega())
 					return w.turned(w.beta + math.Pi/2)
