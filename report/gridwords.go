@@ -96,11 +96,11 @@ func validationFinding(v *record.Convergence) string {
 		if t.Nearest.Ratio() == 0 {
 			return s + ": there is none."
 		}
-		return s + ": the largest |E|/u of " + format.Plural(int64(t.Compared), "figure") + " is " + format.Digits(t.Nearest.Ratio(), 2) + ", of " + cited(t.Nearest) + "."
+		return s + ": the largest |E|/u of " + format.Plural(int64(t.Compared), "figure") + " is " + format.Ratio(t.Nearest.Ratio()) + ", of " + cited(t.Nearest) + "."
 	}
 	var names []string
 	for i := range t.Open {
-		names = append(names, cited(&t.Open[i])+" (|E|/u "+format.Digits(t.Open[i].Ratio(), 2)+")")
+		names = append(names, cited(&t.Open[i])+" (|E|/u "+format.Ratio(t.Open[i].Ratio())+")")
 	}
 	return "Not explained by its uncertainty is the error of " + strings.Join(names[:min(len(names), mostUnexplained)], "; of ") + further(len(names)-mostUnexplained) +
 		". An error without an explanation is a disagreement of the two solutions, even inside the limit."

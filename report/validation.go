@@ -32,7 +32,7 @@ func validationTable(v *record.Convergence) sheet.Table {
 }
 
 func validationRow(s *record.Study) []sheet.Cell {
-	value := studyScale(s, math.Abs(s.Error))
+	value := studyScale(s, max(math.Abs(s.Error), s.Uncertainty/10))
 	size := math.Abs(s.Error)
 	if !(size >= s.Uncertainty) { // NaN too
 		size = s.Uncertainty
@@ -46,7 +46,7 @@ func validationRow(s *record.Study) []sheet.Cell {
 	for _, x := range []float64{s.Error, s.Uncertainty, s.Grid, s.Settling, s.Form, s.Rounding} {
 		row = append(row, sheet.Cell{Text: e.Number(x)})
 	}
-	row = append(row, sheet.Cell{Text: format.Digits(s.Ratio(), 2)})
+	row = append(row, sheet.Cell{Text: format.Ratio(s.Ratio())})
 	if s.Explained {
 		return append(row, sheet.Cell{Text: "explained", Mark: sheet.Holds})
 	}

@@ -66,7 +66,7 @@ func orders(t record.Tally) string {
 // validationText says whether the uncertainties explain the errors.
 func validationText(t record.Tally) string {
 	if len(t.Open) == 0 {
-		return "every error is explained by its uncertainty, at most " + ratio(t.Nearest) + " of it (" + figureName(t.Nearest) + ")"
+		return "every error is explained; largest error over uncertainty " + ratio(t.Nearest) + " (" + figureName(t.Nearest) + ")"
 	}
 	var names []string
 	for i := range t.Open {
@@ -82,7 +82,7 @@ func validationText(t record.Tally) string {
 // mostUnexplained is how many figures a line names.
 const mostUnexplained = 3
 
-func ratio(s *record.Study) string { return typeable.Replace(format.Digits(s.Ratio(), 2)) }
+func ratio(s *record.Study) string { return typeable.Replace(format.Ratio(s.Ratio())) }
 
 // figureName is the id of a requirement, or the name of a key figure.
 func figureName(s *record.Study) string {

@@ -95,9 +95,9 @@ compares the two, and writes a record for the design review.
   linewitness help VERB           more about a verb
 
 The exit status is 0 if every design is verified, 1 if a requirement is missed or
-not shown, 2 for bad usage or a bad design file, 3 if the two methods disagree,
-4 if there is no steady state, 5 if a file could not be read or written, and 130
-if interrupted. With several designs it is the highest.
+not shown or a claim contradicted, 2 for bad usage or a bad design file, 3 if the
+two methods disagree, 4 if there is no steady state, 5 if a file could not be read
+or written, and 130 if interrupted. With several designs it is the highest.
 
 Example:
   linewitness starter feeder.yaml

@@ -155,7 +155,7 @@ nominal: requirement missed
   agreement    0.0200 % found, 0.0300 % expected, limit 0.500 %
   settling     600.0 ns, 60 periods, remaining error 0.00250 %, loop factor 0.2500
   convergence  3 figures: 2 converging with order 1.95 to 2.02, 1 on two grids; largest index 0.024 % (R1)
-  validation   every error is explained by its uncertainty, at most 0.41 of it (source_power source)
+  validation   every error is explained; largest error over uncertainty 0.41 (source_power source)
   curves       2 curves: largest global difference 0.034, excellent (main, |V| along the section)
   id    quantity             value          limit              margin        uncertainty  verdict
   R1    vswr main, from end  1.750          at most 1.5        -0.2500       0.0010       missed

@@ -109,6 +109,14 @@ func Percent(fraction float64) string {
 	return Digits(100*fraction, 3) + Space + "%"
 }
 
+// Ratio returns an error over its uncertainty with two significant digits.
+func Ratio(v float64) string {
+	if v > 0 && v < 0.001 {
+		return "<" + Space + "0.001"
+	}
+	return Digits(v, 2)
+}
+
 // Measure returns a difference measure of the feature selective validation,
 // whose best grade ends at 0.1, with three decimals.
 func Measure(v float64) string {

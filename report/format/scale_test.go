@@ -97,3 +97,31 @@ func TestQualifier(t *testing.T) {
 		}
 	}
 }
+
+// The numbers of the evidence have the digits that tell something.
+func TestEvidenceNumbers(t *testing.T) {
+	nan, inf := math.NaN(), math.Inf(1)
+	for _, c := range []struct{ got, want string }{
+		{Ratio(0.4123), "0.41"},
+		{Ratio(2.8e-9), "< 0.001"},
+		{Ratio(0), "0"},
+		{Ratio(inf), "infinite"},
+		{Ratio(nan), "–"},
+		{Measure(0.0336), "0.034"},
+		{Measure(1e-7), "< 0.001"},
+		{Measure(0), "0.000"},
+		{Measure(nan), "–"},
+		{Index(0.02418), "0.024 %"},
+		{Index(1e-9), "< 10^{-6} %"},
+		{Index(0), "0 %"},
+		{Index(nan), "–"},
+		{Short(1.25), "1.25"},
+		{Short(3), "3"},
+		{Short(100), "100"},
+		{Short(nan), "–"},
+	} {
+		if got := show(c.got); got != c.want {
+			t.Errorf("%q, want %q", got, c.want)
+		}
+	}
+}
