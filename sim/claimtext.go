@@ -102,6 +102,8 @@ func prefixed(unit string, size float64) (factor float64, with string) {
 		return 1, ""
 	case unit != "W" && unit != "s" && unit != "ohm" && !strings.HasPrefix(unit, "V ") && !strings.HasPrefix(unit, "A "):
 		return 1, " " + unit // levels, angles and parts of a whole have none
+	case unit == "ohm" && size < 1:
+		return 1, " " + unit
 	}
 	for _, p := range []struct {
 		factor float64

@@ -15,4 +15,12 @@
 //
 // The slips stand in the order of how usual they are, the most usual first. No
 // count of them is known; the order is a judgement (common practice).
+//
+// # What a slip that fits is worth
+//
+// A real figure that is wrong by some other factor meets one of the slips by
+// chance in one case of seven, at a tolerance of 1 % and on a feeder of three to
+// five sections (84 of 600 random ones); a complex figure hardly ever (none of
+// 444). Hence several claims are better than one, and a complex one better than
+// its size.
 package slip
