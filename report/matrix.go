@@ -46,10 +46,18 @@ func columnsOf(n, most int) [][]int {
 	return out
 }
 
+const (
+	labelShare = 1.9 // width of the labels over that of a case
+	manyCases  = 6   // more take smaller type, for "−135.8 kV" beside its mark
+)
+
 func matrixTable(m *record.Matrix, cases []int) sheet.Table {
-	t := sheet.Table{Size: 6.8, Columns: []sheet.Column{{Head: "Id"}, {Head: "Requirement or key figure", Grow: 3}}}
+	t := sheet.Table{Size: 6.8, Columns: []sheet.Column{{Head: "Id"}, {Head: "Requirement or key figure", Share: labelShare}}}
+	if len(cases) > manyCases {
+		t.Size = 6.4
+	}
 	for _, k := range cases {
-		t.Columns = append(t.Columns, right(m.Cases[k]))
+		t.Columns = append(t.Columns, sheet.Column{Head: m.Cases[k], Align: rightAlign, Share: 1})
 	}
 	for i := range m.Rows {
 		r := &m.Rows[i]

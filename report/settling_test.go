@@ -24,7 +24,7 @@ func textOf(t *testing.T, r *record.Record) string {
 func TestSettlingText(t *testing.T) {
 	all := textOf(t, reporttest.Feeder())
 	for _, s := range []string{
-		"Proof of settling", "from 980.9 ns on (rise 101.9 ns, then a round trip)", "the longest round trip, 879.0 ns; path 439.5 ns",
+		"Proof of settling", "from 980.9 ns on (rise 101.9 ns, then a round trip)", "at least the longest round trip, 879.0 ns; path 439.5 ns",
 		"Loop factor, amplitude a round trip", "0.3501", "0.3500", "837.5 ns", "837.3 ns", "258.1", "258.0",
 		"at most 0.0100 %", "Second and third harmonic", "8.694 µs", "11.53 µs, 1130 periods", "within 203.9 µs",
 		"2 windows in a row", "passed, 2 in a row",
@@ -193,5 +193,30 @@ func TestTimeRows(t *testing.T) {
 	rows := timeRows(s)
 	if len(rows) != 4 || rows[1].times != [6]float64{1, 2, 3, 5, 6, 7} || rows[2].name != "end (load, current)" || rows[3].times[3] != 8 {
 		t.Errorf("rows %+v", rows)
+	}
+}
+
+// The rule says of each of the last two windows whether it passed, and nothing
+// where that was not kept.
+func TestSettlingRule(t *testing.T) {
+	d := &document{r: &record.Record{Design: record.Design{Tolerance: 1e-4, MaxPeriods: 100}}}
+	window := func(time float64, passed bool) record.SettlingPoint {
+		return record.SettlingPoint{Time: time, Passed: passed}
+	}
+	for name, c := range map[string]struct {
+		s    record.Settling
+		want [2]string
+	}{
+		"settled":    {record.Settling{Settled: true, Passes: 2, Curve: []record.SettlingPoint{window(1, false), window(2, true), window(3, true)}}, [2]string{"passed", "passed, 2 in a row"}},
+		"one passed": {record.Settling{Passes: 1, Curve: []record.SettlingPoint{window(1, false), window(2, true)}}, [2]string{"not passed", "passed, 1 in a row"}},
+		"one window": {record.Settling{Curve: []record.SettlingPoint{window(1, false)}}, [2]string{"–", "not passed"}},
+		"none":       {record.Settling{}, [2]string{"–", "–"}},
+		"not kept":   {record.Settling{Settled: true, Curve: []record.SettlingPoint{window(1, false), window(2, false)}}, [2]string{"–", "–"}},
+	} {
+		rows := d.settlingRule(&record.Case{Model: record.Model{Frequency: 1e6}, Settling: c.s}).Rows
+		last := rows[len(rows)-1]
+		if got := [2]string{last[3].Text, last[4].Text}; got != c.want {
+			t.Errorf("%s: %q, want %q", name, got, c.want)
+		}
 	}
 }

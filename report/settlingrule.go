@@ -27,8 +27,8 @@ func (d *document) settlingRule(c *record.Case) sheet.Table {
 		{Text: "Every test passed", Bold: true},
 		{Text: format.Plural(passesNeeded, "window") + " in a row"},
 		{Text: format.Missing},
-		passed(before, ""),
-		passed(last, inARow(s)),
+		passed(s, before, ""),
+		passed(s, last, inARow(s)),
 	})
 	return t
 }
@@ -45,7 +45,7 @@ func (d *document) ruleRows(c *record.Case, before, last record.SettlingPoint) [
 	tau := measuredTime(s)
 	return []ruleRow{
 		{"Window begins", "from " + format.SI(s.Earliest, "s") + " on (rise " + format.SI(s.Ramp, "s") + ", then a round trip)", none, format.SI(before.Time-period, "s"), format.SI(last.Time-period, "s")},
-		{"Windows compared, apart", "the longest round trip, " + format.SI(s.RoundTrip, "s") + "; path " + format.SI(s.LongPath, "s"), none, format.SI(before.Gap, "s"), format.SI(last.Gap, "s")},
+		{"Windows compared, apart", "at least the longest round trip, " + format.SI(s.RoundTrip, "s") + "; path " + format.SI(s.LongPath, "s"), none, format.SI(before.Gap, "s"), format.SI(last.Gap, "s")},
 		{"Change between them", none, none, format.Percent(before.Change), format.Percent(last.Change)},
 		{"Loop factor, amplitude a round trip", "below 1", format.Number(p.LoopFactor), none, format.Number(s.LoopFactor)},
 		{"Time constant", none, format.SI(p.TimeConstant, "s"), none, format.SI(tau, "s")},
@@ -72,9 +72,11 @@ func lastWindows(s record.Settling) (before, last record.SettlingPoint) {
 	return before, last
 }
 
-func passed(p record.SettlingPoint, more string) sheet.Cell {
+// passed says whether a window passed. A settled run without a window that
+// passed is one whose tests were not kept.
+func passed(s record.Settling, p record.SettlingPoint, more string) sheet.Cell {
 	switch {
-	case math.IsNaN(p.Time):
+	case math.IsNaN(p.Time), s.Settled && s.Passes == 0:
 		return sheet.Cell{Text: format.Missing}
 	case p.Passed:
 		return sheet.Cell{Text: "passed" + more}

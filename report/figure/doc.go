@@ -1,5 +1,5 @@
 // Package figure draws the panels of a record: curves over axes, in the line
-// styles of package ink, on any gonum canvas.
+// styles of package ink, and bars of one whole, on any gonum canvas.
 //
 // Data come in SI units; each axis picks its engineering prefix. Points that
 // are not finite are left out. Long data are thinned to what shows: a curve

@@ -11,6 +11,9 @@ import (
 // enough, the columns with the longest words are made narrower than those.
 func (l *layout) fit(width float64) []float64 {
 	natural, least := l.natural()
+	if shared := l.shared(natural, width); shared != nil {
+		return shared
+	}
 	spare := width - sum(natural)
 	if spare >= 0 {
 		return l.grow(natural, spare)
@@ -23,6 +26,36 @@ func (l *layout) fit(width float64) []float64 {
 		return natural
 	}
 	return capped(least, width)
+}
+
+// shared returns the widths of a table with columns that share the width; nil
+// if there are none, or if a column would become too narrow that way. The other
+// columns are as wide as they are by nature.
+func (l *layout) shared(natural []float64, width float64) []float64 {
+	const (
+		others = 0.25 // of the width, at most
+		least  = 32.0 // room for a mark and two characters
+	)
+	var shares, own float64
+	for i, c := range l.t.Columns {
+		shares += c.Share
+		if c.Share == 0 {
+			own += natural[i]
+		}
+	}
+	if shares == 0 || own > others*width {
+		return nil
+	}
+	out := slices.Clone(natural)
+	for i, c := range l.t.Columns {
+		if c.Share > 0 {
+			out[i] = (width - own) * c.Share / shares
+			if out[i] < least {
+				return nil
+			}
+		}
+	}
+	return out
 }
 
 // capped lowers the largest widths to one cap, so that all add up to total,
@@ -60,8 +93,8 @@ func (l *layout) natural() (natural, least []float64) {
 				mark = markRoom
 			}
 			st := l.style(i, row[i])
-			n = max(n, st.Width(row[i].Text)+mark, l.noteStyle().Width(row[i].Note)+mark)
-			w = max(w, widestWord(row[i].Text, st.Width)+mark, widestWord(row[i].Note, l.noteStyle().Width)+mark)
+			n = max(n, st.Width(row[i].Text)+mark, l.noteStyle().Width(row[i].Note))
+			w = max(w, widestWord(row[i].Text, st.Width)+mark, widestWord(row[i].Note, l.noteStyle().Width))
 		}
 		natural = append(natural, n+2*cellPad+0.1)
 		least = append(least, w+2*cellPad+0.1)

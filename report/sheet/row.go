@@ -38,9 +38,8 @@ func (l *layout) row(row []wrapped, shaded bool) {
 				cell.Mark.Draw(c, x+l.markIndent(i, cell)+cellPad+l.t.Size*0.45, middle, l.t.Size*0.95)
 				at += markRoom
 			}
-			width := l.room(i, cell.Cell) + 2*cellPad
-			l.text(c, at, 0, l.lineHeight(), width, l.t.Columns[i].Align, cell.style, cell.lines)
-			l.text(c, at, float64(len(cell.lines))*l.lineHeight(), l.lineHeight()*noteSize, width, l.t.Columns[i].Align, l.noteStyle(), cell.notes)
+			l.text(c, at, 0, l.lineHeight(), l.room(i, cell.Cell)+2*cellPad, l.t.Columns[i].Align, cell.style, cell.lines)
+			l.text(c, x, float64(len(cell.lines))*l.lineHeight(), l.lineHeight()*noteSize, l.noteRoom(i, cell.Cell)+2*cellPad, l.t.Columns[i].Align, l.noteStyle(), cell.notes)
 			x += l.widths[i]
 		}
 	})

@@ -102,6 +102,7 @@ func TestTableFits(t *testing.T) {
 		for range columns {
 			table.Columns = append(table.Columns, Column{
 				Head: rapid.StringMatching(`[A-Za-z ]{0,20}`).Draw(t, "head"), Grow: rapid.Float64Range(0, 2).Draw(t, "grow"),
+				Share: rapid.SampledFrom([]float64{0, 0, 1, 2}).Draw(t, "share"),
 				Align: rapid.SampledFrom([]typeset.Align{typeset.Left, typeset.Right}).Draw(t, "align"),
 			})
 		}

@@ -19,6 +19,7 @@ type Column struct {
 	Align typeset.Align // Left or Right
 	Face  typeset.Face
 	Grow  float64 // share of the width that is left over
+	Share float64 // share of the width that the columns without one leave, whatever the cells hold
 }
 
 // A Cell is a cell of a table.
@@ -126,7 +127,7 @@ func (l *layout) wrap(row []Cell) []wrapped {
 		st := l.style(i, c)
 		out[i] = wrapped{Cell: c, style: st, lines: st.Wrap(c.Text, l.room(i, c))}
 		if c.Note != "" {
-			out[i].notes = l.noteStyle().Wrap(c.Note, l.room(i, c))
+			out[i].notes = l.noteStyle().Wrap(c.Note, l.noteRoom(i, c))
 		}
 	}
 	return out
@@ -144,6 +145,12 @@ func (l *layout) room(i int, c Cell) float64 {
 		w -= markRoom
 	}
 	return w - 2*cellPad
+}
+
+// noteRoom returns the width for the note of a cell, which runs below the mark.
+func (l *layout) noteRoom(i int, c Cell) float64 {
+	c.Mark = NoMark
+	return l.room(i, c)
 }
 
 func (l *layout) height(row []wrapped) float64 {

@@ -44,7 +44,7 @@ func (n Network) audit(s record.Steady, v map[string]complex128, scale, allowed,
 		a.Loads = append(a.Loads, record.PartPower{Name: l.Name, Power: l.Power})
 		a.InLoads += l.Power
 	}
-	a.Balance = a.Delivered - a.Dissipated - a.InLoads
+	a.Balance = off * a.Delivered // a transformer that is not quite ideal leaves more
 	a.Relative = math.Abs(a.Balance) / a.Delivered
 	a.Closed = a.Relative <= a.Allowed
 	a.Q = n.omega() * a.Stored / a.Delivered
