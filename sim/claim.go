@@ -20,8 +20,11 @@ func (s *solved) claims(ctx context.Context, b *budget) []record.Claim {
 		net: s.net, exact: s.exact, found: s.found,
 		steps:  s.grid.grid.StepsPerPeriod,
 		quotes: quotes(s.design),
-		spread: func(r design.Requirement, q quantity) float64 { return s.spreadOf(r, q, b) },
-		timed:  s.timed,
+		spread: func(r design.Requirement, q quantity) float64 {
+			// As sure as a requirement of it would be.
+			return math.Max(s.spreadOf(r, q, b), s.study(studied{scale: asItIs, figure: s.measure(r, q)}).Uncertainty)
+		},
+		timed: s.timed,
 	}
 	var mine []design.Claim
 	for _, c := range s.design.Claims {

@@ -12,6 +12,9 @@ type scale struct {
 	from func(si float64) float64
 }
 
+// asItIs leaves a value in SI units.
+var asItIs = scale{from: func(v float64) float64 { return v }}
+
 // scaleFor gives the scale of a limit's unit.
 func scaleFor(unit string) scale {
 	linear := func(name string, factor float64) scale {
