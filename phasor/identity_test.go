@@ -317,3 +317,25 @@ func TestExtremesAmongCrests(t *testing.T) {
 		}
 	}
 }
+
+// TestDecayAtResonance: a resonant line has pairs of eigenvalues of one size,
+// which the library cannot tell apart as they stand; the decay is that of the
+// closed form all the same.
+func TestDecayAtResonance(t *testing.T) {
+	for _, quarters := range []int{1, 2, 3, 4, 8} {
+		for _, tt := range []struct{ rs, rl float64 }{{10, 250}, {250, 10}, {2.5, 1000}, {10, 10}} {
+			length := float64(quarters) * line.C0 / 100e6 / 4
+			net := &network.Network{
+				Frequency: 100e6, Junctions: []string{"a", "b"},
+				Sections: []network.Section{{From: 0, To: 1, Length: length, Line: vacuum(50)}},
+				Branches: []network.Branch{{A: 1, B: network.Ground, Series: network.Series{R: tt.rl}}},
+				Source:   network.Source{EMF: 1, Series: network.Series{R: tt.rs}},
+			}
+			rho := math.Abs((tt.rs - 50) / (tt.rs + 50) * (tt.rl - 50) / (tt.rl + 50))
+			want := -math.Log(rho) / (2 * length / line.C0)
+			if got := Decay(net); !(math.Abs(got/want-1) < 1e-6) { // as TestDecay
+				t.Errorf("%d quarter waves, %+v: decay %.6g 1/s, want %.6g", quarters, tt, got, want)
+			}
+		}
+	}
+}

@@ -48,8 +48,22 @@ const modesLimit = 64
 // faint is the eigenvalue below which a mode dies within one passage.
 const faint = 1e-6
 
-// slowest is the least decay rate of the modes of m, whose derivative is dm.
-func slowest(m, dm [][]complex128) float64 {
+// offset is added to the diagonal before the eigenvalues are found, and taken
+// off them again. A round trip of one resonant line has the eigenvalues +a and
+// -a, real to rounding: then those of M and of its conjugate are the same, and
+// the QR iteration may stand still between values of one size.
+const offset = 0.37 + 0.59i
+
+// slowest is the least decay rate of the modes of m, whose derivative is dm; NaN
+// if the eigenvalues are not found.
+func slowest(m, dm [][]complex128) (rate float64) {
+	// The library panics, instead of failing, where its iteration for small
+	// matrices does not converge (gonum v0.17, Dhseqr on Dlaqr04).
+	defer func() {
+		if recover() != nil {
+			rate = math.NaN()
+		}
+	}()
 	n := len(m)
 	real2 := mat.NewDense(2*n, 2*n, nil)
 	for i := range m {
@@ -59,6 +73,11 @@ func slowest(m, dm [][]complex128) float64 {
 			real2.Set(i, j+n, -imag(v))
 			real2.Set(i+n, j, imag(v))
 		}
+		for _, at := range []int{i, i + n} {
+			real2.Set(at, at, real2.At(at, at)+real(offset))
+		}
+		real2.Set(i, i+n, real2.At(i, i+n)-imag(offset))
+		real2.Set(i+n, i, real2.At(i+n, i)+imag(offset))
 	}
 	var eig mat.Eigen
 	if !eig.Factorize(real2, mat.EigenBoth) {
@@ -67,8 +86,9 @@ func slowest(m, dm [][]complex128) float64 {
 	var right, left mat.CDense
 	eig.VectorsTo(&right)
 	eig.LeftVectorsTo(&left)
-	rate := math.Inf(1)
+	rate = math.Inf(1)
 	for k, lambda := range eig.Values(nil) {
+		lambda -= offset
 		v, size := project(&right, k, n)
 		w, _ := project(&left, k, n)
 		if cmplx.Abs(lambda) < faint || size < 1e-6 {
