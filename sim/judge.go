@@ -22,7 +22,8 @@ type judgement struct {
 	values   []witnessed
 	spread   float64 // uncertainty, SI
 	figure   *measured
-	unit     string // of limits given without one
+	whole    float64 // see studied
+	unit     string  // of limits given without one
 	note     string
 	// unfinished is set for a peak from a run that ended before the network was
 	// at rest: a larger one may come, so it can be missed but not met.
@@ -65,7 +66,7 @@ func judge(ctx context.Context, c *solved, all map[string]*solved) ([]record.Req
 func (j *judgement) label() studied {
 	return studied{
 		id: j.req.ID, quantity: string(j.req.Quantity), subject: j.subject,
-		scale: scaleFor(j.limitUnit()), figure: j.figure, spread: j.spread,
+		scale: scaleFor(j.limitUnit()), figure: j.figure, spread: j.spread, whole: j.whole,
 	}
 }
 
@@ -188,6 +189,7 @@ func (s *solved) impedance(one judgement) []judgement {
 		j.subject += ", " + what
 		j.min, j.max, j.unit = min, max, "ohm"
 		j.take(s.measure(one.req, q))
+		j.whole = cmplx.Abs(f.impedance(s.exact, one.req))
 		out = append(out, j)
 	}
 	if w := one.req.R; w != nil {

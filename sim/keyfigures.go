@@ -1,6 +1,7 @@
 package sim
 
 import (
+	"math"
 	"math/cmplx"
 
 	"linewitness/sim/design"
@@ -63,10 +64,15 @@ func loadsOf(net *network.Network) []int {
 // keyStudies studies the key figures.
 func (s *solved) keyStudies() []studied {
 	var out []studied
+	whole := cmplx.Abs(ratio(s.exact.junctions[s.net.Source.At], s.exact.source))
 	for _, k := range keyFigures(s.net) {
-		out = append(out, studied{
+		f := studied{
 			quantity: k.name, subject: k.subject, scale: scaleFor(k.unit), figure: s.measure(k.of, k.quantity),
-		})
+		}
+		if k.unit == "ohm" && !math.IsInf(whole, 0) { // a part of one impedance
+			f.whole = whole
+		}
+		out = append(out, f)
 	}
 	return out
 }

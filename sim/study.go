@@ -15,6 +15,7 @@ type studied struct {
 	scale                 scale
 	figure                *measured
 	spread                float64 // of a figure of the time domain only: its uncertainty, SI
+	whole                 float64 // what per cents are of, in the unit; 0 for the value itself
 }
 
 // residualSlack is how many times too small the estimate of what the settling
@@ -50,7 +51,7 @@ func (s *solved) study(f studied) record.Study {
 	for level := range f.figure.levels {
 		out.Values = append(out.Values, at(fdtdView(level)))
 	}
-	s.index(&out, out.Rounding+settlingFloor*out.Settling)
+	s.index(&out, f, out.Rounding+settlingFloor*out.Settling)
 	if f.figure.difference {
 		out.GCI, out.GCIPercent, out.Factor = math.NaN(), math.NaN(), 0
 	}
@@ -84,7 +85,7 @@ func atLeast(a, b float64) float64 {
 }
 
 // index fills the grid convergence index from the values.
-func (s *solved) index(out *record.Study, floor float64) {
+func (s *solved) index(out *record.Study, f studied, floor float64) {
 	var h []float64
 	for i := range out.Values {
 		h = append(h, math.Pow(2, float64(i)))
@@ -95,6 +96,12 @@ func (s *solved) index(out *record.Study, floor float64) {
 	g := gci.Study(h, out.Values, floor)
 	out.Behaviour, out.Order, out.Extrapolated = g.Behaviour, g.Order, g.Extrapolated
 	out.Factor, out.GCI, out.GCIPercent = g.Factor, g.GCI, 100*g.Relative
+	switch {
+	case f.scale.unit == "dB", f.scale.unit == "dBm", f.scale.unit == "deg":
+		out.GCIPercent = math.NaN() // no natural zero
+	case f.whole > 0:
+		out.GCIPercent = 100 * g.GCI / f.whole
+	}
 }
 
 // studyRun studies a figure of the stress runs, which are made on two grids. A
@@ -108,7 +115,7 @@ func (s *solved) studyRun(out *record.Study, f studied) {
 	for _, run := range []*fdtd.Stress{last, s.second} {
 		out.Values = append(out.Values, f.scale.from(f.figure.pick(run)))
 	}
-	s.index(out, 0)
+	s.index(out, f, 0)
 	out.Error = math.NaN()
 	out.Uncertainty = f.scale.from(f.spread) - f.scale.from(0)
 	out.Settling = atRest * math.Abs(out.Values[0])

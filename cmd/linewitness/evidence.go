@@ -26,7 +26,28 @@ func evidenceRows(c *record.Case) (rows [][]string) {
 	if s := fidelityText(c.Fidelity); s != "" {
 		rows = append(rows, []string{"curves", s})
 	}
+	if s := powerText(c.Power); s != "" {
+		rows = append(rows, []string{"power", s})
+	}
 	return rows
+}
+
+// powerText says where the power goes, by the closed form, and how well each
+// balance closes; it is empty where no audit was made.
+func powerText(p record.Power) string {
+	a := p.Phasor
+	if a.Delivered == 0 {
+		return ""
+	}
+	s := inSI(a.Delivered, "W") + " delivered"
+	if !math.IsInf(a.Available, 1) {
+		s += " of " + inSI(a.Available, "W") + " available"
+	}
+	s += ", " + inSI(a.InLoads, "W") + " into loads; balance "
+	if !p.Phasor.Closed || !p.FDTD.Closed {
+		s += "does not close: "
+	}
+	return s + fmt.Sprintf("%s phasor, %s fdtd", percent(p.Phasor.Relative), percent(p.FDTD.Relative))
 }
 
 // convergenceText counts n figures by their behaviour.

@@ -153,7 +153,7 @@ func verifyError(name string, err error) error {
 	case errors.Is(err, context.Canceled):
 		return err
 	case errors.As(err, &bound):
-		return usageError(name+": "+err.Error(), `"linewitness plan" shows what it takes; --grids 1 takes a quarter or less; --no-bound runs it all the same`)
+		return usageError(name+": "+err.Error(), `"linewitness plan" shows what it takes; --grids 1 takes less; --no-bound runs it all the same`)
 	}
 	return usageError(name+": "+err.Error(), "")
 }

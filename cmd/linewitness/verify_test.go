@@ -40,7 +40,7 @@ func TestVerifyFails(t *testing.T) {
 		{
 			"bound", &sim.BoundError{Case: "iced", Updates: 3e12, Bytes: 1 << 30}, nil, statusUsage,
 			"linewitness: stdin: case iced would take 3e+12 cell updates and 1e+03 MiB, over the bound of 2e+12 updates or 8192 MiB\n" +
-				"hint: \"linewitness plan\" shows what it takes; --grids 1 takes a quarter or less; --no-bound runs it all the same\n",
+				"hint: \"linewitness plan\" shows what it takes; --grids 1 takes less; --no-bound runs it all the same\n",
 		},
 		{"solver", errors.New("sim: no way"), nil, statusUsage, "linewitness: stdin: sim: no way\n"},
 		{"writer", nil, errors.New("report: no font"), statusFile, "linewitness: stdin: report: no font\n"},

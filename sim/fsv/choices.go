@@ -65,11 +65,9 @@ var chosen = method{
 	breakShare: breakShare, sumOfSquares: sumOfSquares, offsetTerm: offsetTerm,
 }
 
-// Blind says what the method cannot see.
-const Blind = "The method is blind to a sign reversal: a curve against its negative is a perfect match."
-
 // Choices says in sentences for the record what was chosen where the method,
-// as it was known here, leaves a choice, and what it does not tell.
+// as it was known here, leaves a choice. What the method does not tell, and that
+// its words are no limits, is for the record to say beside them.
 func Choices() []string {
 	return []string{
 		fmt.Sprintf("Curves are compared over the range that they share, at evenly spaced points, no more than the coarser curve has there and at most %d, by linear interpolation.", mostPoints),
@@ -79,7 +77,5 @@ func Choices() []string {
 		fmt.Sprintf("Derivatives are differences over %d points on either side for the low part and over %d for the high part; at the ends of a curve its end point stands for those beyond.", loSpan, hiSpan),
 		"The amplitude measure contains the offset term of the edition of 2008; the global measure is the mean over the points of the root of the sum of the squares, without weights.",
 		fmt.Sprintf("The grade is the number of categories, from excellent on, that hold %.0f %% of the points; the spread is the length of the shortest run of categories around the fullest one that holds as many.", 100*held),
-		"The words describe what an observer would say of two curves; they are not limits of acceptance.",
-		Blind,
 	}
 }

@@ -158,7 +158,7 @@ func TestChoices(t *testing.T) {
 	all := strings.Join(Choices(), "\n")
 	for _, want := range []string{
 		"at most 4096", "bins 0 to 3", "5 bins above", "40 % of its total", "2 bins on either side",
-		"2 points on either side", "over 3 for the high part", "hold 85 %", "blind to a sign reversal",
+		"2 points on either side", "over 3 for the high part", "hold 85 %",
 	} {
 		if !strings.Contains(all, want) {
 			t.Errorf("nothing of %q in:\n%s", want, all)
