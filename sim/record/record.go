@@ -42,6 +42,22 @@ type Record struct {
 	Verdict Verdict
 	Cases   []Case // nominal first, then in the order of the file
 	Matrix  Matrix // the cases side by side
+
+	// Attachments are the files that the design file reads, byte for byte, in the
+	// order in which it names them; to be kept in the document.
+	Attachments []Attachment
+}
+
+// Attachment is a file that a design file refers to.
+type Attachment struct {
+	Name   string // as the design file gives it
+	Data   []byte
+	SHA256 string // of Data, lower-case hex
+}
+
+// Revision is a line of the revision history of the document.
+type Revision struct {
+	Revision, Date, By, Text string
 }
 
 // Tool says what program made the record.
@@ -55,7 +71,13 @@ type Tool struct {
 type Design struct {
 	Title, Number, Revision, Purpose string
 	PreparedBy, CheckedBy            string
-	ApprovedBy, Notes, Date          string
+	ApprovedBy, Notes                string
+
+	// Date is what is printed, and DateFrom where it is from: "record" (the
+	// design file says it), "environment" (SOURCE_DATE_EPOCH), "file" (the time
+	// of the design file) or "" (there is none).
+	Date, DateFrom string
+	History        []Revision // oldest first
 
 	File       string // base name of the design file
 	SHA256     string // of the design file, hex
@@ -93,6 +115,8 @@ type Case struct {
 	Profiles  []Profile  // one a section, in the order of Model.Sections
 	Waveforms []Waveform // source first, then junctions, then loads
 	Spectrum  Spectrum
+	SpaceTime SpaceTime
+	Bounces   Bounces
 }
 
 // Model is the network of a case as it was solved.
