@@ -96,7 +96,7 @@ func newRecord(ctx context.Context, f *design.File, cases []*solved, version str
 		Design: record.Design{
 			Title: r.Title, Number: r.Number, Revision: r.Revision, Purpose: r.Purpose,
 			PreparedBy: r.PreparedBy, CheckedBy: r.CheckedBy, ApprovedBy: r.ApprovedBy,
-			Notes: r.Notes, Date: r.Date,
+			Notes: r.Notes, Date: r.Date, DateFrom: dateFrom(r), History: history(r),
 			File: filepath.Base(f.Name), SHA256: f.SHA256, Source: f.Source,
 			FSVChoices: choices(),
 			Convention: conventionName(f.Nominal.Convention),
@@ -117,6 +117,23 @@ func newRecord(ctx context.Context, f *design.File, cases []*solved, version str
 		out.Cases = append(out.Cases, rc)
 	}
 	out.Matrix = matrix(out.Cases)
+	return out
+}
+
+// dateFrom is where the date of a record is from: the design file, if it is there.
+func dateFrom(r design.Record) string {
+	if r.Date == "" {
+		return ""
+	}
+	return "record"
+}
+
+// history is the revision history of a record, oldest first.
+func history(r design.Record) []record.Revision {
+	var out []record.Revision
+	for _, v := range r.History {
+		out = append(out, record.Revision(v))
+	}
 	return out
 }
 

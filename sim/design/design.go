@@ -68,7 +68,13 @@ type Design struct {
 type Record struct {
 	Title, Number, Revision, Purpose         string
 	PreparedBy, CheckedBy, ApprovedBy, Notes string
-	Date                                     string
+	Date                                     string     // year-month-day, or empty
+	History                                  []Revision // oldest first; empty if the file gives none
+}
+
+// Revision is an entry of the revision history. Date and By may be empty.
+type Revision struct {
+	Revision, Date, By, Text string // Date is year-month-day
 }
 
 // Source is the source of the design. Either EMF or Available was given; the

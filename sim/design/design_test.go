@@ -72,6 +72,13 @@ func TestTextsAndHeader(t *testing.T) {
 			t.Errorf("%s is %q, want %q", tt.what, tt.got, tt.want)
 		}
 	}
+	history := []Revision{
+		{Revision: "1.9", Date: "2025-11-03", By: "A. Kowal", Text: "First issue."},
+		{Revision: "1.10", Text: "Open wire in place of the cable;\nboth ends measured again."},
+	}
+	if diff := cmp.Diff(history, d.Record.History); diff != "" {
+		t.Error("history (-want +got):", diff)
+	}
 	if z := d.Source.Impedance; z.Kind != SeriesParts || z.R != 50 || z.L != 2e-6 || z.C != 1e-9 {
 		t.Errorf("source impedance %+v", z)
 	}

@@ -79,10 +79,16 @@
 // is in %. A phase has none. Requirements and claims have one set of ids. Times
 // in periods are in those of the case that is claimed of.
 //
+// # Dates
+//
+// A date, that of the record and those of its history, is year-month-day,
+// 2026-03-31, and nothing else: no reader takes the day for the month.
+//
 // # Limits
 //
 // A file has at most 1 MiB, 32 levels, 500 lines, sections, loads, elements,
 // requirements and claims each, and 100 cases; names have at most 40 characters. A
 // combination has at most 64 parts and 8 levels, a table of impedances 500 rows, a
-// loss table 100; the files of a design have at most 16 MiB together.
+// loss table 100, a revision history 50; the files of a design have at most 16 MiB
+// together.
 package design

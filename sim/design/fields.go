@@ -149,6 +149,7 @@ var examples = map[string]string{
 	".sections": "{main: {from: tx, to: mast, length: 85 m, line: coax}}",
 
 	"record.title": "Mast feeder", "record.number": "RF-12",
+	"revision.revision": "A", "revision.text": "First issue",
 	"source.at": "tx", "source.frequency": "1.6 MHz", "source.impedance": "50 ohm",
 	"start.profile": "abrupt", "stop.at": "15 us",
 	"loss.at": "10 MHz", "loss.attenuation": "2.0 dB/100m",

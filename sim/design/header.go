@@ -2,7 +2,6 @@ package design
 
 import (
 	"strings"
-	"time"
 	"unicode"
 	"unicode/utf8"
 )
@@ -36,17 +35,10 @@ func (w *walker) walkRecord(f *fields) {
 		Title: f.line("title"), Number: f.line("number"), Revision: f.line("revision"),
 		Purpose:    f.prose("purpose"),
 		PreparedBy: f.line("prepared_by"), CheckedBy: f.line("checked_by"), ApprovedBy: f.line("approved_by"),
-		Notes: f.prose("notes"), Date: f.line("date"),
+		Notes: f.prose("notes"), Date: f.date("date"), History: f.history("history"),
 	}
 	for _, key := range []string{"title", "number"} {
-		if n := f.node(key); n != nil && n.kind == scalar && n.text == "" {
-			w.problem(n.pos, say("the record is filed under it"), "%s is empty", f.name(key))
-		}
-	}
-	if n := f.node("date"); n != nil && n.kind == scalar {
-		if _, err := time.Parse(time.DateOnly, n.text); err != nil {
-			w.problem(n.pos, say("write year-month-day, 2026-03-31"), "%s is not a date: %q", f.name("date"), n.text)
-		}
+		f.filled(key, "the record is filed under it")
 	}
 }
 

@@ -124,7 +124,7 @@ func TestSchemaKeys(t *testing.T) {
 		t.Fatal(err)
 	}
 	tables := []*table{
-		fileTable, recordTable, sourceTable, seriesTable, startTable, stopTable, lineTable, lossTable,
+		fileTable, recordTable, revisionTable, sourceTable, seriesTable, startTable, stopTable, lineTable, lossTable,
 		lossPointTable, ratingTable, geometryTable, coaxTable, twoWireTable, wireOverGroundTable, microstripTable, striplineTable,
 		sectionTable, loadTable, elementTable, memberTable, lumpedTable, impedancePointTable, caseTable, gridTable, windowTable,
 	}

@@ -59,8 +59,9 @@ var (
 	recordTable = &table{
 		def: "record",
 		keys: append(must("title", "number"),
-			may("revision", "date", "purpose", "prepared_by", "checked_by", "approved_by", "notes")...),
+			may("revision", "date", "purpose", "prepared_by", "checked_by", "approved_by", "notes", "history")...),
 	}
+	revisionTable = &table{def: "revision", keys: append(must("revision", "text"), may("date", "by")...)}
 	sourceTable = &table{
 		def:  "source",
 		keys: slices.Concat(must("at", "frequency"), may("emf", "available_power"), must("impedance"), may("start", "stop")),
