@@ -39,6 +39,9 @@ func designObject(d record.Design) object {
 		{"number", d.Number},
 		{"revision", d.Revision},
 		{"title", d.Title},
+		{"date", d.Date},
+		{"date_from", d.DateFrom},
+		{"history", historyList(d.History)},
 		{"sha256", d.SHA256},
 		{"file", d.File},
 		{"convention", d.Convention},
@@ -98,6 +101,8 @@ func caseObject(c *record.Case) (object, error) {
 		{"convergence", convergenceObject(c.Convergence)},
 		{"fidelity", fidelityList(c.Fidelity)},
 		{"claims", claimList(c.Claims)},
+		{"space_time", spaceTimeObject(c.SpaceTime)},
+		{"bounces", bouncesObject(c.Bounces)},
 		{"warnings", stringList(c.Warnings)},
 	}, nil
 }

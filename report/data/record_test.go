@@ -70,6 +70,8 @@ func sample() *record.Record {
 		Warnings:  []string{"the source is ideal: it has no available power"},
 		Profiles:  []record.Profile{sampleProfile()},
 		Waveforms: sampleWaveforms(),
+		SpaceTime: sampleSpaceTime(),
+		Bounces:   sampleBounces(),
 	}
 	lost := record.Case{
 		Name: "ring, lossless", Verdict: record.Unsettle, Convergence: record.Convergence{Skipped: "no steady state"},
@@ -81,6 +83,11 @@ func sample() *record.Record {
 			Title: "Sample", Number: "X-1", Revision: "B", File: "sample.yaml", SHA256: "00ff", Convention: "engineering",
 			Agreement: 0.005, Tolerance: 1e-4, MaxPeriods: 20000,
 			FSVChoices: []string{"four bins"},
+			Date:       "2026-03-31", DateFrom: "record",
+			History: []record.Revision{
+				{Revision: "A", Date: "2026-02-28", By: "R. Aaltonen", Text: "First issue"},
+				{Revision: "B", Text: "Longer main"},
+			},
 		},
 		Verdict: record.Unsettle,
 		Cases:   []record.Case{nominal, lost},
@@ -180,5 +187,29 @@ func sampleRatings() []record.Rating {
 			Uncertainty: math.NaN(), Rated: 1, Text: "1 A peak", Source: "section main",
 			Allowed: 1, Margin: 0.6, MarginDB: 7.96, MarginPercent: 60, Verdict: record.NotShownReq,
 		},
+	}
+}
+
+func sampleSpaceTime() record.SpaceTime {
+	return record.SpaceTime{
+		Path:  []record.PathSection{{Section: "main", Reversed: true, To: 0.5}},
+		Phase: 30, Z: []float64{0, 0.5}, T: []float64{0, 5e-9, 10e-9},
+		V:      [][]float64{{0, 0}, {10, 0}, {5, 12}},
+		Fronts: []record.Front{{Z1: 0.5, T1: 2.5e-9, Passage: 1}},
+	}
+}
+
+func sampleBounces() record.Bounces {
+	return record.Bounces{
+		Sections: []record.BounceSection{{Section: "main", From: "source", To: "far", Z0: 50, Delay: 2.5e-9, Kept: 0.999}},
+		Coefficients: []record.BounceCoefficient{
+			{Junction: "source", FromLeft: math.NaN(), FromRight: -1, ThroughRight: math.NaN(), ThroughLeft: math.NaN()},
+			{Junction: "far", FromLeft: 1, FromRight: math.NaN(), ThroughRight: math.NaN(), ThroughLeft: math.NaN()},
+		},
+		Arrivals: []record.Bounce{
+			{Junction: "source", Step: 1, Voltage: 1},
+			{Time: 2.5e-9, Junction: "far", Section: "main", Step: 2, Voltage: 2},
+		},
+		Note: "between the steps the voltage moves",
 	}
 }

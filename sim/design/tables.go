@@ -62,7 +62,7 @@ var (
 			may("revision", "date", "purpose", "prepared_by", "checked_by", "approved_by", "notes", "history")...),
 	}
 	revisionTable = &table{def: "revision", keys: append(must("revision", "text"), may("date", "by")...)}
-	sourceTable = &table{
+	sourceTable   = &table{
 		def:  "source",
 		keys: slices.Concat(must("at", "frequency"), may("emf", "available_power"), must("impedance"), may("start", "stop")),
 		choices: []choice{{required: true, forms: []form{

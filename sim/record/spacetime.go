@@ -2,12 +2,23 @@ package record
 
 // SpaceTime is the voltage along the main path of a network against place and
 // time, from switch-on in the stress run at the start phase that is shown.
+//
+// The main path runs from the source to the junction that is farthest from it in
+// delay, along a tree of the sections that leaves out the shortest of each ring.
 type SpaceTime struct {
-	Path   []PathSection // from the source on; empty if there is no map
-	Z      []float64     // m along the path
-	T      []float64     // s
-	V      [][]float64   // V at V[time][place]
-	Fronts []Front       // wave fronts of the first passages
+	Path []PathSection // from the source on; empty if there is no map
+	// Envelope says what V is. If it is false V is the instantaneous voltage at
+	// the times T and the places Z. If it is true a period is too short for that,
+	// and V is the amplitude of the wave, not negative, at its largest within
+	// half the way to the neighbouring places, and over the time from half way
+	// to the row before to half way to the next; it is then the same for
+	// every start phase where all were run.
+	Envelope bool
+	Phase    float64     // degrees, the start phase that is shown
+	Z        []float64   // m along the path, rising; at most 320
+	T        []float64   // s, in equal steps; at most 240
+	V        [][]float64 // V at V[time][place]
+	Fronts   []Front     // wave fronts of the first passages, within the times of the map
 }
 
 // PathSection is a section of the main path.
@@ -17,16 +28,36 @@ type PathSection struct {
 	From, To float64 // m along the path
 }
 
-// Front is the way of a wave front along one section of the path.
+// Front is the way of a wave front along one section of the path, or along the
+// part of it that the front passes within the times of the map.
 type Front struct {
 	Z0, T0, Z1, T1 float64 // m along the path, s
+	// Passage is 1 for the front that leaves the source, 2 for what comes back
+	// of it from a junction, 3 for what then leaves the source again.
+	Passage int
 }
 
-// Bounces are the arrivals of the first wave fronts of a unit step at the ends of
-// a chain of sections; empty for anything but a chain.
+// Bounces are the arrivals of the first wave fronts of a unit step of the EMF at
+// the junctions of a chain of sections that begins at the source; empty but for
+// the note for anything but such a chain.
 type Bounces struct {
-	Coefficients []BounceCoefficient
-	Arrivals     []Bounce // in the order of time
+	Sections     []BounceSection     // from the source on
+	Coefficients []BounceCoefficient // of the junctions from the source on
+	Arrivals     []Bounce            // in the order of time, those below 0.5 % of the largest left out
+	Note         string              // why there is no table, or what the table leaves out
+}
+
+// BounceSection is a section of a chain as a wave front sees it.
+type BounceSection struct {
+	Section  string
+	From, To string  // junctions, the nearer to the source first
+	Z0       float64 // ohm, at the highest frequencies
+	Delay    float64 // s, one way
+	// Kept is what is left of a front at the far end. With a loss that depends on
+	// frequency a front has no finite step, and Kept is what is left of a wave at
+	// the source frequency: a step has come so far about a tenth of a period
+	// after its front.
+	Kept float64
 }
 
 // BounceCoefficient is what a junction does to a wave front, at the highest
@@ -41,7 +72,7 @@ type BounceCoefficient struct {
 type Bounce struct {
 	Time     float64 // s
 	Junction string
-	Section  string
+	Section  string  // that it comes along; empty for the step of the source itself
 	Step     float64 // V: what it adds to the voltage of the junction, for an EMF that steps by 1 V
-	Voltage  float64 // V: the voltage of the junction after it
+	Voltage  float64 // V: the voltage of the junction after it, all steps up to then added, those left out too
 }
