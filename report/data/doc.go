@@ -15,6 +15,10 @@
 // witness is good for, and few enough that the last bits of an arithmetic
 // unit do not show. The samples of waveforms have 7, their times 9.
 //
+// Each peak has the uncertainty of its value beside it: "uncertainty_v",
+// "uncertainty_a", of a section "peak_voltage_uncertainty_v" and
+// "peak_current_uncertainty_a".
+//
 // # Lines and ratings
 //
 // Each case has the kinds of line of its sections by their names, and its

@@ -45,6 +45,8 @@ func TestJSONRead(t *testing.T) {
 		{"design/date_from", "record"},
 		{"design/history/0/by", "R. Aaltonen"},
 		{"design/history/1/text", "Longer main"},
+		{"cases/nominal/stress/peak_voltage/uncertainty_v", 0.03},
+		{"cases/nominal/stress/sections/main/peak_current_uncertainty_a", 0.002},
 		{"cases/nominal/space_time/path/0/reversed", true},
 		{"cases/nominal/space_time/rows", 3.0},
 		{"cases/nominal/space_time/columns", 2.0},

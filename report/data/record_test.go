@@ -116,11 +116,12 @@ func sampleSteady(scale float64) record.Steady {
 func sampleStress() record.Stress {
 	return record.Stress{
 		Profile: "abrupt, worst phase", Duration: 900e-9, Worst: true, Overshot: 0.75,
-		Voltage: record.Peak{Value: 21, Section: "main", At: 0.5, Time: 7.5e-9, Phase: 30},
-		Current: record.Peak{Value: 0.4, Section: "main", At: 0.025, Time: 5e-9, Phase: 120},
+		Voltage: record.Peak{Value: 21, Section: "main", At: 0.5, Time: 7.5e-9, Phase: 30, Uncertainty: 0.03},
+		Current: record.Peak{Value: 0.4, Section: "main", At: 0.025, Time: 5e-9, Phase: 120, Uncertainty: 0.002},
 		Sections: []record.StressSection{{
 			Name: "main", Voltage: 21, VoltageAt: 0.5, VoltageTime: 7.5e-9,
 			Current: 0.4, CurrentAt: 0.025, CurrentTime: 5e-9, SteadyVoltage: 12,
+			VoltageUncertainty: 0.03, CurrentUncertainty: 0.002,
 		}},
 	}
 }

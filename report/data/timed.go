@@ -7,9 +7,11 @@ func stressObject(s record.Stress) (object, error) {
 	for _, x := range s.Sections {
 		sections.add(x.Name, object{
 			{"peak_voltage_v", x.Voltage},
+			{"peak_voltage_uncertainty_v", x.VoltageUncertainty},
 			{"at_m", x.VoltageAt},
 			{"time_s", x.VoltageTime},
 			{"peak_current_a", x.Current},
+			{"peak_current_uncertainty_a", x.CurrentUncertainty},
 			{"current_at_m", x.CurrentAt},
 			{"current_time_s", x.CurrentTime},
 			{"steady_voltage_v", x.SteadyVoltage},
@@ -23,8 +25,8 @@ func stressObject(s record.Stress) (object, error) {
 		{"profile", s.Profile},
 		{"phase", phaseOf(s)},
 		{"duration_s", s.Duration},
-		{"peak_voltage", peakObject("value_v", s.Voltage)},
-		{"peak_current", peakObject("value_a", s.Current)},
+		{"peak_voltage", peakObject("v", s.Voltage)},
+		{"peak_current", peakObject("a", s.Current)},
 		{"overshoot", s.Overshot},
 		{"sections", all},
 	}, nil
@@ -39,9 +41,10 @@ func phaseOf(s record.Stress) string {
 	return "given"
 }
 
-func peakObject(key string, p record.Peak) object {
+func peakObject(unit string, p record.Peak) object {
 	return object{
-		{key, p.Value},
+		{"value_" + unit, p.Value},
+		{"uncertainty_" + unit, p.Uncertainty},
 		{"section", p.Section},
 		{"at_m", p.At},
 		{"time_s", p.Time},
