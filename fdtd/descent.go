@@ -10,12 +10,20 @@ type descent []struct {
 
 const descentStep = 1e-3
 
+// push takes in the next error. One that is hardly below the last takes over its
+// place and leaves it its level: were the level to follow, a slow fall would have
+// no step in it at all.
 func (d descent) push(step int, e float64) descent {
 	n := len(d)
-	for n > 0 && d[n-1].error <= e*(1+descentStep) {
+	for n > 0 && d[n-1].error <= e {
 		n--
 	}
-	return append(d[:n], struct {
+	d = d[:n]
+	if n > 0 && d[n-1].error <= e*(1+descentStep) {
+		d[n-1].step = step
+		return d
+	}
+	return append(d, struct {
 		step  int
 		error float64
 	}{step, e})
