@@ -41,6 +41,7 @@ func (d *document) network(m record.Model) {
 	}
 	d.b.Space(2)
 	d.b.Caption(d.figure(), networkFinding(m))
+	d.noteNetwork(m)
 }
 
 // networkFinding says what the drawing shows, from the model.

@@ -25,7 +25,7 @@ const manySections = 3
 
 // The heights of an envelope and of the error strip below it.
 const (
-	envelopeHeight = 86.0
+	envelopeHeight = 93.0 // the axis in wavelengths included
 	stripHeight    = 50.0
 	rowHeight      = envelopeHeight + stripHeight
 	zoomHeight     = rowHeight - 14 // of the zooms below a long section
@@ -121,20 +121,27 @@ func (d *document) envelopes(c *record.Case) {
 		first += zoomHeight
 	}
 	d.b.Subheading("Along the sections: envelopes and agreement", first+headed)
-	d.envelopeKey(c, slices.Concat(long, short))
+	e := envelopeDrawer{d, c, d.envelopeKey(c, slices.Concat(long, short))}
 	if first == rowHeight { // a long one would leave the rest of the page empty
-		d.shortSections(short)
+		e.shortSections(short)
 		short = nil
 	}
 	for _, ts := range long {
-		d.longSection(ts)
+		e.longSection(ts)
 	}
-	d.shortSections(short)
+	e.shortSections(short)
+}
+
+// envelopeDrawer draws the envelopes of a case, which share one key.
+type envelopeDrawer struct {
+	d   *document
+	c   *record.Case
+	key []figure.Entry
 }
 
 // envelopeKey writes what the curves and lines of the envelopes are.
-func (d *document) envelopeKey(c *record.Case, sections [][]*track) {
-	note := "Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end."
+func (d *document) envelopeKey(c *record.Case, sections [][]*track) []figure.Entry {
+	note := "Above: amplitude by both solutions. Below: their difference over the section's largest value, found and expected. Distance from the From end, in metres and in wavelengths."
 	key := []figure.Entry{
 		{Style: ink.PhasorLine, Text: "phasor; expected error"},
 		{Style: ink.FDTDLine, Text: "time domain; found error"},
@@ -149,6 +156,7 @@ func (d *document) envelopeKey(c *record.Case, sections [][]*track) {
 	}
 	d.b.Note(note)
 	d.key(key)
+	return key
 }
 
 // sorted parts the sections into those drawn as bands and the others.
@@ -167,32 +175,28 @@ func sorted(c *record.Case) (long, short [][]*track) {
 }
 
 // shortSections draws one section a row, or two if they are many.
-func (d *document) shortSections(sections [][]*track) {
+func (e envelopeDrawer) shortSections(sections [][]*track) {
 	each := 1
 	if len(sections) > manySections {
 		each = 2
 	}
 	for i := 0; i < len(sections); i += each {
 		var row []*track
-		finding := ""
+		finding, names := "", []string{"envelopes"}
 		for _, ts := range sections[i:min(i+each, len(sections))] {
 			row = append(row, ts...)
 			finding += envelopeFinding(ts) + " "
+			names = append(names, ts[0].section)
 		}
-		d.envelopeRow(row, 2*each, trimmed(finding))
+		e.d.show(picture{
+			name: pictureName(e.c, names...), finding: trimmed(finding), height: rowHeight, key: e.key,
+			paint: func(c draw.Canvas) {
+				for i, t := range row {
+					t.draw(column(c, i, 2*each), span{0, t.length})
+				}
+			},
+		})
 	}
-}
-
-// envelopeRow draws tracks side by side, in columns of equal width.
-func (d *document) envelopeRow(row []*track, columns int, finding string) {
-	label := d.figure()
-	d.b.Need(rowHeight + d.b.CaptionHeight(label, finding))
-	d.b.Block(rowHeight, func(c draw.Canvas) {
-		for i, t := range row {
-			t.draw(column(c, i, columns), span{0, t.length})
-		}
-	})
-	d.b.Caption(label, finding)
 }
 
 // column crops the i-th of n columns of equal width.
@@ -202,19 +206,37 @@ func column(c draw.Canvas, i, n int) draw.Canvas {
 }
 
 // longSection draws the whole length as bands and zooms of both ends.
-func (d *document) longSection(ts []*track) {
-	const height = rowHeight + zoomHeight
-	label, finding := d.figure(), envelopeFinding(ts)+" Upper row: extremes over each half wavelength; lower row: the outer "+format.Plural(zoomWavelengths, "wavelength")+" at each end."
-	d.b.Need(height + d.b.CaptionHeight(label, finding))
-	d.b.Block(height, func(c draw.Canvas) {
-		upper := draw.Crop(c, 0, 0, vg.Points(zoomHeight), 0)
-		lower := draw.Crop(c, 0, 0, 0, -vg.Points(rowHeight))
-		for i, t := range ts {
-			t.drawBand(column(upper, i, len(ts)))
-			part := zoomWavelengths * t.length / t.wavelengths
-			t.draw(column(lower, 2*i, 2*len(ts)), span{0, part})
-			t.draw(column(lower, 2*i+1, 2*len(ts)), span{t.length - part, t.length})
-		}
+func (e envelopeDrawer) longSection(ts []*track) {
+	e.d.show(picture{
+		name:    pictureName(e.c, "envelopes", ts[0].section),
+		finding: envelopeFinding(ts) + " " + bandNote(ts[0].wavelengths), height: rowHeight + zoomHeight, key: e.key,
+		paint: func(c draw.Canvas) {
+			upper := draw.Crop(c, 0, 0, vg.Points(zoomHeight), 0)
+			lower := draw.Crop(c, 0, 0, 0, -vg.Points(rowHeight))
+			for i, t := range ts {
+				t.drawBand(column(upper, i, len(ts)))
+				part := zoomWavelengths * t.length / t.wavelengths
+				t.draw(column(lower, 2*i, 2*len(ts)), span{0, part})
+				t.draw(column(lower, 2*i+1, 2*len(ts)), span{t.length - part, t.length})
+			}
+		},
 	})
-	d.b.Caption(label, finding)
+}
+
+// bandWindows is how many windows a band has at most: narrower ones do not
+// show apart on half the width of a page.
+const bandWindows = 240
+
+// windows returns how many windows the band of a section of so many
+// wavelengths has: one each half wavelength, so that it holds a crest and a
+// trough, or fewer.
+func windows(wavelengths float64) int { return int(min(math.Ceil(2*wavelengths), bandWindows)) }
+
+// bandNote says what the rows of a long section are.
+func bandNote(wavelengths float64) string {
+	over := "half wavelength"
+	if n := windows(wavelengths); float64(n) < 2*wavelengths-1 {
+		over = format.Number(wavelengths/float64(n)) + format.Space + "wavelengths"
+	}
+	return "Upper row: extremes over each " + over + "; lower row: the outer " + format.Plural(zoomWavelengths, "wavelength") + " at each end."
 }

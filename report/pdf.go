@@ -66,6 +66,9 @@ type document struct {
 	r       *record.Record
 	b       *sheet.Book
 	figures int
+
+	pictures []picture // every figure so far, and their names
+	taken    map[string]bool
 }
 
 // figure returns the label of the next figure.

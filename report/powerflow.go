@@ -37,11 +37,10 @@ func (d *document) powerFlow(c *record.Case) {
 		most = flowPartsOther
 	}
 	list := flowBars(a, gatheredParts(takers(a), most), whole)
-	label, finding := d.figure(), flowFinding(a, whole, of)
-	height := figure.BarsHeight(len(list))
-	d.b.Need(height + d.b.CaptionHeight(label, finding))
-	d.b.Block(height, func(cv draw.Canvas) { figure.Bars(cv, list, whole) })
-	d.b.Caption(label, finding)
+	d.show(picture{
+		name: pictureName(c, "power"), finding: flowFinding(a, whole, of), height: figure.BarsHeight(len(list)),
+		paint: func(cv draw.Canvas) { figure.Bars(cv, list, whole) },
+	})
 }
 
 // takers lists what takes up power, in the order of the record, without what

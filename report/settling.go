@@ -83,17 +83,19 @@ func (d *document) settlingPanels(c *record.Case, first *figure.Panel) {
 	if len(panels) == 0 {
 		return
 	}
-	label := d.figure()
-	d.b.Need(settlingHeight + figure.KeyRoom(entries, d.b.Width()) + d.b.CaptionHeight(label, finding))
+	p := picture{
+		name: pictureName(c, "settling"), finding: finding, height: settlingHeight, key: entries,
+		paint: func(cv draw.Canvas) {
+			for i, p := range panels {
+				p.Draw(share(cv, i, len(panels), first != nil))
+			}
+		},
+	}
+	d.b.Need(p.full(d.b.Width()) + d.b.CaptionHeight("Figure 00", finding))
 	if len(entries) > 0 {
 		d.key(entries)
 	}
-	d.b.Block(settlingHeight, func(cv draw.Canvas) {
-		for i, p := range panels {
-			p.Draw(share(cv, i, len(panels), first != nil))
-		}
-	})
-	d.b.Caption(label, finding)
+	d.show(p)
 }
 
 // where names the place of the settling run's panel in its row.

@@ -51,7 +51,7 @@ func (t *track) draw(c draw.Canvas, s span) {
 func (t *track) drawBand(c draw.Canvas) {
 	upper, lower := t.stack(c)
 	s := span{0, t.length}
-	n := min(int(math.Ceil(2*t.wavelengths)), 180)
+	n := windows(t.wavelengths)
 	e := t.envelope(s)
 	e.Band(figure.Extremes(t.z, t.phasor, n), ink.BandEdge)
 	b := figure.Extremes(t.z, t.fdtd, n)
@@ -88,13 +88,14 @@ func (t *track) envelope(s span) *figure.Panel {
 	top := max(max(largestOf(t.fdtd), largestOf(t.phasor), largestOf(t.peak))*air, headroom(limits))
 	p := figure.New(t.section, t.symbol, figure.Axis{Min: s.from, Max: s.to, Unit: "m", Bare: true}, figure.Axis{Unit: t.unit, Max: top})
 	p.Limits(limits)
+	p.Second("λ", t.wavelengths/t.length)
 	return p
 }
 
 // headroom returns the top of a panel that has room for the labels above the
 // highest limit, which stack where limits are close.
 func headroom(limits []figure.Limit) float64 {
-	const label = figure.TagHeight / (envelopeHeight - 20) // over the height of the data area
+	const label = figure.TagHeight / (envelopeHeight - 28) // over the height of the data area
 	var highest float64
 	for _, l := range limits {
 		highest = max(highest, l.Value)

@@ -32,7 +32,7 @@ func (d *document) waveforms(c *record.Case) {
 	d.b.Note(startNote(c.Stress, silent))
 	d.key(key)
 	for i := 0; i < len(list); i += each {
-		d.waveformRow(list[i:min(i+each, len(list))], each, height, c.Model.Frequency)
+		d.waveformRow(c, list[i:min(i+each, len(list))], each, height, key)
 	}
 }
 
@@ -91,19 +91,20 @@ func (d *document) key(entries []figure.Entry) {
 }
 
 // waveformRow draws waveforms side by side in columns of equal width.
-func (d *document) waveformRow(ws []record.Waveform, columns int, height, frequency float64) {
-	label, finding := d.figure(), ""
+func (d *document) waveformRow(c *record.Case, ws []record.Waveform, columns int, height float64, key []figure.Entry) {
+	finding, names := "", []string{"waveform"}
 	for i := range ws {
 		finding += waveformFinding(&ws[i]) + " "
+		names = append(names, ws[i].Name)
 	}
-	finding = trimmed(finding)
-	d.b.Need(height + d.b.CaptionHeight(label, finding))
-	d.b.Block(height, func(c draw.Canvas) {
-		for i := range ws {
-			waveform(column(c, i, columns), &ws[i], frequency)
-		}
+	d.show(picture{
+		name: pictureName(c, names...), finding: trimmed(finding), height: height, key: key,
+		paint: func(cv draw.Canvas) {
+			for i := range ws {
+				waveform(column(cv, i, columns), &ws[i], c.Model.Frequency)
+			}
+		},
 	})
-	d.b.Caption(label, finding)
 }
 
 // waveform draws the turn-on at the left and the last periods at the right.

@@ -27,6 +27,7 @@ type Panel struct {
 	x, y           scale
 	over           []plot.Plotter // what is drawn last, so that no curve runs through it
 	tags           []vg.Rectangle // labels of marks, which names of curves keep clear of
+	second         *second        // or nil
 }
 
 // scale maps SI values to the coordinates of an axis.
@@ -133,10 +134,17 @@ func (pn *Panel) Draw(c draw.Canvas) {
 	quantity := withUnit(pn.Quantity, pn.y.unit())
 	textStyle.Draw(c, x, y, textStyle.Fit(quantity, c.Max.X.Points()-x), typeset.Left)
 	c = draw.Crop(c, 0, 0, 0, vg.Points(-titleHeight))
+	if pn.second != nil {
+		c = draw.Crop(c, 0, 0, 0, vg.Points(-secondHeight))
+	}
 	pn.setTicks(c)
 	pn.p.Add(pn.over...)
 	pn.over = nil
-	pn.p.Draw(pn.align(c))
+	c = pn.align(c)
+	pn.p.Draw(c)
+	if pn.second != nil {
+		pn.second.draw(pn.p.DataCanvas(c), pn.x)
+	}
 }
 
 // setTicks chooses tick distances that suit the size of the panel.
