@@ -26,3 +26,25 @@ func newDrive(src network.Source, g Grid, phase float64) *drive {
 func (d *drive) at(n int) float64 {
 	return d.source.Profile(float64(n)*d.dt) * d.carry[n%len(d.carry)]
 }
+
+// edgeSteps is the rise, in steps, of a jump that the source makes. A jump has
+// frequencies that no grid carries: at Courant numbers below 1 they lag behind
+// and swing over by a fifth and more of the jump, however fine the grid is. A
+// rise of some steps has hardly any of them, and shrinks with the grid.
+const edgeSteps = 6
+
+// resolved gives a source that jumps a rise, or a fall, of edgeSteps, and tells
+// which. A start at a zero of the EMF does not jump.
+func resolved(src network.Source, g Grid) (network.Source, float64) {
+	edge := edgeSteps * g.Step
+	found := 0.0
+	if src.StartJumps() {
+		src.Start.Rise, found = edge, edge
+	}
+	if src.Stop != nil && src.Stop.Fall == 0 {
+		stop := *src.Stop
+		stop.Fall, found = edge, edge
+		src.Stop = &stop
+	}
+	return src, found
+}

@@ -59,31 +59,38 @@ type tree struct {
 }
 
 type edge struct {
-	to    int
-	delay float64
+	to      int
+	delay   float64
+	section int // -1 for a branch
 }
 
 func newTree(net *network.Network) *tree {
 	t := &tree{next: make([][]edge, len(net.Junctions))}
 	sets := newSets(len(net.Junctions))
-	join := func(a, b int, d float64) bool {
+	join := func(a, b int, d float64, section int) bool {
 		if !sets.join(a, b) {
 			return false
 		}
-		t.next[a] = append(t.next[a], edge{b, d})
-		t.next[b] = append(t.next[b], edge{a, d})
+		t.next[a] = append(t.next[a], edge{b, d, section})
+		t.next[b] = append(t.next[b], edge{a, d, section})
 		return true
 	}
-	order := slices.Clone(net.Sections)
-	slices.SortStableFunc(order, func(a, b network.Section) int { return cmp.Compare(b.Delay(), a.Delay()) })
-	for _, s := range order {
-		if !join(s.From, s.To, s.Delay()) {
+	order := make([]int, len(net.Sections))
+	for k := range order {
+		order[k] = k
+	}
+	slices.SortStableFunc(order, func(a, b int) int {
+		return cmp.Compare(net.Sections[b].Delay(), net.Sections[a].Delay())
+	})
+	for _, k := range order {
+		s := net.Sections[k]
+		if !join(s.From, s.To, s.Delay(), k) {
 			t.closing += s.Delay()
 		}
 	}
 	for _, b := range net.Branches {
 		if b.B != network.Ground && !b.Open {
-			join(b.A, b.B, 0)
+			join(b.A, b.B, 0, -1)
 		}
 	}
 	return t

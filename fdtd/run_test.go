@@ -11,9 +11,17 @@ import (
 	"linewitness/sim/network"
 )
 
-// TestNoAllocation: a time step, its peaks and its records do not allocate.
+// TestNoAllocation: a time step, its peaks, its records and its map do not
+// allocate, be the map that of the voltage or, of a long line, of the envelope.
 func TestNoAllocation(t *testing.T) {
-	net := lossyCascade()
+	long := matchedLine(40 * wavelength)
+	long.Branches[0].R = 200
+	for name, net := range map[string]*network.Network{"cascade": lossyCascade(), "long line": long} {
+		t.Run(name, func(t *testing.T) { allocations(t, net, net == long) })
+	}
+}
+
+func allocations(t *testing.T, net *network.Network, envelope bool) {
 	net.Source.Start.Worst = true
 	m, err := newModel(net, fixedGrid(net, 40))
 	if err != nil {
@@ -23,14 +31,19 @@ func TestNoAllocation(t *testing.T) {
 	if err != nil {
 		t.Fatal(err)
 	}
-	r := m.newRun(context.Background(), Settings{}, newDrive(net.Source, m.grid, 0), newDrive(net.Source, m.grid, -math.Pi/2))
+	set := Settings{Map: true}.withDefaults()
+	r := m.newRun(context.Background(), set, newDrive(net.Source, m.grid, 0), newDrive(net.Source, m.grid, -math.Pi/2))
 	s := &stresser{m: m, run: r, final: st, worst: true}
 	s.prepare([]float64{0, -math.Pi / 2})
+	if s.chart.envelope != envelope {
+		t.Fatalf("envelope %v, want %v", s.chart.envelope, envelope)
+	}
 	rec := newRecorder(t.Context(), m, 4096)
 	look := func(n int) { s.look(); rec.sample(r.lanes[0], n) }
 	defer runtime.GOMAXPROCS(runtime.GOMAXPROCS(1)) // as testing.AllocsPerRun: nobody else allocates
 	// Room for the periods below is made at their beginning, as in a run.
-	for range 60 {
+	halved := s.chart.every
+	for range 300 { // beyond the map of either network
 		s.follow.reserve()
 		s.traces.reserve()
 		var before, after runtime.MemStats
@@ -40,6 +53,9 @@ func TestNoAllocation(t *testing.T) {
 		if n := after.Mallocs - before.Mallocs; n != 0 || err != nil {
 			t.Fatalf("%d allocations in a period (%v)", n, err)
 		}
+	}
+	if s.chart.end >= r.n || s.chart.every == halved && s.chart.rows < mapRows/2 {
+		t.Errorf("the map was not filled: %d rows of %d steps, end %d of %d", s.chart.rows, s.chart.every, s.chart.end, r.n)
 	}
 }
 

@@ -20,6 +20,8 @@ type Settings struct {
 	Exactly int
 	// Sharp keeps a jump of the source in a stress run as it is, see edgeSteps.
 	Sharp bool
+	// Map makes a stress run keep the voltage along the main path against time.
+	Map bool
 	// Progress, if not nil, is called after every period with the number of
 	// cell updates done since the last call.
 	Progress func(updates float64)

@@ -37,6 +37,7 @@ type Stress struct {
 	// Edge is the rise that a jump of the source was given, s; 0 if it has none.
 	Edge    float64
 	Traces  Traces
+	Map     Map // empty without Settings.Map
 	Updates float64
 }
 
@@ -108,28 +109,6 @@ func StressRun(ctx context.Context, net *network.Network, final *Steady, set Set
 	return s.result(), nil
 }
 
-// edgeSteps is the rise, in steps, of a jump that the source makes. A jump has
-// frequencies that no grid carries: at Courant numbers below 1 they lag behind
-// and swing over by a fifth and more of the jump, however fine the grid is. A
-// rise of some steps has hardly any of them, and shrinks with the grid.
-const edgeSteps = 6
-
-// resolved gives a source that jumps a rise, or a fall, of edgeSteps, and tells
-// which. A start at a zero of the EMF does not jump.
-func resolved(src network.Source, g Grid) (network.Source, float64) {
-	edge := edgeSteps * g.Step
-	found := 0.0
-	if src.StartJumps() {
-		src.Start.Rise, found = edge, edge
-	}
-	if src.Stop != nil && src.Stop.Fall == 0 {
-		stop := *src.Stop
-		stop.Fall, found = edge, edge
-		src.Stop = &stop
-	}
-	return src, found
-}
-
 type stresser struct {
 	m      *model
 	run    *run
@@ -141,6 +120,7 @@ type stresser struct {
 	parts  []held    // network parts, and the source last
 	follow *follower
 	traces *tracer
+	chart  *charter // nil without Settings.Map
 	edge   float64
 	done   bool
 }
@@ -154,6 +134,7 @@ func (s *stresser) prepare(phases []float64) {
 	s.parts = make([]held, len(s.m.net.Parts)+1)
 	s.follow = newFollower(s.m, s.final, phases)
 	s.traces = newTracer(s.m, len(phases))
+	s.chart = newCharter(s.m, s.run.set, len(phases))
 }
 
 // stress runs period by period until the network is at rest.
@@ -205,6 +186,7 @@ func (s *stresser) look() {
 	s.lumped(a, b, n)
 	s.follow.look(s.run.lanes)
 	s.traces.look(s.run.lanes, n)
+	s.chart.look(s.run.lanes, n)
 }
 
 // addEnds takes the peaks of the currents at the ends of section k into its
@@ -261,6 +243,7 @@ func (s *stresser) result() *Stress {
 		Grid: g, Worst: s.worst, Complete: s.done,
 		Duration:   float64(s.run.n) * g.Step,
 		Traces:     s.traces.traces(),
+		Map:        s.chart.chart(),
 		Updates:    s.run.updates,
 		SettleTime: s.follow.settleTime,
 		PartTime:   s.follow.partTime,
