@@ -3,6 +3,7 @@ package report
 import (
 	"math"
 	"math/cmplx"
+	"slices"
 
 	"linewitness/report/format"
 	"linewitness/report/sheet"
@@ -10,7 +11,7 @@ import (
 )
 
 // caseRoom is the part of a page that a chapter needs to begin on it.
-const caseRoom = 0.5
+const caseRoom = 0.34
 
 // solved writes the pages of one case.
 func (d *document) solved(c *record.Case) {
@@ -47,6 +48,12 @@ func (d *document) verdictLine(c *record.Case) {
 		" at most; " + format.Percent(a.Expected) + " was expected and the limit is " + format.Percent(a.Limit) + "."
 	if a.Worst.Section != "" {
 		s += " The largest difference is in the " + a.Worst.Quantity + " of " + a.Worst.Section + " at " + place(a.Worst.At) + "."
+	}
+	switch n := len(c.Warnings); {
+	case n == 0:
+		s += " The run raised no warning."
+	default:
+		s += " " + format.Plural(int64(n), "warning") + "."
 	}
 	d.b.Verdict(markOf(c.Verdict), colorOf(c.Verdict), capital(string(c.Verdict))+".", s)
 }
@@ -92,9 +99,14 @@ func (d *document) loads(c *record.Case) {
 	t := sheet.Table{Columns: []sheet.Column{
 		left("Load or junction"), right("Voltage, peak"), right("Voltage, rms"), right("Current, peak"), right("Power"),
 	}}
+	shown := map[string]bool{}
 	for _, l := range c.Phasor.Loads {
+		name := l.Name + " (load)"
+		if at := loadAt(c.Model, l.Name); at != "" {
+			name, shown[at] = l.Name+" (load), "+at, true
+		}
 		t.Rows = append(t.Rows, []sheet.Cell{
-			{Text: l.Name + " (load)", Bold: true},
+			{Text: name, Bold: true},
 			{Text: format.Polar(near.voltage(l.V), "V")},
 			{Text: rms(near.voltage(l.V))},
 			{Text: format.Polar(near.current(l.I), "A")},
@@ -102,6 +114,9 @@ func (d *document) loads(c *record.Case) {
 		})
 	}
 	for _, j := range c.Phasor.Junctions {
+		if shown[j.Name] { // a load has its voltage
+			continue
+		}
 		t.Rows = append(t.Rows, []sheet.Cell{
 			{Text: j.Name},
 			{Text: format.Polar(near.voltage(j.V), "V")},
@@ -113,13 +128,27 @@ func (d *document) loads(c *record.Case) {
 	d.b.Table(t)
 }
 
+// loadAt returns the junction of a load.
+func loadAt(m record.Model, name string) string {
+	for _, l := range m.Loads {
+		if l.Name == name {
+			return l.At
+		}
+	}
+	return ""
+}
+
 func rms(v complex128) string { return format.SI(cmplx.Abs(v)/math.Sqrt2, "V") }
 
-// warnings lists what the run noticed.
+// warnings lists what the run noticed; what was noticed in the nominal case is
+// not said again.
 func (d *document) warnings(c *record.Case) {
-	d.b.Subheading("Warnings", 30)
 	if len(c.Warnings) == 0 {
-		d.b.Paragraph("The run of this case raised no warning.")
+		return
+	}
+	d.b.Subheading("Warnings", 30)
+	if n := d.nominal(); c != n && slices.Equal(c.Warnings, n.Warnings) {
+		d.b.Paragraph("The same as in " + n.Name + ".")
 		return
 	}
 	for _, w := range c.Warnings {
@@ -131,6 +160,13 @@ func (d *document) warnings(c *record.Case) {
 func (d *document) grid(c *record.Case) {
 	g := c.Grid
 	if len(g.Sections) == 0 {
+		return
+	}
+	note := format.Plural(int64(g.StepsPerPeriod), "step") + " a period, each " + format.SI(g.Step, "s") + "; " +
+		format.Digits(g.Updates, 3) + " cell updates in both runs."
+	if n := d.nominal(); c != n && slices.Equal(g.Sections, n.Grid.Sections) {
+		d.b.Subheading("Grid of the time domain", 30)
+		d.b.Note("The grid of " + n.Name + ": " + note)
 		return
 	}
 	t := sheet.Table{Columns: []sheet.Column{
@@ -150,6 +186,5 @@ func (d *document) grid(c *record.Case) {
 	}
 	d.b.Subheading("Grid of the time domain", 60)
 	d.b.Table(t)
-	d.b.Note(format.Plural(int64(g.StepsPerPeriod), "step") + " a period, each " + format.SI(g.Step, "s") + "; " +
-		format.Digits(g.Updates, 3) + " cell updates in both runs.")
+	d.b.Note(note)
 }

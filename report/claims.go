@@ -168,7 +168,7 @@ func (d *document) coverClaims() {
 		worst, word = record.ClaimOpen, "Not shown: "+among(claimsOf(all, record.ClaimOpen), mostNames)+"."
 	}
 	d.b.Subheading("Claims of the designer", 30)
-	d.b.Verdict(markOfClaim(worst), colorOfClaim(worst), word, claimTally(all)+" The chapter Claims has the figures.")
+	d.b.Verdict(markOfClaim(worst), colorOfClaim(worst), word, claimTally(all)+" The chapter Claims has the figures, and the slips that would explain what is contradicted.")
 }
 
 // claimsOf returns the ids of the claims of a verdict.

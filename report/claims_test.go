@@ -2,6 +2,7 @@ package report
 
 import (
 	"fmt"
+	"math"
 	"strings"
 	"testing"
 
@@ -97,5 +98,27 @@ func TestTogether(t *testing.T) {
 	got := together([]record.Claim{{ID: "C1", Slips: slips}, {ID: "C2", Slips: slips[:2]}})
 	if want := "One slip explains C1 and C2 together: first."; len(got) != 1 || got[0] != want {
 		t.Errorf("%q, want %q", got, want)
+	}
+}
+
+// The reason of a claim leads to its list of slips without naming the first
+// twice, and has no bare infinity.
+func TestClaimReason(t *testing.T) {
+	one := []record.Slip{{Name: "feet for metres", Where: "section main"}}
+	for _, c := range []struct {
+		q    record.Claim
+		want string
+	}{
+		{record.Claim{Verdict: record.Contradicted, Finding: "Too far. Most likely: feet for metres, section main.", Slips: one}, "Too far. One slip alone would give it:"},
+		{
+			record.Claim{Verdict: record.Contradicted, Finding: "Too far. Most likely: feet for metres, section main. And more.", Slips: append(one, record.Slip{Name: "x"})},
+			"Too far. And more. Each of these slips alone would give it, the most likely first:",
+		},
+		{record.Claim{Verdict: record.Contradicted, Finding: "Too far."}, "Too far. No single known slip explains it."},
+		{record.Claim{Verdict: record.ClaimOpen, Finding: "Its +Inf.", Uncertainty: math.Inf(1)}, "The uncertainty has no bound, so that nothing is shown either way."},
+	} {
+		if got := claimReason(&c.q); got != c.want {
+			t.Errorf("%q, want %q", got, c.want)
+		}
 	}
 }

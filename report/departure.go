@@ -4,7 +4,6 @@ import (
 	"math"
 	"slices"
 
-	"gonum.org/v1/plot/vg/draw"
 	"linewitness/report/figure"
 	"linewitness/report/format"
 	"linewitness/report/ink"
@@ -18,10 +17,7 @@ func (d *document) departures(c *record.Case) {
 	if p == nil {
 		return
 	}
-	label, finding := d.figure(), capital(departureFinding(c))
-	d.b.Need(departureHeight + d.b.CaptionHeight(label, finding))
-	d.b.Block(departureHeight, func(cv draw.Canvas) { p.Draw(cv) })
-	d.b.Caption(label, finding)
+	d.show(picture{name: pictureName(c, "departure"), finding: capital(departureFinding(c)), height: departureHeight, paint: p.Draw})
 }
 
 // The vertical range of a departure: down to a tenth of the finest level, and
@@ -32,10 +28,11 @@ const (
 	echoRooms      = 12
 )
 
-// departurePanel returns nil if no junction has a curve.
+// departurePanel returns nil if no junction has a curve, or the run no steady
+// state.
 func (d *document) departurePanel(c *record.Case) *figure.Panel {
 	places := shownPlaces(c)
-	if len(places) == 0 {
+	if len(places) == 0 || !c.Settling.Settled { // without a final phasor nothing departs from it
 		return nil
 	}
 	top, last := 1.0, 0.0
@@ -161,15 +158,15 @@ func departureFinding(c *record.Case) string {
 		}
 		return "not within 1" + format.Space + "% in the run of " + format.SI(c.Stress.Duration, "s") + ": " + among(slow, 3) + "."
 	}
-	text := "every junction within 1" + format.Space + "% " + format.SI(s.To1Percent, "s") + " after switch-on, " + inTrips(s.To1Percent, s.RoundTrip, c.Model.Frequency)
+	text := "every junction is within 1" + format.Space + "% after " + format.SI(s.To1Percent, "s") + " (" + inTrips(s.To1Percent, s.RoundTrip, c.Model.Frequency) + ")"
 	if p := shownPlaces(c); len(p) > 1 {
 		slices.SortStableFunc(p, slower)
 		if slower(p[0], p[1]) < 0 {
-			text += ", the last " + p[0].Name
+			text += ", " + p[0].Name + " the last"
 		}
 	}
 	if len(c.Settling.Echoes) > 0 {
-		text += "; the upright lines are first echoes from the junctions named"
+		text += "; upright lines: the first echoes, from the junctions named"
 	}
 	return text + "."
 }

@@ -11,7 +11,7 @@ import (
 // gridStudy writes what the grids make of every figure, and the comparison of
 // each with the closed form.
 func (d *document) gridStudy(c *record.Case) {
-	v := &c.Convergence
+	v := c.Convergence.Distinct()
 	if len(v.Studies) == 0 && v.Skipped == "" {
 		return
 	}
@@ -22,12 +22,16 @@ func (d *document) gridStudy(c *record.Case) {
 	}
 	if v.Skipped == "" {
 		d.b.Table(gridTable(v))
-		d.b.Note(gridNote(v))
+		d.b.Note(gridNote(v, c == d.nominal()))
+	}
+	if !c.Settling.Settled {
+		d.b.Paragraph("The errors against the closed form are not judged: the time domain reached no steady state that could be compared.")
+		return
 	}
 	d.b.Paragraph(validationFinding(v))
 	if t := validationTable(v); len(t.Rows) > 0 {
 		d.b.Table(t)
-		d.b.Note(validationNote(v))
+		d.b.Note(validationNote(v, c == d.nominal()))
 	}
 }
 

@@ -63,8 +63,8 @@ func listed(parts []string) string {
 	return strings.Join(parts[:last], ", ") + " and " + parts[last]
 }
 
-// gridNote says what the grids and the columns are.
-func gridNote(v *record.Convergence) string {
+// gridNote says what the grids are and, where they come first, the columns.
+func gridNote(v *record.Convergence, columns bool) string {
 	var grids []string
 	for _, g := range v.Grids {
 		grids = append(grids, format.Plural(int64(g.StepsPerPeriod), "step")+" of "+format.SI(g.Step, "s")+" a period and "+format.Plural(int64(g.Cells), "cell"))
@@ -78,6 +78,9 @@ func gridNote(v *record.Convergence) string {
 			s += "A figure of the stress run stands on that run's own two grids. "
 			break
 		}
+	}
+	if !columns {
+		return trimmed(s)
 	}
 	return s + "Step to zero: the value extrapolated to a step of zero. Index: the grid convergence index of the finest grid, the factor times what the order leaves of the change (see Method)."
 }
@@ -130,9 +133,13 @@ func further(n int) string {
 	return "; and of " + format.Count(int64(n)) + " more"
 }
 
-// validationNote says what the columns are and which figures are not compared.
-func validationNote(v *record.Convergence) string {
-	s := "E: finest grid less closed form. u: its uncertainty, the sum of those of the grid (the larger of the index and of what the dispersion formulas predict), of what is left of the settling, of the rational form of dispersive lines, and of rounding."
+// validationNote says which figures are not compared and, where they come
+// first, what the columns are.
+func validationNote(v *record.Convergence, columns bool) string {
+	s := ""
+	if columns {
+		s = "E: finest grid less closed form. u: its uncertainty, the sum of those of the grid (the larger of the index and of what the dispersion formulas predict), of what is left of the settling, of the rational form of dispersive lines, and of rounding."
+	}
 	var only []string
 	for i := range v.Studies {
 		if x := &v.Studies[i]; math.IsNaN(x.Phasor) {
@@ -142,5 +149,5 @@ func validationNote(v *record.Convergence) string {
 	if len(only) > 0 {
 		s += " Given by the time domain alone, and not compared: " + among(only, mostNames) + "."
 	}
-	return s
+	return trimmed(s)
 }

@@ -92,9 +92,19 @@ func (d *document) transientFields(c *record.Case) []sheet.Field {
 	return []sheet.Field{
 		{Label: "Peak voltage", Value: peak(x.Voltage, "V"), Wide: true},
 		{Label: "Peak current", Value: peak(x.Current, "A"), Wide: true},
-		{Label: "Over the steady value", Value: "largest instantaneous voltage " + format.Percent(x.Overshot) + " over the largest steady one; " + start, Wide: true},
+		{Label: "Against the steady value", Value: overSteady(x.Overshot) + "; " + start, Wide: true},
 		{Label: "Settling", Value: settled(s, d.r.Design.Tolerance), Wide: true},
 	}
+}
+
+// overSteady compares the largest instantaneous voltage with the largest steady
+// one, of which it falls short where the run ends before it is reached.
+func overSteady(part float64) string {
+	word := " above"
+	if part < 0 {
+		word = " below"
+	}
+	return "largest instantaneous voltage " + format.Percent(math.Abs(part)) + word + " the largest steady one"
 }
 
 func peak(p record.Peak, unit string) string {

@@ -52,17 +52,23 @@ func TestFewRatings(t *testing.T) {
 	}
 }
 
-// Rows that differ in their value only are joined; others are not.
+// What has one origin and one note is joined; the values of one thing name it
+// once.
 func TestGathered(t *testing.T) {
 	row := func(what, text, kind, note string) record.Pedigree {
 		return record.Pedigree{What: what, Text: text, Kind: kind, Note: note}
 	}
 	got := gathered([]record.Pedigree{
 		row("loss", "1 dB", "datasheet", ""), row("loss", "2 dB", "datasheet", ""), row("loss", "3 dB", "measured", ""), row("z0", "50 ohm", "measured", ""),
+		row("model", "constant", "datasheet", "a note"),
 	})
-	want := []record.Pedigree{row("loss", "1 dB; 2 dB", "datasheet", ""), row("loss", "3 dB", "measured", ""), row("z0", "50 ohm", "measured", "")}
-	if !slices.Equal(got, want) {
-		t.Errorf("%v, want %v", got, want)
+	var texts []string
+	for _, p := range got {
+		texts = append(texts, p.Kind+": "+p.Text)
+	}
+	want := []string{"datasheet: loss 1 dB; 2 dB", "measured: loss 3 dB; z0 50 ohm", "datasheet: model constant"}
+	if !slices.Equal(texts, want) {
+		t.Errorf("%q, want %q", texts, want)
 	}
 }
 

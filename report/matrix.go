@@ -3,6 +3,7 @@ package report
 import (
 	"math"
 	"slices"
+	"strings"
 
 	"linewitness/report/format"
 	"linewitness/report/sheet"
@@ -15,7 +16,7 @@ const matrixCases = 8
 // sideBySide writes the cases beside each other; with one case there is
 // nothing to set beside it.
 func (d *document) sideBySide() {
-	m := &d.r.Matrix
+	m := merged(&d.r.Matrix)
 	if len(m.Cases) < 2 || len(m.Rows) == 0 {
 		return
 	}
@@ -27,7 +28,7 @@ func (d *document) sideBySide() {
 		d.b.Table(matrixTable(m, group))
 	}
 	d.b.Note("In small type: the difference from " + m.Cases[0] + ". Worst, in bold: the least margin of the row or, of a figure without a limit, the farthest from " + m.Cases[0] +
-		". A dash: not judged in that case. Amplitudes are peak where nothing else is said.")
+		". A requirement's value without a mark is not judged in that case; a dash: there is none. Amplitudes are peak where nothing else is said.")
 }
 
 // columnsOf splits n cases into groups of at most most, as even as can be.
@@ -70,7 +71,46 @@ func matrixTable(m *record.Matrix, cases []int) sheet.Table {
 	return t
 }
 
-func matrixLabel(r *record.MatrixRow) string { return figureName(r.Label, "", r.Unit) }
+// matrixLabel is the quantity in words and what it is of, whose names stay as
+// the design file has them.
+func matrixLabel(r *record.MatrixRow) string {
+	quantity, subject, _ := strings.Cut(r.Label, ", ")
+	return figureName(quantity, subject, r.Unit)
+}
+
+// merged puts a key figure that a requirement is about into the row of the
+// requirement, where it fills the cases in which that is not judged.
+func merged(m *record.Matrix) *record.Matrix {
+	out := &record.Matrix{Cases: m.Cases}
+	for _, r := range m.Rows {
+		r.Cells = slices.Clone(r.Cells)
+		k := slices.IndexFunc(out.Rows, func(o record.MatrixRow) bool {
+			return r.ID == "" && o.ID != "" && o.Label == r.Label && o.Unit == r.Unit
+		})
+		if k < 0 {
+			out.Rows = append(out.Rows, r)
+			continue
+		}
+		fillCells(out.Rows[k].Cells, r.Cells)
+	}
+	return out
+}
+
+// fillCells fills the cells that are missing; none of those is the worst, for
+// the worst has the least margin.
+func fillCells(cells, from []record.MatrixCell) {
+	for i := range min(len(cells), len(from)) {
+		if !cells[i].Present && from[i].Present {
+			cells[i] = from[i]
+			cells[i].Worst = false
+		}
+	}
+	for i := 1; i < min(len(cells), len(from)); i++ {
+		if math.IsNaN(cells[i].Difference) {
+			cells[i].Difference = from[i].Difference
+		}
+	}
+}
 
 // matrixCell has a value, the mark of its verdict, and in small type whether it
 // is the worst and how far it is from the nominal case.
@@ -79,14 +119,26 @@ func matrixCell(r *record.MatrixRow, k int) sheet.Cell {
 		return sheet.Cell{Text: format.Missing}
 	}
 	c := r.Cells[k]
-	out := sheet.Cell{Text: unqualified(c.Value, r.Unit), Bold: c.Worst, Note: departure(c, r.Unit)}
+	out := sheet.Cell{Text: unqualified(c.Value, r.Unit), Note: departure(c, r.Unit)}
 	if c.Verdict != "" {
 		out.Mark = markOfRequirement(c.Verdict)
 	}
-	if c.Worst {
+	if c.Worst && rivals(r) > 1 {
+		out.Bold = true
 		out.Note = trimmed("worst " + out.Note)
 	}
 	return out
+}
+
+// rivals counts the cells of which one can be the worst: those that are judged,
+// or all of a key figure.
+func rivals(r *record.MatrixRow) (n int) {
+	for _, c := range r.Cells {
+		if c.Present && (r.ID == "" || c.Verdict != "") {
+			n++
+		}
+	}
+	return n
 }
 
 // unqualified prints a value without the qualifier of its unit, which the label has.

@@ -102,3 +102,40 @@ func TestManyCases(t *testing.T) {
 		}
 	}
 }
+
+// A key figure that a requirement is about fills the cases in which the
+// requirement is not judged, and has no row of its own; none of the filled
+// cells is the worst of the requirement.
+func TestMerged(t *testing.T) {
+	nan := math.NaN()
+	m := &record.Matrix{Cases: []string{"a", "b", "c"}, Rows: []record.MatrixRow{
+		{ID: "R1", Label: "steady_voltage, main", Unit: "V peak", Cells: []record.MatrixCell{
+			{Difference: nan}, {Present: true, Value: 2, Difference: nan, Verdict: record.Met, Worst: true}, {Difference: nan},
+		}},
+		{Label: "steady_voltage, main", Unit: "V peak", Cells: []record.MatrixCell{
+			{Present: true, Value: 1, Difference: nan}, {Present: true, Value: 2, Difference: 1}, {Present: true, Value: 9, Difference: 8, Worst: true},
+		}},
+		{Label: "steady_voltage, main", Unit: "dB", Cells: make([]record.MatrixCell, 3)},
+	}}
+	got := merged(m)
+	if len(got.Rows) != 2 || got.Rows[1].Unit != "dB" {
+		t.Fatalf("rows %+v", got.Rows)
+	}
+	r := &got.Rows[0]
+	for k, want := range []sheet.Cell{
+		{Text: "1.000 V"},
+		{Text: "2.000 V", Mark: sheet.Holds, Note: "+1.000 V"}, // judged in one case alone: nothing to be worst of
+		{Text: "9.000 V", Note: "+8.000 V"},
+	} {
+		c := matrixCell(r, k)
+		if c.Text, c.Note = readable(c.Text), readable(c.Note); c != want {
+			t.Errorf("cell %d is %+v, want %+v", k, c, want)
+		}
+	}
+	if m.Rows[0].Cells[0].Present {
+		t.Error("the record itself was changed")
+	}
+	if got := matrixLabel(&record.MatrixRow{Label: "power_split, rack_2 to rack_1"}); got != "power split, rack_2 to rack_1" {
+		t.Errorf("label %q", got)
+	}
+}

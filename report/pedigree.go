@@ -37,7 +37,7 @@ func originOf(p record.Pedigree) string {
 // pedigree writes where the data of the lines come from.
 func (d *document) pedigree(kinds []lineKind) {
 	t := sheet.Table{Columns: []sheet.Column{
-		left("Line"), left("What"), left("Value"), left("Origin"), left("Note"),
+		left("Line"), {Head: "Data", Grow: 3}, left("Origin"), left("Note"),
 	}}
 	flagged := false
 	for _, k := range kinds {
@@ -56,38 +56,39 @@ func (d *document) pedigree(kinds []lineKind) {
 	d.b.Note(note)
 }
 
-// pedigreeRows returns the rows of one line. A note that repeats that of the
-// row above is not printed again.
+// pedigreeRows returns the rows of one line, one for each origin and note.
 func pedigreeRows(k lineKind) [][]sheet.Cell {
 	var rows [][]sheet.Cell
-	var above record.Pedigree
 	for i, p := range gathered(k.Pedigree) {
-		note := p.Note
-		if note != "" && note == above.Note && p.Kind == above.Kind {
-			note = "as above"
-		}
-		row := []sheet.Cell{{}, {Text: p.What}, {Text: format.Signed(p.Text)}, {Text: originOf(p)}, {Text: note}}
+		row := []sheet.Cell{{}, {Text: format.Signed(p.Text)}, {Text: originOf(p)}, {Text: p.Note}}
 		if i == 0 {
 			row[0] = sheet.Cell{Text: k.label, Bold: true}
 		}
 		if unconfirmed(p) {
-			row[3].Mark, row[3].Bold = sheet.Confirm, true
+			row[2].Mark, row[2].Bold = sheet.Confirm, true
 		}
-		rows, above = append(rows, row), p
+		rows = append(rows, row)
 	}
 	return rows
 }
 
-// gathered joins rows that follow one another and differ in their values only,
-// such as those of a loss table.
+// gathered joins what has the same origin and note: "z0 50 ohm; velocity factor
+// 0.66". What is given several times, such as the loss of a table, is named once.
 func gathered(ps []record.Pedigree) []record.Pedigree {
 	var out []record.Pedigree
+	last := "" // what the last text of out is of
 	for _, p := range ps {
-		if n := len(out); n > 0 && out[n-1].What == p.What && out[n-1].Kind == p.Kind && out[n-1].Note == p.Note {
-			out[n-1].Text += "; " + p.Text
-			continue
+		i := slices.IndexFunc(out, func(o record.Pedigree) bool { return o.Kind == p.Kind && o.Note == p.Note })
+		switch what := p.What + " "; {
+		case i < 0:
+			p.Text = what + p.Text
+			out = append(out, p)
+		case last == p.What && i == len(out)-1:
+			out[i].Text += "; " + p.Text
+		default:
+			out[i].Text += "; " + what + p.Text
 		}
-		out = append(out, p)
+		last = p.What
 	}
 	return out
 }

@@ -49,6 +49,10 @@ func (d *document) balance(c *record.Case) sheet.Table {
 		if w.a.Closed {
 			mark, word = sheet.Holds, "closed"
 		}
+		if w.name != "Phasor" && !c.Settling.Settled {
+			mark, word = sheet.Open, "not judged"
+			w.a.Q = math.NaN()
+		}
 		t.Rows = append(t.Rows, []sheet.Cell{
 			{Text: w.name, Bold: true},
 			{Text: availablePower(w.a)},

@@ -23,10 +23,25 @@ func (d *document) settlingTimes(c *record.Case) {
 	if len(rows) == 0 {
 		return
 	}
+	if !c.Settling.Settled {
+		d.b.Note(noTimes(c.Settling.Predicted))
+		return
+	}
 	ringing := len(c.Settling.RingDown) > 0
 	t := timesTable(rows, ringing)
 	d.b.Table(t)
 	d.b.Note(timesNote(c, rows, ringing))
+}
+
+// noTimes says why a run that did not settle has no times, and what the slowest
+// mode alone would take.
+func noTimes(p record.PredictedSettling) string {
+	s := "No times to the final phasors are given, for none was reached."
+	if p.To1Percent > 0 && !math.IsInf(p.To1Percent, 0) {
+		s += " The slowest mode alone takes " + format.SI(p.To10Percent, "s") + " to 10" + format.Space + "%, " + format.SI(p.To1Percent, "s") +
+			" to 1" + format.Space + "% and " + format.SI(p.ToTenth, "s") + " to 0.1" + format.Space + "% (predicted, from the end of the source's own rise)."
+	}
+	return s
 }
 
 // timeRows lists the prediction and the places.

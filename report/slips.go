@@ -1,6 +1,7 @@
 package report
 
 import (
+	"math"
 	"math/cmplx"
 	"slices"
 	"strings"
@@ -16,10 +17,7 @@ func (d *document) claimFinding(q *record.Claim) {
 		return
 	}
 	word := capital(string(q.Verdict)) + "."
-	text := q.ID + ", " + words(q.Quantity) + subject(q.Subject) + ", case " + q.Case + ". " + q.Finding
-	if q.Verdict == record.Contradicted && len(q.Slips) == 0 && !strings.Contains(strings.ToLower(q.Finding), noSlip) {
-		text += " " + capital(noSlip) + "."
-	}
+	text := q.ID + ", " + words(q.Quantity) + subject(q.Subject) + ", case " + q.Case + ". " + claimReason(q)
 	d.b.Space(5)
 	d.b.Need(slipRoom)
 	d.b.Verdict(markOfClaim(q.Verdict), colorOfClaim(q.Verdict), word, trimmed(text))
@@ -32,6 +30,29 @@ const (
 	noSlip   = "no single known slip explains it"
 	slipRoom = 44.0 // what a claim needs to begin on a page: its finding and the first slip
 )
+
+// claimReason says why a claim has its verdict, and leads to the list of slips.
+func claimReason(q *record.Claim) string {
+	switch {
+	case q.Verdict == record.ClaimOpen && math.IsInf(q.Uncertainty, 0):
+		return "The uncertainty has no bound, so that nothing is shown either way."
+	case len(q.Slips) == 0 && q.Verdict == record.Contradicted && !strings.Contains(strings.ToLower(q.Finding), noSlip):
+		return trimmed(q.Finding + " " + capital(noSlip) + ".")
+	case len(q.Slips) == 0:
+		return q.Finding
+	}
+	// The list names the slips, with their values; the finding's name of the
+	// first would only repeat it.
+	first := q.Slips[0].Name
+	if q.Slips[0].Where != "" {
+		first += ", " + q.Slips[0].Where
+	}
+	s := strings.Replace(q.Finding, " Most likely: "+first+".", "", 1)
+	if len(q.Slips) == 1 {
+		return trimmed(s + " One slip alone would give it:")
+	}
+	return trimmed(s + " Each of these slips alone would give it, the most likely first:")
+}
 
 // slipText says what a slip makes of the claim, what cannot be told from it,
 // and what else it explains.

@@ -3,6 +3,7 @@ package report
 import (
 	"fmt"
 	"image/color"
+	"slices"
 	"strings"
 
 	"linewitness/report/format"
@@ -135,11 +136,11 @@ func (d *document) named(v record.RequirementVerdict, word string) []string {
 	for _, c := range d.r.Cases {
 		for _, q := range c.Requirements {
 			if q.Verdict == v {
-				list.add(q.ID+" is "+word, c.Name)
+				list.add(q.ID, c.Name)
 			}
 		}
 	}
-	return list.sentences("further requirements are " + word)
+	return list.gathered(word).sentences("further requirements are " + word)
 }
 
 // disputed names the claims of one verdict, a sentence for each case.
@@ -171,6 +172,35 @@ func (l *casesOf) add(statement, name string) {
 		l.statements = append(l.statements, statement)
 	}
 	l.cases[statement] = append(l.cases[statement], name)
+}
+
+// gathered joins ids that hold in the same cases into one statement: "R1, R2
+// are missed".
+func (l *casesOf) gathered(word string) *casesOf {
+	var out casesOf
+	done := map[string]bool{}
+	for i, id := range l.statements {
+		ids := []string{id}
+		for _, o := range l.statements[i+1:] {
+			if !done[o] && slices.Equal(l.cases[id], l.cases[o]) {
+				ids = append(ids, o)
+			}
+		}
+		if done[id] {
+			continue
+		}
+		verb := " is "
+		if len(ids) > 1 {
+			verb = " are "
+		}
+		for _, o := range ids {
+			done[o] = true
+		}
+		for _, c := range l.cases[id] {
+			out.add(among(ids, mostNames)+verb+word, c)
+		}
+	}
+	return &out
 }
 
 // sentences makes a sentence of each statement, of the first few; further says

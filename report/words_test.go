@@ -41,6 +41,10 @@ func TestReason(t *testing.T) {
 			judged(map[string][]record.RequirementVerdict{"a": {missed, met}, "b": {missed, open}}, "a", "b"),
 			"R1 is missed in a, b. R2 is not shown in b.",
 		},
+		{
+			judged(map[string][]record.RequirementVerdict{"a": {missed, missed, met}, "b": {met, met, missed}}, "a", "b"),
+			"R1, R2 are missed in a. R3 is missed in b.",
+		},
 	} {
 		if got := readable(c.d.reason()); got != c.want {
 			t.Errorf("reason %q, want %q", got, c.want)

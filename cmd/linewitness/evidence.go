@@ -12,7 +12,7 @@ import (
 // evidenceRows are the lines on the grid study, on the validation and on the
 // curves; there are none of what a record was made without.
 func evidenceRows(c *record.Case) (rows [][]string) {
-	v := &c.Convergence
+	v := c.Convergence.Distinct()
 	t := v.Tally()
 	switch {
 	case v.Skipped != "":
@@ -20,7 +20,10 @@ func evidenceRows(c *record.Case) (rows [][]string) {
 	case len(v.Studies) > 0:
 		rows = append(rows, []string{"convergence", convergenceText(len(v.Studies), t)})
 	}
-	if t.Compared > 0 || len(t.Open) > 0 {
+	switch {
+	case !c.Settling.Settled && len(v.Studies) > 0:
+		rows = append(rows, []string{"validation", "not judged: no steady state was reached"})
+	case t.Compared > 0 || len(t.Open) > 0:
 		rows = append(rows, []string{"validation", validationText(t)})
 	}
 	if s := fidelityText(c.Fidelity); s != "" {

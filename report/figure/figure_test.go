@@ -36,7 +36,7 @@ func TestTicks(t *testing.T) {
 		{0, 1.7, 400, false, "0.0 | 0.2 | 0.4 | 0.6 | 0.8 | 1.0 | 1.2 | 1.4 | 1.6"},
 		{18.41, 18.44, 150, false, "18.41 | 18.42 | 18.43 | 18.44"},
 		{-6, -1, 100, true, "0.01 % | 10 %"},
-		{-6, -1, 300, true, "10\ue000−6\ue002 | 10\ue000−5\ue002 | 0.01 % | 0.1 % | 1 % | 10 %"},
+		{-6, -1, 300, true, "10\ue000−4\ue002 % | 0.001 % | 0.01 % | 0.1 % | 1 % | 10 %"},
 	} {
 		axis := ticks{s: scale{Axis: Axis{Log: c.log}}, length: c.length, wish: 46, need: narrow}
 		got := labels(axis, c.lo, c.hi)

@@ -19,11 +19,13 @@ func Tick(v, step float64) string {
 	return Fixed(v, decimals)
 }
 
-// Decade returns the label of a tick of a logarithmic axis at 10^n, as a
-// percentage down to 0.01 % and as a power of ten below.
+// Decade returns the label of a tick of a logarithmic axis at 10^n. It is a
+// percentage throughout, so that no axis mixes per cent and parts of one; down
+// to 0.001 % in decimals and with a power of ten below.
 func Decade(n int) string {
-	if n >= -4 && n <= 1 {
-		return Digits(math.Pow(10, float64(n+2)), 1) + Space + "%"
+	const percent = 2 // decades
+	if n >= -5 && n <= 1 {
+		return Fixed(math.Pow(10, float64(n+percent)), max(-n-percent, 0)) + Space + "%"
 	}
-	return Pow10(n)
+	return Pow10(n+percent) + Space + "%"
 }

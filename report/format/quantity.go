@@ -87,12 +87,17 @@ func Unit(unit string) string {
 func VSWR(v float64) string { return Number(v) }
 
 // DB returns a level or a loss with two decimals, small ones with three
-// significant digits.
+// significant digits as far as five decimals go: what is less is the arithmetic
+// of two equal levels.
 func DB(v float64) string {
+	const decimals = 5
 	if math.IsNaN(v) {
 		return Missing
 	}
 	if a := math.Abs(v); a > 0 && a < 0.095 {
+		if a < 0.00095 {
+			return Fixed(v, decimals) + Space + "dB"
+		}
 		return Digits(v, 3) + Space + "dB"
 	}
 	return Fixed(v, 2) + Space + "dB"

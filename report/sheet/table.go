@@ -53,11 +53,15 @@ func Row(texts ...string) []Cell {
 func (b *Book) Table(t Table) {
 	l := b.layout(t)
 	b.Space(4)
-	b.Need(l.headHeight + l.heightOfFirst(2))
+	b.Need(l.headHeight + l.heightOfFirst(l.together()))
 	l.head()
 	for i, row := range t.Rows {
 		for _, part := range l.split(l.wrap(row)) {
-			if b.Room() < l.height(part) && !b.Fresh() {
+			room := l.height(part)
+			if i == len(t.Rows)-2 { // the last row is not left alone
+				room += l.height(l.wrap(t.Rows[i+1]))
+			}
+			if b.Room() < min(room, b.Body()-l.headHeight) && !b.Fresh() {
 				b.NewPage()
 				l.head()
 			}
@@ -159,6 +163,17 @@ func (l *layout) height(row []wrapped) float64 {
 		most = max(most, float64(len(c.lines))*l.lineHeight()+float64(len(c.notes))*l.lineHeight()*noteSize)
 	}
 	return most + 2*rowPad
+}
+
+// together returns how many rows must stand below the head: all of a short
+// table, which is not broken.
+func (l *layout) together() int {
+	const short = 0.22 // of the page
+	all := len(l.t.Rows)
+	if l.headHeight+l.heightOfFirst(all) <= short*l.b.Body() {
+		return all
+	}
+	return 2
 }
 
 // heightOfFirst returns the height of the first n rows, so that a head is not

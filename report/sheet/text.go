@@ -62,8 +62,12 @@ func (b *Book) Paragraph(s string) {
 	b.Space(4)
 }
 
-// Note writes a paragraph in the smaller secondary style.
+// Note writes a paragraph in the smaller secondary style; an empty one is
+// nothing.
 func (b *Book) Note(s string) {
+	if s == "" {
+		return
+	}
 	b.Space(3)
 	b.lines(NoteStyle, s)
 	b.Space(4)

@@ -1,5 +1,7 @@
 package record
 
+import "slices"
+
 // Convergence is what grids of different fineness make of every figure that a
 // requirement or the summary uses, and the comparison of each with the closed
 // form.
@@ -7,6 +9,18 @@ type Convergence struct {
 	Grids   []StudyGrid // finest first; one only if the study was left out
 	Skipped string      // why it was left out, or empty
 	Studies []Study     // of requirements first, in their order, then key figures
+}
+
+// Distinct is the study without the key figures that a requirement is about
+// too: they have a row of that requirement already.
+func (c *Convergence) Distinct() *Convergence {
+	out := *c
+	out.Studies = slices.DeleteFunc(slices.Clone(c.Studies), func(s Study) bool {
+		return s.ID == "" && slices.ContainsFunc(c.Studies, func(o Study) bool {
+			return o.ID != "" && o.Quantity == s.Quantity && o.Subject == s.Subject && o.Unit == s.Unit
+		})
+	})
+	return &out
 }
 
 // StudyGrid is one grid of the study.
