@@ -24,12 +24,13 @@ type CSVFile struct {
 // It fails if the samples of a profile or a waveform do not match in number.
 func CSV(r *record.Record) ([]CSVFile, error) {
 	var files []CSVFile
+	waves := newWaveforms(r)
 	for _, f := range []struct {
 		name   string
 		header []string
 		rows   func(*table, *record.Case) error
 	}{
-		{"waveforms", waveformHeader, waveformRows},
+		{"waveforms", waves.header, waves.rows},
 		{"envelopes", envelopeHeader, envelopeRows},
 		{"error", errorHeader, errorRows},
 	} {
@@ -48,12 +49,14 @@ func CSV(r *record.Record) ([]CSVFile, error) {
 	return files, nil
 }
 
-// The significant digits of CSV numbers. The samples of a waveform, of which
-// there are many, have fewer; their times have all, so that two neighbours
-// differ at the end of the longest run.
+// The significant digits of CSV numbers. Places and times have the most, so that
+// two neighbours differ at the end of the longest run. Values have a hundred times
+// what the witnesses agree to, and what is a difference of two witnesses has fewer
+// still: it is not known better.
 const (
-	csvDigits    = 9
-	sampleDigits = 7
+	csvDigits   = 9
+	valueDigits = 6 // of a sample: of the largest of its waveform, the others to the same place
+	errorDigits = 4
 )
 
 // A table writes the rows of one CSV file.
@@ -89,6 +92,27 @@ func (t *table) digits(n int, xs ...float64) {
 		t.row = append(t.row, field)
 	}
 }
+
+// sample appends x to the place at which the largest value of its kind has its
+// last digit.
+func (t *table) sample(x, largest float64) {
+	if largest == 0 || math.IsNaN(x) || math.IsInf(x, 0) {
+		t.digits(1, x)
+		return
+	}
+	last := exponent(largest) - (valueDigits - 1)
+	if math.Abs(x) < math.Pow10(last)/2 {
+		x = 0
+	}
+	if x == 0 {
+		t.digits(1, 0)
+		return
+	}
+	t.digits(max(exponent(x)-last+1, 1), x)
+}
+
+// exponent is that of the first digit of x.
+func exponent(x float64) int { return int(math.Floor(math.Log10(math.Abs(x)))) }
 
 // end ends the current row.
 func (t *table) end() {

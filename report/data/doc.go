@@ -11,9 +11,11 @@
 // its "unit", V or A, and peak like all others; "rated_text" is the limit as
 // the design file has it.
 //
-// JSON numbers have 12 significant digits and CSV numbers 9: more than either
-// witness is good for, and few enough that the last bits of an arithmetic
-// unit do not show. The samples of waveforms have 7, their times 9.
+// JSON numbers have 12 significant digits: more than either witness is good for,
+// and few enough that the last bits of an arithmetic unit do not show. In CSV
+// files places and times have 9, amplitudes and phases 6, and the errors, which
+// are small differences of amplitudes, 4. The largest sample of a waveform has 6
+// too, and its other samples end at the same place.
 //
 // Each peak has the uncertainty of its value beside it: "uncertainty_v",
 // "uncertainty_a", of a section "peak_voltage_uncertainty_v" and
@@ -95,12 +97,16 @@
 // where "complex" is true, else plain numbers; a slip "explains" the claims
 // whose ids it has. A key figure has an empty "id", and in the matrix no verdict.
 //
-// # Size
+// # Waveforms
 //
-// The waveform file holds every sample that the record has, one a row: some
-// 60 bytes each, mostly names, so that a compressed file is a seventh of it.
-// A record keeps a bounded number of samples a case and warns where that is
-// less than the whole run.
+// The waveform file has a row for each time of a case and a column for each
+// waveform, named after it: flange_v, antenna_a. Rows of part "run" are the
+// stress run, those of part "tail" its last periods again, and those of part
+// "phasor" the closed form at the times of the tail. The grid has its currents,
+// and the voltages of junctions without a section, half a step before the other
+// voltages: so each row has the fields of one of the two kinds. The file holds
+// every sample that the record has. A record keeps a bounded number of samples a
+// case and warns where that is less than the whole run.
 //
 // # What has no number
 //

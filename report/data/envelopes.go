@@ -28,7 +28,7 @@ func envelopeRows(t *table, c *record.Case) error {
 			t.numbers(row.z)
 			polar(t, p.VF, row.a)
 			polar(t, p.VP, row.a)
-			t.numbers(at(p.PeakV, row.b))
+			t.digits(valueDigits, at(p.PeakV, row.b))
 			t.numbers(none[:5]...)
 			t.end()
 		}
@@ -38,7 +38,7 @@ func envelopeRows(t *table, c *record.Case) error {
 			t.numbers(none[:5]...)
 			polar(t, p.IF, row.a)
 			polar(t, p.IP, row.a)
-			t.numbers(at(p.PeakI, row.b))
+			t.digits(valueDigits, at(p.PeakI, row.b))
 			t.end()
 		}
 	}
@@ -58,7 +58,7 @@ func polar(t *table, xs []complex128, i int) {
 	if r == 0 {
 		angle = math.NaN()
 	}
-	t.numbers(r, angle*180/math.Pi)
+	t.digits(valueDigits, r, angle*180/math.Pi)
 }
 
 func at(xs []float64, i int) float64 {

@@ -26,7 +26,8 @@ func errorRows(t *table, c *record.Case) error {
 		for j, z := range p.ZV {
 			d := cmplx.Abs(p.VF[j] - p.VP[j])
 			t.text(c.Name, p.Section)
-			t.numbers(z, d, p.EV[j], d/v)
+			t.numbers(z)
+			t.digits(errorDigits, d, p.EV[j], d/v)
 			t.numbers(none[:3]...)
 			t.end()
 		}
@@ -35,7 +36,7 @@ func errorRows(t *table, c *record.Case) error {
 			t.text(c.Name, p.Section)
 			t.numbers(z)
 			t.numbers(none[:3]...)
-			t.numbers(d, p.EI[j], d/a)
+			t.digits(errorDigits, d, p.EI[j], d/a)
 			t.end()
 		}
 	}
