@@ -28,6 +28,8 @@ func (s *solved) caseRecord(ctx context.Context, reqs []record.Requirement, stud
 		Convergence:  s.convergence(studies),
 		Profiles:     s.profiles(),
 		Waveforms:    s.waveforms(),
+		SpaceTime:    s.spaceTime(),
+		Bounces:      bounces(s.net),
 		Spectrum: record.Spectrum{
 			Where:     s.net.Junctions[s.net.Source.At],
 			Periods:   s.steady.Spectrum.Periods,

@@ -76,7 +76,7 @@ func (s *solved) stressRuns(ctx context.Context, g *errgroup.Group, second *grid
 	}
 	run := func(out **fdtd.Stress, steady *fdtd.Steady, sharp bool) {
 		set := set
-		set.Sharp = sharp
+		set.Sharp, set.Map = sharp, out == &s.stress
 		g.Go(func() (err error) {
 			*out, err = fdtd.StressRun(ctx, s.net, steady, set)
 			return err
