@@ -119,7 +119,7 @@ func (d *document) cases() {
 			sheet.Cell{Text: format.SI(c.Stress.Voltage.Value, "V")},
 			sheet.Cell{Text: format.SI(c.Stress.Current.Value, "A")}))
 	}
-	d.b.Subheading("Cases", 60)
+	d.b.Subheading("Cases", d.b.Kept(t))
 	d.b.Table(t)
 }
 

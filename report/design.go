@@ -89,7 +89,7 @@ func (d *document) lengths(m record.Model) {
 			{Text: format.DB(s.LossDB)},
 		})
 	}
-	d.b.Subheading("Sections: lengths", 70)
+	d.b.Subheading("Sections: lengths", d.b.Kept(t))
 	d.b.Table(t)
 }
 
@@ -109,7 +109,7 @@ func (d *document) constants(m record.Model) {
 			{Text: format.SI(s.C, "F/m")},
 		})
 	}
-	d.b.Subheading("Sections: constants at the design frequency", 70)
+	d.b.Subheading("Sections: constants at the design frequency", d.b.Kept(t))
 	d.b.Table(t)
 }
 
@@ -138,7 +138,7 @@ func (d *document) parts(title string, parts []record.ModelPart) {
 			{Text: impedance(p)},
 		})
 	}
-	d.b.Subheading(title, 60)
+	d.b.Subheading(title, d.b.Kept(t))
 	d.b.Table(t)
 }
 

@@ -91,11 +91,15 @@ func fidelityPairs(fs []record.Fidelity) sheet.Table {
 
 // notGraded says which curves have no measures, and why.
 func notGraded(fs []record.Fidelity) string {
-	s := ""
+	var reasons casesOf
 	for i := range fs {
 		if f := &fs[i]; f.Note != "" {
-			s += " Not graded: " + curveName(f) + " (" + f.Note + ")."
+			reasons.add(f.Note, curveName(f))
 		}
+	}
+	s := ""
+	for _, why := range reasons.statements {
+		s += " Not graded: " + listed(reasons.cases[why]) + " (" + why + ")."
 	}
 	return s
 }

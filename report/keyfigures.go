@@ -26,7 +26,7 @@ func (d *document) keyFigures(c *record.Case) {
 			{Text: r.name}, {Text: r.phasor}, {Text: r.fdtd}, {Text: format.Percent(r.difference)},
 		})
 	}
-	d.b.Subheading("Key figures", 60)
+	d.b.Subheading("Key figures", d.b.Kept(t))
 	d.b.Table(t)
 	d.b.Fields(d.transientFields(c))
 }

@@ -47,7 +47,7 @@ func (d *document) pedigree(kinds []lineKind) {
 	if len(t.Rows) == 0 {
 		return
 	}
-	d.b.Subheading("Where the data of the lines come from", 70)
+	d.b.Subheading("Where the data of the lines come from", d.b.Kept(t))
 	d.b.Table(t)
 	note := "Design file: it gives the value and does not say where that comes from."
 	if flagged {

@@ -5,6 +5,7 @@ import (
 	"slices"
 	"strings"
 
+	"gonum.org/v1/plot/vg"
 	"gonum.org/v1/plot/vg/draw"
 	"linewitness/report/figure"
 	"linewitness/report/format"
@@ -19,21 +20,45 @@ func (d *document) waveforms(c *record.Case) {
 	if len(list) == 0 {
 		return
 	}
-	height, each := 72.0, 1
+	each := 1
 	if len(list) > crowdedWaveforms {
-		height, each = 62, 2
+		each = 2
 	}
 	key := []figure.Entry{
 		{Style: ink.PhasorLine, Text: "phasor: its amplitude (left), its waveform (right)"},
 		{Style: ink.FDTDLine, Text: "time domain (right)"},
 		{Style: ink.TraceLine, Band: true, Text: "time domain, between its extremes where dense"},
 	}
-	d.b.Subheading("Waveforms", figure.KeyHeight+height+40)
+	rows := min(len(list)/each, fewWaveRows)
+	d.b.Subheading("Waveforms", figure.KeyHeight+waveHeight(rows)+waveCaption)
 	d.b.Note(startNote(c.Stress, silent))
 	d.key(key)
-	for i := 0; i < len(list); i += each {
-		d.waveformRow(c, list[i:min(i+each, len(list))], each, height, key)
+	for len(list) > 0 {
+		if fit := d.waveRowsThatFit(); fit < rows {
+			d.b.NewPage()
+		}
+		n := min(len(list), max(d.waveRowsThatFit(), 1)*each)
+		d.waveStack(c, list[:n], each, key)
+		list = list[n:]
+		rows = min((len(list)+each-1)/each, fewWaveRows)
 	}
+}
+
+// The rows of waveforms stand one upon the other and share the axes of the
+// lowest.
+const (
+	waveRow     = 51.0
+	waveAxis    = 19.0 // the labels below the lowest row
+	waveAlone   = 72.0 // of a waveform in a file of its own
+	waveCaption = 46.0 // room for the caption, the more for the more rows
+	fewWaveRows = 3    // that at least stand together
+)
+
+func waveHeight(rows int) float64 { return float64(rows)*waveRow + waveAxis }
+
+// waveRowsThatFit returns how many rows have room on the page in work.
+func (d *document) waveRowsThatFit() int {
+	return int((d.b.Room() - waveAxis - waveCaption) / waveRow)
 }
 
 // startNote says how the source starts, and what is not drawn.
@@ -90,29 +115,40 @@ func (d *document) key(entries []figure.Entry) {
 	d.b.Block(figure.KeyRoom(entries, d.b.Width()), func(c draw.Canvas) { figure.Key(c, entries) })
 }
 
-// waveformRow draws waveforms side by side in columns of equal width.
-func (d *document) waveformRow(c *record.Case, ws []record.Waveform, columns int, height float64, key []figure.Entry) {
-	finding, names := "", []string{"waveform"}
-	for i := range ws {
-		finding += waveformFinding(&ws[i]) + " "
-		names = append(names, ws[i].Name)
-	}
-	d.show(picture{
-		name: pictureName(c, names...), finding: trimmed(finding), height: height, key: key,
-		paint: func(cv draw.Canvas) {
-			for i := range ws {
-				waveform(column(cv, i, columns), &ws[i], c.Model.Frequency)
+// waveStack draws waveforms in rows of so many columns, as one figure of the
+// document; in the files each is a figure of its own.
+func (d *document) waveStack(c *record.Case, ws []record.Waveform, columns int, key []figure.Entry) {
+	rows := (len(ws) + columns - 1) / columns
+	label, finding := d.figure(), wavesFinding(ws)
+	d.b.Block(waveHeight(rows), func(cv draw.Canvas) {
+		for i := range ws {
+			row := i / columns
+			below := waveAxis
+			if i+columns < len(ws) {
+				below = 0
 			}
-		},
+			top := vg.Points(float64(row) * waveRow)
+			cell := draw.Crop(cv, 0, 0, cv.Size().Y-top-vg.Points(waveRow+below), -top)
+			waveform(column(cell, i%columns, columns), &ws[i], c.Model.Frequency, below == 0)
+		}
 	})
+	d.b.Caption(label, finding)
+	for i := range ws {
+		w := &ws[i]
+		d.note(picture{
+			name: pictureName(c, "waveform", w.Name), finding: waveformFinding(w), height: waveAlone, key: key,
+			paint: func(cv draw.Canvas) { waveform(cv, w, c.Model.Frequency, false) },
+		})
+	}
 }
 
-// waveform draws the turn-on at the left and the last periods at the right.
-func waveform(c draw.Canvas, w *record.Waveform, frequency float64) {
+// waveform draws the turn-on at the left and the last periods at the right. A
+// bare one has another below it that shares its axes.
+func waveform(c draw.Canvas, w *record.Waveform, frequency float64, bare bool) {
 	const share = 0.62 // of the turn-on
 	split := c.Size().X * share
-	turnOn(w, frequency).Draw(draw.Crop(c, 0, split-c.Size().X, 0, 0))
-	lastPeriods(w).Draw(draw.Crop(c, split, 0, 0, 0))
+	turnOn(w, frequency, bare).Draw(draw.Crop(c, 0, split-c.Size().X, 0, 0))
+	lastPeriods(w, bare).Draw(draw.Crop(c, split, 0, 0, 0))
 }
 
 // times returns the times of the samples.
@@ -140,10 +176,10 @@ func symmetric(series ...[]float64) (lo, hi float64) {
 	return -hi, hi
 }
 
-func turnOn(w *record.Waveform, frequency float64) *figure.Panel {
+func turnOn(w *record.Waveform, frequency float64, bare bool) *figure.Panel {
 	ts, at := times(w), largestAt(w.Samples)
 	lo, hi := symmetric(w.Samples, w.Tail.Phasor)
-	p := figure.New(w.Name, "turn-on", figure.Axis{Label: "time from switch-on", Unit: "s", Min: min(0, ts[0]), Max: ts[len(ts)-1]},
+	p := figure.New(w.Name, "turn-on", figure.Axis{Label: "time from switch-on", Unit: "s", Min: min(0, ts[0]), Max: ts[len(ts)-1], Bare: bare},
 		figure.Axis{Unit: w.Unit, Min: lo, Max: hi})
 	if i := largestAt(w.Tail.Phasor); i >= 0 {
 		level := math.Abs(w.Tail.Phasor[i])
@@ -159,48 +195,13 @@ func turnOn(w *record.Waveform, frequency float64) *figure.Panel {
 	return p
 }
 
-func lastPeriods(w *record.Waveform) *figure.Panel {
+func lastPeriods(w *record.Waveform, bare bool) *figure.Panel {
 	t := w.Tail
 	lo, hi := symmetric(t.Samples, t.Phasor)
 	ts := figure.Times(t.Start, t.Step, len(t.Samples))
-	axis := figure.Axis{Label: "time from switch-on", Unit: "s", Min: t.Start, Max: t.Start + t.Step*float64(len(t.Samples)-1)}
+	axis := figure.Axis{Label: "time from switch-on", Unit: "s", Min: t.Start, Max: t.Start + t.Step*float64(len(t.Samples)-1), Bare: bare}
 	p := figure.New("", "last periods", axis, figure.Axis{Unit: w.Unit, Min: lo, Max: hi})
 	p.Line(ts, t.Phasor, ink.PhasorLine)
 	p.Line(ts, t.Samples, ink.FDTDLine)
 	return p
-}
-
-// waveformFinding says what a row shows: the largest value, and how near the
-// last periods come to the phasor's waveform.
-func waveformFinding(w *record.Waveform) string {
-	ts, at := times(w), largestAt(w.Samples)
-	if at < 0 {
-		return w.Name + ": no finite value."
-	}
-	most := math.Abs(w.Samples[at])
-	s := w.Name + ": largest " + format.SI(most, w.Unit) + " at " + format.SI(ts[at], "s")
-	i := largestAt(w.Tail.Phasor)
-	if i < 0 {
-		return s + "; the source has stopped, so there is no steady waveform to compare with."
-	}
-	amplitude := w.Steady
-	if amplitude == 0 { // not given: the largest sample stands for it
-		amplitude = math.Abs(w.Tail.Phasor[i])
-	}
-	if amplitude > 0 && most > 0 {
-		s += ", " + format.Number(most/amplitude) + " of the steady amplitude"
-	}
-	if amplitude == 0 {
-		return s + "; it has no steady amplitude."
-	}
-	return s + "; last periods within " + format.Percent(deviation(w.Tail)/amplitude) + " of the phasor's waveform."
-}
-
-func deviation(t record.Tail) (most float64) {
-	for i := range min(len(t.Samples), len(t.Phasor)) {
-		if e := math.Abs(t.Samples[i] - t.Phasor[i]); e > most {
-			most = e
-		}
-	}
-	return most
 }

@@ -184,3 +184,27 @@ func TestWaveformFinding(t *testing.T) {
 		t.Errorf("%q for a source that stopped", got)
 	}
 }
+
+// The finding under a figure of several waveforms names the largest value of
+// each and the one whose last periods are farthest from its phasor's.
+func TestWavesFinding(t *testing.T) {
+	wave := func(name string, off float64) record.Waveform {
+		return record.Waveform{
+			Name: name, Unit: "V", Step: 1e-9, Samples: []float64{0, 1, -1500, 990},
+			Tail: record.Tail{Samples: []float64{1000 + off, -1000}, Phasor: []float64{1000, -1000}},
+		}
+	}
+	ws := []record.Waveform{wave("tee", 1), wave("end", -2)}
+	want := "Largest values: tee 1.500 kV at 2.000 ns (1.500 of the steady amplitude); end 1.500 kV at 2.000 ns (1.500)." +
+		" The last periods are within 0.200 % of the phasor's waveforms, end the farthest."
+	if got := readable(wavesFinding(ws)); got != want {
+		t.Errorf("%q, want %q", got, want)
+	}
+	ws[0].Tail.Phasor, ws[1].Samples = nil, []float64{math.NaN()}
+	got := readable(wavesFinding(ws))
+	for _, s := range []string{"tee 1.500 kV at 2.000 ns;", "end has no finite value", "The source has stopped"} {
+		if !strings.Contains(got, s) {
+			t.Errorf("%q lacks %q", got, s)
+		}
+	}
+}

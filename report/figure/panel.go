@@ -149,7 +149,10 @@ func (pn *Panel) Draw(c draw.Canvas) {
 
 // setTicks chooses tick distances that suit the size of the panel.
 func (pn *Panel) setTicks(c draw.Canvas) {
-	const below = 21.0 // tick labels and label of the horizontal axis
+	below := 21.0 // tick labels and label of the horizontal axis
+	if pn.x.Bare {
+		below = 3
+	}
 	size := c.Size()
 	widest := func(label string) float64 { return tickStyle.Width(label) + 9 }
 	tall := func(string) float64 { return tickStyle.Size + 2.5 }

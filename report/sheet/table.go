@@ -53,7 +53,7 @@ func Row(texts ...string) []Cell {
 func (b *Book) Table(t Table) {
 	l := b.layout(t)
 	b.Space(4)
-	b.Need(l.headHeight + l.heightOfFirst(l.together()))
+	b.Need(l.kept())
 	l.head()
 	for i, row := range t.Rows {
 		for _, part := range l.split(l.wrap(row)) {
@@ -164,6 +164,12 @@ func (l *layout) height(row []wrapped) float64 {
 	}
 	return most + 2*rowPad
 }
+
+// Kept returns the height of the part of a table that is not broken: what a
+// heading above it must leave room for.
+func (b *Book) Kept(t Table) float64 { return 4 + b.layout(t).kept() }
+
+func (l *layout) kept() float64 { return l.headHeight + l.heightOfFirst(l.together()) }
 
 // together returns how many rows must stand below the head: all of a short
 // table, which is not broken.
