@@ -11,7 +11,7 @@ import (
 )
 
 // caseRoom is the part of a page that a chapter needs to begin on it.
-const caseRoom = 0.34
+const caseRoom = 0.3
 
 // solved writes the pages of one case.
 func (d *document) solved(c *record.Case) {
@@ -88,14 +88,13 @@ func (d *document) sections(c *record.Case) {
 	if len(t.Rows) == 0 {
 		return
 	}
-	d.b.Subheading("Sections: steady state (phasor) and peaks (time domain)", 60)
+	d.b.Subheading("Sections: steady state (phasor) and peaks (time domain)", d.b.Kept(t))
 	d.b.Table(t)
 }
 
 // loads writes the loads and the junctions.
 func (d *document) loads(c *record.Case) {
 	near := noise(c)
-	d.b.Subheading("Loads and junctions: steady state (phasor)", 60)
 	t := sheet.Table{Columns: []sheet.Column{
 		left("Load or junction"), right("Voltage, peak"), right("Voltage, rms"), right("Current, peak"), right("Power"),
 	}}
@@ -125,6 +124,7 @@ func (d *document) loads(c *record.Case) {
 			{Text: format.Missing},
 		})
 	}
+	d.b.Subheading("Loads and junctions: steady state (phasor)", d.b.Kept(t))
 	d.b.Table(t)
 }
 
@@ -184,7 +184,7 @@ func (d *document) grid(c *record.Case) {
 			{Text: format.Digits(s.PhaseErrorDegrees, 3) + "°"},
 		})
 	}
-	d.b.Subheading("Grid of the time domain", 60)
+	d.b.Subheading("Grid of the time domain", d.b.Kept(t))
 	d.b.Table(t)
 	d.b.Note(note)
 }
