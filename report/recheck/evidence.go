@@ -9,7 +9,7 @@ var evidence = []rule{
 	{[]string{"cases.*.convergence.figures.[].uncertainty_parts.*"}, estimated("../values"), "an uncertainty is known to one digit"},
 	{[]string{"cases.*.convergence.figures.[].gci_percent"}, estimated(), "an index is known to one digit"},
 	{[]string{"cases.*.convergence.figures.[].order"}, order, "an order is judged in tenths"},
-	{[]string{"cases.*.convergence.figures.[].factor"}, exact, "it follows from the behaviour"},
+	{[]string{"cases.*.convergence.figures.[].factor"}, given, "it follows from the behaviour"},
 	{[]string{"cases.*.convergence.figures.[].behaviour"}, graded("order", "gci", "error"), "it follows from the figures beside it"},
 	{[]string{"cases.*.convergence.skipped"}, withFigures, "a sentence: its words, and its figures to the last digit"},
 	{[]string{"cases.*.convergence.figures.[].id|quantity|subject|unit|explained"}, exact, "a name, or whether the error is explained"},
