@@ -30,6 +30,7 @@ func (d *document) solved(c *record.Case) {
 	d.power(c)
 	d.waveforms(c)
 	d.envelopes(c)
+	d.reflections(c)
 	d.settling(c)
 	d.gridStudy(c)
 	d.fidelity(c)

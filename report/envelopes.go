@@ -46,6 +46,8 @@ type track struct {
 	peakZ, peak []float64
 	limits      []limit
 	agreed      float64 // limit of the agreement
+
+	fine func(z float64) float64 // the phasor's magnitude between the points
 }
 
 // tracks returns voltage and current along the k-th section, or nil where the
@@ -55,8 +57,11 @@ func tracks(c *record.Case, k int) []*track {
 	m := sectionOf(c, k)
 	v := &track{symbol: "|V|", unit: "V", z: p.ZV, peakZ: p.PeakZV, peak: p.PeakV, limits: limitsOf(c, p.Section, "voltage")}
 	v.compare(p.VF, p.VP, p.EV)
+	gamma := propagation(m, c.Model.Frequency)
+	v.fine = func(z float64) float64 { return cmplx.Abs(between(p.ZV, p.VP, gamma, z)) }
 	i := &track{symbol: "|I|", unit: "A", z: p.ZI, peakZ: p.PeakZI, peak: p.PeakI, limits: limitsOf(c, p.Section, "current")}
 	i.compare(p.IF, p.IP, p.EI)
+	i.fine = func(z float64) float64 { return cmplx.Abs(between(p.ZI, p.IP, gamma, z)) }
 	var out []*track
 	for _, t := range []*track{v, i} {
 		t.section, t.wavelengths, t.length, t.agreed = p.Section, m.Wavelengths, m.Length, c.Agreement.Limit

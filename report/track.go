@@ -29,11 +29,8 @@ func (s span) in(xs, ys []float64) (x, y []float64) {
 func (t *track) draw(c draw.Canvas, s span) {
 	upper, lower := t.stack(c)
 	e := t.envelope(s)
-	x, y := s.in(t.z, t.phasor)
-	e.Line(x, y, ink.PhasorLine)
-	x, y = s.in(t.z, t.fdtd)
-	e.Line(x, y, ink.FDTDLine)
-	x, y = s.in(t.peakZ, t.peak)
+	t.amplitudes(e, s)
+	x, y := s.in(t.peakZ, t.peak)
 	e.Line(x, y, ink.PeakLine)
 	if largestAt(t.phasor) < 0 && largestAt(t.fdtd) < 0 {
 		e.Say(nothingFinite)
@@ -45,6 +42,29 @@ func (t *track) draw(c draw.Canvas, s span) {
 	x, y = s.in(t.z, t.found)
 	strip.Line(x, y, ink.FDTDLine)
 	strip.Draw(lower)
+}
+
+// amplitudes draws the amplitude by both solutions. Where a long section was
+// thinned to so few points that lines between them would cut the crests off, the
+// phasor's is what the wave is between them, and the time domain's are points.
+func (t *track) amplitudes(e *figure.Panel, s span) {
+	const sparse = 16 // points a wavelength
+	x, y := s.in(t.z, t.phasor)
+	if float64(len(t.z)) >= sparse*t.wavelengths {
+		e.Line(x, y, ink.PhasorLine)
+		x, y = s.in(t.z, t.fdtd)
+		e.Line(x, y, ink.FDTDLine)
+		return
+	}
+	const steps = 200
+	var xs, ys []float64
+	for k := range steps + 1 {
+		z := s.from + (s.to-s.from)*float64(k)/steps
+		xs, ys = append(xs, z), append(ys, t.fine(z))
+	}
+	e.Line(xs, ys, ink.PhasorLine)
+	x, y = s.in(t.z, t.fdtd)
+	e.Dots(x, y, ink.FDTDLine)
 }
 
 // drawBand draws the whole section by the extremes over half wavelengths.

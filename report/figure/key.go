@@ -11,6 +11,7 @@ import (
 type Entry struct {
 	Style draw.LineStyle
 	Band  bool
+	Dots  bool // open circles
 	Text  string
 }
 
@@ -67,6 +68,13 @@ func sample(c draw.Canvas, e Entry, x, y float64) {
 		c.Fill(box.Path())
 		c.SetLineStyle(e.Style)
 		c.Stroke(box.Path())
+		return
+	}
+	if e.Dots {
+		c.SetLineStyle(draw.LineStyle{Color: e.Style.Color, Width: vg.Points(0.6)})
+		for k := range 3 {
+			c.Stroke(circle(vg.Point{X: vg.Points(x + keySample*(0.2+0.3*float64(k))), Y: vg.Points(y)}, vg.Points(1.3)))
+		}
 		return
 	}
 	c.StrokeLine2(e.Style, vg.Points(x), vg.Points(y), vg.Points(x+keySample), vg.Points(y))
