@@ -3,6 +3,7 @@
 // requirements and writes a record that a design review can file.
 //
 //	linewitness verify DESIGN...   solve, compare, judge; write DESIGN.pdf and DESIGN.json
+//	linewitness recheck RECORD     solve the design in a record again and compare
 //	linewitness plan DESIGN        the grid and the predicted cost; solves nothing
 //	linewitness starter [FILE]     a commented design file to begin from
 //	linewitness cables             the cable table with its pedigree

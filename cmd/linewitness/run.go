@@ -86,6 +86,7 @@ const rootHelp = `linewitness solves a transmission-line network twice, in time 
 compares the two, and writes a record for the design review.
 
   linewitness verify DESIGN...    solve, compare, judge; write DESIGN.pdf and DESIGN.json
+  linewitness recheck RECORD.pdf  solve the design in a record again and compare
   linewitness plan DESIGN         the grid and the predicted cost; solves nothing
   linewitness starter [FILE]      write a commented design file to begin from
   linewitness cables              the cable table with its pedigree
@@ -97,7 +98,8 @@ compares the two, and writes a record for the design review.
 The exit status is 0 if every design is verified, 1 if a requirement is missed or
 not shown or a claim contradicted, 2 for bad usage or a bad design file, 3 if the
 two methods disagree, 4 if there is no steady state, 5 if a file could not be read
-or written, and 130 if interrupted. With several designs it is the highest.
+or written, and 130 if interrupted. With several designs it is the highest. What it
+says of a comparison is in the help of the verb.
 
 Example:
   linewitness starter feeder.yaml
@@ -125,7 +127,7 @@ func (a *app) rootCommand() *cobra.Command {
 	root.CompletionOptions.DisableDefaultCmd = true // completion.go has our own
 	root.SetHelpCommand(helpCommand())
 	root.AddCommand(
-		a.verifyCommand(), a.planCommand(), a.starterCommand(),
+		a.verifyCommand(), a.recheckCommand(), a.planCommand(), a.starterCommand(),
 		a.cablesCommand(), a.schemaCommand(), a.versionCommand(), a.completionCommand(),
 	)
 	return root

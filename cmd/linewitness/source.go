@@ -28,9 +28,13 @@ func (a *app) load(ctx context.Context, path string) (*design.File, error) {
 	if err != nil {
 		return nil, fileError(err.Error(), "")
 	}
-	f, err := await(ctx, func() (*design.File, error) {
-		return design.LoadWith(displayName(path), source, besides(path))
-	})
+	return a.loadFrom(ctx, displayName(path), source, besides(path))
+}
+
+// loadFrom checks a design file that is in memory; open gives the files that it
+// names.
+func (a *app) loadFrom(ctx context.Context, name string, source []byte, open func(string) ([]byte, error)) (*design.File, error) {
+	f, err := await(ctx, func() (*design.File, error) { return design.LoadWith(name, source, open) })
 	if errors.Is(err, context.Canceled) {
 		return nil, err
 	}
@@ -63,16 +67,19 @@ func besides(path string) func(string) ([]byte, error) {
 // reader of such files accepts.
 const maxAttached = 4<<20 + 1
 
-func (a *app) read(path string) ([]byte, error) {
+func (a *app) read(path string) ([]byte, error) { return a.readUpTo(path, maxSource) }
+
+// readUpTo reads the first bytes of a file, which are all if it has fewer.
+func (a *app) readUpTo(path string, most int64) ([]byte, error) {
 	if path == standardInput {
-		return io.ReadAll(io.LimitReader(a.stdin, maxSource))
+		return io.ReadAll(io.LimitReader(a.stdin, most))
 	}
 	f, err := os.Open(path)
 	if err != nil {
 		return nil, err
 	}
 	defer f.Close()
-	return io.ReadAll(io.LimitReader(f, maxSource))
+	return io.ReadAll(io.LimitReader(f, most))
 }
 
 func displayName(path string) string {

@@ -34,6 +34,9 @@ func plainNumber(v float64) string { return typeable.Replace(format.Number(v)) }
 
 func counted(n int, noun string) string { return typeable.Replace(format.Plural(int64(n), noun)) }
 
+// whole is a number of things.
+func whole(n int) string { return typeable.Replace(format.Count(int64(n))) }
+
 // writeTable writes rows of cells with two spaces before each row and between
 // columns, each column as wide as its widest cell, and no space at the end of
 // a line.
