@@ -1,12 +1,16 @@
 package report
 
 import (
+	"bytes"
 	"errors"
 	"fmt"
 	"io"
 	"path"
+	"slices"
+	"strings"
 	"time"
 
+	"linewitness/report/archive"
 	"linewitness/report/canvas"
 	"linewitness/report/sheet"
 	"linewitness/sim/record"
@@ -17,16 +21,36 @@ type Options struct {
 	Paper string // "a4" (the default) or "letter"
 }
 
-// WritePDF writes the record as a PDF document.
+// WritePDF writes the record as a PDF document, written to PDF/A-3b, with the
+// design, the files it reads and the outcome attached.
 //
 // It returns an error for an unknown paper, for a text with a character that
-// the document's fonts do not have, and for a failing w.
+// the document's fonts do not have, for a record that cannot be written as JSON
+// or CSV, and for a failing w.
 func WritePDF(w io.Writer, r *record.Record, opt Options) error {
 	d, err := build(r, opt)
 	if err != nil {
 		return err
 	}
-	return explain(d.b.Write(w))
+	file, err := d.finish(r)
+	if err == nil {
+		_, err = w.Write(file)
+	}
+	return explain(err)
+}
+
+// finish brings what was laid out into the form to be kept. r is the record as
+// it was, for what is attached.
+func (d *document) finish(r *record.Record) ([]byte, error) {
+	var pages bytes.Buffer
+	if err := d.b.Write(&pages); err != nil {
+		return nil, err
+	}
+	files, err := attachments(r)
+	if err != nil {
+		return nil, err
+	}
+	return archive.Finish(pages.Bytes(), properties(r), files)
 }
 
 // build lays out the whole document.
@@ -86,28 +110,41 @@ func (d *document) nominal() *record.Case {
 }
 
 func meta(r *record.Record) sheet.Meta {
-	return sheet.Meta{
-		Title: title(r), Subject: r.Design.Purpose, Author: r.Design.PreparedBy,
-		Creator: "linewitness " + r.Tool.Version, Date: date(r.Design.Date),
-		Header: title(r),
-		Number: r.Design.Number, Revision: r.Design.Revision,
+	return sheet.Meta{Header: title(r), Number: r.Design.Number, Revision: r.Design.Revision}
+}
+
+// properties are what the document says about itself to viewers and to systems
+// that keep documents.
+func properties(r *record.Record) archive.Meta {
+	d := r.Design
+	creator := "linewitness " + r.Tool.Version
+	return archive.Meta{
+		Title: title(r), Subject: d.Purpose, Author: d.PreparedBy,
+		Keywords: strings.Join(slices.DeleteFunc([]string{d.Number, prefixed("revision ", d.Revision)}, func(s string) bool { return s == "" }), ", "),
+		Creator:  creator, Producer: creator + prefixed(", ", r.Tool.Go), Version: r.Tool.Version,
+		Lang: "en-GB", Created: date(d.Date),
 	}
+}
+
+// prefixed is s after a prefix, or nothing if s is.
+func prefixed(prefix, s string) string {
+	if s == "" {
+		return ""
+	}
+	return prefix + s
 }
 
 // title returns the title of the document, or the name of the design file.
 func title(r *record.Record) string { return orElse(r.Design.Title, path.Base(r.Design.File)) }
 
-// undated stands in the properties of a document whose record has no date
-// that can be read; any constant would do, for it must not be the clock.
-var undated = time.Date(2000, time.January, 1, 0, 0, 0, 0, time.UTC)
-
+// date reads the date of a record; it is zero if there is none that can be read.
 func date(s string) time.Time {
 	for _, layout := range []string{time.DateOnly, time.RFC3339, "2 January 2006", "January 2, 2006"} {
 		if t, err := time.Parse(layout, s); err == nil {
 			return t.UTC()
 		}
 	}
-	return undated
+	return time.Time{}
 }
 
 // explain says how to mend a record that cannot be printed.

@@ -26,14 +26,14 @@ func write(t interface {
 	if err != nil {
 		t.Fatalf("build: %v", err)
 	}
-	var b bytes.Buffer
-	if err := explain(d.b.Write(&b)); err != nil {
-		t.Fatalf("write: %v", err)
+	file, err := d.finish(r)
+	if err != nil {
+		t.Fatalf("write: %v", explain(err))
 	}
 	if d.b.Overfull > 0 {
 		t.Fatalf("%d texts are wider than their room", d.b.Overfull)
 	}
-	return b.Bytes()
+	return file
 }
 
 // The text of the document: title block, verdict, numbers with their units,
@@ -86,7 +86,7 @@ func TestStructure(t *testing.T) {
 	if got := count("/Title "); got < 1+len(reporttest.Feeder().Cases) {
 		t.Errorf("%d titles in properties and outline", got)
 	}
-	if want := "/CreationDate (D:20260514000000)"; !strings.Contains(file, want) {
+	if want := "/CreationDate (D:20260514000000+00'00')"; !strings.Contains(file, want) {
 		t.Errorf("the file lacks %s", want)
 	}
 }
@@ -95,7 +95,7 @@ func TestStructure(t *testing.T) {
 func TestDate(t *testing.T) {
 	for in, want := range map[string]string{
 		"2026-05-14": "2026-05-14", "14 May 2026": "2026-05-14", "2026-05-14T23:30:00-02:00": "2026-05-15",
-		"": "2000-01-01", "last spring": "2000-01-01",
+		"": "0001-01-01", "last spring": "0001-01-01", // none
 	} {
 		if got := date(in).Format("2006-01-02"); got != want {
 			t.Errorf("date(%q) = %s, want %s", in, got, want)

@@ -31,7 +31,7 @@ func TestFileIsValid(t *testing.T) {
 		t.Errorf("%d fonts, want regular, bold, italic and mono", len(ctx.Optimize.FontObjects))
 	}
 	for _, f := range ctx.Optimize.FontObjects {
-		if !strings.Contains(f.FontName, "liberation") || !embedded(t, ctx, f.FontDict) {
+		if !strings.HasPrefix(f.FontName, "Liberation") || !embedded(t, ctx, f.FontDict) {
 			t.Errorf("font %s is not embedded", f.FontName)
 		}
 	}

@@ -1,7 +1,6 @@
 package sheet
 
 import (
-	"bytes"
 	"io"
 	"time"
 
@@ -12,12 +11,10 @@ import (
 	"linewitness/report/typeset"
 )
 
-// Meta is what a document says about itself.
+// Meta is what every page says about its document.
 type Meta struct {
-	Title, Subject, Author, Creator string
-	Date                            time.Time // of creation and modification, printed nowhere
-	Header                          string    // at the head of every page
-	Number, Revision                string    // at the foot of every page
+	Header           string // at the head of the page
+	Number, Revision string // at its foot
 }
 
 // A Book is a document being laid out.
@@ -45,13 +42,8 @@ func New(meta Meta, paper Paper) *Book {
 	pdf.SetAutoPageBreak(false, 0)
 	pdf.SetMargins(0, 0, 0)
 	pdf.SetCatalogSort(true) // else the order of objects is random
-	pdf.SetCreationDate(meta.Date.UTC())
-	pdf.SetModificationDate(meta.Date.UTC())
-	pdf.SetTitle(meta.Title, true)
-	pdf.SetSubject(meta.Subject, true)
-	pdf.SetAuthor(meta.Author, true)
-	pdf.SetCreator(meta.Creator, true)
-	pdf.SetProducer(meta.Creator, true)
+	pdf.SetCreationDate(time.Unix(0, 0).UTC()) // else it is the clock's
+	pdf.SetModificationDate(time.Unix(0, 0).UTC())
 	b := &Book{pdf: pdf, fonts: canvas.NewFonts(pdf), paper: paper, meta: meta}
 	// The outline is encoded as the current font is.
 	b.fail(b.fonts.Use(typeset.Sans.Face(10)))
@@ -126,8 +118,9 @@ func (b *Book) fail(err error) {
 // Pages returns the number of pages so far.
 func (b *Book) Pages() int { return b.pdf.PageCount() }
 
-// Write draws the headers and footers and writes the document to w. The book
-// cannot be used after it.
+// Write draws the headers and footers and writes the document to w, without
+// properties: what it says about itself, and the form in which it is kept, are the
+// business of package archive. The book cannot be used after it.
 func (b *Book) Write(w io.Writer) error {
 	b.endPage()
 	total := b.pdf.PageCount()
@@ -139,14 +132,5 @@ func (b *Book) Write(w io.Writer) error {
 	if b.err != nil {
 		return b.err
 	}
-	var buf bytes.Buffer
-	if err := b.pdf.Output(&buf); err != nil {
-		return err
-	}
-	file, err := mapToUnicode(buf.Bytes())
-	if err != nil {
-		return err
-	}
-	_, err = w.Write(file)
-	return err
+	return b.pdf.Output(w)
 }

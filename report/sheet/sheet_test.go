@@ -2,10 +2,8 @@ package sheet
 
 import (
 	"bytes"
-	"strconv"
 	"strings"
 	"testing"
-	"time"
 
 	"gonum.org/v1/plot/vg/draw"
 	"linewitness/report/typeset"
@@ -13,7 +11,7 @@ import (
 )
 
 func book() *Book {
-	return New(Meta{Title: "Title", Header: "Title", Number: "N-1", Date: time.Unix(0, 0)}, A4)
+	return New(Meta{Header: "Title", Number: "N-1"}, A4)
 }
 
 // finish writes the book and fails on any error or text that is too wide.
@@ -180,39 +178,4 @@ func TestFirst(t *testing.T) {
 	if lines[1] != "b" {
 		t.Error("First changed its argument")
 	}
-}
-
-// Every offset of the cross-reference table is that of its object.
-func TestCrossReference(t *testing.T) {
-	b := book()
-	b.Paragraph("Ω − β")
-	b.Heading("Bold", 0)
-	file := string(finish(t, b))
-	m := crossReference.FindStringSubmatch(file)
-	if m == nil {
-		t.Fatal("no table")
-	}
-	for i, line := range strings.Split(strings.TrimSpace(m[1]), "\n") {
-		want := itoa(i+1) + " 0 obj"
-		if at := atoi(t, line[:10]); !strings.HasPrefix(file[at:], want) {
-			t.Errorf("object %d: %.20q at its offset", i+1, file[at:])
-		}
-	}
-	if at := atoi(t, m[2]); !strings.HasPrefix(file[at:], "xref") {
-		t.Errorf("startxref leads to %.20q", file[at:])
-	}
-	if strings.Contains(file, "<0000> <FFFF> <0000>") {
-		t.Error("a font still maps all characters by one range")
-	}
-}
-
-func itoa(n int) string { return strconv.Itoa(n) }
-
-func atoi(t *testing.T, s string) int {
-	t.Helper()
-	n, err := strconv.Atoi(s)
-	if err != nil {
-		t.Fatal(err)
-	}
-	return n
 }
