@@ -50,7 +50,7 @@ func (s *solved) caseRecord(ctx context.Context, reqs []record.Requirement, stud
 		c.Grid.Sections[k].Points = len(s.steady.Sections[k].ZV)
 	}
 	c.Power = s.power()
-	c.Claims = s.claims(ctx, newBudget(s.net, &s.compared))
+	c.Claims = s.claims(ctx)
 	c.Fidelity = s.fidelity()
 	c.Ratings = s.ratings()
 	c.Verdict = s.verdict(&c)
@@ -64,7 +64,7 @@ func (s *solved) verdict(c *record.Case) record.Verdict {
 	switch {
 	case !s.steady.Settling.Settled:
 		return record.Unsettle
-	case s.compared.Found() > s.design.Grid.Agreement || !s.compared.Explained() || unexplained(c.Convergence.Studies) > 0, open(c.Power):
+	case !(s.compared.Found() <= s.design.Grid.Agreement) || !s.compared.Explained() || unexplained(c.Convergence.Studies) > 0, open(c.Power):
 		return record.Disagree
 	}
 	var all []record.RequirementVerdict
@@ -130,7 +130,7 @@ func (s *solved) steadyRecord(st *state) record.Steady {
 func (s *state) end(k, e int, z0 complex128) record.End {
 	t := s.ends[k][e]
 	g := reflectionAt(s, k, e, z0)
-	return record.End{V: t.v, I: t.i, Impedance: ratio(t.v, t.i), Reflection: g, VSWR: vswrOf(g)}
+	return record.End{V: t.v, I: t.i, Impedance: ratio(t.v, t.i), Reflection: g, VSWR: vswrOf(standing(t, g))}
 }
 
 func (s *solved) stressRecord() record.Stress {

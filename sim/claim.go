@@ -15,16 +15,14 @@ import (
 // claims compares the designer's own figures of this case with both witnesses
 // and looks for the slips behind those that both contradict. It is cut short if
 // ctx ends.
-func (s *solved) claims(ctx context.Context, b *budget) []record.Claim {
+func (s *solved) claims(ctx context.Context) []record.Claim {
 	a := &assessor{
 		net: s.net, exact: s.exact, found: s.found,
 		steps:  s.grid.grid.StepsPerPeriod,
 		quotes: quotes(s.design),
-		spread: func(r design.Requirement, q quantity) float64 {
-			// As sure as a requirement of it would be.
-			return math.Max(s.spreadOf(r, q, b), s.study(studied{scale: asItIs, figure: s.measure(r, q)}).Uncertainty)
-		},
-		timed: s.timed,
+		// As sure as a requirement of it would be.
+		spread: func(r design.Requirement, q quantity) float64 { return s.measure(r, q).uncertainty() },
+		timed:  s.timed,
 	}
 	var mine []design.Claim
 	for _, c := range s.design.Claims {

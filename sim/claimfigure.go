@@ -18,7 +18,11 @@ func rawOf(c design.Claim, s *state) complex128 {
 	case design.InputImpedance:
 		return f.impedance(s, r)
 	case design.Reflection, design.VSWR, design.ReturnLoss:
-		return f.reflection(s, r)
+		g := f.reflection(s, r)
+		if r.Quantity == design.VSWR && standing(s.ends[f.section(r.Section)][endOf(r.End)], g) < cmplx.Abs(g) {
+			return 1 / g
+		}
+		return g
 	case design.Voltage, design.Phase:
 		return f.voltage(r.At + r.Load)(s)
 	case design.PhaseDifference:
@@ -39,7 +43,7 @@ func rawOf(c design.Claim, s *state) complex128 {
 func formed(c design.Claim, raw complex128) complex128 {
 	switch c.Quantity {
 	case design.VSWR:
-		return complex(vswrOf(raw), 0)
+		return complex(vswrOf(cmplx.Abs(raw)), 0)
 	case design.ReturnLoss:
 		return complex(-20*math.Log10(cmplx.Abs(raw)), 0)
 	case design.Phase, design.PhaseDifference:

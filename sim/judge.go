@@ -20,7 +20,7 @@ type judgement struct {
 	subject  string
 	min, max *design.Limit
 	values   []witnessed
-	spread   float64 // uncertainty, SI
+	spread   float64 // uncertainty of a figure of the time domain only, SI
 	figure   *measured
 	whole    float64 // see studied
 	unit     string  // of limits given without one
@@ -30,10 +30,16 @@ type judgement struct {
 	unfinished bool
 }
 
-// witnessed is a value and the witness who gave it.
+// witnessed is a value, what it may be at least and at most, and the witness who
+// gave it.
 type witnessed struct {
-	value  float64
-	method string
+	value, low, high float64
+	method           string
+}
+
+// timed is a value of the time domain only.
+func timed(value, spread float64) []witnessed {
+	return []witnessed{{value, value - spread, value + spread, fdtdOnly}}
 }
 
 // The names of the methods in a record.
@@ -54,9 +60,8 @@ func judge(ctx context.Context, c *solved, all map[string]*solved) ([]record.Req
 			continue
 		}
 		for _, j := range c.judgements(r, all) {
-			study := c.study(j.label())
-			reqs = append(reqs, j.record(study.Uncertainty))
-			studies = append(studies, study)
+			reqs = append(reqs, j.record())
+			studies = append(studies, c.study(j.label()))
 		}
 	}
 	return reqs, studies
@@ -80,7 +85,7 @@ func (s *solved) judgements(r design.Requirement, all map[string]*solved) []judg
 	case design.PeakVoltage, design.PeakCurrent:
 		pick, unit := s.peak(r)
 		p := s.stressed(pick)
-		one.values = []witnessed{{p.value, fdtdOnly}}
+		one.values = timed(p.value, p.spread)
 		one.spread, one.figure = p.spread, &measured{pick: pick}
 		one.note, one.unfinished = s.stressNote(pick, unit), !s.finished()
 	case design.Overshoot:
@@ -89,94 +94,12 @@ func (s *solved) judgements(r design.Requirement, all map[string]*solved) []judg
 		s.settleTime(&one)
 	case design.Agreement:
 		one.figure = s.agreementFigure()
-		one.values = []witnessed{{s.compared.Found(), byBoth}}
+		low, high := one.figure.bounds(fdtdView(0))
+		one.values = []witnessed{{s.compared.Found(), low, high, byBoth}}
 	default:
 		s.steadyValues(&one, all)
 	}
 	return []judgement{one}
-}
-
-// steadyValues fills a judgement of the steady state, or of its change from
-// another case.
-func (s *solved) steadyValues(j *judgement, all map[string]*solved) {
-	f := s.measure(j.req, finder{s.net}.steady(j.req))
-	if j.req.RelativeTo != "" {
-		ref := all[j.req.RelativeTo]
-		f = f.relativeTo(ref.measure(j.req, finder{ref.net}.steady(j.req)), j.req)
-	}
-	if angular(j.req.Quantity) {
-		f = f.near(j.centre())
-	}
-	j.take(f)
-}
-
-// take makes a figure of the steady state the one that is judged.
-func (j *judgement) take(f *measured) {
-	j.figure = f
-	j.values = []witnessed{{f.at(closedForm), byPhasor}, {f.at(fdtdView(0)), byFDTD}}
-	j.spread = f.spread(foundOrExpected)
-}
-
-// spreadOf is the uncertainty of a quantity, the larger of the two
-// witnesses'. An angle is followed from its own value, so that it does not
-// jump by a turn.
-func (s *solved) spreadOf(r design.Requirement, q quantity, b *budget) float64 {
-	if r.Section == "" && r.At == "" { // the largest anywhere cannot move further than its parts
-		switch r.Quantity {
-		case design.SteadyVoltage:
-			return b.largest(0)
-		case design.SteadyCurrent:
-			return b.largest(1)
-		}
-	}
-	worst := 0.0
-	for _, w := range []*state{s.exact, s.found} {
-		f := q
-		if angular(r.Quantity) {
-			base := q(w)
-			f = func(st *state) float64 { return base + math.Remainder(q(st)-base, 2*pi) }
-		}
-		worst = math.Max(worst, b.spread(w, f))
-	}
-	return worst
-}
-
-func angular(q design.Quantity) bool {
-	return q == design.Phase || q == design.PhaseDifference
-}
-
-// relative is a value's change from its reference: an angle's difference, a
-// power's or a voltage's ratio in dB.
-func relative(r design.Requirement, v, ref float64) float64 {
-	switch r.Quantity {
-	case design.Phase:
-		return math.Remainder(v-ref, 2*pi)
-	case design.LoadPower:
-		return 10 * math.Log10(v/ref)
-	default:
-		return 20 * math.Log10(v/ref)
-	}
-}
-
-// relativeSpread is what an uncertainty of v makes of the change.
-func relativeSpread(r design.Requirement, v, spread float64) float64 {
-	switch r.Quantity {
-	case design.Phase:
-		return spread
-	case design.LoadPower:
-		return 10 / math.Ln10 * spread / v
-	default:
-		return 20 / math.Ln10 * spread / v
-	}
-}
-
-// centre is the middle of the window of an angle, so that a value just
-// outside it is not a turn away; 0 with one limit only.
-func (j *judgement) centre() float64 {
-	if j.min != nil && j.max != nil {
-		return (j.min.SI + j.max.SI) / 2
-	}
-	return 0
 }
 
 // impedance makes a judgement of each window on an input impedance.
@@ -279,8 +202,8 @@ func (s *solved) overshoot(j *judgement) {
 	r.Quantity = design.PeakVoltage
 	pick, unit := s.peak(r)
 	p := s.stressed(pick)
-	j.values = []witnessed{{p.value/steady - 1, fdtdOnly}}
 	j.spread = p.spread / steady
+	j.values = timed(p.value/steady-1, j.spread)
 	j.figure = &measured{pick: func(t *fdtd.Stress) float64 { return pick(t)/steady - 1 }}
 	j.note, j.unfinished = s.stressNote(pick, unit), !s.finished()
 }
@@ -293,12 +216,16 @@ func (s *solved) settleTime(j *judgement) {
 	pick := func(run *fdtd.Stress) float64 { return run.SettleTime(at, j.req.Settled) }
 	settled := s.stressed(pick)
 	j.figure = &measured{pick: pick}
-	j.values = []witnessed{{settled.value, fdtdOnly}}
+	j.values = timed(settled.value, settled.spread)
 	j.spread = settled.spread
+	// Before a stop nothing more comes that the source has not sent.
+	j.unfinished = s.net.Source.Stop == nil && !s.finished()
 	if math.IsNaN(settled.value) && s.net.Source.Stop != nil {
 		j.note = fmt.Sprintf("not within %.3g %% before the source stops", j.req.Settled*100)
 	} else if math.IsNaN(settled.value) {
 		j.note = fmt.Sprintf("not within %.3g %% when the run ended after %.3g us", j.req.Settled*100, s.stress.Duration*1e6)
+	} else if j.unfinished {
+		j.note = "the run ended before the network was at rest"
 	}
 }
 

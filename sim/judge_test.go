@@ -41,11 +41,11 @@ func TestOutcome(t *testing.T) {
 		{"infinite", nil, limit(1.5, "1"), []float64{math.Inf(1)}, 0, math.Inf(1), math.Inf(-1), record.MissedReq, phasor},
 		{"not a number", nil, limit(1e-6, "us"), []float64{math.NaN()}, 0, math.NaN(), math.NaN(), record.NotShownReq, phasor},
 	} {
-		j := judgement{min: tt.min, max: tt.max, spread: tt.spread}
+		j := judgement{min: tt.min, max: tt.max}
 		for i, v := range tt.values {
-			j.values = append(j.values, witnessed{v, []string{phasor, fdtd}[i]})
+			j.values = append(j.values, witnessed{v, v - tt.spread, v + tt.spread, []string{phasor, fdtd}[i]})
 		}
-		got := j.record(0)
+		got := j.record()
 		const rounding = 1e-12
 		same := func(a, b float64) bool {
 			return a == b || math.IsNaN(a) && math.IsNaN(b) || math.Abs(a-b) <= rounding*math.Max(1, math.Abs(b))
@@ -89,7 +89,7 @@ func TestSpread(t *testing.T) {
 		t.Fatal(err)
 	}
 	s := phasorState(p.net, p.grids[0].exact)
-	b := &budget{junctions: make([]float64, len(p.net.Junctions)), branches: make([]float64, len(p.net.Branches)), ends: make([][2]float64, len(p.net.Sections))}
+	b := &budget{junctions: make([]float64, len(p.net.Junctions)), branches: make([]float64, len(p.net.Branches)), ends: make([][2]offset, len(p.net.Sections)), crests: make([]offset, len(p.net.Sections))}
 	at := p.net.Branches[0].A
 	v := s.junctions[at]
 	b.junctions[at] = 1

@@ -8,10 +8,9 @@ import (
 )
 
 // record judges and writes down: the value is that of the worse witness, met
-// if value and uncertainty are inside the limits, missed if both are outside,
-// not shown if the uncertainty straddles a limit. The uncertainty is no less than
-// least, in the unit of the requirement.
-func (j *judgement) record(least float64) record.Requirement {
+// if all that it may be is inside the limits, missed if all is outside, not
+// shown if it straddles a limit. The uncertainty is the one towards the limit.
+func (j *judgement) record() record.Requirement {
 	s := scaleFor(j.limitUnit())
 	out := record.Requirement{
 		ID: j.req.ID, Text: j.req.Text, Source: j.req.Document,
@@ -27,34 +26,43 @@ func (j *judgement) record(least float64) record.Requirement {
 			out.Value, out.Margin, out.Method = v, m, w.method
 			out.MarginDB = marginDB(s.unit, limit, v, m)
 			out.MarginPercent = percent(s.unit, m, limit)
-			// The scale may bend (dBm): the larger of the two sides.
-			out.Uncertainty = math.Max(math.Abs(s.from(w.value+j.spread)-v), math.Abs(v-s.from(w.value-j.spread)))
+			low, high := s.from(w.low), s.from(w.high)
+			out.Uncertainty = towards(limit, v, low, high)
+			out.Verdict = outcome(v, low, high, out.Min, out.Max)
 		}
 	}
-	if least > out.Uncertainty {
-		out.Uncertainty = least
-	}
-	if math.IsNaN(out.Uncertainty) || math.IsInf(out.Uncertainty, 0) {
-		out.Uncertainty = 0
-		if !math.IsInf(out.Value, 0) {
-			out.Uncertainty = math.NaN()
-		}
-	}
-	out.Verdict = outcome(out.Value, out.Margin, out.Uncertainty)
 	if j.unfinished {
 		out.Verdict = atMostNotShown(out.Verdict)
 	}
 	return out
 }
 
-// outcome is the verdict on a margin with an uncertainty.
-func outcome(value, margin, uncertainty float64) record.RequirementVerdict {
+// towards is how far a value may be off on the side of a limit; NaN where that
+// is no number.
+func towards(limit, v, low, high float64) float64 {
+	u := v - low
+	if limit > v {
+		u = high - v
+	}
 	switch {
-	case math.IsNaN(value) || math.IsNaN(uncertainty):
+	case math.IsInf(v, 0) && low == v && high == v:
+		return 0
+	case math.IsInf(u, 0):
+		return math.NaN()
+	}
+	return u
+}
+
+// outcome is the verdict on a value that may be anything from low to high.
+func outcome(v, low, high float64, min, max *float64) record.RequirementVerdict {
+	inside := (min == nil || low >= *min) && (max == nil || high <= *max)
+	outside := min != nil && high < *min || max != nil && low > *max
+	switch {
+	case math.IsNaN(v), math.IsNaN(low), math.IsNaN(high):
 		return record.NotShownReq
-	case margin >= uncertainty:
+	case inside:
 		return record.Met
-	case margin < -uncertainty:
+	case outside:
 		return record.MissedReq
 	}
 	return record.NotShownReq

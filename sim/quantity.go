@@ -15,13 +15,23 @@ type quantity func(*state) float64
 // total is the reflection above which rounding cannot tell from a total one.
 const total = 1 - 1e-12
 
-// vswrOf is (1+|g|)/(1-|g|), +Inf for a total reflection.
-func vswrOf(g complex128) float64 {
-	a := cmplx.Abs(g)
+// vswrOf is (1+a)/(1-a) of a reflection of size a, +Inf for a total one.
+func vswrOf(a float64) float64 {
 	if a >= total {
 		return math.Inf(1)
 	}
 	return (1 + a) / (1 - a)
+}
+
+// standing is the size of the reflection g at a terminal that the VSWR goes by.
+// A standing wave has no direction: where the power flows from To to From, the
+// incident wave is the one that g takes for the reflected.
+func standing(t terminal, g complex128) float64 {
+	a := cmplx.Abs(g)
+	if a > 1 && power(t.v, t.i) < 0 {
+		return 1 / a
+	}
+	return a
 }
 
 // reflectionAt is (Z - Z0)/(Z + Z0) of the impedance seen along section k at
@@ -77,13 +87,12 @@ func (f finder) voltage(name string) func(*state) complex128 {
 // steady gives the quantity that a requirement limits, or nil if it is not
 // one of the steady state.
 func (f finder) steady(r design.Requirement) quantity {
+	if l := f.law(r); l != nil {
+		return l.quantity
+	}
 	switch r.Quantity {
-	case design.VSWR:
-		return func(s *state) float64 { return vswrOf(f.reflection(s, r)) }
 	case design.Reflection:
-		return func(s *state) float64 { return cmplx.Abs(f.reflection(s, r)) }
-	case design.ReturnLoss:
-		return func(s *state) float64 { return -20 * math.Log10(cmplx.Abs(f.reflection(s, r))) }
+		return f.reflected(r)
 	case design.SteadyVoltage:
 		return f.steadyVoltage(r)
 	case design.SteadyCurrent:
@@ -93,8 +102,6 @@ func (f finder) steady(r design.Requirement) quantity {
 		return func(s *state) float64 { return s.partPower(b) }
 	case design.Efficiency:
 		return f.efficiency(r)
-	case design.Loss:
-		return f.loss(r)
 	case design.Phase:
 		name := r.At
 		if r.Load != "" {
@@ -105,11 +112,19 @@ func (f finder) steady(r design.Requirement) quantity {
 	case design.PhaseDifference:
 		a, b := f.voltage(r.Between[0]), f.voltage(r.Between[1])
 		return func(s *state) float64 { return cmplx.Phase(a(s) * cmplx.Conj(b(s))) }
-	case design.PowerSplit:
-		a, b := f.load(r.Between[0]), f.load(r.Between[1])
-		return func(s *state) float64 { return 10 * math.Log10(s.partPower(a)/s.partPower(b)) }
 	}
 	return nil
+}
+
+// reflected is the size of the reflection at the end of a section.
+func (f finder) reflected(r design.Requirement) quantity {
+	return func(s *state) float64 { return cmplx.Abs(f.reflection(s, r)) }
+}
+
+// standing is that size as the VSWR goes by it.
+func (f finder) standing(r design.Requirement) quantity {
+	k, end := f.section(r.Section), endOf(r.End)
+	return func(s *state) float64 { return standing(s.ends[k][end], f.reflection(s, r)) }
 }
 
 // endOf is 0 for the From end and 1 for the To end.
@@ -219,23 +234,37 @@ func (f finder) efficiency(r design.Requirement) quantity {
 // loss in dB is, of a section, the power that enters it over the power that
 // leaves it; of a load, the available power (for an ideal source the
 // delivered power) over the power into the load.
-func (f finder) loss(r design.Requirement) quantity {
+func (f finder) loss(r design.Requirement) *law {
 	if r.Section != "" {
 		k := f.section(r.Section)
-		return func(s *state) float64 {
-			in, out := power(s.ends[k][0].v, s.ends[k][0].i), power(s.ends[k][1].v, s.ends[k][1].i)
-			if in < 0 { // the power flows from To to From
-				in, out = -out, -in
-			}
-			return 10 * math.Log10(in/out)
-		}
+		return powerRatio(
+			func(s *state) float64 { in, _ := s.flow(k); return in },
+			func(s *state) float64 { _, out := s.flow(k); return out })
 	}
 	b := f.load(r.Load)
-	return func(s *state) float64 {
-		p := f.net.Source.Available()
-		if math.IsInf(p, 1) {
-			p = s.sourcePower()
-		}
-		return 10 * math.Log10(p/s.partPower(b))
+	available := f.net.Source.Available()
+	from := func(*state) float64 { return available }
+	if math.IsInf(available, 1) {
+		from = (*state).sourcePower
 	}
+	return powerRatio(from, func(s *state) float64 { return s.partPower(b) })
+}
+
+// idle is the part of the apparent power at the ends of a section below which a
+// power is rounding: nothing goes through.
+const idle = 1e-12
+
+// flow is the power that enters section k, W, and the power that leaves it,
+// whichever way it flows. It is NaN where nothing goes through, as in a stub
+// without loss; what leaves is negative where power enters at both ends.
+func (s *state) flow(k int) (in, out float64) {
+	e := s.ends[k]
+	in, out = power(e[0].v, e[0].i), power(e[1].v, e[1].i)
+	if in+out < 0 { // from To to From
+		in, out = -out, -in
+	}
+	if math.Max(in, out) <= idle*(apparent(e[0].v, e[0].i)+apparent(e[1].v, e[1].i)) {
+		return math.NaN(), math.NaN()
+	}
+	return in, out
 }

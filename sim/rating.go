@@ -12,12 +12,12 @@ import (
 // ratings compares every rated section with its rating, worst first.
 func (s *solved) ratings() []record.Rating {
 	var out []record.Rating
-	b := newBudget(s.net, &s.compared)
+	b := s.likely()
 	for k, sec := range s.design.Sections {
 		peaks := s.stress.Sections[k]
 		if l := sec.Rating.Voltage; l != nil {
 			r := s.rating(sec.Name, "voltage", "V", sec.Rating.MarginDB, l, sec.Rating.VoltageSource)
-			r.steady(s.exact.voltage[k].largest, s.found.voltage[k].largest, b.ends[k][0])
+			r.steady(s.exact.voltage[k].largest, s.found.voltage[k].largest, b.crests[k].v)
 			r.peak(peaks.Voltage, s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Voltage.Value }).spread)
 			r.judge(s.finished())
 			r.Field = math.Max(r.Steady, r.Peak) * s.fieldPerVolt(sec.Line)
@@ -25,7 +25,7 @@ func (s *solved) ratings() []record.Rating {
 		}
 		if l := sec.Rating.Current; l != nil {
 			r := s.rating(sec.Name, "current", "A", sec.Rating.MarginDB, l, sec.Rating.CurrentSource)
-			r.steady(s.exact.current[k].largest, s.found.current[k].largest, b.ends[k][1])
+			r.steady(s.exact.current[k].largest, s.found.current[k].largest, b.crests[k].i)
 			r.peak(peaks.Current, s.stressed(func(t *fdtd.Stress) float64 { return t.Sections[k].Current.Value }).spread)
 			r.judge(s.finished())
 			out = append(out, r.Rating)
@@ -81,7 +81,7 @@ func (r *rated) judge(finished bool) {
 	r.Margin = r.Allowed - worst
 	r.MarginDB = 20 * math.Log10(r.Allowed/worst)
 	r.MarginPercent = 100 * r.Margin / r.Allowed
-	r.Verdict = outcome(worst, r.Margin, r.Uncertainty)
+	r.Verdict = outcome(worst, worst-r.Uncertainty, worst+r.Uncertainty, nil, &r.Allowed)
 	if !finished {
 		r.Verdict = atMostNotShown(r.Verdict)
 	}

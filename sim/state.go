@@ -115,12 +115,16 @@ func (s *state) chop() {
 	}
 }
 
-// ratio is the impedance v/i, infinite at an open end.
+// ratio is the impedance v/i, infinite at an open end. Where there is neither
+// voltage nor current there is no impedance: it is NaN.
 func ratio(v, i complex128) complex128 {
-	if i == 0 {
+	switch {
+	case i != 0:
+		return v / i
+	case v != 0:
 		return cmplx.Inf()
 	}
-	return v / i
+	return cmplx.NaN()
 }
 
 // gridExtremes finds the extremes of |p| between the points of a grid. The

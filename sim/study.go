@@ -4,7 +4,6 @@ import (
 	"math"
 
 	"linewitness/fdtd"
-	"linewitness/sim/agree"
 	"linewitness/sim/gci"
 	"linewitness/sim/record"
 )
@@ -46,7 +45,7 @@ func (s *solved) study(f studied) record.Study {
 	at := func(v view) float64 { return f.scale.from(f.figure.at(v)) }
 	finest := at(fdtdView(0))
 	per := s.sensitivity(f, at)
-	residual := residualSlack * s.steady.Settling.Residual
+	residual := residualSlack * f.figure.residual
 	out.Settling, out.Rounding = per*residual, arithmetic*(per+math.Abs(finest))
 	for level := range f.figure.levels {
 		out.Values = append(out.Values, at(fdtdView(level)))
@@ -60,17 +59,40 @@ func (s *solved) study(f studied) record.Study {
 	out.Grid = atLeast(out.GCI, atLeast(gci.Factor*math.Abs(at(gridPredicted)-at(limitOfGrids)), 0))
 	out.Error = finest - out.Phasor
 	out.Uncertainty = out.Grid + out.Settling + out.Form + out.Rounding
-	// A figure that is infinite (the VSWR of a total reflection) has no error;
-	// the comparison along the sections has it.
+	// A figure that is infinite for one of the witnesses (the impedance of an open
+	// end) has no error; the comparison along the sections has it.
+	if math.IsInf(out.Error, 0) {
+		out.Error = math.NaN()
+	}
 	out.Explained = !(math.Abs(out.Error) > out.Uncertainty)
+	s.studyParts(&out, f)
 	return out
+}
+
+// studyParts leaves the verdict on a figure that its uncertainty bends, as a level
+// is bent, to what it is made of.
+func (s *solved) studyParts(out *record.Study, f studied) {
+	var reach float64
+	switch c := f.figure.composed; {
+	case c != nil:
+		out.Explained, reach = c.explained()
+		reach = f.scale.from(reach)
+	case f.scale.unit == "dBm":
+		watts := f.figure.study()
+		out.Explained = watts.Explained
+		at := f.figure.at(fdtdView(0))
+		reach = math.Max(f.scale.from(at+watts.Uncertainty)-f.scale.from(at), f.scale.from(at)-f.scale.from(at-watts.Uncertainty))
+	default:
+		return
+	}
+	out.Uncertainty = math.Max(out.Uncertainty, reach)
 }
 
 // sensitivity is the change of a figure, in its unit, for a relative error of
 // the phasors of 1, from a small one.
 func (s *solved) sensitivity(f studied, at func(view) float64) float64 {
 	const small = 1e-6
-	d := f.figure.spread(uniform(small))
+	d := f.figure.moved(small)
 	base := f.figure.at(fdtdView(0))
 	up, down := f.scale.from(base+d)-at(fdtdView(0)), at(fdtdView(0))-f.scale.from(base-d)
 	return atLeast(math.Abs(up), math.Abs(down)) / small
@@ -131,8 +153,9 @@ func (s *solved) agreementFigure() *measured {
 		r := compareOn(s.coarseGrids[i], c, 0)
 		found = append(found, r.Found())
 	}
-	return &measured{
+	return s.studying(&measured{
 		difference: true,
+		residual:   s.steady.Settling.Residual,
 		levels:     len(found),
 		at: func(v view) float64 {
 			if v < 0 {
@@ -140,6 +163,7 @@ func (s *solved) agreementFigure() *measured {
 			}
 			return found[v]
 		},
-		spread: func(size errorSize) float64 { return size(&agree.Kind{}) },
-	}
+		spread: func() float64 { return 0 },
+		moved:  func(e float64) float64 { return e },
+	})
 }

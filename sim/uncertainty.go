@@ -2,65 +2,129 @@ package sim
 
 import (
 	"math"
+	"math/cmplx"
 	"slices"
 
-	"linewitness/sim/agree"
 	"linewitness/sim/network"
 )
 
-// An error budget is how far each phasor of a state may be off: the larger of
-// the found and the expected difference of the witnesses on the sections that
-// meet there.
+// An error budget is how far each phasor of a state may be off.
 type budget struct {
 	junctions, branches []float64
 	source              float64
-	ends                [][2]float64 // V and A of each section
+	ends                [][2]offset // of each section, its From end first
+	crests              []offset    // of the largest voltage and current along each section
 }
 
-func newBudget(net *network.Network, r *agree.Result) *budget {
-	return budgetOf(net, r, foundOrExpected)
-}
+// An offset is a size of errors, V and A.
+type offset struct{ v, i float64 }
 
-// budgetOf is a budget with errors of a size of one's own, relative to the
-// section's largest.
-func budgetOf(net *network.Network, r *agree.Result, size errorSize) *budget {
-	b := &budget{
-		junctions: make([]float64, len(net.Junctions)),
-		branches:  make([]float64, len(net.Branches)),
+// rounding is the relative error that arithmetic may leave in a phasor of the
+// time-domain run: as of package agree.
+const rounding = 1e-11
+
+// likely is how far each phasor may be off: by what the witnesses are found to
+// be apart there, or by what the grid must do to it and the settling leaves,
+// whichever is larger. The place counts: at the far end of a line of much loss
+// an error that is small against the largest voltage would be all there is.
+func (s *solved) likely() *budget {
+	b := s.budget(s.steady.Settling.Residual + rounding)
+	raise := func(left *float64, exact, found, grid complex128) {
+		*left = math.Max(cmplx.Abs(found-exact), *left+cmplx.Abs(grid-exact))
 	}
-	currents := make([]float64, len(net.Junctions))
-	topV, topI := 0.0, 0.0
-	for k := range r.Sections {
-		s := &r.Sections[k]
-		v, i := size(&s.Voltage)*s.Voltage.Scale, size(&s.Current)*s.Current.Scale
-		b.ends = append(b.ends, [2]float64{v, i})
-		for _, j := range []int{net.Sections[k].From, net.Sections[k].To} {
-			b.junctions[j] = math.Max(b.junctions[j], v)
-			currents[j] += i // Kirchhoff's law: their errors may add up in a branch
+	raiseSize := func(left *float64, exact, found, grid extreme) {
+		raise(left, complex(exact.value, 0), complex(found.value, 0), complex(grid.value, 0))
+	}
+	exact, found, grid := s.exact, s.found, s.predicted
+	for j := range b.junctions {
+		raise(&b.junctions[j], exact.junctions[j], found.junctions[j], grid.junctions[j])
+	}
+	for k := range b.branches {
+		raise(&b.branches[k], exact.branches[k], found.branches[k], grid.branches[k])
+	}
+	raise(&b.source, exact.source, found.source, grid.source)
+	for k := range b.ends {
+		for e := range b.ends[k] {
+			x, f, g := exact.ends[k][e], found.ends[k][e], grid.ends[k][e]
+			raise(&b.ends[k][e].v, x.v, f.v, g.v)
+			raise(&b.ends[k][e].i, x.i, f.i, g.i)
 		}
-		topV, topI = math.Max(topV, v), math.Max(topI, i)
+		raiseSize(&b.crests[k].v, exact.voltage[k].largest, found.voltage[k].largest, grid.voltage[k].largest)
+		raiseSize(&b.crests[k].i, exact.current[k].largest, found.current[k].largest, grid.current[k].largest)
 	}
+	return b
+}
+
+// budget is one of errors of the same size e everywhere, relative to the
+// largest of their kind, as the residual of a settling run is: on a section to
+// the largest there, at a junction without a section to that of all junctions,
+// in a branch to that of all branches.
+func (s *solved) budget(e float64) *budget {
+	net := s.net
+	b := &budget{junctions: make([]float64, len(net.Junctions)), branches: make([]float64, len(net.Branches))}
+	currents := make([]float64, len(net.Junctions))
+	var top offset
+	for k := range s.compared.Sections {
+		c := &s.compared.Sections[k]
+		o := offset{e * c.Voltage.Scale, e * c.Current.Scale}
+		b.ends, b.crests = append(b.ends, [2]offset{o, o}), append(b.crests, o)
+		for _, j := range []int{net.Sections[k].From, net.Sections[k].To} {
+			b.junctions[j] = math.Max(b.junctions[j], o.v)
+			currents[j] += o.i // Kirchhoff's law: their errors may add up in a branch
+		}
+		top.v, top.i = math.Max(top.v, o.v), math.Max(top.i, o.i)
+	}
+	top.v = math.Max(top.v, e*largestOf(s.exact.junctions))
 	for j := range currents { // where no section ends, the worst of all
 		if currents[j] == 0 {
-			b.junctions[j], currents[j] = topV, topI
+			b.junctions[j], currents[j] = top.v, top.i
 		}
 	}
+	lumped := e * math.Max(largestOf(s.exact.branches), cmplx.Abs(s.exact.source))
 	for k, br := range net.Branches {
-		b.branches[k] = currents[br.A]
+		b.branches[k] = b.within(br.Series, br.A, br.B, lumped, net.Omega())
+		if br.Ratio != 0 { // tied to two junctions, by no impedance
+			b.branches[k] = lumped
+		}
+		b.branches[k] = math.Max(b.branches[k], currents[br.A])
 		if br.B != network.Ground {
 			b.branches[k] = math.Max(b.branches[k], currents[br.B])
 		}
 	}
-	b.source = currents[net.Source.At]
+	b.source = b.within(net.Source.Series, net.Source.At, network.Ground, lumped, net.Omega())
+	b.source = math.Max(b.source, currents[net.Source.At])
 	return b
 }
 
-// largest is the largest budget of the voltages (0) or of the currents (1) of
-// all sections.
-func (b *budget) largest(kind int) float64 {
+// within is how far the current of a series part between two junctions may be
+// off: by that of all branches, or by what its voltage is off over its impedance.
+func (b *budget) within(part network.Series, from, to int, all, omega float64) float64 {
+	v := b.junctions[from]
+	if to != network.Ground {
+		v += b.junctions[to]
+	}
+	if part.Ideal() {
+		return all
+	}
+	return math.Min(all, v/cmplx.Abs(part.Impedance(omega)))
+}
+
+func largestOf(p []complex128) float64 {
 	top := 0.0
-	for _, e := range b.ends {
-		top = math.Max(top, e[kind])
+	for _, v := range p {
+		top = math.Max(top, cmplx.Abs(v))
+	}
+	return top
+}
+
+// largest is the largest budget of all voltages, and of all currents.
+func (b *budget) largest() offset {
+	top := offset{slices.Max(b.junctions), b.source}
+	for _, i := range b.branches {
+		top.i = math.Max(top.i, i)
+	}
+	for _, c := range b.crests {
+		top.v, top.i = math.Max(top.v, c.v), math.Max(top.i, c.i)
 	}
 	return top
 }
@@ -94,8 +158,8 @@ func (b *budget) spread(s *state, q quantity) float64 {
 	probe(&s.source, b.source)
 	for k := range s.ends {
 		for e := range s.ends[k] {
-			probe(&s.ends[k][e].v, b.ends[k][0])
-			probe(&s.ends[k][e].i, b.ends[k][1])
+			probe(&s.ends[k][e].v, b.ends[k][e].v)
+			probe(&s.ends[k][e].i, b.ends[k][e].i)
 		}
 		sum += b.extremes(s, q, base, k)
 	}
@@ -105,12 +169,14 @@ func (b *budget) spread(s *state, q quantity) float64 {
 // extremes is the part of spread that the largest values along section k make.
 func (b *budget) extremes(s *state, q quantity, base float64, k int) float64 {
 	sum := 0.0
-	for i, e := range []*extreme{&s.voltage[k].largest, &s.current[k].largest} {
+	move := func(e *extreme, size float64) {
 		was := e.value
-		e.value = was + b.ends[k][i]
+		e.value = was + size
 		sum += math.Abs(q(s) - base)
 		e.value = was
 	}
+	move(&s.voltage[k].largest, b.crests[k].v)
+	move(&s.current[k].largest, b.crests[k].i)
 	return sum
 }
 

@@ -29,7 +29,7 @@ func scaleFor(unit string) scale {
 	}
 	switch {
 	case unit == "dBm":
-		return scale{unit, func(w float64) float64 { return 10 * math.Log10(w/1e-3) }}
+		return scale{unit, func(w float64) float64 { return 10 * math.Log10(math.Max(0, w)/1e-3) }} // a power of rounding may be negative
 	case unit == "dB":
 		return linear(unit, 1)
 	case unit == "%":

@@ -142,12 +142,15 @@ func (r *Result) Found() float64 { return math.Max(r.Voltage, r.Current) }
 // residual must cause, within slack, on every section.
 func (r *Result) Explained() bool {
 	for _, s := range r.Sections {
-		if s.Voltage.Found > slack*s.Voltage.Expected || s.Current.Found > slack*s.Current.Expected {
+		if !s.Voltage.explained() || !s.Current.explained() {
 			return false
 		}
 	}
 	return true
 }
+
+// explained is false for a difference that is not a number.
+func (k *Kind) explained() bool { return k.Found <= slack*k.Expected }
 
 func at(z []float64, k int, f func(int, float64) complex128) []complex128 {
 	out := make([]complex128, len(z))
