@@ -26,6 +26,9 @@ type Options struct {
 	Grids int
 	// Version is the version of the program, for the record.
 	Version string
+	// Date is the date of the record if its design file gives none, and DateFrom
+	// where it is from, as record.Design.DateFrom has it.
+	Date, DateFrom string
 }
 
 // Verify solves, compares and judges every case of a design.
@@ -55,7 +58,7 @@ func Verify(ctx context.Context, f *design.File, opt Options) (*record.Record, e
 		}
 		return nil, err
 	}
-	out := newRecord(ctx, f, cases, opt.Version)
+	out := newRecord(ctx, f, cases, opt)
 	return out, ctx.Err()
 }
 
@@ -85,25 +88,27 @@ func solveAll(ctx context.Context, all []*planned, progress func(float64)) ([]*s
 
 // newRecord judges the solved cases and writes the record. If ctx ends it is
 // cut short and of no use.
-func newRecord(ctx context.Context, f *design.File, cases []*solved, version string) *record.Record {
+func newRecord(ctx context.Context, f *design.File, cases []*solved, opt Options) *record.Record {
 	byName := map[string]*solved{}
 	for _, c := range cases {
 		byName[c.name] = c
 	}
 	r := f.Nominal.Record
+	date, from := dated(r, opt)
 	out := &record.Record{
-		Tool: record.Tool{Version: version, Go: runtime.Version() + " " + runtime.GOOS + "/" + runtime.GOARCH},
+		Tool: record.Tool{Version: opt.Version, Go: runtime.Version() + " " + runtime.GOOS + "/" + runtime.GOARCH},
 		Design: record.Design{
 			Title: r.Title, Number: r.Number, Revision: r.Revision, Purpose: r.Purpose,
 			PreparedBy: r.PreparedBy, CheckedBy: r.CheckedBy, ApprovedBy: r.ApprovedBy,
-			Notes: r.Notes, Date: r.Date, DateFrom: dateFrom(r), History: history(r),
+			Notes: r.Notes, Date: date, DateFrom: from, History: history(r),
 			File: filepath.Base(f.Name), SHA256: f.SHA256, Source: f.Source,
 			FSVChoices: choices(),
 			Convention: conventionName(f.Nominal.Convention),
 			Agreement:  f.Nominal.Grid.Agreement,
 			Tolerance:  f.Nominal.Grid.SettleTolerance, MaxPeriods: f.Nominal.Grid.MaxPeriods,
 		},
-		Verdict: record.Verified,
+		Verdict:     record.Verified,
+		Attachments: attached(f),
 	}
 	for _, c := range cases {
 		if ctx.Err() != nil {
@@ -120,12 +125,13 @@ func newRecord(ctx context.Context, f *design.File, cases []*solved, version str
 	return out
 }
 
-// dateFrom is where the date of a record is from: the design file, if it is there.
-func dateFrom(r design.Record) string {
+// dated is the date of a record and where it is from: the design file, or else
+// what the caller knows.
+func dated(r design.Record, opt Options) (date, from string) {
 	if r.Date == "" {
-		return ""
+		return opt.Date, opt.DateFrom
 	}
-	return "record"
+	return r.Date, "record"
 }
 
 // history is the revision history of a record, oldest first.

@@ -21,8 +21,9 @@ func TestScripts(t *testing.T) {
 	testscript.Run(t, testscript.Params{
 		Dir: "testdata/script",
 		Cmds: map[string]func(*testscript.TestScript, bool, []string){
-			"exits": exits,
-			"like":  like,
+			"exits":  exits,
+			"like":   like,
+			"detach": detach, "swap": swap, "forge": forge,
 		},
 		UpdateScripts:       *update,
 		RequireExplicitExec: true,

@@ -30,7 +30,7 @@ func (r *recheckReport) write(w io.Writer) {
 		{"texts", countText(r.out.Texts)},
 	}
 	if d := r.out.Largest; d != nil {
-		rows = append(rows, []string{"largest", plainNumber(d.Ratio()) + " of what its uncertainty allows, " + d.Path})
+		rows = append(rows, []string{"largest", plainNumber(d.Ratio()) + " of the change that is allowed, " + d.Path})
 	}
 	writeTable(w, rows)
 	writeDifferences(w, "different:", r.out.Differences)
@@ -83,13 +83,13 @@ func gridsOf(n *result.Node) int {
 
 // jsonDifference is a difference as JSON; what has no number is null.
 type jsonDifference struct {
-	Path     string   `json:"path"`
-	Record   string   `json:"record"`
-	Now      string   `json:"now"`
-	Change   *float64 `json:"change"`
-	Allowed  *float64 `json:"allowed"`
-	OfLimits *float64 `json:"of_allowed"`
-	Why      string   `json:"why"`
+	Path    string   `json:"path"`
+	Record  string   `json:"record"`
+	Now     string   `json:"now"`
+	Change  *float64 `json:"change"`
+	Allowed *float64 `json:"allowed"`
+	Ratio   *float64 `json:"of_allowed"`
+	Why     string   `json:"why"`
 }
 
 func jsonDifferences(ds []recheck.Difference) []jsonDifference {
