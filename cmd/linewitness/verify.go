@@ -114,11 +114,17 @@ func (a *app) verifyAll(ctx context.Context, paths []string, opt *verifyOptions)
 
 // verifyOne verifies one design and returns the status of its verdict.
 func (a *app) verifyOne(ctx context.Context, j job, opt *verifyOptions) (int, error) {
+	how := sim.Options{NoBound: opt.noBound, Grids: gridCount(opt.grids), Version: version()}
+	if j.file.Nominal.Record.Date == "" {
+		var err error
+		if how.Date, how.DateFrom, err = dateOf(j.path); err != nil {
+			return statusVerified, err
+		}
+	}
 	bar := startBar(a.stderr, outputBase(j.path))
 	defer bar.stop()
-	r, err := await(ctx, func() (*record.Record, error) {
-		return a.verify(ctx, j.file, sim.Options{Progress: bar.progress(), NoBound: opt.noBound, Grids: gridCount(opt.grids), Version: version()})
-	})
+	how.Progress = bar.progress()
+	r, err := await(ctx, func() (*record.Record, error) { return a.verify(ctx, j.file, how) })
 	if err != nil {
 		return statusVerified, verifyError(j.file.Name, err)
 	}
