@@ -1,6 +1,9 @@
 package fdtd
 
-import "math"
+import (
+	"math"
+	"slices"
+)
 
 // A charter draws up the map of a stress run. All its storage is made in
 // advance; when the rows are used up every second one makes room.
@@ -15,6 +18,7 @@ type charter struct {
 	end      int         // last step of the map
 	every    int         // steps of a row
 	stride   int         // envelope: steps between samples
+	reach    int         // envelope of crests: places to either side, or 0
 	rows     int
 	data     [][]float64 // of the only or the cosine lane, [row x place]; likewise of the sine lane
 }
@@ -36,12 +40,16 @@ func newCharter(m *model, set Settings, lanes int) *charter {
 	var last int
 	c.every, last = strides(c.end, mapRows-1)
 	c.envelope = n < rowsPerPeriod*last
-	c.spread()
+	edges := c.spread()
 	kept := lanes
 	if c.envelope {
 		half := max(1, n/2)
 		first, _ := strides((c.end+half-1)/half, mapRows)
 		c.every, c.stride = first*half, samplesApart(half)
+		// A cell is about a step of delay long, and half a wavelength half a period.
+		if lobe := float64(half*len(c.places)) / float64(edges); lobe < placesPerLobe {
+			c.reach = int(math.Ceil(lobe / 2))
+		}
 		for _, leg := range c.path {
 			c.sum = append(c.sum, make([]float64, m.grid.Cells[leg.Section]+1))
 		}
@@ -69,9 +77,10 @@ func samplesApart(half int) int {
 	return 1
 }
 
-// spread spreads the places over the path, by edges: evenly in delay, about.
-func (c *charter) spread() {
-	edges := 1
+// spread spreads the places over the path, by edges: evenly in delay, about. It
+// gives the number of edges.
+func (c *charter) spread() (edges int) {
+	edges = 1
 	for _, leg := range c.path {
 		edges += c.m.grid.Cells[leg.Section]
 	}
@@ -88,6 +97,7 @@ func (c *charter) spread() {
 		}
 	})
 	c.bounds = append(c.bounds, edges)
+	return edges
 }
 
 // along calls do for every edge of the path, numbered from the source on. Where
@@ -201,7 +211,7 @@ func (c *charter) chart() Map {
 	if c == nil {
 		return Map{}
 	}
-	out := Map{Path: c.path, Envelope: c.envelope}
+	out := Map{Path: c.path, Envelope: c.envelope, Crests: c.reach > 0}
 	for _, p := range c.places {
 		out.Z = append(out.Z, p.z)
 	}
@@ -219,13 +229,16 @@ func (c *charter) chart() Map {
 	return out
 }
 
-// values are those of a row, roots taken of squares.
+// values are those of a row: roots of the squares, and of crests the largest
+// within reach.
 func (c *charter) values(lane, r int) []float64 {
-	out := append([]float64(nil), c.row(lane, r)...)
-	if c.envelope {
-		for p, v := range out {
-			out[p] = math.Sqrt(v)
-		}
+	row := c.row(lane, r)
+	out := append([]float64(nil), row...)
+	if !c.envelope {
+		return out
+	}
+	for p := range out {
+		out[p] = math.Sqrt(slices.Max(row[max(0, p-c.reach):min(len(row), p+c.reach+1)]))
 	}
 	return out
 }

@@ -9,11 +9,14 @@ import "math"
 // If a period is long enough for that it is the instantaneous voltage. Else it
 // is the envelope: the amplitude of the wave over the time of a row, a whole
 // number of half periods, at its largest among the cells that a place stands
-// for. Stripes of crests that are drawn too coarsely are stripes of nothing, and
-// so are the lobes of a standing wave.
+// for. Stripes that are drawn too coarsely show a pattern that is not there; so
+// do the lobes of a standing wave, and where they have fewer than
+// placesPerLobe places each the envelope is that of the crests: the largest
+// within a quarter of a wavelength to either side.
 type Map struct {
 	Path     []Leg // empty if there is no map
 	Envelope bool
+	Crests   bool      // of an envelope
 	Z        []float64 // m along the path
 	T        []float64 // s; of an envelope the middle of the row
 	// The only or the cosine lane, and the sine lane or nil, at [time][place]. An
@@ -43,7 +46,11 @@ const mapTrips, mapPeriods = 3, 12
 
 // rowsPerPeriod is how many rows a period must have for the map to be that of
 // the instantaneous voltage.
-const rowsPerPeriod = 3
+const rowsPerPeriod = 4
+
+// placesPerLobe is how many places half a wavelength must have for the lobes of
+// a standing wave to be shown.
+const placesPerLobe = 6
 
 // mapSteps is the number of steps that a map covers if the run is long enough.
 func mapSteps(m *model, maxPeriods int) int {

@@ -176,7 +176,7 @@ func TestMapEnvelope(t *testing.T) {
 		s := charted(t, net, fixedGrid(net, 12), Settings{})
 		checkShape(t, net, s)
 		m := s.Map
-		if !m.Envelope || m.B != nil || len(m.T) < mapRows/2 || len(m.Z) != mapPlaces {
+		if !m.Envelope || !m.Crests || m.B != nil || len(m.T) < mapRows/2 || len(m.Z) != mapPlaces {
 			t.Fatalf("envelope %v, %d rows, %d places", m.Envelope, len(m.T), len(m.Z))
 		}
 		top := 1.5 * net.Source.EMF / 2
@@ -221,16 +221,41 @@ func TestMapBounded(t *testing.T) {
 			t.Fatalf("%d steps: only %d rows", units, units/last)
 		}
 	})
-	net := matchedLine(30 * wavelength)
-	net.Branches[0].R = 400
-	g := fixedGrid(net, 40)
-	s := charted(t, net, g, Settings{MaxPeriods: 190})
-	checkShape(t, net, s)
-	if len(s.Map.T) < mapRows/2 {
-		t.Errorf("%d rows", len(s.Map.T))
-	}
-	if s := stressed(t, net, g); len(s.Map.T) != 0 || len(s.Map.Path) != 0 {
+	net := matchedLine(wavelength)
+	if s := stressed(t, net, fixedGrid(net, 40)); len(s.Map.T) != 0 || len(s.Map.Path) != 0 {
 		t.Error("a map that was not asked for")
+	}
+}
+
+// TestMapLobes: a standing wave is shown by its lobes, down to its smallest
+// amplitude, until they are too narrow; then by its crests. The reflection
+// coefficient is 7/9.
+func TestMapLobes(t *testing.T) {
+	for _, tt := range []struct {
+		wavelengths float64
+		crests      bool
+	}{{15, false}, {30, true}} {
+		net := matchedLine(tt.wavelengths * wavelength)
+		net.Branches[0].R = 400
+		s := charted(t, net, fixedGrid(net, 40), Settings{MaxPeriods: 190})
+		checkShape(t, net, s)
+		m, top := s.Map, net.Source.EMF/2*(1+7./9)
+		if !m.Envelope || m.Crests != tt.crests || len(m.T) < mapRows/3 {
+			t.Fatalf("%g wavelengths: envelope %v, crests %v, %d rows", tt.wavelengths, m.Envelope, m.Crests, len(m.T))
+		}
+		smallest, largest := math.Inf(1), 0.0
+		for _, v := range m.A[len(m.A)-1] {
+			smallest, largest = math.Min(smallest, v), math.Max(largest, v)
+		}
+		if math.Abs(largest/top-1) > 1e-9 { // rounding
+			t.Errorf("%g wavelengths: largest %.9g V, want %.9g", tt.wavelengths, largest, top)
+		}
+		switch {
+		case tt.crests && smallest < largest*(1-1e-9): // rounding
+			t.Errorf("%g wavelengths: crests from %.6g to %.6g V", tt.wavelengths, smallest, largest)
+		case !tt.crests && smallest > 0.2*top: // 1/8 at the very place
+			t.Errorf("%g wavelengths: smallest %.6g V of %.6g", tt.wavelengths, smallest, top)
+		}
 	}
 }
 

@@ -95,21 +95,13 @@ func newLattice(f *frontView) (l *lattice, why string) {
 }
 
 // rung is section k, taken from junction at on.
-//
-// Behind a front that has gone l on a line of constant R and G, e^{-(R/(2 Z0) +
-// G Z0/2) l} of it is left. A loss that grows with frequency leaves no finite
-// step; the same with the R and the G at the source frequency f is taken then.
-// With skin effect a step is erfc(a/(2 sqrt(pi f t))), a Np of loss at f, at t
-// after its front: for a small loss 1 - a, so 1 - a at f t = 1/pi^2, which is a
-// tenth of a period.
 func (f *frontView) rung(k, at int) rung {
 	s := f.net.Sections[k]
 	to := s.To
 	if at == s.To {
 		to = s.From
 	}
-	c, y := s.At(f.net.Omega()), f.admittance(k)
-	return rung{section: k, from: at, to: to, delay: s.Delay(), kept: math.Exp(-(c.R*y + c.G/y) / 2 * s.Length)}
+	return rung{section: k, from: at, to: to, delay: s.Delay(), kept: f.kept(k)}
 }
 
 func (l *lattice) section(rung int) network.Section { return l.net.Sections[l.rungs[rung].section] }

@@ -13,7 +13,7 @@ import (
 func (s *solved) spaceTime() record.SpaceTime {
 	m := s.stress.Map
 	out := record.SpaceTime{
-		Envelope: m.Envelope, Phase: s.phase() * 180 / pi,
+		Envelope: m.Envelope, Crests: m.Crests, Phase: s.phase() * 180 / pi,
 		Z: m.Z, T: m.T, V: m.At(s.phase()),
 	}
 	if len(m.T) == 0 {
@@ -31,12 +31,20 @@ func (s *solved) spaceTime() record.SpaceTime {
 	return out
 }
 
-// A tour is a path along which wave fronts are followed.
+// A tour is a path along which wave fronts are followed, from node to node.
 type tour struct {
 	*frontView
-	legs   []fdtd.Leg
-	z, at  []float64 // m and s of delay at the nodes, from the source on
-	pieces []record.Front
+	legs  []fdtd.Leg
+	z, at []float64 // m and s of delay at the nodes, from the source on
+}
+
+// A way is that of a front which leaves a node; its step is relative to the
+// one that the source launches.
+type way struct {
+	node  int
+	right bool // away from the source
+	time  float64
+	step  float64
 }
 
 func newTour(f *frontView, legs []fdtd.Leg) *tour {
@@ -48,84 +56,85 @@ func newTour(f *frontView, legs []fdtd.Leg) *tour {
 	return t
 }
 
-// mostEchoes is how many junctions the fronts are followed back from: with the
-// front that goes out and what the source sends out again, some dozen.
-const mostEchoes = 5
+// The fronts that are drawn: so many passages, so many fronts in each but the
+// first, and none of a smaller step than 2 % of the first, which is not to be
+// seen on a map.
+const (
+	passages    = 3
+	mostInOne   = 5
+	visibleStep = 0.02
+)
 
 // fronts are the first front along the path, what comes back of it from the end
-// and from the junctions that reflect most, and what of each the source sends
-// along the path again; up to the time until.
+// and from the junctions, and what of that is reflected again; up to the time
+// until.
 func (t *tour) fronts(until float64) []record.Front {
-	last := len(t.legs)
-	t.follow(0, last, 0, until, 1)
-	back := t.echoes()
-	for _, e := range back {
-		t.follow(e, 0, t.at[e], until, 2)
-	}
-	if t.mirror(0) > visible {
-		for _, e := range back {
-			t.follow(0, last, 2*t.at[e], until, 3)
+	var out []record.Front
+	ways := []way{{right: true, step: 1}}
+	for passage := 1; passage <= passages; passage++ {
+		var next []way
+		for _, w := range ways {
+			pieces, echoes := t.follow(w, passage)
+			out, next = append(out, pieces...), append(next, echoes...)
 		}
+		slices.SortStableFunc(next, func(a, b way) int { return cmp.Compare(b.step, a.step) })
+		next = slices.DeleteFunc(next, func(w way) bool { return w.step < visibleStep })
+		ways = next[:min(mostInOne, len(next))]
 	}
-	return t.pieces
+	return clip(out, until)
 }
 
-// visible is the reflection coefficient below which no front is drawn: 2 % of
-// the wave is not to be seen on a map.
-const visible = 0.02
-
-// echoes are the nodes that reflect visibly, the end first and then those that
-// reflect most.
-func (t *tour) echoes() []int {
-	var out []int
-	for node := 1; node < len(t.legs); node++ {
-		if t.mirror(node) > visible {
-			out = append(out, node)
+// follow gives the way of a front, one piece a leg, and those of its echoes.
+func (t *tour) follow(w way, passage int) (pieces []record.Front, echoes []way) {
+	for node := w.node; ; {
+		leg, next := node, node+1
+		if !w.right {
+			leg, next = node-1, node-1
+		}
+		if leg < 0 || leg == len(t.legs) {
+			return pieces, echoes
+		}
+		arrives := w.time + math.Abs(t.at[next]-t.at[node])
+		pieces = append(pieces, record.Front{Z0: t.z[node], T0: w.time, Z1: t.z[next], T1: arrives, Passage: passage})
+		w.step *= t.kept(t.legs[leg].Section)
+		back, on := t.divide(next, leg)
+		echoes = append(echoes, way{next, !w.right, arrives, w.step * back})
+		node, w.time, w.step = next, arrives, w.step*on
+		if w.step < visibleStep {
+			return pieces, echoes // behind a short, say
 		}
 	}
-	slices.SortStableFunc(out, func(a, b int) int { return cmp.Compare(t.mirror(b), t.mirror(a)) })
-	if end := len(t.legs); t.mirror(end) > visible {
-		out = slices.Insert(out, 0, end)
-	}
-	return out[:min(mostEchoes, len(out))]
 }
 
-// mirror is how much of a front that comes to a node is reflected: from the
-// source's side, or at the source from the path. Parts that are something else
-// at lower frequencies reflect some of what follows the front, whatever they do
-// to the front itself, and count as 1.
-func (t *tour) mirror(node int) float64 {
-	leg := t.legs[max(0, node-1)]
-	j := t.net.Sections[leg.Section].To
-	if leg.Reversed != (node == 0) {
-		j = t.net.Sections[leg.Section].From
+// divide is how much of a front that comes to a node along a leg is reflected,
+// and how much goes on. Parts that are something else at lower frequencies
+// reflect and pass some of what follows the front, whatever they do to the front
+// itself, and count as 1.
+func (t *tour) divide(node, leg int) (back, on float64) {
+	sec := t.net.Sections[t.legs[leg].Section]
+	j := sec.To
+	if (node == leg) != t.legs[leg].Reversed { // the leg begins here
+		j = sec.From
 	}
 	if t.varying[j] {
-		return 1
+		return 1, 1
 	}
-	return math.Abs(t.reflection(j, leg.Section))
+	g := t.reflection(j, t.legs[leg].Section)
+	return math.Abs(g), 1 + g
 }
 
-// follow adds the way of a front from a node to another, leaving at a time, one
-// piece a leg, up to the time until.
-func (t *tour) follow(from, to int, leaves, until float64, passage int) {
-	way := 1
-	if to < from {
-		way = -1
-	}
-	for node := from; node != to; node += way {
-		next := node + way
-		p := record.Front{
-			Z0: t.z[node], T0: leaves + math.Abs(t.at[node]-t.at[from]),
-			Z1: t.z[next], T1: leaves + math.Abs(t.at[next]-t.at[from]), Passage: passage,
-		}
+// clip ends the fronts at a time.
+func clip(fronts []record.Front, until float64) []record.Front {
+	var out []record.Front
+	for _, p := range fronts {
 		if p.T0 >= until {
-			return
+			continue
 		}
 		if p.T1 > until {
 			part := (until - p.T0) / (p.T1 - p.T0)
 			p.Z1, p.T1 = p.Z0+part*(p.Z1-p.Z0), until
 		}
-		t.pieces = append(t.pieces, p)
+		out = append(out, p)
 	}
+	return out
 }

@@ -173,6 +173,19 @@ func (f *frontView) admittance(k int) float64 {
 	return math.Sqrt(c.C / c.L)
 }
 
+// kept is what is left of a front at the other end of section k.
+//
+// On a line of constant R and G that is e^{-(R/(2 Z0) + G Z0/2) l} exactly. A
+// loss that grows with frequency leaves no finite step; the same with the R and
+// the G at the source frequency f is taken then. With skin effect a step is
+// erfc(a/(2 sqrt(pi f t))), a Np of loss at f, at t after its front: for a small
+// loss 1 - a at f t = 1/pi^2, a tenth of a period.
+func (f *frontView) kept(k int) float64 {
+	s := f.net.Sections[k]
+	c, y := s.At(f.net.Omega()), f.admittance(k)
+	return math.Exp(-(c.R*y + c.G/y) / 2 * s.Length)
+}
+
 // reflection is the reflection coefficient of voltage of a front that comes
 // along section k to junction j: (y - Y)/(y + Y), Y being all else at j.
 func (f *frontView) reflection(j, k int) float64 {

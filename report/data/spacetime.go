@@ -14,7 +14,10 @@ func spaceTimeObject(m record.SpaceTime) object {
 		}
 	}
 	quantity := "instantaneous voltage"
-	if m.Envelope {
+	switch {
+	case m.Crests:
+		quantity = "crests of the envelope of the voltage"
+	case m.Envelope:
 		quantity = "envelope of the voltage"
 	}
 	out := object{

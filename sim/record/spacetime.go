@@ -9,11 +9,13 @@ type SpaceTime struct {
 	Path []PathSection // from the source on; empty if there is no map
 	// Envelope says what V is. If it is false V is the instantaneous voltage at
 	// the times T and the places Z. If it is true a period is too short for that,
-	// and V is the amplitude of the wave, not negative, at its largest within
-	// half the way to the neighbouring places, and over the time from half way
-	// to the row before to half way to the next; it is then the same for
-	// every start phase where all were run.
+	// and V is the amplitude of the wave, not negative, over the time of a row,
+	// of which T is the middle, and at its largest up to half the way to the
+	// neighbouring places; it is then the same for every start phase where all
+	// were run. Where the lobes of a standing wave are too narrow to be shown,
+	// Crests is true too and V is the largest within a quarter of a wavelength.
 	Envelope bool
+	Crests   bool
 	Phase    float64     // degrees, the start phase that is shown
 	Z        []float64   // m along the path, rising; at most 320
 	T        []float64   // s, in equal steps; at most 240
@@ -29,11 +31,13 @@ type PathSection struct {
 }
 
 // Front is the way of a wave front along one section of the path, or along the
-// part of it that the front passes within the times of the map.
+// part of it that the front passes within the times of the map. A front that
+// goes on along the next section is another Front; eleven fronts are followed
+// at most, those of the largest steps.
 type Front struct {
 	Z0, T0, Z1, T1 float64 // m along the path, s
 	// Passage is 1 for the front that leaves the source, 2 for what comes back
-	// of it from a junction, 3 for what then leaves the source again.
+	// of it from a junction, 3 for what of that is reflected again.
 	Passage int
 }
 
