@@ -64,8 +64,8 @@ func newCharter(m *model, set Settings, lanes int) *charter {
 }
 
 // leastSamples is how many samples of a half period its mean square is taken
-// of.
-const leastSamples = 8
+// of: three, evenly spread, give that of a sinusoid exactly, one more is spare.
+const leastSamples = 4
 
 // samplesApart is the largest divisor of a half period that leaves leastSamples.
 func samplesApart(half int) int {
