@@ -160,15 +160,16 @@ func (d *document) coverClaims() {
 	if len(all) == 0 {
 		return
 	}
-	worst, word := record.Confirmed, "All confirmed."
+	worst, word, explained := record.Confirmed, "All confirmed.", ""
 	switch _, contradicted, open := countClaims(all); {
 	case contradicted > 0:
 		worst, word = record.Contradicted, "Contradicted: "+among(claimsOf(all, record.Contradicted), mostNames)+"."
+		explained = ", and the slips that would explain them"
 	case open > 0:
 		worst, word = record.ClaimOpen, "Not shown: "+among(claimsOf(all, record.ClaimOpen), mostNames)+"."
 	}
 	d.b.Subheading("Claims of the designer", 30)
-	d.b.Verdict(markOfClaim(worst), colorOfClaim(worst), word, claimTally(all)+" The chapter Claims has the figures, and the slips that would explain what is contradicted.")
+	d.b.Verdict(markOfClaim(worst), colorOfClaim(worst), word, claimTally(all)+" The chapter Claims has the figures"+explained+".")
 }
 
 // claimsOf returns the ids of the claims of a verdict.

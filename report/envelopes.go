@@ -47,6 +47,7 @@ type track struct {
 	limits      []limit
 	agreed      float64 // limit of the agreement
 
+	top  record.Extreme          // the closed form's largest value, which may lie between the points
 	fine func(z float64) float64 // the phasor's magnitude between the points
 }
 
@@ -62,6 +63,11 @@ func tracks(c *record.Case, k int) []*track {
 	i := &track{symbol: "|I|", unit: "A", z: p.ZI, peakZ: p.PeakZI, peak: p.PeakI, limits: limitsOf(c, p.Section, "current")}
 	i.compare(p.IF, p.IP, p.EI)
 	i.fine = func(z float64) float64 { return cmplx.Abs(between(p.ZI, p.IP, gamma, z)) }
+	for _, s := range c.Phasor.Sections {
+		if s.Name == p.Section {
+			v.top, i.top = s.VoltageMax, s.CurrentMax
+		}
+	}
 	var out []*track
 	for _, t := range []*track{v, i} {
 		t.section, t.wavelengths, t.length, t.agreed = p.Section, m.Wavelengths, m.Length, c.Agreement.Limit

@@ -16,6 +16,7 @@ func gridFinding(v *record.Convergence) string {
 	}
 	t := v.Tally()
 	var parts []string
+	rest := len(v.Studies)
 	for _, b := range []struct {
 		of        record.Behaviour
 		one, many string
@@ -28,12 +29,16 @@ func gridFinding(v *record.Convergence) string {
 		{record.TwoGrids, "is of the stress run, on two grids, where no order can be observed", "are of the stress run, on two grids, where no order can be observed"},
 		{record.OneGrid, "is on one grid", "are on one grid"},
 	} {
+		rest -= t.Of[b.of]
 		switch n := t.Of[b.of]; {
 		case n == 1:
 			parts = append(parts, format.Count(1)+format.Space+b.one)
 		case n > 1:
 			parts = append(parts, format.Count(int64(n))+format.Space+b.many)
 		}
+	}
+	if rest > 0 {
+		parts = append(parts, format.Count(int64(rest))+format.Space+"without a finite value")
 	}
 	s := "Of " + format.Plural(int64(len(v.Studies)), "figure") + " " + listed(parts) + "."
 	if t.Largest != nil {

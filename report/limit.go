@@ -158,6 +158,9 @@ func toPeak(unit string) (factor float64, ok bool) {
 // finding says how far the curve that the limit is on stays from it.
 func (l limit) finding(t *track) string {
 	value := largestOf(t.phasor)
+	if t.top.Value > value && !math.IsInf(t.top.Value, 0) {
+		value = t.top.Value
+	}
 	switch l.on {
 	case onPeak:
 		value = largestOf(t.peak)

@@ -5,6 +5,7 @@ import (
 	"flag"
 	"fmt"
 	"math"
+	"regexp"
 	"strings"
 	"sync"
 	"testing"
@@ -78,8 +79,9 @@ func TestStructure(t *testing.T) {
 	if d, f := count("/Type /FontDescriptor"), count("/FontFile2 "); d != fonts || f != fonts {
 		t.Errorf("%d fonts, %d embedded, want %d", d, f, fonts)
 	}
+	objects := regexp.MustCompile(`(?s)stream\r?\n.*?endstream`).ReplaceAllString(file, "") // packed bytes hold anything
 	for _, s := range []string{"/Subtype /Type1", "/JavaScript", "/JS", "{nb}", "/Type0 /Helvetica"} {
-		if strings.Contains(file, s) {
+		if strings.Contains(objects, s) {
 			t.Errorf("the file holds %s", s)
 		}
 	}

@@ -34,6 +34,7 @@ func (d *document) settling(c *record.Case) {
 	d.b.Subheading(title, keep)
 	if proof {
 		d.b.Table(d.settlingRule(c))
+		d.b.Note(factorNote(s, d.r.Design.Tolerance))
 		d.settlingTimes(c)
 		d.resonance(c)
 	}
@@ -43,6 +44,19 @@ func (d *document) settling(c *record.Case) {
 		return
 	}
 	d.settlingPanels(c, d.departurePanel(c))
+}
+
+// factorNote says why the measured loop factor is not the predicted one, where
+// so little was left that it may be of something else than the slowest mode.
+func factorNote(s record.Settling, tolerance float64) string {
+	const near = 2.0 // times
+	p, m := s.Predicted.LoopFactor, s.LoopFactor
+	_, last := lastWindows(s)
+	if !(p > 0 && m > 0) || m < near*p && p < near*m || !(last.Change < tolerance) {
+		return ""
+	}
+	return "The loop factor is measured on the change that was left, " + format.Percent(last.Change) +
+		". So far below the tolerance it need not be that of the slowest mode, which is the one predicted. The measured time constant and Q follow from it."
 }
 
 // resonance says what the network holds and how fast it fills and empties.

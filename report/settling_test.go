@@ -7,6 +7,7 @@ import (
 	"testing"
 
 	"linewitness/report/figure"
+	"linewitness/report/format"
 	"linewitness/report/internal/reporttest"
 	"linewitness/sim/record"
 )
@@ -217,6 +218,35 @@ func TestSettlingRule(t *testing.T) {
 		last := rows[len(rows)-1]
 		if got := [2]string{last[3].Text, last[4].Text}; got != c.want {
 			t.Errorf("%s: %q, want %q", name, got, c.want)
+		}
+	}
+}
+
+// Where measured and predicted loop factor differ and little was left to
+// measure, the record says why; where they agree, or much is left, it does not.
+func TestFactorNote(t *testing.T) {
+	of := func(predicted, measured, change float64) record.Settling {
+		return record.Settling{
+			LoopFactor: measured, Predicted: record.PredictedSettling{LoopFactor: predicted},
+			Curve: []record.SettlingPoint{{Change: 1}, {Change: change}},
+		}
+	}
+	const tolerance = 1e-4
+	for _, c := range []struct {
+		s    record.Settling
+		want string
+	}{
+		{of(0.5, 0.45, 1e-6), ""},
+		{of(1e-6, 0.1, 1e-3), ""},
+		{of(math.NaN(), 0.1, 1e-6), ""},
+		{of(0.1, 0, 1e-6), ""},
+		{of(1e-6, 0.1, 1e-9), "the change that was left, 1.00 × 10^{−7} %."},
+		{of(0.1, 1e-3, 1e-9), "need not be that of the slowest mode"},
+	} {
+		got := readable(factorNote(c.s, tolerance))
+		got = strings.NewReplacer(string(format.Sup), "^{", string(format.End), "}").Replace(got)
+		if (got == "") != (c.want == "") || !strings.Contains(got, c.want) {
+			t.Errorf("%v: %q, want %q", c.s.LoopFactor, got, c.want)
 		}
 	}
 }

@@ -3,6 +3,7 @@ package report
 import (
 	"math"
 	"math/cmplx"
+	"regexp"
 	"slices"
 	"strings"
 
@@ -17,7 +18,7 @@ func (d *document) claimFinding(q *record.Claim) {
 		return
 	}
 	word := capital(string(q.Verdict)) + "."
-	text := q.ID + ", " + words(q.Quantity) + subject(q.Subject) + ", case " + q.Case + ". " + claimReason(q)
+	text := q.ID + ", " + words(q.Quantity) + subject(q.Subject) + ", case " + q.Case + ". " + ohms.ReplaceAllString(claimReason(q), "${1}Ω")
 	d.b.Space(5)
 	d.b.Need(slipRoom)
 	d.b.Verdict(markOfClaim(q.Verdict), colorOfClaim(q.Verdict), word, trimmed(text))
@@ -53,6 +54,9 @@ func claimReason(q *record.Claim) string {
 	}
 	return trimmed(s + " Each of these slips alone would give it, the most likely first:")
 }
+
+// ohms finds the unit as the design file writes it.
+var ohms = regexp.MustCompile(`(\d [kMm]?)ohm\b`)
 
 // slipText says what a slip makes of the claim, what cannot be told from it,
 // and what else it explains.

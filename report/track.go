@@ -10,6 +10,7 @@ import (
 	"linewitness/report/figure"
 	"linewitness/report/format"
 	"linewitness/report/ink"
+	"linewitness/sim/record"
 )
 
 // span is a part of a section, in metres from its From end.
@@ -175,7 +176,11 @@ func (t *track) finding() string {
 	if i < 0 {
 		return t.symbol + " has no finite value"
 	}
-	s := t.symbol + " up to " + format.SI(t.phasor[i], t.unit) + " at " + place(t.z[i])
+	top := record.Extreme{Value: t.phasor[i], At: t.z[i]}
+	if t.top.Value >= top.Value && !math.IsInf(t.top.Value, 0) { // as in the table of the sections
+		top = t.top
+	}
+	s := t.symbol + " up to " + format.SI(top.Value, t.unit) + " at " + place(top.At)
 	if k := largestAt(t.peak); k >= 0 {
 		s += ", peak " + format.SI(t.peak[k], t.unit)
 	}

@@ -47,6 +47,9 @@ func validationRow(s *record.Study) []sheet.Cell {
 		row = append(row, sheet.Cell{Text: e.Number(x)})
 	}
 	row = append(row, sheet.Cell{Text: format.Ratio(s.Ratio())})
+	if math.IsInf(s.Phasor, 0) {
+		return append(row, sheet.Cell{Text: "not finite"})
+	}
 	if s.Explained {
 		return append(row, sheet.Cell{Text: "explained", Mark: sheet.Holds})
 	}

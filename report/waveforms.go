@@ -51,7 +51,7 @@ const (
 	waveAxis    = 19.0 // the labels below the lowest row
 	waveAlone   = 72.0 // of a waveform in a file of its own
 	waveCaption = 46.0 // room for the caption, the more for the more rows
-	fewWaveRows = 3    // that at least stand together
+	fewWaveRows = 2    // that at least stand together
 )
 
 func waveHeight(rows int) float64 { return float64(rows)*waveRow + waveAxis }

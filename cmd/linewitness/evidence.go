@@ -56,10 +56,12 @@ func powerText(p record.Power) string {
 // convergenceText counts n figures by their behaviour.
 func convergenceText(n int, t record.Tally) string {
 	var parts []string
+	rest := n
 	for _, b := range []record.Behaviour{
 		record.Converging, record.OffOrder, record.GridFree, record.Oscillatory, record.Diverging, record.TwoGrids, record.OneGrid,
 	} {
 		k := t.Of[b]
+		rest -= k
 		if k == 0 {
 			continue
 		}
@@ -71,6 +73,9 @@ func convergenceText(n int, t record.Tally) string {
 			s = fmt.Sprintf("%d on %s", k, b)
 		}
 		parts = append(parts, s)
+	}
+	if rest > 0 {
+		parts = append(parts, fmt.Sprintf("%d without a finite value", rest))
 	}
 	s := counted(n, "figure") + ": " + strings.Join(parts, ", ")
 	if t.Largest != nil {

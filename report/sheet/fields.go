@@ -42,8 +42,13 @@ func First(lines []string, n int) []string {
 	return append(lines[:n-1:n-1], "…")
 }
 
-// Fields writes labelled values.
+// Fields writes labelled values. A few lines of them are not parted by the foot
+// of a page.
 func (b *Book) Fields(fields []Field) {
+	const few = 8
+	if len(fields) <= few {
+		b.Need(b.fieldsHeight(fields))
+	}
 	for i := 0; i < len(fields); {
 		if !fields[i].Wide && i+1 < len(fields) && !fields[i+1].Wide {
 			b.fieldRow(fields[i:i+2], b.Width()/2)
@@ -53,6 +58,19 @@ func (b *Book) Fields(fields []Field) {
 		b.fieldRow(fields[i:i+1], b.Width())
 		i++
 	}
+}
+
+// fieldsHeight returns the height of fields with a line to each.
+func (b *Book) fieldsHeight(fields []Field) (h float64) {
+	for _, f := range fields {
+		n := len(First(fieldStyle(f).Wrap(f.Value, b.Width()-fieldLabel-6), fieldLines))
+		if f.Wide {
+			h += float64(n)*leadingOf(BodyStyle) + 2
+		} else { // two to a line
+			h += (float64(n)*leadingOf(BodyStyle) + 2) / 2
+		}
+	}
+	return h
 }
 
 func (b *Book) fieldRow(fields []Field, width float64) {
