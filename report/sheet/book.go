@@ -28,6 +28,12 @@ type Book struct {
 	gap   float64 // room to leave before the next block on the page
 	err   error
 
+	entries     []entry // the headings so far
+	contents    int     // the page for the list of them; 0 if there is none
+	contentsTop float64 // the upper edge of its room
+	feet        []Foot
+	headed      bool // the last block on the page is a heading
+
 	// Overfull counts the pieces of text that are wider than the room given
 	// to them. It stays 0; tests look at it.
 	Overfull int
@@ -41,7 +47,7 @@ func New(meta Meta, paper Paper) *Book {
 	})
 	pdf.SetAutoPageBreak(false, 0)
 	pdf.SetMargins(0, 0, 0)
-	pdf.SetCatalogSort(true) // else the order of objects is random
+	pdf.SetCatalogSort(true)                   // else the order of objects is random
 	pdf.SetCreationDate(time.Unix(0, 0).UTC()) // else it is the clock's
 	pdf.SetModificationDate(time.Unix(0, 0).UTC())
 	b := &Book{pdf: pdf, fonts: canvas.NewFonts(pdf), paper: paper, meta: meta}
@@ -61,6 +67,7 @@ func (b *Book) NewPage() {
 
 func (b *Book) endPage() {
 	if b.cv != nil {
+		b.feet = append(b.feet, Foot{Left: b.y - marginBottom, Headed: b.headed})
 		b.fail(b.cv.Close())
 		b.cv = nil
 	}
@@ -98,7 +105,7 @@ func (b *Book) Space(h float64) {
 func (b *Book) Block(h float64, paint func(draw.Canvas)) {
 	b.Need(h)
 	b.y -= b.gap
-	b.gap = 0
+	b.gap, b.headed = 0, false
 	paint(draw.Canvas{Canvas: b.cv, Rectangle: vg.Rectangle{
 		Min: vg.Point{X: vg.Points(marginLeft), Y: vg.Points(b.y - h)},
 		Max: vg.Point{X: vg.Points(b.paper.Width - marginRight), Y: vg.Points(b.y)},
@@ -123,6 +130,7 @@ func (b *Book) Pages() int { return b.pdf.PageCount() }
 // business of package archive. The book cannot be used after it.
 func (b *Book) Write(w io.Writer) error {
 	b.endPage()
+	b.listContents()
 	total := b.pdf.PageCount()
 	for page := 1; page <= total; page++ {
 		b.pdf.SetPage(page)

@@ -4,6 +4,7 @@ import (
 	"bytes"
 	"strings"
 	"testing"
+	"unicode/utf8"
 
 	"gonum.org/v1/plot/vg/draw"
 	"linewitness/report/typeset"
@@ -157,17 +158,44 @@ func TestNoteOfCell(t *testing.T) {
 	}
 }
 
-func TestCut(t *testing.T) {
+// A long line of a listing is broken after a space, and inside a word only where
+// that has no end. Without the added indentation it is what it was.
+func TestBroken(t *testing.T) {
 	for _, c := range []struct {
-		in         string
-		n          int
-		head, tail string
-	}{{"abc", 3, "abc", ""}, {"abcd", 3, "abc", "d"}, {"Ωλµβ", 2, "Ωλ", "µβ"}, {"", 5, "", ""}} {
-		head, tail := cut(c.in, c.n)
-		if head != c.head || tail != c.tail {
-			t.Errorf("cut(%q, %d) = %q, %q", c.in, c.n, head, tail)
+		in   string
+		n    int
+		want string
+	}{
+		{"abc", 3, "abc"},
+		{"", 5, ""},
+		{"abcd", 3, "abc| d"},
+		{"one two three", 9, "one two |  three"},
+		{"  one two three four", 14, "  one two |    three four"},
+		{"a bcdefghijklmnop", 9, "a bcdefgh|  ijklmno|  p"},
+	} {
+		lines := broken(c.in, c.n)
+		if got := strings.Join(lines, "|"); got != c.want {
+			t.Errorf("broken(%q, %d) = %q, want %q", c.in, c.n, got, c.want)
 		}
 	}
+	rapid.Check(t, func(t *rapid.T) {
+		s := rapid.StringMatching(`[ ]{0,9}([a-zΩ]{0,30} ?){0,9}`).Draw(t, "line")
+		n := rapid.IntRange(12, 60).Draw(t, "columns")
+		margin := min(len(s)-len(strings.TrimLeft(s, " "))+2, n/3)
+		whole := ""
+		for i, l := range broken(s, n) {
+			if utf8.RuneCountInString(l) > n {
+				t.Fatalf("line %q is longer than %d", l, n)
+			}
+			if i > 0 {
+				l = l[margin:]
+			}
+			whole += l
+		}
+		if whole != s {
+			t.Fatalf("%q became %q", s, whole)
+		}
+	})
 }
 
 func TestFirst(t *testing.T) {

@@ -38,6 +38,7 @@ func (b *Book) Heading(s string, keep float64) {
 	b.Block(3, func(c draw.Canvas) {
 		rule(c, c.Min.X.Points(), c.Max.X.Points(), c.Min.Y.Points()+1, 0.8)
 	})
+	b.headed = true
 	b.Space(6)
 }
 
@@ -46,13 +47,16 @@ func (b *Book) Subheading(s string, keep float64) {
 	b.Space(11)
 	b.outline(s, 1, leadingOf(SubheadStyle)+4+keep)
 	b.lines(SubheadStyle, s)
+	b.headed = true
 	b.Space(4)
 }
 
 // outline makes room for a heading and enters it in the outline.
 func (b *Book) outline(s string, level int, room float64) {
 	b.Need(room)
+	b.began(s)
 	b.pdf.Bookmark(s, level, b.paper.Height-b.y)
+	b.entries = append(b.entries, entry{s, level, b.pdf.PageCount(), b.paper.Height - b.y})
 }
 
 // Paragraph writes a paragraph of running text.
