@@ -31,6 +31,7 @@ func (d *document) solved(c *record.Case) {
 	d.waveforms(c)
 	d.envelopes(c)
 	d.reflections(c)
+	d.spaceTime(c)
 	d.settling(c)
 	d.gridStudy(c)
 	d.fidelity(c)

@@ -32,13 +32,11 @@ func imageOptions() gofpdf.ImageOptions {
 	return gofpdf.ImageOptions{ImageType: "png", AllowNegativePosition: true}
 }
 
-// storeImage adds img to the document under a name made of its content. It is
-// converted to eight bits a channel, for gofpdf refuses sixteen.
+// storeImage adds img to the document under a name made of its content.
 func (c *Canvas) storeImage(img image.Image) (name string, err error) {
+	n, pixels := eightBits(img)
 	bounds := img.Bounds()
-	n := image.NewNRGBA(image.Rect(0, 0, bounds.Dx(), bounds.Dy()))
-	draw.Draw(n, n.Bounds(), img, bounds.Min, draw.Src)
-	sum := sha256.Sum256(n.Pix)
+	sum := sha256.Sum256(pixels)
 	name = fmt.Sprintf("image-%dx%d-%s", bounds.Dx(), bounds.Dy(), hex.EncodeToString(sum[:8]))
 	if c.pdf.GetImageInfo(name) != nil {
 		return name, nil
@@ -49,4 +47,22 @@ func (c *Canvas) storeImage(img image.Image) (name string, err error) {
 	}
 	c.pdf.RegisterImageOptionsReader(name, imageOptions(), &b)
 	return name, nil
+}
+
+// eightBits returns an image of eight bits a channel, for gofpdf refuses
+// sixteen, and what tells it from others. One with an opaque palette is left as
+// it is: it takes a third of the room.
+func eightBits(img image.Image) (image.Image, []byte) {
+	if p, ok := img.(*image.Paletted); ok && p.Opaque() && p.Rect.Min == (image.Point{}) && p.Stride == p.Rect.Dx() {
+		id := append([]byte{}, p.Pix...)
+		for _, clr := range p.Palette {
+			r, g, b, _ := clr.RGBA()
+			id = append(id, byte(r>>8), byte(g>>8), byte(b>>8))
+		}
+		return p, id
+	}
+	bounds := img.Bounds()
+	n := image.NewNRGBA(image.Rect(0, 0, bounds.Dx(), bounds.Dy()))
+	draw.Draw(n, n.Bounds(), img, bounds.Min, draw.Src)
+	return n, n.Pix
 }

@@ -9,9 +9,17 @@ import (
 )
 
 // frame draws the grid and the border of the data area.
-type frame struct{}
+type frame struct{ bare bool } // bare: no grid
 
-func (frame) Plot(c draw.Canvas, p *plot.Plot) {
+func (f frame) Plot(c draw.Canvas, p *plot.Plot) {
+	if !f.bare {
+		f.grid(c, p)
+	}
+	c.SetLineStyle(ink.FrameLine)
+	c.Stroke(c.Rectangle.Path())
+}
+
+func (frame) grid(c draw.Canvas, p *plot.Plot) {
 	x, y := p.Transforms(&c)
 	for _, t := range p.X.Tick.Marker.Ticks(p.X.Min, p.X.Max) {
 		c.StrokeLine2(ink.GridLine, x(t.Value), c.Min.Y, x(t.Value), c.Max.Y)
@@ -19,8 +27,6 @@ func (frame) Plot(c draw.Canvas, p *plot.Plot) {
 	for _, t := range p.Y.Tick.Marker.Ticks(p.Y.Min, p.Y.Max) {
 		c.StrokeLine2(ink.GridLine, c.Min.X, y(t.Value), c.Max.X, y(t.Value))
 	}
-	c.SetLineStyle(ink.FrameLine)
-	c.Stroke(c.Rectangle.Path())
 }
 
 // inData plots with everything clipped to the data area.

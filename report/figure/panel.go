@@ -27,7 +27,8 @@ type Panel struct {
 	x, y           scale
 	over           []plot.Plotter // what is drawn last, so that no curve runs through it
 	tags           []vg.Rectangle // labels of marks, which names of curves keep clear of
-	second         *second        // or nil
+	heads          []head         // strips above the data area
+	area           vg.Rectangle   // the data area as drawn last
 }
 
 // scale maps SI values to the coordinates of an axis.
@@ -134,17 +135,15 @@ func (pn *Panel) Draw(c draw.Canvas) {
 	quantity := withUnit(pn.Quantity, pn.y.unit())
 	textStyle.Draw(c, x, y, textStyle.Fit(quantity, c.Max.X.Points()-x), typeset.Left)
 	c = draw.Crop(c, 0, 0, 0, vg.Points(-titleHeight))
-	if pn.second != nil {
-		c = draw.Crop(c, 0, 0, 0, vg.Points(-secondHeight))
-	}
+	c = draw.Crop(c, 0, 0, 0, vg.Points(-pn.headsHeight()))
 	pn.setTicks(c)
 	pn.p.Add(pn.over...)
 	pn.over = nil
 	c = pn.align(c)
 	pn.p.Draw(c)
-	if pn.second != nil {
-		pn.second.draw(pn.p.DataCanvas(c), pn.x)
-	}
+	data := pn.p.DataCanvas(c)
+	pn.area = data.Rectangle
+	pn.drawHeads(data)
 }
 
 // setTicks chooses tick distances that suit the size of the panel.

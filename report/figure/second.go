@@ -22,12 +22,13 @@ const secondHeight = 8.5
 // label carries the unit.
 func (pn *Panel) Second(unit string, per float64) {
 	if per > 0 && finite(per) {
-		pn.second = &second{unit, per}
+		s := second{unit, per}
+		pn.heads = append(pn.heads, head{secondHeight, func(data draw.Canvas, _ float64) { s.draw(data, pn.x) }})
 	}
 }
 
 // draw draws the axis above the data area.
-func (s *second) draw(data draw.Canvas, x scale) {
+func (s second) draw(data draw.Canvas, x scale) {
 	from, to := x.Min*s.per, x.Max*s.per
 	length := data.Size().X.Points()
 	if !(to > from) || length <= 0 {

@@ -37,6 +37,7 @@ func (n Network) Case(name string, opt Options) record.Case {
 	c.Model.Source.Stop = opt.Stop
 	n.prove(&c, opt)
 	c.Power = n.power(c, v, opt)
+	c.SpaceTime, c.Bounces = n.spaceTime(v, n.longest()*n.Frequency), n.bounces()
 	if opt.Unsettled {
 		c.Verdict = record.Unsettle
 	}
