@@ -23,6 +23,14 @@ func clean(v reflect.Value) {
 		for i := range v.NumField() {
 			clean(v.Field(i))
 		}
+	case reflect.Pointer:
+		if v.IsNil() || v.Type().Elem().Kind() != reflect.Struct {
+			return
+		}
+		own := reflect.New(v.Type().Elem())
+		own.Elem().Set(v.Elem())
+		clean(own.Elem())
+		v.Set(own)
 	case reflect.Slice:
 		if kind := v.Type().Elem().Kind(); v.Len() == 0 || kind != reflect.Struct && kind != reflect.String {
 			return

@@ -101,3 +101,19 @@ type Figure struct {
 	Limit       string  // in words
 	Verdict     string  // "met", "confirmed", ...; empty for a key figure
 }
+
+// Where names a term: "case iced, load aerial, r".
+func (c *Change) Where() string {
+	s := c.Place
+	if c.Case != "" {
+		s = "case " + c.Case + ", " + s
+	}
+	if c.Term != "" {
+		s += ", " + c.Term
+	}
+	return s
+}
+
+// Matters reports whether an effect is one to be told: anything but a figure that
+// is as before.
+func (e *Effect) Matters() bool { return e.Direction != AsBefore }
