@@ -22,7 +22,7 @@ func mapped() *record.Case {
 			Path: []record.PathSection{{Section: "a", From: 0, To: 30}, {Section: "b", Reversed: true, From: 30, To: 50}},
 			Z:    []float64{0, 25, 50}, T: []float64{0, 1e-7, 2e-7, 3e-7},
 			V:      [][]float64{{1, 0, 0}, {0, 2, math.NaN()}, {0, 1, -3}, {math.Inf(1), 0, 0}},
-			Fronts: []record.Front{{0, 0, 30, 1e-7, 1}, {30, 1e-7, 50, 1.7e-7, 1}, {50, 1.7e-7, 30, 2.4e-7, 2}},
+			Fronts: []record.Front{{Z1: 30, T1: 1e-7, Passage: 1}, {Z0: 30, T0: 1e-7, Z1: 50, T1: 1.7e-7, Passage: 1}, {Z0: 50, T0: 1.7e-7, Z1: 30, T1: 2.4e-7, Passage: 2}},
 		},
 	}
 }
