@@ -9,19 +9,43 @@ import (
 	"linewitness/report/archive/internal/syntax"
 )
 
+// enclosed is a file and its stream, which comes when it is compressed.
+type enclosed struct {
+	Attachment
+	stream chan *syntax.Stream
+}
+
+// enclose begins to compress the files and their manifest, beside what else there
+// is to do.
+func (m Meta) enclose(files []Attachment) ([]enclosed, error) {
+	if len(files) == 0 {
+		return nil, nil
+	}
+	all, err := list(m.Version, files)
+	if err != nil {
+		return nil, err
+	}
+	var out []enclosed
+	for _, a := range append(slices.Clone(files), all) {
+		e := enclosed{a, make(chan *syntax.Stream, 1)}
+		go func() { e.stream <- m.embedded(a) }()
+		out = append(out, e)
+	}
+	return out, nil
+}
+
 // attach puts the files and their manifest into the document (6.8): in the name
 // tree, where viewers find them, and as files associated with the whole of it.
 func (d *document) attach() error {
-	m, err := list(d.meta.Version, d.files)
-	if err != nil {
-		return err
-	}
 	specs := map[string]syntax.Ref{}
 	var associated syntax.Array
-	for _, a := range append(slices.Clone(d.files), m) {
-		key := freeKey(specs, a.Name)
-		specs[key] = d.Add(d.specification(a))
+	for _, e := range d.files {
+		key := freeKey(specs, e.Name)
+		specs[key] = d.Add(d.specification(e))
 		associated = append(associated, specs[key])
+	}
+	if len(specs) == 0 {
+		return nil
 	}
 	var names syntax.Array
 	for _, key := range slices.Sorted(maps.Keys(specs)) {
@@ -44,8 +68,8 @@ func freeKey(taken map[string]syntax.Ref, name string) string {
 }
 
 // specification is the file specification of a file (6.8; ISO 32000-1, 7.11.3).
-func (d *document) specification(a Attachment) syntax.Dict {
-	stream := d.Add(d.embedded(a))
+func (d *document) specification(a enclosed) syntax.Dict {
+	stream := d.Add(<-a.stream)
 	return syntax.Dict{
 		"Type": syntax.Name("Filespec"),
 		"F":    syntax.String(ascii(a.Name)), "UF": textString(a.Name),
@@ -56,17 +80,17 @@ func (d *document) specification(a Attachment) syntax.Dict {
 }
 
 // embedded is the embedded file stream of a file (ISO 32000-1, 7.11.4).
-func (d *document) embedded(a Attachment) *syntax.Stream {
+func (m Meta) embedded(a Attachment) *syntax.Stream {
 	sum := md5.Sum(a.Data) // what the format asks for; the manifest has a better one
 	params := syntax.Dict{
 		"Size":     syntax.Number(strconv.Itoa(len(a.Data))),
 		"CheckSum": syntax.String(sum[:]),
 	}
-	if !d.meta.Created.IsZero() {
-		params["CreationDate"] = dateString(d.meta.Created)
-		params["ModDate"] = dateString(d.meta.Created)
+	if !m.Created.IsZero() {
+		params["CreationDate"] = dateString(m.Created)
+		params["ModDate"] = dateString(m.Created)
 	}
-	return syntax.NewStream(syntax.Dict{
+	return syntax.NewLongStream(syntax.Dict{
 		"Type": syntax.Name("EmbeddedFile"), "Subtype": syntax.Name(a.MIME), "Params": params,
 	}, a.Data)
 }

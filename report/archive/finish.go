@@ -12,7 +12,7 @@ type document struct {
 	*syntax.File
 	catalog syntax.Dict
 	meta    Meta
-	files   []Attachment
+	files   []enclosed
 }
 
 // trusted bounds what the document of our own layout may ask for: only mistakes
@@ -35,7 +35,10 @@ func Finish(pdf []byte, m Meta, files []Attachment) ([]byte, error) {
 	if err != nil {
 		return nil, fault("the document as laid out: %w", err)
 	}
-	d := &document{File: f, meta: m.cleaned(), files: files}
+	d := &document{File: f, meta: m.cleaned()}
+	if d.files, err = d.meta.enclose(files); err != nil {
+		return nil, fault("%w", err)
+	}
 	out, err := d.finish()
 	if err != nil {
 		return nil, fmt.Errorf("archive: %w", err)

@@ -44,6 +44,7 @@ func (f *File) Bytes(id func(body []byte) []byte) ([]byte, error) {
 		number[r] = Ref(i + 1)
 	}
 	var b bytes.Buffer
+	b.Grow(f.size(order))
 	b.WriteString("%PDF-1.7\n%\xe2\xe3\xcf\xd3\n") // the comment says that the file is binary
 	offsets := make([]int, len(order))
 	for i, r := range order {
@@ -56,6 +57,18 @@ func (f *File) Bytes(id func(body []byte) []byte) ([]byte, error) {
 	}
 	f.end(&b, offsets, number, id(b.Bytes()))
 	return b.Bytes(), nil
+}
+
+// size is about that of the file, to get the room for it at once.
+func (f *File) size(order []Ref) int {
+	const other = 400 // bytes of an object without its data, and of its entry in the table
+	n := other * len(order)
+	for _, r := range order {
+		if s, ok := f.objects[r].(*Stream); ok {
+			n += len(s.Data)
+		}
+	}
+	return n
 }
 
 // end writes the cross-reference table and the trailer.

@@ -60,6 +60,9 @@ func (f *File) Decode(s *Stream) ([]byte, error) {
 }
 
 func (f *File) inflate(data []byte) ([]byte, error) {
+	if len(data) == 0 { // what other programs make of an empty file
+		return nil, nil
+	}
 	z, err := zlib.NewReader(bytes.NewReader(data))
 	if err != nil {
 		return nil, damaged("compressed data: %w", err)
@@ -77,7 +80,7 @@ func (f *File) Repack(s *Stream) error {
 	if err != nil {
 		return err
 	}
-	if z := deflate(data); len(z) < len(s.Data) {
+	if z := deflate(data, zlib.DefaultCompression); len(z) < len(s.Data) {
 		s.Data = z
 	}
 	return nil
@@ -119,13 +122,27 @@ func (f *File) oneOrMore(v Value) (Array, error) {
 
 // NewStream returns a stream of d and data, compressed.
 func NewStream(d Dict, data []byte) *Stream {
-	d["Filter"] = Name("FlateDecode")
-	return &Stream{d, deflate(data)}
+	return newStream(d, deflate(data, zlib.DefaultCompression))
 }
 
-func deflate(data []byte) []byte {
+// fast is the level for long columns of digits: a third of the time of the usual
+// level for 7 % more bytes (measured on waveforms).
+const fast = 4
+
+// NewLongStream is NewStream for what may be many MiB.
+func NewLongStream(d Dict, data []byte) *Stream { return newStream(d, deflate(data, fast)) }
+
+func newStream(d Dict, compressed []byte) *Stream {
+	d["Filter"] = Name("FlateDecode")
+	return &Stream{d, compressed}
+}
+
+func deflate(data []byte, level int) []byte {
 	var b bytes.Buffer
-	z := zlib.NewWriter(&b)
+	z, err := zlib.NewWriterLevel(&b, level)
+	if err != nil {
+		panic("syntax: unknown level of compression")
+	}
 	_, _ = z.Write(data) // a bytes.Buffer takes everything
 	_ = z.Close()
 	return b.Bytes()
