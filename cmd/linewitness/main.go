@@ -4,6 +4,7 @@
 //
 //	linewitness verify DESIGN...   solve, compare, judge; write DESIGN.pdf and DESIGN.json
 //	linewitness recheck RECORD     solve the design in a record again and compare
+//	linewitness compare OLD NEW    what changed in a design, and what that did
 //	linewitness plan DESIGN        the grid and the predicted cost; solves nothing
 //	linewitness starter [FILE]     a commented design file to begin from
 //	linewitness cables             the cable table with its pedigree

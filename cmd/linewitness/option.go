@@ -129,7 +129,7 @@ func dashed(name string) string {
 	return "--" + name
 }
 
-// atMostOne, exactlyOne and atLeastOne check the number of arguments.
+// atMostOne, exactlyOne, exactlyTwo and atLeastOne check the number of arguments.
 
 func atMostOne(what string) cobra.PositionalArgs {
 	return func(cmd *cobra.Command, args []string) error { return countArgs(cmd, args, what, 0, 1) }
@@ -141,6 +141,10 @@ func exactlyOne(what string) cobra.PositionalArgs {
 
 func atLeastOne(what string) cobra.PositionalArgs {
 	return func(cmd *cobra.Command, args []string) error { return countArgs(cmd, args, what, 1, len(args)) }
+}
+
+func exactlyTwo(what string) cobra.PositionalArgs {
+	return func(cmd *cobra.Command, args []string) error { return countArgs(cmd, args, what, 2, 2) }
 }
 
 func noArgs(cmd *cobra.Command, args []string) error { return countArgs(cmd, args, "", 0, 0) }

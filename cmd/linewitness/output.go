@@ -102,6 +102,17 @@ func writeProducts(ctx context.Context, files []product) error {
 	return nil
 }
 
+// wrote says which files were written, unless what is on stdout is JSON.
+func (a *app) wrote(files []product, asJSON bool) {
+	if asJSON || len(files) == 0 {
+		return
+	}
+	fmt.Fprintln(a.stdout)
+	for _, f := range files {
+		fmt.Fprintln(a.stdout, "wrote", f.path)
+	}
+}
+
 // writeTemporary writes a file under a temporary name beside its own. It does
 // not use os.CreateTemp, whose files only their owner can read.
 func writeTemporary(p product) (name string, err error) {

@@ -87,6 +87,7 @@ compares the two, and writes a record for the design review.
 
   linewitness verify DESIGN...    solve, compare, judge; write DESIGN.pdf and DESIGN.json
   linewitness recheck RECORD.pdf  solve the design in a record again and compare
+  linewitness compare OLD NEW     what changed in a design, and what that did
   linewitness plan DESIGN         the grid and the predicted cost; solves nothing
   linewitness starter [FILE]      write a commented design file to begin from
   linewitness cables              the cable table with its pedigree
@@ -127,7 +128,7 @@ func (a *app) rootCommand() *cobra.Command {
 	root.CompletionOptions.DisableDefaultCmd = true // completion.go has our own
 	root.SetHelpCommand(helpCommand())
 	root.AddCommand(
-		a.verifyCommand(), a.recheckCommand(), a.planCommand(), a.starterCommand(),
+		a.verifyCommand(), a.recheckCommand(), a.compareCommand(), a.planCommand(), a.starterCommand(),
 		a.cablesCommand(), a.schemaCommand(), a.versionCommand(), a.completionCommand(),
 	)
 	return root

@@ -143,12 +143,7 @@ func (a *app) verifyOne(ctx context.Context, j job, opt *verifyOptions) (int, er
 	if err := writeProducts(ctx, files); err != nil {
 		return status, err
 	}
-	if !opt.json && len(files) > 0 {
-		fmt.Fprintln(a.stdout)
-		for _, f := range files {
-			fmt.Fprintln(a.stdout, "wrote", f.path)
-		}
-	}
+	a.wrote(files, opt.json)
 	return status, nil
 }
 

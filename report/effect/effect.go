@@ -5,6 +5,7 @@ package effect
 
 import (
 	"math"
+	"math/cmplx"
 	"slices"
 
 	"linewitness/report/result"
@@ -65,8 +66,23 @@ func (f figure) isOf(other figure) bool {
 func (f figure) effect() record.Effect {
 	e := record.Effect{Kind: f.kind, ID: f.id, Quantity: f.quantity, Subject: f.subject, Old: f.old, New: f.now}
 	e.Direction = direction(&e)
+	e.Old, e.New = rounded(e.Old, e.New), rounded(e.New, e.Old)
 	return e
 }
+
+// rounded is a figure whose value is nothing beside that of the other, and no more
+// than the rounding of a zero, with the zero.
+func rounded(f, other *record.Figure) *record.Figure {
+	if f == nil || other == nil || !(cmplx.Abs(f.Value) < nothing*cmplx.Abs(other.Value)) {
+		return f
+	}
+	own := *f
+	own.Value = 0
+	return &own
+}
+
+// nothing, relative: less is the rounding of a double.
+const nothing = 1e-15
 
 // figuresOf are the figures of a case in the order of its result.
 func figuresOf(c *result.Node) (all []figure) {

@@ -110,6 +110,15 @@ func TestFill(t *testing.T) {
 	}
 }
 
+// The rounding of a zero is a zero beside a figure, and a figure beside nothing.
+func TestRoundingOfZero(t *testing.T) {
+	var c record.Comparison
+	Fill(&c, read(t, `"phasor": 10,`, `"phasor": 4e-30,`), read(t))
+	if e := c.Cases[0].Effects[4]; e.Old.Value != 0 || e.New.Value != 10 || e.Direction != record.Moved {
+		t.Errorf("from %v to %v, %s", e.Old.Value, e.New.Value, e.Direction)
+	}
+}
+
 // What worsened one way is better the other way, and nothing is both.
 func TestReversed(t *testing.T) {
 	a, b := read(t), read(t, `"margin": 0.3`, `"margin": 0.2`, `"verdict": "missed"`, `"verdict": "met"`, `"phasor": 10,`, `"phasor": 12,`)
