@@ -15,11 +15,12 @@ func (d *document) claims() {
 	if len(all) == 0 {
 		return
 	}
-	d.b.Need(d.b.Body() * 0.3)
+	table := claimTable(all)
+	d.b.Need(claimHead + d.b.Kept(table))
 	d.b.Space(22)
-	d.b.Heading("Claims", 120)
+	d.b.Heading("Claims", claimHead)
 	d.b.Paragraph("The design file states figures of the designer's own. Each is compared with both solutions: confirmed if difference and uncertainty are inside its tolerance, contradicted if outside, not shown if the uncertainty straddles it. " + claimTally(all))
-	d.b.Table(claimTable(all))
+	d.b.Table(table)
 	d.notes(claimTexts(all))
 	for _, s := range together(all) {
 		d.b.Paragraph(s)
@@ -28,6 +29,9 @@ func (d *document) claims() {
 		d.claimFinding(&all[i])
 	}
 }
+
+// claimHead is the room of the chapter's heading and what it says first.
+const claimHead = 80.0
 
 // allClaims returns the claims of all cases.
 func (d *document) allClaims() []record.Claim {
@@ -160,15 +164,15 @@ func (d *document) coverClaims() {
 	if len(all) == 0 {
 		return
 	}
-	worst, word, explained := record.Confirmed, "All confirmed.", ""
+	worst, word, explained := record.Confirmed, "Claims confirmed.", ""
 	switch _, contradicted, open := countClaims(all); {
 	case contradicted > 0:
-		worst, word = record.Contradicted, "Contradicted: "+among(claimsOf(all, record.Contradicted), mostNames)+"."
+		worst, word = record.Contradicted, "Claims contradicted: "+among(claimsOf(all, record.Contradicted), mostNames)+"."
 		explained = ", and the slips that would explain them"
 	case open > 0:
-		worst, word = record.ClaimOpen, "Not shown: "+among(claimsOf(all, record.ClaimOpen), mostNames)+"."
+		worst, word = record.ClaimOpen, "Claims not shown: "+among(claimsOf(all, record.ClaimOpen), mostNames)+"."
 	}
-	d.b.Subheading("Claims of the designer", 30)
+	d.b.Space(5)
 	d.b.Verdict(markOfClaim(worst), colorOfClaim(worst), word, claimTally(all)+" The chapter Claims has the figures"+explained+".")
 }
 

@@ -174,7 +174,7 @@ func (l *layout) kept() float64 { return l.headHeight + l.heightOfFirst(l.togeth
 // together returns how many rows must stand below the head: all of a short
 // table, which is not broken.
 func (l *layout) together() int {
-	const short = 0.22 // of the page
+	const short = 0.19 // of the page
 	all := len(l.t.Rows)
 	if l.headHeight+l.heightOfFirst(all) <= short*l.b.Body() {
 		return all
