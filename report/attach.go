@@ -9,9 +9,15 @@ import (
 	"linewitness/sim/record"
 )
 
+// largestTable bounds a CSV file that is attached, in bytes, so that all three and
+// what else there is can be. A design of some dozen long cases passes it; its
+// samples can still be written as files.
+const largestTable = archive.MaxContent / 4
+
 // attachments are the files that make a record repeatable and readable by
 // machines: the design, what it reads, and the outcome as JSON and CSV. They are
 // the same bytes as the files of their own that the record can be written to.
+// A CSV file larger than largestTable is left out.
 func attachments(r *record.Record) ([]archive.Attachment, error) {
 	out := []archive.Attachment{{
 		Name: designName(r.Design.File), Role: archive.Design, Relationship: archive.Source,
@@ -37,6 +43,9 @@ func attachments(r *record.Record) ([]archive.Attachment, error) {
 		MIME: "application/json", Description: "every figure of the record", Data: result,
 	})
 	for _, t := range tables {
+		if !fits(t) {
+			continue
+		}
 		out = append(out, archive.Attachment{
 			Name: unused(out, stem+"."+t.Name+".csv"), Role: archive.Table, Relationship: archive.Data,
 			MIME: "text/csv", Description: "samples: " + t.Name, Data: t.Data,
@@ -44,6 +53,9 @@ func attachments(r *record.Record) ([]archive.Attachment, error) {
 	}
 	return out, nil
 }
+
+// fits reports whether a table is short enough to be attached.
+func fits(t data.CSVFile) bool { return len(t.Data) <= largestTable }
 
 // designName is what the design file is called in the document. A viewer knows
 // what to do with it by the end of its name.

@@ -42,8 +42,10 @@ type Attachment struct {
 // check says what is wrong with the attachments of a new document.
 func check(files []Attachment) error {
 	count := map[string]int{manifestName: 1}
+	size := 0
 	for _, a := range files {
 		count[a.Name]++
+		size += len(a.Data)
 		switch {
 		case a.Name == "":
 			return fault("an attachment has no name")
@@ -55,6 +57,8 @@ func check(files []Attachment) error {
 			return fault("attachment %q: unknown relationship %q", a.Name, a.Relationship)
 		case a.MIME == "":
 			return fault("attachment %q: no MIME type", a.Name)
+		case size > MaxContent:
+			return fault("the attachments have more than %d bytes", MaxContent)
 		}
 	}
 	return nil

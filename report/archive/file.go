@@ -2,9 +2,14 @@ package archive
 
 import "slices"
 
-// MaxSize is the size of the largest file that [Open] reads, in bytes. Records
-// have a few MiB.
-const MaxSize = 64 << 20
+const (
+	// MaxSize is the size of the largest file that [Open] reads, in bytes. Records
+	// have a few MiB.
+	MaxSize = 64 << 20
+	// MaxContent is the size of all attached files together that [Finish] attaches
+	// and [Open] reads, in bytes.
+	MaxContent = 192 << 20
+)
 
 // A File is what a record holds beside its pages. Every attached file in it is
 // as the record was made with: its size and its SHA-256 are those of the manifest.

@@ -241,6 +241,7 @@ func TestFinishRefuses(t *testing.T) {
 		{"no name", "has no name", pages(t), with(func(a *Attachment) { a.Name = "" })},
 		{"role", `unknown role "x"`, pages(t), with(func(a *Attachment) { a.Name, a.Role = "n", "x" })},
 		{"relationship", `unknown relationship "x"`, pages(t), with(func(a *Attachment) { a.Name, a.Relationship = "n", "x" })},
+		{"size", "more than 201326592 bytes", pages(t), with(func(a *Attachment) { a.Name, a.Data = "n", make([]byte, MaxContent) })},
 		{"type", `"n": no MIME type`, pages(t), with(func(a *Attachment) { a.Name, a.MIME = "n", "" })},
 	} {
 		if _, err := Finish(c.pdf, Meta{}, c.files); err == nil || !strings.Contains(err.Error(), c.reason) {

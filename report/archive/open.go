@@ -10,9 +10,9 @@ import (
 )
 
 // foreign bounds what a file from outside may ask for. A record has some
-// thousand objects.
+// thousand objects; other programs pack them into streams.
 var foreign = syntax.Limits{
-	Bytes: MaxSize, Objects: 1 << 18, Depth: 32, Values: 1 << 20, Inflated: 256 << 20, Updates: 64,
+	Bytes: MaxSize, Objects: 1 << 18, Depth: 32, Values: 1 << 20, Inflated: MaxContent + 16<<20, Updates: 64,
 }
 
 // Open reads the attached files of a record and checks each against the manifest.
