@@ -63,7 +63,7 @@ func networkFinding(m record.Model) string {
 	if slices.ContainsFunc(m.Elements, func(p record.ModelPart) bool { return p.Ratio != 0 }) {
 		s += " The ratio of a transformer is that of its turns, read from left to right."
 	}
-	return s + " Thick lines are sections, not to scale; thin ones have no length. Loads end on the return conductor."
+	return s + " " + drawing.ScaleNote + " Loads end on the return conductor."
 }
 
 func right(head string) sheet.Column { return sheet.Column{Head: head, Align: typeset.Right, Grow: 1} }

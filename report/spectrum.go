@@ -13,7 +13,7 @@ import (
 // harmonic that is shown and a little beyond.
 const (
 	spectrumFloor = -160.0
-	spectrumHead  = 12.0 // above the fundamental, for its label
+	spectrumHead  = 28.0 // above the fundamental, for its label
 	harmonics     = 8
 )
 
@@ -55,7 +55,7 @@ func spectrumPanel(c *record.Case) *figure.Panel {
 	s := c.Spectrum
 	f := c.Model.Frequency
 	last := min(s.Frequency[len(s.Frequency)-1], (harmonics+0.4)*f)
-	p := figure.New("Spectrum", "at "+s.Where+", dB below the fundamental",
+	p := figure.New("Spectrum", "at "+s.Where+", dB to the fundamental",
 		figure.Axis{Label: "frequency", Unit: "Hz", Max: last}, figure.Axis{Min: spectrumFloor, Max: spectrumHead})
 	p.Marks(harmonicMarks(f, last), ink.MarkLine)
 	xs, ys := span{0, last}.in(s.Frequency, levels(s, at))

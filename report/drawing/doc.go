@@ -1,6 +1,7 @@
 // Package drawing lays out and draws the network of a case: the source at the
-// left, the line sections as thick lines to the right of it, junctions as
-// named dots, loads and elements as symbols. Lengths are not to scale.
+// left, the line sections as double lines to the right of it, junctions as
+// named dots on their reference planes, loads and elements as symbols. Lengths
+// are drawn in three classes, see [ScaleNote].
 //
 // Everything has a cell of a grid to itself, so that labels cannot meet:
 //

@@ -33,7 +33,6 @@ var (
 	nameStyle  = typeset.Style{Face: typeset.Bold, Size: 6.8, Color: ink.Text}
 	valueStyle = typeset.Style{Face: typeset.Sans, Size: 6.5, Color: ink.Text}
 	nodeStyle  = typeset.Style{Face: typeset.Italic, Size: 6.8, Color: ink.Accent}
-	lineStyle  = draw.LineStyle{Color: ink.Accent, Width: 2.2}
 	wireStyle  = draw.LineStyle{Color: ink.Text, Width: 0.6}
 )
 
@@ -138,20 +137,20 @@ func (p *pen) arrow(x, y float64, name string) {
 	p.label(nodeStyle, x+8, y-2.2, p.cell*0.3-8-textGap, name)
 }
 
-// edge draws a section as a thick line, an element as its symbol, with its
+// edge draws a section as a double line, an element as its symbol, with its
 // name and its length or value above.
 func (p *pen) edge(w *wire, x, right, y float64) {
 	e, room := w.via, right-x-2*textGap-lanes*lanePitch
 	if e.section != nil {
-		p.line(lineStyle, x, y, right, y)
-		p.label(nameStyle, x+textGap, y+3.6*mm, room, e.section.Name)
-		p.label(valueStyle, x+textGap, y+1.0*mm, room, format.SI(e.section.Length, "m"))
+		p.section(e.section, x, right, y)
+		p.label(nameStyle, x+textGap, y+3.9*mm, room, e.section.Name)
+		p.label(valueStyle, x+textGap, y+1.3*mm, room, lengths(e.section, room))
 		return
 	}
-	middle := (x + right) / 2
-	p.line(wireStyle, x, y, middle-symbolHalf, y)
-	p.line(wireStyle, middle+symbolHalf, y, right, y)
-	p.symbol(e.part, middle, y)
+	list, middle := signs(e.part), (x+right)/2
+	p.line(wireStyle, x, y, middle-half(list), y)
+	p.line(wireStyle, middle+half(list), y, right, y)
+	p.row(list, middle, y)
 	given := e.part.Given
 	if e.part.Ratio != 0 && w.turned() {
 		given = turnedRatio(given)
@@ -185,8 +184,8 @@ func combined(part *record.ModelPart) bool { return strings.HasPrefix(part.As, "
 // part draws a load or an element to the return conductor.
 func (p *pen) part(part *record.ModelPart, x, y float64) {
 	p.value(part, part.Given, x, y, p.cell-2*textGap-lanes*lanePitch)
-	middle := x + p.cell*0.45
-	end := middle + symbolHalf + 3*mm
+	list, middle := signs(part), x+p.cell*0.45
+	end := middle + half(list) + 2.6*mm
 	switch {
 	case part.Open:
 		p.line(wireStyle, x, y, middle, y)
@@ -195,9 +194,9 @@ func (p *pen) part(part *record.ModelPart, x, y float64) {
 	case part.Short:
 		p.line(wireStyle, x, y, end, y)
 	default:
-		p.line(wireStyle, x, y, middle-symbolHalf, y)
-		p.line(wireStyle, middle+symbolHalf, y, end, y)
-		p.symbol(part, middle, y)
+		p.line(wireStyle, x, y, middle-half(list), y)
+		p.line(wireStyle, middle+half(list), y, end, y)
+		p.row(list, middle, y)
 	}
 	p.ground(end, y, 1)
 }
@@ -205,6 +204,7 @@ func (p *pen) part(part *record.ModelPart, x, y float64) {
 // node draws a junction and its name, below the wire.
 func (p *pen) node(n *node) {
 	x, y := p.x(n.col), p.y(n.row)
+	p.line(planeStyle, x, y+0.6*mm, x, y+planeRise)
 	if n.end {
 		p.ring(x, y, 2.2)
 	} else {

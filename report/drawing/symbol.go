@@ -11,28 +11,23 @@ import (
 	"linewitness/sim/record"
 )
 
-// symbolHalf is half the length of a symbol on its wire.
-const symbolHalf = 3 * mm
-
-// symbol draws a part around (x, y): after IEC 60617 a rectangle for a
-// resistor, half circles for an inductor, two plates for a capacitor, two
-// windings for a transformer, and a rectangle for any series combination; one
-// that is more than a series combination has a Z in it.
-func (p *pen) symbol(part *record.ModelPart, x, y float64) {
-	switch {
-	case part.Ratio != 0:
+// symbol draws a symbol of half a length around (x, y): after IEC 60617 a
+// rectangle for a resistor, half circles for a coil, two plates for a capacitor
+// and two windings for a transformer; a rectangle with a Z in it for any other
+// impedance.
+func (p *pen) symbol(s sign, x, y, half float64) {
+	switch s {
+	case transformer:
 		p.windings(x, y)
-	case part.L > 0 && part.R == 0 && part.C == 0:
-		p.coil(x, y)
-	case part.C > 0 && part.R == 0 && part.L == 0:
-		p.plates(x, y)
-	case part.Short:
-		p.line(wireStyle, x-symbolHalf, y, x+symbolHalf, y)
-	case combined(part):
-		p.box(x, y)
+	case coil:
+		p.coil(x, y, half)
+	case capacitor:
+		p.plates(x, y, half)
+	case general:
+		p.box(x, y, half)
 		valueStyle.At(6).Draw(p.c, x, y-2.1, "Z", typeset.Center)
 	default:
-		p.box(x, y)
+		p.box(x, y, half)
 	}
 }
 
@@ -71,11 +66,11 @@ func (p *pen) winding(x, y, reach, side float64) {
 	p.c.Stroke(path)
 }
 
-func (p *pen) box(x, y float64) {
+func (p *pen) box(x, y, long float64) {
 	const half = 1.2 * mm
 	r := vg.Rectangle{
-		Min: vg.Point{X: vg.Points(x - symbolHalf), Y: vg.Points(y - half)},
-		Max: vg.Point{X: vg.Points(x + symbolHalf), Y: vg.Points(y + half)},
+		Min: vg.Point{X: vg.Points(x - long), Y: vg.Points(y - half)},
+		Max: vg.Point{X: vg.Points(x + long), Y: vg.Points(y + half)},
 	}
 	p.c.SetColor(ink.White)
 	p.c.Fill(r.Path())
@@ -83,23 +78,23 @@ func (p *pen) box(x, y float64) {
 	p.c.Stroke(r.Path())
 }
 
-func (p *pen) coil(x, y float64) {
+func (p *pen) coil(x, y, half float64) {
 	const turns = 4
-	r := symbolHalf / turns
+	r := half / turns
 	var path vg.Path
-	path.Move(vg.Point{X: vg.Points(x - symbolHalf), Y: vg.Points(y)})
+	path.Move(vg.Point{X: vg.Points(x - half), Y: vg.Points(y)})
 	for k := range turns {
-		center := x - symbolHalf + (2*float64(k)+1)*r
+		center := x - half + (2*float64(k)+1)*r
 		path.Arc(vg.Point{X: vg.Points(center), Y: vg.Points(y)}, vg.Points(r), math.Pi, -math.Pi)
 	}
 	p.c.SetLineStyle(draw.LineStyle{Color: ink.Text, Width: 0.8})
 	p.c.Stroke(path)
 }
 
-func (p *pen) plates(x, y float64) {
-	const gap, height = 0.6 * mm, 1.7 * mm
-	p.line(wireStyle, x-symbolHalf, y, x-gap, y)
-	p.line(wireStyle, x+gap, y, x+symbolHalf, y)
+func (p *pen) plates(x, y, half float64) {
+	const gap, height = 0.6 * mm, 1.4 * mm
+	p.line(wireStyle, x-half, y, x-gap, y)
+	p.line(wireStyle, x+gap, y, x+half, y)
 	plate := draw.LineStyle{Color: ink.Text, Width: 1.1}
 	p.line(plate, x-gap, y-height, x-gap, y+height)
 	p.line(plate, x+gap, y-height, x+gap, y+height)
@@ -167,7 +162,13 @@ func (p *pen) source(s *record.ModelSource, x, y float64) {
 	p.c.Stroke(disc(center, y, radius))
 	p.wave(center, y)
 	if s.Impedance != 0 {
-		p.box(middle, y)
+		list := seriesSigns(s.R, s.L, s.C)
+		p.c.SetColor(ink.White)
+		p.c.Fill(vg.Rectangle{
+			Min: vg.Point{X: vg.Points(middle - half(list)), Y: vg.Points(y - 1)},
+			Max: vg.Point{X: vg.Points(middle + half(list)), Y: vg.Points(y + 1)},
+		}.Path())
+		p.row(list, middle, y)
 	}
 	room := leadWidth - 2*mm - textGap
 	p.label(nameStyle, x, y+5.6*mm, room, "source")
