@@ -18,7 +18,7 @@ func (d *document) claimFinding(q *record.Claim) {
 		return
 	}
 	word := capital(string(q.Verdict)) + "."
-	text := q.ID + ", " + words(q.Quantity) + subject(q.Subject) + ", case " + q.Case + ". " + ohms.ReplaceAllString(claimReason(q), "${1}Ω")
+	text := q.ID + ", " + words(q.Quantity) + subject(q.Subject) + ", case " + q.Case + ". " + ohms.ReplaceAllString(claimReason(q), "${1}"+format.Space+"${2}Ω")
 	d.b.Space(5)
 	d.b.Need(slipRoom)
 	d.b.Verdict(markOfClaim(q.Verdict), colorOfClaim(q.Verdict), word, trimmed(text))
@@ -56,7 +56,7 @@ func claimReason(q *record.Claim) string {
 }
 
 // ohms finds the unit as the design file writes it.
-var ohms = regexp.MustCompile(`(\d [kMm]?)ohm\b`)
+var ohms = regexp.MustCompile(`(\d) ([kMm]?)ohm\b`)
 
 // slipText says what a slip makes of the claim, what cannot be told from it,
 // and what else it explains.
