@@ -113,6 +113,22 @@ func TestLoopFactor(t *testing.T) {
 	}
 }
 
+// TestLoopFactorOfAShortLine: a round trip of 0.4 periods, between the
+// comparisons a period apart, keeps its own part of the amplitude.
+func TestLoopFactorOfAShortLine(t *testing.T) {
+	net := matchedLine(wavelength / 5)
+	net.Source.R, net.Branches[0].R = 2, 1000
+	st, err := Settle(context.Background(), net, fixedGrid(net, 100), Settings{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	want := math.Abs((2 - 50.) / (2 + 50) * (1000 - 50) / (1000 + 50))
+	const tolerance = 0.02 // the mode is off the frequency, and turns
+	if got := st.Settling.LoopFactor; math.Abs(got-want) > tolerance {
+		t.Errorf("loop factor %.4f, want %.4f", got, want)
+	}
+}
+
 // TestPlateau: with one branch of a tee open, the source voltage stands still
 // for a branch's round trip at a time, at levels far from the final one. A
 // comparison of neighbouring periods would take the first for steady.

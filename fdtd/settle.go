@@ -212,7 +212,7 @@ func (w *watch) estimate() float64 {
 	if rho >= 1 {
 		last, rho = w.envelope()
 	}
-	w.LoopFactor = math.Pow(rho, float64(w.trip)/float64(w.gap))
+	w.LoopFactor = math.Pow(rho, 2*w.LongPath/(float64(w.gap)*w.period))
 	if rho >= 1 {
 		return math.Inf(1)
 	}

@@ -22,24 +22,58 @@ import (
 //
 //	s - jw = -ln m / (d ln m/ds),   dm/ds = w^H (dM/ds) v / (w^H v)
 //
-// with w and v the left and right eigenvectors, gives it with the time that
-// waves spend in lines and lumped parts alike.
+// with w and v the left and right eigenvectors, tells about where it is, with
+// the time that waves spend in lines and lumped parts alike. Where hardly
+// anything comes back from a line, as behind a matched source, what rings are
+// the lumped parts: see lumpedModes. The slowest of both are followed to where
+// they are: see natural.
 func Decay(net *network.Network) float64 {
 	check(net)
 	if len(net.Sections) > modesLimit {
 		return math.NaN()
 	}
 	s0 := complex(0, net.Omega())
-	h := 1e-5 * s0 // central difference: error 1e-10 relative, rounding 1e-11
-	m := roundTrip(net, s0)
-	dm := roundTrip(net, s0+h)
-	back := roundTrip(net, s0-h)
-	for i := range dm {
-		for j := range dm {
-			dm[i][j] = (dm[i][j] - back[i][j]) / (2 * h)
+	steps, ok := lineModes(roundTrip(net, s0), derivative(net, s0, roundTrip), delays(net))
+	if !ok {
+		return math.NaN()
+	}
+	steps = append(polished(net, s0, steps), polished(net, s0, lumpedModes(net, s0))...)
+	return slowest(steps, band*net.Omega())
+}
+
+// band is how far from the source frequency, as a part of it, a mode may ring
+// for it to count: what rings further off hardly shows in a phasor. If none is
+// so near, the nearest count.
+const band = 0.5
+
+// slowest is the least decay rate of the modes that lie so far from s0, of those
+// that ring within a distance of it, rad/s.
+func slowest(steps []complex128, within float64) float64 {
+	rate, nearest := math.Inf(1), math.Inf(1)
+	for _, d := range steps {
+		nearest = math.Min(nearest, math.Abs(imag(d)))
+	}
+	const equal = 1 + 1e-6
+	within = math.Max(within, equal*nearest)
+	for _, d := range steps {
+		if r := -real(d); r >= 0 && r < rate && math.Abs(imag(d)) <= within {
+			rate = r
 		}
 	}
-	return slowest(m, dm)
+	return rate
+}
+
+// derivative is that of a matrix by s: a central difference, whose error is
+// 1e-10 of it and whose rounding 1e-11.
+func derivative(net *network.Network, s complex128, of func(*network.Network, complex128) [][]complex128) [][]complex128 {
+	h := complex(0, 1e-5*net.Omega())
+	d, back := of(net, s+h), of(net, s-h)
+	for i := range d {
+		for j := range d[i] {
+			d[i][j] = (d[i][j] - back[i][j]) / (2 * h)
+		}
+	}
+	return d
 }
 
 // modesLimit bounds the eigenvalue problem of Decay.
@@ -48,100 +82,60 @@ const modesLimit = 64
 // faint is the eigenvalue below which a mode dies within one passage.
 const faint = 1e-6
 
-// offset is added to the diagonal before the eigenvalues are found, and taken
-// off them again. A round trip of one resonant line has the eigenvalues +a and
-// -a, real to rounding: then those of M and of its conjugate are the same, and
-// the QR iteration may stand still between values of one size.
-const offset = 0.37 + 0.59i
-
-// slowest is the least decay rate of the modes of m, whose derivative is dm; NaN
-// if the eigenvalues are not found.
-func slowest(m, dm [][]complex128) (rate float64) {
-	// The library panics, instead of failing, where its iteration for small
-	// matrices does not converge (gonum v0.17, Dhseqr on Dlaqr04).
-	defer func() {
-		if recover() != nil {
-			rate = math.NaN()
-		}
-	}()
-	n := len(m)
-	real2 := mat.NewDense(2*n, 2*n, nil)
-	for i := range m {
-		for j, v := range m[i] {
-			real2.Set(i, j, real(v))
-			real2.Set(i+n, j+n, real(v))
-			real2.Set(i, j+n, -imag(v))
-			real2.Set(i+n, j, imag(v))
-		}
-		for _, at := range []int{i, i + n} {
-			real2.Set(at, at, real2.At(at, at)+real(offset))
-		}
-		real2.Set(i, i+n, real2.At(i, i+n)-imag(offset))
-		real2.Set(i+n, i, real2.At(i+n, i)+imag(offset))
-	}
-	var eig mat.Eigen
-	if !eig.Factorize(real2, mat.EigenBoth) {
-		return math.NaN()
-	}
-	var right, left mat.CDense
-	eig.VectorsTo(&right)
-	eig.LeftVectorsTo(&left)
-	rate = math.Inf(1)
-	for k, lambda := range eig.Values(nil) {
-		lambda -= offset
-		v, size := project(&right, k, n)
-		w, _ := project(&left, k, n)
-		if cmplx.Abs(lambda) < faint || size < 1e-6 {
-			continue // dead, or an eigenvector of the conjugate half of the real form
+// lineModes are how far from s0 the modes of m, whose derivative is dm, are by
+// one step; false if the eigenvalues are not found. delays are those of the
+// waves, s.
+func lineModes(m, dm [][]complex128, delays []float64) (steps []complex128, ok bool) {
+	all, ok := pairs(m)
+	for _, p := range all {
+		if cmplx.Abs(p.value) < faint {
+			continue // dead
 		}
 		var num, den complex128
-		for i := range v {
-			den += cmplx.Conj(w[i]) * v[i]
-			for j := range v {
-				num += cmplx.Conj(w[i]) * dm[i][j] * v[j]
+		var norm, left, delay float64
+		for i := range p.right {
+			den += cmplx.Conj(p.left[i]) * p.right[i]
+			for j := range p.right {
+				num += cmplx.Conj(p.left[i]) * dm[i][j] * p.right[j]
 			}
+			size := real(p.right[i] * cmplx.Conj(p.right[i]))
+			norm, left, delay = norm+size, left+real(p.left[i]*cmplx.Conj(p.left[i])), delay+size*delays[i]
 		}
-		slope := num / den / lambda // d ln m/ds
-		if r := real(cmplx.Log(lambda) / slope); r >= 0 && r < rate {
-			rate = r
+		step := -cmplx.Log(p.value) * p.value * den / num
+		if cmplx.Abs(den) < defective*math.Sqrt(norm*left) {
+			step = cmplx.Log(p.value) * complex(norm/delay, 0)
 		}
+		steps = append(steps, step)
 	}
-	return rate
+	return steps, ok
 }
 
-// project takes the part of eigenvector k of the real form [a; b] that
-// belongs to M itself, (a + jb)/2, and its norm.
-func project(vectors *mat.CDense, k, n int) (v []complex128, size float64) {
-	for i := range n {
-		x := (vectors.At(i, k) + 1i*vectors.At(i+n, k)) / 2
-		v = append(v, x)
-		size += real(x)*real(x) + imag(x)*imag(x)
+// defective is the cosine between the eigenvectors of one eigenvalue below which
+// it is as good as a double one that has one vector only, as in a ring of equal
+// parts. Such a value has no derivative: the delay of its waves stands for it.
+const defective = 0.01
+
+// delays are those of the waves of a round trip, in their order.
+func delays(net *network.Network) (out []float64) {
+	for _, s := range net.Sections {
+		out = append(out, s.Delay(), s.Delay())
 	}
-	return v, math.Sqrt(size)
+	return out
 }
 
 // roundTrip is M(s): row and column 2k stand for the wave that leaves the
 // From end of section k, 2k+1 for the one that leaves its To end.
 func roundTrip(net *network.Network, s complex128) [][]complex128 {
-	n := len(net.Junctions) + len(net.Branches) + 1
-	a := make([][]complex128, n)
-	for i := range a {
-		a[i] = make([]complex128, n)
-	}
-	stampBranches(net, s, a)
+	a := endless(net, s)
 	ends := 2 * len(net.Sections)
-	rhs := make([][]complex128, n) // one column an arriving wave
+	rhs := make([][]complex128, len(a)) // one column an arriving wave
 	for i := range rhs {
 		rhs[i] = make([]complex128, ends)
 	}
 	decay := make([]complex128, len(net.Sections))
 	for k, sec := range net.Sections {
-		z, y := lineAt(sec, s)
-		g := cmplx.Sqrt(z) * cmplx.Sqrt(y)
-		y0 := cmplx.Sqrt(y) / cmplx.Sqrt(z)
-		decay[k] = cmplx.Exp(-g * complex(sec.Length, 0))
-		a[sec.From][sec.From] += y0
-		a[sec.To][sec.To] += y0
+		var y0 complex128
+		y0, decay[k] = passage(sec, s)
 		// V = arriving + leaving, so the line brings 2 y0 times the arriving
 		// wave. Column 2k is the wave from the From end, at the To end now.
 		rhs[sec.To][2*k] += 2 * y0 * decay[k]
@@ -156,6 +150,31 @@ func roundTrip(net *network.Network, s complex128) [][]complex128 {
 		m[2*k+1][2*k] -= decay[k]
 	}
 	return m
+}
+
+// passage is the characteristic admittance of a section, S, and what is left of
+// a wave at its other end.
+func passage(sec network.Section, s complex128) (y0, decay complex128) {
+	z, y := lineAt(sec, s)
+	g := cmplx.Sqrt(z) * cmplx.Sqrt(y)
+	return cmplx.Sqrt(y) / cmplx.Sqrt(z), cmplx.Exp(-g * complex(sec.Length, 0))
+}
+
+// endless is the nodal matrix of the network with sections from whose other ends
+// nothing comes back.
+func endless(net *network.Network, s complex128) [][]complex128 {
+	n := len(net.Junctions) + len(net.Branches) + 1
+	a := make([][]complex128, n)
+	for i := range a {
+		a[i] = make([]complex128, n)
+	}
+	stampBranches(net, s, a)
+	for _, sec := range net.Sections {
+		y0, _ := passage(sec, s)
+		a[sec.From][sec.From] += y0
+		a[sec.To][sec.To] += y0
+	}
+	return a
 }
 
 // stampBranches enters the lumped branches and the dead source into the nodal
