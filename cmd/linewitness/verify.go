@@ -19,6 +19,7 @@ the requirements, prints a short table and writes the record.
 
   -o, --output DIR       directory of the files, made if missing    (default .)
       --formats LIST     pdf, json, csv with commas, or none         (default pdf,json)
+      --figures DIR      draw each figure into DIR as SVG and PNG, for slides
       --paper SIZE       a4 or letter                                (default a4)
       --grids N          grids of the convergence study, 3 or 1      (default 3)
       --json             print the JSON on standard output instead of the table
@@ -30,6 +31,11 @@ feeder.yaml gives feeder.pdf, feeder.json, feeder.waveforms.csv, feeder.envelope
 and feeder.error.csv, each written whole or not at all. With --json and several
 designs, one JSON document follows the other.
 
+The figures are those of the PDF, named after case and subject, as in
+nominal-envelopes-main.svg; captions.txt has the finding of each. With several
+designs each has its own directory in DIR. Text in SVG is text: without the
+Liberation faces, which the PNG files use, it is shown in Arial or the like.
+
 For the exit status see "linewitness --help".
 
 Example:
@@ -39,6 +45,8 @@ Example:
 // verifyOptions are the options of the verb.
 type verifyOptions struct {
 	dir     string
+	figures string // directory of the figures; empty for none
+	several bool   // designs
 	formats choices
 	paper   choice
 	grids   *choice
@@ -65,6 +73,7 @@ func (a *app) verifyCommand() *cobra.Command {
 	flags := cmd.Flags()
 	flags.StringVarP(&opt.dir, "output", "o", ".", "directory of the files")
 	flags.Var(&opt.formats, "formats", "formats of the record")
+	flags.StringVar(&opt.figures, "figures", "", "draw each figure into a directory")
 	flags.Var(&opt.paper, "paper", "paper size of the PDF")
 	addGrids(cmd, opt.grids)
 	flags.BoolVar(&opt.json, "json", false, "print the JSON instead of the table")
@@ -73,6 +82,7 @@ func (a *app) verifyCommand() *cobra.Command {
 	_ = cmd.RegisterFlagCompletionFunc("formats", oneOf(formatPDF, formatJSON, formatCSV, "pdf,json,csv", noChoice))
 	_ = cmd.RegisterFlagCompletionFunc("paper", oneOf(opt.paper.of...))
 	_ = cmd.MarkFlagDirname("output")
+	_ = cmd.MarkFlagDirname("figures")
 	return cmd
 }
 
@@ -83,6 +93,7 @@ func (a *app) verifyAll(ctx context.Context, paths []string, opt *verifyOptions)
 	if err != nil {
 		return err
 	}
+	opt.several = len(jobs) > 1
 	status := statusVerified
 	for i := range jobs {
 		jobs[i].file, err = a.load(ctx, jobs[i].path)
@@ -91,7 +102,7 @@ func (a *app) verifyAll(ctx context.Context, paths []string, opt *verifyOptions)
 		}
 		status = max(status, a.explain(err))
 	}
-	if err := opt.makeDir(jobs); err != nil {
+	if err := errors.Join(opt.makeDir(jobs), opt.makeFigureDirs(jobs)); err != nil {
 		return err
 	}
 	first := true
@@ -103,7 +114,7 @@ func (a *app) verifyAll(ctx context.Context, paths []string, opt *verifyOptions)
 			fmt.Fprintln(a.stdout)
 		}
 		first = false
-		s, err := a.verifyOne(ctx, j, opt)
+		s, err := a.verifyOne(ctx, j, paths, opt)
 		if errors.Is(err, context.Canceled) {
 			return err
 		}
@@ -113,7 +124,7 @@ func (a *app) verifyAll(ctx context.Context, paths []string, opt *verifyOptions)
 }
 
 // verifyOne verifies one design and returns the status of its verdict.
-func (a *app) verifyOne(ctx context.Context, j job, opt *verifyOptions) (int, error) {
+func (a *app) verifyOne(ctx context.Context, j job, designs []string, opt *verifyOptions) (int, error) {
 	how := sim.Options{NoBound: opt.noBound, Grids: gridCount(opt.grids), Version: version()}
 	if j.file.Nominal.Record.Date == "" {
 		var err error
@@ -129,6 +140,10 @@ func (a *app) verifyOne(ctx context.Context, j job, opt *verifyOptions) (int, er
 		return statusVerified, verifyError(j.file.Name, err)
 	}
 	files, err := a.products(ctx, r, j.stem, &opt.formats, opt.paper.value)
+	var figures []product
+	if err == nil {
+		figures, err = a.drawn(ctx, r, j, opt)
+	}
 	if errors.Is(err, context.Canceled) {
 		return statusVerified, err
 	}
@@ -140,10 +155,14 @@ func (a *app) verifyOne(ctx context.Context, j job, opt *verifyOptions) (int, er
 	if err := a.tell(r, opt.json); err != nil {
 		return status, err
 	}
-	if err := writeProducts(ctx, files); err != nil {
+	if err := spareDesigns(figures, designs); err != nil {
+		return status, err
+	}
+	if err := writeProducts(ctx, append(files, figures...)); err != nil {
 		return status, err
 	}
 	a.wrote(files, opt.json)
+	a.wroteFigures(figures, len(files) == 0, opt.json)
 	return status, nil
 }
 
