@@ -81,9 +81,10 @@ func (d *comparison) sorted() (effects, figures []effectIn, before int) {
 		for j := range k.Effects {
 			e := effectIn{k.Name, &k.Effects[j]}
 			switch {
-			case e.Kind == record.FigureEffect && e.Matters():
-				figures = append(figures, e)
 			case e.Kind == record.FigureEffect:
+				if e.Matters() && k.Old != "" && k.New != "" { // else there is nothing to compare with
+					figures = append(figures, e)
+				}
 			case e.Matters():
 				effects = append(effects, e)
 			default:
@@ -149,6 +150,7 @@ func (d *comparison) properties() archive.Meta {
 func (d *comparison) page(r rows) {
 	d.b.Overline("Comparison of two versions of a design, transmission-line network")
 	d.b.Title(d.title())
+	d.b.Space(12)
 	d.sides()
 	d.finding()
 	d.changeTable(r.changes)

@@ -79,10 +79,12 @@ func writeCaseEffect(w io.Writer, c *record.CaseEffect) {
 	fmt.Fprintf(w, "\n%s: %s\n", c.Name, turned(string(c.Old), string(c.New)))
 	judged := [][]string{{"id", "quantity", "value", "limit", "margin", "verdict", ""}}
 	figures := [][]string{{"key figure", "value", "change"}}
-	before := 0
+	before, alone := 0, 0
 	for i := range c.Effects {
 		e := &c.Effects[i]
 		switch {
+		case e.Kind == record.FigureEffect && (c.Old == "" || c.New == ""):
+			alone++
 		case !e.Matters():
 			before++
 		case e.Kind == record.FigureEffect:
@@ -100,6 +102,9 @@ func writeCaseEffect(w io.Writer, c *record.CaseEffect) {
 	}
 	if before > 0 {
 		fmt.Fprintf(w, "  as before: %s\n", counted(before, "figure"))
+	}
+	if alone > 0 {
+		fmt.Fprintf(w, "  with nothing to compare: %s, in --json\n", counted(alone, "key figure"))
 	}
 }
 

@@ -148,7 +148,12 @@ func (a *app) solveAgain(ctx context.Context, old *filed, noBound bool) (*record
 	if err != nil {
 		return nil, err
 	}
-	return a.solve(ctx, file, outputBase(old.path), sim.Options{Grids: old.grids(), NoBound: noBound})
+	d := old.result.Get("design")
+	return a.solve(ctx, file, outputBase(old.path), sim.Options{
+		Grids: old.grids(), NoBound: noBound,
+		// Where the design gives no date it was that of a file, or of the environment.
+		Date: d.String("date"), DateFrom: d.String("date_from"),
+	})
 }
 
 // attached opens a file that the design reads. To the reader of designs a file that

@@ -5,9 +5,9 @@ import "linewitness/sim/record"
 // The exit statuses. A run over several designs ends with the highest.
 const (
 	statusVerified    = 0   // all is as it should be
-	statusMissed      = 1   // a requirement is missed or not shown to be met, or a claim contradicted
+	statusMissed      = 1   // a requirement is missed or not shown to be met, a claim contradicted, or a verdict is worse than it was
 	statusUsage       = 2   // the command line or a design file is wrong
-	statusDisagree    = 3   // the two methods disagree
+	statusDisagree    = 3   // the two methods disagree, or a recheck with its record
 	statusUnsettled   = 4   // there is no steady state
 	statusFile        = 5   // a file could not be read or written
 	statusInterrupted = 130 // stopped by a signal; 128 + SIGINT, as shells have it

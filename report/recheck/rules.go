@@ -26,11 +26,10 @@ var (
 var rules = []rule{
 	// The document.
 	{[]string{"tool.version", "tool.go"}, said, "another version of the program or of its tools is what a recheck is for"},
-	{[]string{"design.date", "design.date_from"}, said, "the date may come from the environment or from the time of the file"},
 	{[]string{"format", "verdict", "cases.*.verdict"}, exact, "a verdict is the outcome; it may not change"},
 	{[]string{"design.agreement_limit", "design.settle_tolerance", "design.max_periods"}, given, "from the design file"},
 	{[]string{
-		"design.number|revision|title|sha256|file|convention", "design.history.[].*", "design.fsv_choices.[]",
+		"design.number|revision|title|sha256|file|convention|date|date_from", "design.history.[].*", "design.fsv_choices.[]",
 	}, exact, "from the design file, or a name"},
 	{[]string{"cases.*.frequency_hz"}, given, "from the design file"},
 	{[]string{"cases.*.warnings.[]"}, withFigures, "a warning: its words, and its figures to the last digit"},
