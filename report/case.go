@@ -37,6 +37,7 @@ func (d *document) solved(c *record.Case) {
 	d.fidelity(c)
 	d.grid(c)
 	d.warnings(c)
+	d.leftOut(c)
 }
 
 // verdictLine says the verdict of the case in a line.

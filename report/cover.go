@@ -1,59 +1,103 @@
 package report
 
 import (
+	"math"
 	"path"
+	"slices"
 	"strings"
 
 	"gonum.org/v1/plot/vg"
 	"gonum.org/v1/plot/vg/draw"
 	"linewitness/report/format"
-	"linewitness/report/ink"
 	"linewitness/report/sheet"
 	"linewitness/report/typeset"
 	"linewitness/sim/record"
 )
 
-// cover writes the first page: identity, verdict, cases, requirements, ratings.
-func (d *document) cover() {
+// coverRoom is how much of what may be long the cover shows.
+type coverRoom struct {
+	prose   int // lines of the purpose, of the notes and of the assumptions
+	cases   int
+	margins int
+	history int // revisions, the newest
+	files   int // fingerprints of files that the design reads
+}
+
+// everything is the room of a cover that may go on on a second page.
+var everything = coverRoom{prose: math.MaxInt, cases: coverCases, margins: worstMargins, history: coverHistory, files: math.MaxInt}
+
+// less is about half the room.
+func (r coverRoom) less() coverRoom {
+	half := func(n int) int { return max(min(n, 16)/2, 1) }
+	return coverRoom{half(r.prose), half(r.cases), half(r.margins), half(r.history), half(r.files)}
+}
+
+// cover writes the first page: what the document is, its verdict and what that
+// rests on, and who answers for it.
+func (d *document) cover(room coverRoom) {
 	d.b.Overline("Design verification record, transmission-line network")
 	d.b.Title(title(d.r))
-	d.identity()
-	d.signatures()
-	d.banner()
-	if d.r.Design.Purpose != "" {
-		d.b.Paragraph(d.r.Design.Purpose)
-	}
-	if d.r.Design.Notes != "" {
-		d.b.Note("Notes: " + d.r.Design.Notes)
-	}
-	d.cases()
-	d.requirements()
+	d.identity(room)
+	d.banner(room)
 	d.coverClaims()
-	d.ratings()
-	d.toConfirm()
+	d.worstMargins(room)
+	d.cases(room)
+	d.assumptions(room)
+	d.history(room)
+	d.signatures()
+	d.fingerprint(room)
+}
+
+// summary writes the cover on one page, with as much as finds room there.
+func (d *document) summary(paper sheet.Paper) {
+	for room := everything; ; room = room.less() {
+		d.b = sheet.New(meta(d.r), paper)
+		d.cover(room)
+		if d.b.Pages() == 1 || room == room.less() {
+			return
+		}
+	}
 }
 
 // field is a label and its value.
 type field struct{ label, value string }
 
-// identity writes what identifies the document, in two columns.
-func (d *document) identity() {
+// identity writes what identifies the document and what it is for.
+func (d *document) identity(room coverRoom) {
 	g := d.r.Design
 	d.b.Fields([]sheet.Field{
 		{Label: "Document number", Value: orElse(g.Number, "none")},
 		{Label: "Revision", Value: orElse(g.Revision, "none")},
-		{Label: "Date", Value: orElse(g.Date, "not stated")},
+		{Label: "Date", Value: dated(g)},
 		{Label: "Design file", Value: path.Base(g.File)},
-		{Label: "SHA-256 of the design file", Value: g.SHA256, Face: typeset.Mono, Wide: true},
-		{Label: "Made by", Value: "linewitness " + strings.TrimSpace(d.r.Tool.Version+" ("+d.r.Tool.Go+")"), Wide: true},
+		{Label: "Purpose", Value: orElse(g.Purpose, "not stated"), Wide: true, Lines: room.prose},
 	})
+	if g.Notes != "" {
+		d.b.Fields([]sheet.Field{{Label: "Notes", Value: g.Notes, Wide: true, Lines: room.prose}})
+	}
+}
+
+// dated is the date of the document and where it is from.
+func dated(g record.Design) string {
+	from := map[string]string{
+		"record":      "given in the design",
+		"environment": "from SOURCE_DATE_EPOCH",
+		"file":        "time of the design file",
+	}[g.DateFrom]
+	switch {
+	case g.Date == "":
+		return "not stated"
+	case from == "":
+		return g.Date
+	}
+	return g.Date + ", " + from
 }
 
 // banner draws the verdict: word, shape and colour.
-func (d *document) banner() {
+func (d *document) banner(room coverRoom) {
 	v := d.r.Verdict
 	word := typeset.Style{Face: typeset.Bold, Size: 15, Color: colorOf(v)}
-	lines := sheet.First(sheet.BodyStyle.Wrap(d.reason(), d.b.Width()-bannerIndent-10), bannerLines)
+	lines := sheet.First(sheet.BodyStyle.Wrap(d.reason(), d.b.Width()-bannerIndent-10), min(bannerLines, max(room.prose, 2)))
 	height := 32 + float64(len(lines))*bannerLeading
 	d.b.Space(8)
 	d.b.Block(height, func(c draw.Canvas) {
@@ -96,15 +140,35 @@ func capital(s string) string {
 	return strings.ToUpper(s[:1]) + s[1:]
 }
 
-// cases writes the summary of the cases.
-func (d *document) cases() {
+// coverCases is how many cases the cover has room for.
+const coverCases = 10
+
+// cases writes the summary of the cases, the worst where they are many.
+func (d *document) cases(room coverRoom) {
+	list := d.r.Cases
+	if len(list) > room.cases {
+		list = slices.Clone(list)
+		slices.SortStableFunc(list, func(a, b record.Case) int { return b.Verdict.Rank() - a.Verdict.Rank() })
+		list = list[:room.cases]
+	}
+	t := d.caseTable(list)
+	title := "Cases"
+	if len(list) < len(d.r.Cases) {
+		title = "Cases: " + format.Count(int64(len(list))) + " of " + format.Count(int64(len(d.r.Cases))) + ", the worst"
+	}
+	d.b.Label(title, d.b.Kept(t))
+	d.b.Table(t)
+}
+
+// caseTable has a row for each case.
+func (d *document) caseTable(cases []record.Case) sheet.Table {
 	rated := d.rated()
 	t := sheet.Table{Columns: []sheet.Column{{Head: "Case", Grow: 2}, {Head: "Verdict", Grow: 2}, {Head: "Requirements", Grow: 2}}}
 	if rated {
 		t.Columns = append(t.Columns, sheet.Column{Head: "Ratings", Grow: 2})
 	}
 	t.Columns = append(t.Columns, right("Solutions differ by"), right("Settled to 1"+format.Space+"% after"), right("Peak voltage"), right("Peak current"))
-	for _, c := range d.r.Cases {
+	for _, c := range cases {
 		row := []sheet.Cell{
 			{Text: c.Name, Bold: true},
 			{Text: string(c.Verdict), Mark: markOf(c.Verdict)},
@@ -119,28 +183,5 @@ func (d *document) cases() {
 			sheet.Cell{Text: format.SI(c.Stress.Voltage.Value, "V")},
 			sheet.Cell{Text: format.SI(c.Stress.Current.Value, "A")}))
 	}
-	d.b.Subheading("Cases", d.b.Kept(t))
-	d.b.Table(t)
-}
-
-// signatures draws the block to sign.
-func (d *document) signatures() {
-	const height = 42.0
-	g := d.r.Design
-	d.b.Space(5)
-	d.b.Block(height, func(c draw.Canvas) {
-		third := c.Size().X / 3
-		for i, f := range []field{{"Prepared", g.PreparedBy}, {"Checked", g.CheckedBy}, {"Approved", g.ApprovedBy}} {
-			box := c.Rectangle
-			box.Min.X += third * vg.Length(i)
-			box.Max.X = box.Min.X + third
-			c.SetLineStyle(draw.LineStyle{Color: ink.Hair, Width: 0.5})
-			c.Stroke(box.Path())
-			x, y, room := box.Min.X.Points()+5, box.Max.Y.Points(), third.Points()-10
-			d.b.Draw(c, sheet.NoteStyle, x, y-10, room, f.label)
-			d.b.Draw(c, sheet.BodyStyle, x, y-21, room, sheet.BodyStyle.Fit(f.value, room))
-			d.b.Draw(c, sheet.NoteStyle, x, y-36, room, "signature, date")
-		}
-	})
-	d.b.Space(8)
+	return t
 }

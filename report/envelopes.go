@@ -127,6 +127,9 @@ func (d *document) envelopes(c *record.Case) {
 	}
 	const headed = 70.0 // note, key and caption
 	long, short := sorted(c)
+	if !d.whole(c) {
+		long, short = d.chosenTracks(c, long, short)
+	}
 	first := rowHeight
 	if len(long) > 0 && (len(short) == 0 || d.b.Room() > rowHeight+zoomHeight+headed+headingRoom) {
 		first += zoomHeight

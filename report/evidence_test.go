@@ -21,7 +21,7 @@ func TestEvidenceInText(t *testing.T) {
 		"the largest global difference of 13 curves is that of stub, |V| along the section, 0.040, in words excellent", "the curve is zero in both solutions",
 		"the lowest 4 bins of the transform are the offset.", "blind to a reversal of sign", "Its words describe and do not accept",
 		"Roache 1998; Celik et al.", "ASME V&V 20-2009",
-		"Claims C2, C3, C4 are contradicted in nominal. Claim C5 is not shown in arc.", "Contradicted: C2, C3, C4.",
+		"Claims C2, C3, C4 are contradicted in nominal. Claim C5 is not shown in arc.", "Claims contradicted: C2, C3, C4.",
 		"Claims: 1 confirmed, 3 contradicted, 1 not shown.", "Claims: 1 not shown.",
 		"One slip explains C2 and C3 together: velocity factor left out on every section.",
 		"velocity factor left out on every section: 18.68 − j14.84 Ω; cannot be told from velocity factor used twice (section stub)", "explains C3 too.",
@@ -94,7 +94,7 @@ func TestHollowEvidence(t *testing.T) {
 	r.Matrix.Rows[0].Cells[1] = record.MatrixCell{Present: true, Value: nan, Difference: inf, Worst: true}
 	r.Matrix.Rows = append(r.Matrix.Rows, record.MatrixRow{})
 	all := readable(strings.Join(pages(t, write(t, r, Options{})), "\n"))
-	for _, s := range []string{"Not explained by its uncertainty is the error of ", "(|E|/u infinite)", "Contradicted: H.", "worst +infinite"} {
+	for _, s := range []string{"Not explained by its uncertainty is the error of ", "(|E|/u infinite)", "Claims contradicted: H.", "worst +infinite"} {
 		if !strings.Contains(all, s) {
 			t.Errorf("the text lacks %q", s)
 		}

@@ -21,6 +21,10 @@ func (d *document) fidelity(c *record.Case) {
 		return
 	}
 	d.b.Paragraph(fidelityFinding(c.Fidelity))
+	if !d.proven(c) && faithful(c.Fidelity) {
+		d.leave("the table of the feature selective validation")
+		return
+	}
 	meaning := ""
 	if c == d.nominal() {
 		meaning = "ADM, FDM, GDM: mean difference of amplitude, of feature and of both together, with its word. Grade, spread: how many of the six grades hold 85" + format.Space + "% of the points, counted from the best one and around the fullest one. For the choices see Method."

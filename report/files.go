@@ -37,6 +37,7 @@ const figureMargin = 8.0
 // widths of Arial. It returns the first error of write, and one for an unknown
 // paper or a text that the document's fonts do not have.
 func WriteFigures(r *record.Record, opt Options, write func(File) error) error {
+	opt.Full, opt.Summary = true, false // files take no pages
 	d, err := build(r, opt)
 	if err != nil {
 		return err

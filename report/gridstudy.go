@@ -15,13 +15,24 @@ func (d *document) gridStudy(c *record.Case) {
 	if len(v.Studies) == 0 && v.Skipped == "" {
 		return
 	}
-	d.b.Subheading("Grid convergence and validation", 110)
+	shown := v
+	if !d.proven(c) {
+		shown = doubtful(v)
+	}
+	keep := 110.0
+	if len(shown.Studies) == 0 {
+		keep = 40
+	}
+	d.b.Subheading("Grid convergence and validation", keep)
 	d.b.Paragraph(gridFinding(v))
 	if len(v.Studies) == 0 {
 		return
 	}
-	if v.Skipped == "" {
-		d.b.Table(gridTable(v))
+	if len(shown.Studies) < len(v.Studies) {
+		d.leave("the tables of grid convergence and validation" + butFor(len(shown.Studies)))
+	}
+	if v.Skipped == "" && len(shown.Studies) > 0 {
+		d.b.Table(gridTable(shown))
 		d.b.Note(gridNote(v, c == d.nominal()))
 	}
 	if !c.Settling.Settled {
@@ -29,7 +40,7 @@ func (d *document) gridStudy(c *record.Case) {
 		return
 	}
 	d.b.Paragraph(validationFinding(v))
-	if t := validationTable(v); len(t.Rows) > 0 {
+	if t := validationTable(shown); len(t.Rows) > 0 {
 		d.b.Table(t)
 		d.b.Note(validationNote(v, c == d.nominal()))
 	}

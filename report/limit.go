@@ -157,6 +157,11 @@ func toPeak(unit string) (factor float64, ok bool) {
 
 // finding says how far the curve that the limit is on stays from it.
 func (l limit) finding(t *track) string {
+	return distance(l.valueOn(t), l.value) + " " + l.name
+}
+
+// valueOn is the largest value of the curve that the limit is on.
+func (l limit) valueOn(t *track) float64 {
 	value := largestOf(t.phasor)
 	if t.top.Value > value && !math.IsInf(t.top.Value, 0) {
 		value = t.top.Value
@@ -167,7 +172,7 @@ func (l limit) finding(t *track) string {
 	case onBoth:
 		value = max(value, largestOf(t.fdtd), largestOf(t.peak))
 	}
-	return distance(value, l.value) + " " + l.name
+	return value
 }
 
 // distance says how far a value is from a limit: in per cent of the limit, or

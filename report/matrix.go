@@ -20,7 +20,7 @@ func (d *document) sideBySide() {
 	if len(m.Cases) < 2 || len(m.Rows) == 0 {
 		return
 	}
-	d.b.Need(d.b.Body() * 0.4)
+	d.b.Need(d.b.Body() * caseRoom)
 	d.b.Space(22)
 	d.b.Heading("Cases side by side", 120)
 	d.b.Paragraph(matrixFinding(m))

@@ -18,13 +18,15 @@ import (
 
 // Options steer WritePDF. The zero value is the default.
 type Options struct {
-	Paper string // "a4" (the default) or "letter"
+	Paper   string // "a4" (the default) or "letter"
+	Full    bool   // every case with all its figures and tables, not the nominal alone
+	Summary bool   // the cover alone, on one page; the attachments stay
 }
 
 // WritePDF writes the record as a PDF document, written to PDF/A-3b, with the
 // design, the files it reads and the outcome attached.
 //
-// It returns an error for an unknown paper, for a text with a character that
+// It returns an error for an unknown paper, for Full and Summary together, for a text with a character that
 // the document's fonts do not have, for a record that cannot be written as JSON
 // or CSV, and for a failing w.
 func WritePDF(w io.Writer, r *record.Record, opt Options) error {
@@ -39,18 +41,13 @@ func WritePDF(w io.Writer, r *record.Record, opt Options) error {
 	return explain(err)
 }
 
-// finish brings what was laid out into the form to be kept. r is the record as
-// it was, for what is attached.
+// finish brings what was laid out into the form to be kept.
 func (d *document) finish(r *record.Record) ([]byte, error) {
 	var pages bytes.Buffer
 	if err := d.b.Write(&pages); err != nil {
 		return nil, err
 	}
-	files, err := attachments(r)
-	if err != nil {
-		return nil, err
-	}
-	return archive.Finish(pages.Bytes(), properties(r), files)
+	return archive.Finish(pages.Bytes(), properties(r), d.files)
 }
 
 // build lays out the whole document.
@@ -59,9 +56,19 @@ func build(r *record.Record, opt Options) (*document, error) {
 	if err != nil {
 		return nil, err
 	}
-	d := &document{r: cleaned(r)}
+	files, err := attachments(r)
+	if err != nil {
+		return nil, explain(err)
+	}
+	d := &document{r: cleaned(r), opt: opt, files: files}
+	if opt.Summary {
+		d.summary(paper)
+		return d, nil
+	}
 	d.b = sheet.New(meta(d.r), paper)
-	d.cover()
+	d.cover(everything)
+	d.b.Contents()
+	d.compliance()
 	d.sideBySide()
 	d.claims()
 	d.design()
@@ -76,6 +83,9 @@ func build(r *record.Record, opt Options) (*document, error) {
 }
 
 func (o Options) paper() (sheet.Paper, error) {
+	if o.Full && o.Summary {
+		return sheet.Paper{}, errors.New("report: a full record and a summary exclude each other")
+	}
 	switch o.Paper {
 	case "", "a4":
 		return sheet.A4, nil
@@ -88,8 +98,11 @@ func (o Options) paper() (sheet.Paper, error) {
 // document is a record being laid out.
 type document struct {
 	r       *record.Record
+	opt     Options
+	files   []archive.Attachment
 	b       *sheet.Book
 	figures int
+	left    []string // what the case in work leaves out
 
 	pictures []picture // every figure so far, and their names
 	taken    map[string]bool

@@ -2,10 +2,8 @@ package report
 
 import (
 	"slices"
-	"strings"
 
 	"linewitness/report/format"
-	"linewitness/report/ink"
 	"linewitness/report/sheet"
 	"linewitness/sim/record"
 )
@@ -91,43 +89,4 @@ func gathered(ps []record.Pedigree) []record.Pedigree {
 		last = p.What
 	}
 	return out
-}
-
-// toConfirm names on the cover what the record rests on and nobody has
-// confirmed.
-func (d *document) toConfirm() {
-	var parts []string
-	said := map[string]bool{}
-	for _, k := range d.lineKinds() {
-		s := confirmations(k.Pedigree)
-		if key := k.Name + ":" + s; s != "" && !said[key] { // a case may have it again
-			said[key] = true
-			parts = append(parts, "Line "+k.label+": "+s)
-		}
-	}
-	if len(parts) == 0 {
-		return
-	}
-	d.b.Space(4)
-	d.b.Verdict(sheet.Confirm, ink.Doubt, "To be confirmed:", strings.Join(parts, ". ")+". The tables of the design as modelled have each value.")
-}
-
-// confirmations lists what of a line needs confirmation, by origin.
-func confirmations(ps []record.Pedigree) string {
-	var groups []string
-	for _, g := range []struct{ kind, words string }{
-		{"catalogue", "from the cable table (nominal, from memory; to be replaced by the sheet of the cable in hand)"},
-		{"assumed", "assumed"},
-	} {
-		var whats []string
-		for _, p := range ps {
-			if p.Kind == g.kind && !slices.Contains(whats, p.What) {
-				whats = append(whats, p.What)
-			}
-		}
-		if len(whats) > 0 {
-			groups = append(groups, strings.Join(whats, ", ")+" "+g.words)
-		}
-	}
-	return strings.Join(groups, "; ")
 }

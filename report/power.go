@@ -23,6 +23,10 @@ func (d *document) power(c *record.Case) {
 	if t := powerTable(c); len(t.Rows) > 0 {
 		d.b.Table(t)
 	}
+	if !d.whole(c) {
+		d.leave("the power flow")
+		return
+	}
 	d.powerFlow(c)
 }
 

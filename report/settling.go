@@ -31,8 +31,14 @@ func (d *document) settling(c *record.Case) {
 	if !proof {
 		title, keep = "Spectrum", settlingHeight+2*figure.KeyHeight
 	}
+	if proof && !d.proven(c) {
+		keep = settlingHeight + 2*figure.KeyHeight + 40
+	}
 	d.b.Subheading(title, keep)
-	if proof {
+	if proof && !d.proven(c) {
+		d.b.Note(d.settlingWords(c))
+		d.leave("the tables of the settling")
+	} else if proof {
 		d.b.Table(d.settlingRule(c))
 		d.b.Note(factorNote(s, d.r.Design.Tolerance))
 		d.settlingTimes(c)
@@ -44,6 +50,17 @@ func (d *document) settling(c *record.Case) {
 		return
 	}
 	d.settlingPanels(c, d.departurePanel(c))
+}
+
+// settlingWords says in a sentence how the rule was kept.
+func (d *document) settlingWords(c *record.Case) string {
+	s, most := c.Settling, format.Percent(d.r.Design.Tolerance)
+	words := "Steady after " + format.SI(s.Time, "s") + ", " + format.Plural(int64(s.Periods), "period") + ": remaining error " + format.Percent(s.Residual) +
+		", mean " + format.Percent(s.Mean) + ", second and third harmonic " + format.Percent(s.Harmonic) + ", each at most " + most
+	if s.Passes > 0 {
+		words += ", in " + format.Plural(int64(s.Passes), "window") + " in a row"
+	}
+	return words + ". Amplitude kept over the longest round trip: " + format.Number(s.LoopFactor) + " measured, " + format.Number(s.Predicted.LoopFactor) + " predicted."
 }
 
 // factorNote says why the measured loop factor is not the predicted one, where

@@ -40,7 +40,8 @@ func TestSettlingText(t *testing.T) {
 	if s := "From the stop"; strings.Contains(all, squeezed(s)) {
 		t.Errorf("a source that stays on has %q", s)
 	}
-	if n := strings.Count(all, squeezed("Proof of settling")); n != len(reporttest.Feeder().Cases) {
+	after := squeezed(afterContents(pages(t, write(t, reporttest.Feeder(), Options{}))))
+	if n := strings.Count(after, squeezed("Proof of settling")); n != len(reporttest.Feeder().Cases) {
 		t.Errorf("%d proofs, want one a case", n)
 	}
 }

@@ -33,6 +33,9 @@ func (d *document) reflections(c *record.Case) {
 			list = append(list, l)
 		}
 	}
+	if !d.whole(c) {
+		list = d.chosenLoci(c, list)
+	}
 	if len(list) == 0 {
 		return
 	}

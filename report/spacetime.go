@@ -16,6 +16,10 @@ const mapHeight = 236.0
 // spaceTime draws the voltage along the main path against place and time, and
 // writes the bounce table of a chain.
 func (d *document) spaceTime(c *record.Case) {
+	if !d.whole(c) && !d.stressed(c) {
+		d.leaveMap(c)
+		return
+	}
 	m := c.SpaceTime
 	if len(m.Path) == 0 || len(m.Z) == 0 || len(m.T) == 0 {
 		d.bounces(c)
@@ -30,6 +34,16 @@ func (d *document) spaceTime(c *record.Case) {
 		paint: func(cv draw.Canvas) { spaceTimeMap(c).Draw(cv) },
 	})
 	d.bounces(c)
+}
+
+// leaveMap notes that the map and the bounce table are left out.
+func (d *document) leaveMap(c *record.Case) {
+	if len(c.SpaceTime.Path) > 0 {
+		d.leave("the map of place and time")
+	}
+	if len(c.Bounces.Arrivals) > 0 {
+		d.leave("the bounce table")
+	}
 }
 
 // frontLines are the styles of fronts by their passage.

@@ -38,6 +38,9 @@ func pages(t *testing.T, file []byte) []string {
 	return out
 }
 
+// afterContents is the text without the cover and the contents.
+func afterContents(text []string) string { return readable(strings.Join(text[2:], "\n")) }
+
 // pageText joins the texts of a page without a space between them.
 func pageText(t *testing.T, content []byte) string {
 	t.Helper()

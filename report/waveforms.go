@@ -20,6 +20,11 @@ func (d *document) waveforms(c *record.Case) {
 	if len(list) == 0 {
 		return
 	}
+	if !d.whole(c) {
+		var others []string
+		list, others = loudest(list)
+		d.leave(namesOf("waveforms", "place", others))
+	}
 	each := 1
 	if len(list) > crowdedWaveforms {
 		each = 2

@@ -1,6 +1,8 @@
 package sheet
 
 import (
+	"math"
+
 	"gonum.org/v1/plot/vg"
 	"linewitness/report/canvas"
 	"linewitness/report/format"
@@ -136,23 +138,38 @@ func (b *Book) arrange(room float64) arrangement {
 	return l
 }
 
-// inColumns parts a list into n columns of about equal heights, and returns the
-// height of the highest.
+// inColumns parts a list into n columns of about equal heights, between chapters
+// where one ends nearly there, and returns the height of the highest.
 func inColumns(list []entry, n int) (columns [][]entry, units float64) {
-	total := 0.0
-	for _, e := range list {
-		total += e.units()
+	heights := make([]float64, len(list)+1) // of all up to an entry
+	for i, e := range list {
+		heights[i+1] = heights[i] + e.units()
 	}
-	next, filled := 0, 0.0
+	from := 0
 	for i := range n {
-		from, height := next, 0.0
-		for next < len(list) && (i == n-1 || filled < total*float64(i+1)/float64(n)) {
-			filled += list[next].units()
-			height += list[next].units()
-			next++
+		to := len(list)
+		if i < n-1 {
+			to = breakNear(list, heights, from, heights[len(list)]*float64(i+1)/float64(n), heights[len(list)]/float64(n))
 		}
-		columns = append(columns, list[from:next])
-		units = max(units, height)
+		columns = append(columns, list[from:to])
+		units = max(units, heights[to]-heights[from])
+		from = to
 	}
 	return columns, units
+}
+
+// breakNear is where a column ends best that is to end at a height.
+func breakNear(list []entry, heights []float64, from int, height, column float64) int {
+	const off = 0.12 // of a column, that one may be higher or lower
+	best, to := math.Inf(1), from
+	for k := from; k <= len(list); k++ {
+		away := math.Abs(heights[k] - height)
+		if k < len(list) && list[k].level == 0 && away < off*column {
+			away -= column
+		}
+		if away < best {
+			best, to = away, k
+		}
+	}
+	return to
 }

@@ -15,7 +15,10 @@ func (b *Book) Overline(s string) {
 // Title writes the title of the document.
 func (b *Book) Title(s string) {
 	b.outline("Summary", 0, 0) // an outline must begin with its first level
-	b.lines(TitleStyle, s)
+	const most = 4             // lines; the listing of the design file has the rest
+	for _, line := range First(TitleStyle.Wrap(s, b.Width()), most) {
+		b.lines(TitleStyle, line)
+	}
 	b.Block(4, func(c draw.Canvas) {
 		rule(c, c.Min.X.Points(), c.Max.X.Points(), c.Min.Y.Points(), 1.4)
 	})
@@ -27,12 +30,22 @@ type Field struct {
 	Label, Value string
 	Face         typeset.Face
 	Wide         bool
+	Lines        int // of the value at most; 0 means twelve
 }
 
-const (
-	fieldLabel = 108.0 // width of the labels
-	fieldLines = 12    // at most; the listing of the design file has the rest
-)
+// FieldLabel is the width of the labels.
+const FieldLabel = 108.0
+
+const fieldLines = 12 // at most; the listing of the design file has the rest
+
+// lines breaks the value of a field into lines.
+func (f Field) lines(room float64) []string {
+	most := fieldLines
+	if f.Lines > 0 {
+		most = min(f.Lines, fieldLines)
+	}
+	return First(fieldStyle(f).Wrap(f.Value, room), most)
+}
 
 // First returns the first n lines, with an ellipsis if there are more.
 func First(lines []string, n int) []string {
@@ -63,7 +76,7 @@ func (b *Book) Fields(fields []Field) {
 // fieldsHeight returns the height of fields with a line to each.
 func (b *Book) fieldsHeight(fields []Field) (h float64) {
 	for _, f := range fields {
-		n := len(First(fieldStyle(f).Wrap(f.Value, b.Width()-fieldLabel-6), fieldLines))
+		n := len(f.lines(b.Width() - FieldLabel - 6))
 		if f.Wide {
 			h += float64(n)*leadingOf(BodyStyle) + 2
 		} else { // two to a line
@@ -74,19 +87,19 @@ func (b *Book) fieldsHeight(fields []Field) (h float64) {
 }
 
 func (b *Book) fieldRow(fields []Field, width float64) {
-	room := width - fieldLabel - 6
+	room := width - FieldLabel - 6
 	var values [][]string
 	most := 1
 	for _, f := range fields {
-		values = append(values, First(fieldStyle(f).Wrap(f.Value, room), fieldLines))
+		values = append(values, f.lines(room))
 		most = max(most, len(values[len(values)-1]))
 	}
 	b.Block(float64(most)*leadingOf(BodyStyle)+2, func(c draw.Canvas) {
 		for i, f := range fields {
 			x, y := c.Min.X.Points()+float64(i)*width, c.Max.Y.Points()-BodyStyle.Size*ascender
-			b.Draw(c, NoteStyle, x, y, fieldLabel-4, f.Label)
+			b.Draw(c, NoteStyle, x, y, FieldLabel-4, f.Label)
 			for k, line := range values[i] {
-				b.Draw(c, fieldStyle(f), x+fieldLabel, y-float64(k)*leadingOf(BodyStyle), room, line)
+				b.Draw(c, fieldStyle(f), x+FieldLabel, y-float64(k)*leadingOf(BodyStyle), room, line)
 			}
 		}
 	})

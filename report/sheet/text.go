@@ -2,6 +2,7 @@ package sheet
 
 import (
 	"image/color"
+	"math"
 	"strings"
 
 	"gonum.org/v1/plot/vg"
@@ -46,6 +47,16 @@ func (b *Book) Heading(s string, keep float64) {
 func (b *Book) Subheading(s string, keep float64) {
 	b.Space(11)
 	b.outline(s, 1, leadingOf(SubheadStyle)+4+keep)
+	b.lines(SubheadStyle, s)
+	b.headed = true
+	b.Space(4)
+}
+
+// Label is a heading of the second level that neither the outline nor the
+// contents have.
+func (b *Book) Label(s string, keep float64) {
+	b.Space(11)
+	b.Need(leadingOf(SubheadStyle) + 4 + keep)
 	b.lines(SubheadStyle, s)
 	b.headed = true
 	b.Space(4)
@@ -190,6 +201,11 @@ func (b *Book) Draw(c vg.Canvas, st typeset.Style, x, y, room float64, s string)
 
 // Verdict writes a paragraph that begins with a mark and a word.
 func (b *Book) Verdict(m Mark, clr color.Color, word, s string) {
+	b.VerdictOf(math.MaxInt, m, clr, word, s)
+}
+
+// VerdictOf is Verdict with so many lines at most.
+func (b *Book) VerdictOf(most int, m Mark, clr color.Color, word, s string) {
 	const indent = 14
 	st := BodyStyle
 	lead := st.In(typeset.Bold).At(10).Of(clr)
@@ -199,6 +215,7 @@ func (b *Book) Verdict(m Mark, clr color.Color, word, s string) {
 		rest := strings.TrimPrefix(s[len(lines[0]):], " ")
 		lines = append(lines[:1:1], st.Wrap(rest, b.Width()-indent)...)
 	}
+	lines = First(lines, most)
 	for i, line := range lines {
 		b.keep(i, len(lines), leadingOf(st))
 		b.Block(leadingOf(st), func(c draw.Canvas) {
