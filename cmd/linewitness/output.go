@@ -36,12 +36,12 @@ type product struct {
 
 // products makes the files of a record in the given formats; stem is their
 // path without suffix.
-func (a *app) products(ctx context.Context, r *record.Record, stem string, formats *choices, paper string) ([]product, error) {
+func (a *app) products(ctx context.Context, r *record.Record, stem string, formats *choices, opt report.Options) ([]product, error) {
 	var out []product
 	if formats.has(formatPDF) {
 		pdf, err := await(ctx, func() ([]byte, error) {
 			var b bytes.Buffer
-			err := a.writePDF(&b, r, report.Options{Paper: paper})
+			err := a.writePDF(&b, r, opt)
 			return b.Bytes(), err
 		})
 		if err != nil {

@@ -7,6 +7,7 @@ import (
 
 	"github.com/spf13/cobra"
 
+	"linewitness/report"
 	"linewitness/report/data"
 	"linewitness/sim"
 	"linewitness/sim/record"
@@ -21,6 +22,8 @@ the requirements, prints a short table and writes the record.
       --formats LIST     pdf, json, csv with commas, or none         (default pdf,json)
       --figures DIR      draw each figure into DIR as SVG and PNG, for slides
       --paper SIZE       a4 or letter                                (default a4)
+      --full             every case in the PDF with all its figures and tables
+      --summary          one page: verdict, worst margins, cases; the attachments stay
       --grids N          grids of the convergence study, 3 or 1      (default 3)
       --json             print the JSON on standard output instead of the table
       --no-bound         let a run pass the bounds on work and memory
@@ -49,6 +52,8 @@ type verifyOptions struct {
 	several bool   // designs
 	formats choices
 	paper   choice
+	full    bool
+	summary bool
 	grids   *choice
 	json    bool
 	noBound bool
@@ -76,6 +81,8 @@ func (a *app) verifyCommand() *cobra.Command {
 	flags.StringVar(&opt.figures, "figures", "", "draw each figure into a directory")
 	flags.Var(&opt.paper, "paper", "paper size of the PDF")
 	addGrids(cmd, opt.grids)
+	flags.BoolVar(&opt.full, "full", false, "every case with all its figures")
+	flags.BoolVar(&opt.summary, "summary", false, "the PDF as one page")
 	flags.BoolVar(&opt.json, "json", false, "print the JSON instead of the table")
 	flags.BoolVar(&opt.noBound, "no-bound", false, "let a run pass the bounds")
 	// The errors are of names that are no options; the tests complete each.
@@ -89,6 +96,9 @@ func (a *app) verifyCommand() *cobra.Command {
 // verifyAll goes through the designs in order. Only an interruption or a
 // wrong command line stops it; all else counts in the status.
 func (a *app) verifyAll(ctx context.Context, paths []string, opt *verifyOptions) error {
+	if opt.full && opt.summary {
+		return usageError("verify: --full and --summary exclude each other", "without either the PDF has the nominal case in full and of the others what differs")
+	}
 	jobs, err := opt.jobs(paths)
 	if err != nil {
 		return err
@@ -139,7 +149,7 @@ func (a *app) verifyOne(ctx context.Context, j job, designs []string, opt *verif
 	if err != nil {
 		return statusVerified, verifyError(j.file.Name, err)
 	}
-	files, err := a.products(ctx, r, j.stem, &opt.formats, opt.paper.value)
+	files, err := a.products(ctx, r, j.stem, &opt.formats, report.Options{Paper: opt.paper.value, Full: opt.full, Summary: opt.summary})
 	var figures []product
 	if err == nil {
 		figures, err = a.drawn(ctx, r, j, opt)
