@@ -4,6 +4,7 @@ import (
 	"bytes"
 	"context"
 	"errors"
+	"io"
 	"os"
 
 	"github.com/spf13/cobra"
@@ -166,7 +167,7 @@ func (a *app) deliver(ctx context.Context, c *record.Comparison, opt *compareOpt
 		}
 		a.stdout.Write(text)
 	} else {
-		writeComparison(a.stdout, c)
+		a.print(func(w io.Writer) { writeComparison(w, c) })
 	}
 	if err := writeProducts(ctx, files); err != nil {
 		return err

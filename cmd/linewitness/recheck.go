@@ -86,7 +86,7 @@ func (a *app) recheck(ctx context.Context, path string, opt *recheckOptions) err
 	if opt.json {
 		err = report.writeJSON(a.stdout)
 	} else {
-		report.write(a.stdout)
+		a.print(report.write)
 	}
 	if err != nil {
 		return fileError(err.Error(), "")
@@ -120,11 +120,11 @@ func (a *app) openRecord(ctx context.Context, path string) (*filed, error) {
 func unpack(path string, text []byte) (*filed, error) {
 	f, err := archive.Open(text)
 	if err != nil {
-		return nil, usageError(displayName(path)+": "+err.Error(), recordHint(err))
+		return nil, usageError(printable(displayName(path)+": "+err.Error()), recordHint(err))
 	}
 	n, err := result.Read(f.Result().Data)
 	if err != nil {
-		return nil, usageError(fmt.Sprintf("%s: %s, which is attached: %s", displayName(path), f.Result().Name, err), "")
+		return nil, usageError(printable(fmt.Sprintf("%s: %s, which is attached: %s", displayName(path), f.Result().Name, err)), "")
 	}
 	return &filed{path, f, n}, nil
 }
@@ -144,7 +144,7 @@ func recordHint(err error) string {
 
 // solveAgain verifies the design of a record. Nothing is read but the record.
 func (a *app) solveAgain(ctx context.Context, old *filed, noBound bool) (*record.Record, error) {
-	file, err := a.loadFrom(ctx, old.file.Design().Name, old.file.Design().Data, old.attached)
+	file, err := a.loadFrom(ctx, printable(old.file.Design().Name), old.file.Design().Data, old.attached)
 	if err != nil {
 		return nil, err
 	}

@@ -33,8 +33,8 @@ func (r *recheckReport) write(w io.Writer) {
 		rows = append(rows, []string{"largest", plainNumber(d.Ratio()) + " of the change that is allowed, " + d.Path})
 	}
 	writeTable(w, rows)
-	writeDifferences(w, "different:", r.out.Differences)
-	writeDifferences(w, "not counted:", r.out.Said)
+	writeDifferences(w, "different:", r.out.Differences, r.out.Further)
+	writeDifferences(w, "not counted:", r.out.Said, 0)
 }
 
 func countText(c recheck.Count) string {
@@ -42,8 +42,9 @@ func countText(c recheck.Count) string {
 		whole(c.Total()), whole(c.Same), whole(c.Within), whole(c.Different))
 }
 
-// writeDifferences lists differences under a title; there is nothing without any.
-func writeDifferences(w io.Writer, title string, ds []recheck.Difference) {
+// writeDifferences lists differences under a title and counts the further ones;
+// there is nothing without any.
+func writeDifferences(w io.Writer, title string, ds []recheck.Difference, further int) {
 	if len(ds) == 0 {
 		return
 	}
@@ -54,8 +55,8 @@ func writeDifferences(w io.Writer, title string, ds []recheck.Difference) {
 		rows = append(rows, []string{d.Path, d.Then, d.Now, plainNumber(d.Ratio()), d.Why})
 	}
 	writeTable(w, rows)
-	if more := len(ds) - mostDifferences; more > 0 {
-		fmt.Fprintf(w, "  and %s more; --json lists them all\n", whole(more))
+	if more := len(ds) - mostDifferences + further; more > 0 {
+		fmt.Fprintf(w, "  and %s more; --json lists more of them\n", whole(more))
 	}
 }
 
@@ -129,10 +130,11 @@ func (r *recheckReport) writeJSON(w io.Writer) error {
 		Texts       recheck.Count    `json:"texts"`
 		Largest     *jsonDifference  `json:"largest"`
 		Differences []jsonDifference `json:"differences"`
+		Further     int              `json:"further"`
 		NotCounted  []jsonDifference `json:"not_counted"`
 	}{
 		r.out.Status().String(), r.path, headingOf(r.then), by(r.then), by(r.now), gridsOf(r.now), r.out.Numbers, r.out.Texts,
-		largest, jsonDifferences(r.out.Differences), jsonDifferences(r.out.Said),
+		largest, jsonDifferences(r.out.Differences), r.out.Further, jsonDifferences(r.out.Said),
 	})
 }
 

@@ -46,7 +46,7 @@ func (a *app) readSide(ctx context.Context, path string) (*side, error) {
 		s.side.Kind = resultKind
 		n, err := result.Read(text)
 		if err != nil {
-			return nil, usageError(displayName(path)+": "+err.Error(), "")
+			return nil, usageError(printable(displayName(path)+": "+err.Error()), "")
 		}
 		s.set(n)
 		return s, nil
@@ -63,7 +63,7 @@ func (a *app) readRecord(ctx context.Context, path string, text []byte, s *side)
 		return err
 	}
 	s.set(old.result)
-	s.file, err = a.loadFrom(ctx, old.file.Design().Name, old.file.Design().Data, old.attached)
+	s.file, err = a.loadFrom(ctx, printable(old.file.Design().Name), old.file.Design().Data, old.attached)
 	return err
 }
 

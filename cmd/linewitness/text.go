@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"io"
 	"strings"
+	"unicode"
 	"unicode/utf8"
 
 	"linewitness/report/format"
@@ -36,6 +37,25 @@ func counted(n int, noun string) string { return typeable.Replace(format.Plural(
 
 // whole is a number of things.
 func whole(n int) string { return typeable.Replace(format.Count(int64(n))) }
+
+// print prints what write writes. Texts of a file from outside may be in it, and these
+// must not steer the terminal.
+func (a *app) print(write func(io.Writer)) {
+	var b strings.Builder
+	write(&b)
+	io.WriteString(a.stdout, printable(b.String()))
+}
+
+// printable is a text with a space for everything that a terminal does not print,
+// but for ends of lines.
+func printable(s string) string {
+	return strings.Map(func(r rune) rune {
+		if r == '\n' || unicode.IsPrint(r) {
+			return r
+		}
+		return ' '
+	}, s)
+}
 
 // writeTable writes rows of cells with two spaces before each row and between
 // columns, each column as wide as its widest cell, and no space at the end of

@@ -90,18 +90,20 @@ func (c *comparison) count(at *place, then, now *result.Node, compare func(*plac
 	v := compare(at, r, then, now)
 	d := Difference{Path: at.label, Then: printedValue(then), Now: printedValue(now), Change: v.change, Allowed: v.allowed}
 	if r == nil {
-		c.out.Unruled = append(c.out.Unruled, strings.Join(at.path, "."))
+		if len(c.out.Unruled) < Most {
+			c.out.Unruled = append(c.out.Unruled, strings.Join(at.path, "."))
+		}
 		d.Why = "no rule for it: compared digit by digit"
 	} else {
 		d.Why = r.why
 	}
 	if v.status != Same && r != nil && r.class.said {
-		c.out.Said = append(c.out.Said, d)
+		c.say(d)
 		return
 	}
 	c.book(then, v.status)
 	if v.status == Different {
-		c.out.Differences = append(c.out.Differences, d)
+		c.differ(d)
 	}
 	if v.status != Same {
 		c.largest(d)
@@ -131,7 +133,7 @@ func (c *comparison) largest(d Difference) {
 // lost books a value of the record, with all that is in it, that has nothing to
 // be compared with.
 func (c *comparison) lost(at *place, then *result.Node, why string) {
-	c.out.Differences = append(c.out.Differences, Difference{
+	c.differ(Difference{
 		Path: at.label, Then: printedValue(then), Now: none, Change: math.NaN(), Allowed: math.NaN(), Why: why,
 	})
 	c.bookAll(then)
@@ -158,9 +160,23 @@ func (c *comparison) gained(at *place, now *result.Node, ofFormat bool) {
 		Why: "the record does not have it",
 	}
 	if ofFormat {
-		c.out.Said = append(c.out.Said, d)
+		c.say(d)
 		return
 	}
 	c.out.Texts.add(Different)
+	c.differ(d)
+}
+
+func (c *comparison) differ(d Difference) {
+	if len(c.out.Differences) == Most {
+		c.out.Further++
+		return
+	}
 	c.out.Differences = append(c.out.Differences, d)
+}
+
+func (c *comparison) say(d Difference) {
+	if len(c.out.Said) < Most {
+		c.out.Said = append(c.out.Said, d)
+	}
 }

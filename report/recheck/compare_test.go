@@ -142,6 +142,16 @@ func TestUnruled(t *testing.T) {
 	}
 }
 
+// A result that was made to fill the memory is compared all the same, and its
+// differences are counted.
+func TestMost(t *testing.T) {
+	many := strings.Repeat(`"w", `, Most+7)
+	out := Compare(document(t, `"warnings": [`, `"warnings": [`+many), document(t))
+	if len(out.Differences) != Most || out.Further != 8 || out.Texts.Different != Most+8 {
+		t.Errorf("%d differences and %d further, %+v", len(out.Differences), out.Further, out.Texts)
+	}
+}
+
 // FuzzCompare: any two results can be compared, and a result is the same as itself.
 func FuzzCompare(f *testing.F) {
 	f.Add([]byte(small), []byte(strings.ReplaceAll(small, "10", "null")))

@@ -40,18 +40,23 @@ func (c Count) Total() int { return c.Same + c.Within + c.Different }
 type Outcome struct {
 	Numbers Count // a complex number counts as two
 	Texts   Count // texts, flags and what is there at all
-	// Differences are the values that are different, in the order of the record.
+	// Differences are the values that are different, in the order of the record;
+	// the first Most of them, and Further counts the rest.
 	Differences []Difference
+	Further     int
 	// Said are differences that count for nothing: the version of the program, and
 	// values that the record's version did not write yet.
 	Said []Difference
 	// Largest is the change that comes nearest to what is allowed or passes it by
 	// most; nil if no number has changed.
 	Largest *Difference
-	// Unruled are the paths for which the table has no rule. Their values are
+	// Unruled are the paths, at most Most, for which the table has no rule. Their values are
 	// compared digit by digit.
 	Unruled []string
 }
+
+// Most bounds the lists of an outcome: a record may have been made to fill the memory.
+const Most = 10000
 
 // A Difference is a value that changed.
 type Difference struct {

@@ -16,7 +16,7 @@ import (
 const (
 	MaxBytes = 64 << 20
 	maxDepth = 32
-	maxNodes = 4 << 20
+	maxNodes = 2 << 20
 )
 
 // Read reads a document.

@@ -82,11 +82,13 @@ func TestBetween(t *testing.T) {
 		{"the grid", []string{"agreement: 0.5 %", "agreement: 0.2 %, max_periods: 9000"}, []string{"changed grid, agreement: 0.5 % -> 0.2 %", "added grid, max_periods:  -> 9000"}},
 		{"a part of the file", []string{"grid: {agreement: 0.5 %}\n", ""}, []string{"removed grid: {agreement: 0.5 %} -> "}},
 		{
-			"a revision", []string{"revision: A,", "revision: B,", "text: First}", "text: First}, {revision: B, date: 2026-02-01, by: AB, text: Longer}"},
+			"a revision",
+			[]string{"revision: A,", "revision: B,", "text: First}", "text: First}, {revision: B, date: 2026-02-01, by: AB, text: Longer}"},
 			[]string{"changed record, revision: A -> B", "added record, history B:  -> {revision: B, date: 2026-02-01, by: AB, text: Longer}"},
 		},
 		{
-			"several, in the order of the file", []string{"max: 1.5", "max: 1.4", "20 V peak", "21 V peak", "1.2 uH", "1.3 uH"},
+			"several, in the order of the file",
+			[]string{"max: 1.5", "max: 1.4", "20 V peak", "21 V peak", "1.2 uH", "1.3 uH"},
 			[]string{"changed source, emf: 20 V peak -> 21 V peak", "changed load aerial, l: 1.2 uH -> 1.3 uH", "changed requirement R1, max: 1.5 -> 1.4"},
 		},
 	} {
