@@ -186,3 +186,34 @@ func TestReflectionsOfNothing(t *testing.T) {
 		t.Errorf("finding %q", got)
 	}
 }
+
+// Of matched sections without a limit only the names are given; but one chart is
+// always there.
+func TestUneven(t *testing.T) {
+	n := reporttest.Star(3)
+	n.Loads[1].R = 300
+	c := n.Case("nominal", reporttest.Options{Error: 1e-4, Loop: 0.3})
+	var list []*locus
+	for _, m := range c.Model.Sections {
+		list = append(list, newLocus(&c, m))
+	}
+	drawn, even := uneven(&c, list)
+	var names []string
+	for _, l := range drawn {
+		names = append(names, l.section.Name)
+	}
+	if got := strings.Join(names, " "); got != "feed branch_2" {
+		t.Errorf("drawn: %s", got)
+	}
+	if got := plain(strings.Join(even, ", ")); got != "branch_1 (−2058°), branch_3 (−2062°)" {
+		t.Errorf("not drawn: %s", got)
+	}
+	if drawn, even = uneven(&c, list[1:2]); len(drawn) != 1 || len(even) != 0 {
+		t.Errorf("%d drawn of one section", len(drawn))
+	}
+	limit := 1.5
+	c.Requirements = []record.Requirement{{ID: "R", Quantity: "vswr", Section: "branch_1", Subject: "branch_1, to end", Max: &limit}}
+	if drawn, _ = uneven(&c, list); len(drawn) != 3 {
+		t.Errorf("%d drawn with a limit on one more", len(drawn))
+	}
+}

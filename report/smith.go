@@ -36,6 +36,7 @@ func (d *document) reflections(c *record.Case) {
 	if !d.whole(c) {
 		list = d.chosenLoci(c, list)
 	}
+	list, even := uneven(c, list)
 	if len(list) == 0 {
 		return
 	}
@@ -45,13 +46,40 @@ func (d *document) reflections(c *record.Case) {
 		g.height = figure.ChartHeight(d.b.Width()*chartShare/float64(g.columns), chartLines)
 	}
 	key := reflectionKey(c, list)
-	d.b.Subheading("Reflection and phase along the sections", g.total()+70)
+	var rows []picture
+	for i := 0; i < len(list); i += g.columns {
+		rows = append(rows, g.row(c, list[i:min(i+g.columns, len(list))], key))
+	}
+	const note = 45 // of the text and the key
+	d.b.Subheading("Reflection and phase along the sections", note+g.total()+d.b.CaptionHeight("Figure 00", rows[0].finding))
 	d.b.Note("Reflection coefficient Γ in its plane (chart after P. H. Smith), in each section against its own " + z0 + " and looking away from the generator. " +
 		"Circles: resistance and reactance in units of that " + z0 + ". A turn is half a wavelength. Phase of V relative to the EMF of the source, unwrapped.")
 	d.key(key)
-	for i := 0; i < len(list); i += g.columns {
-		d.reflectionRow(c, list[i:min(i+g.columns, len(list))], g, key)
+	for _, p := range rows {
+		d.show(p)
 	}
+	if len(even) > 0 {
+		d.b.Note("Not drawn, for |Γ| stays below " + format.Short(evenReflection) + " there and the phase falls evenly: " + strings.Join(even, ", ") + ".")
+	}
+}
+
+// evenReflection is the size of the reflection coefficient below which a section
+// without a limit on it is not drawn: all of it is a dot and a straight line.
+const evenReflection = 0.01
+
+// uneven returns the sections worth a chart, one at least, and of the others the
+// names and by how much the phase turns.
+func uneven(c *record.Case, list []*locus) (drawn []*locus, even []string) {
+	for i, l := range list {
+		small := l.shown() && max(cmplx.Abs(l.near), cmplx.Abs(l.far), cmplx.Abs(l.nearF), cmplx.Abs(l.farF)) < evenReflection
+		if small && len(reflectionLimits(c, l)) == 0 && !(i == len(list)-1 && len(drawn) == 0) {
+			first, last, _ := ends(newPhaseTrack(l).phasor)
+			even = append(even, l.section.Name+" ("+format.Electrical(last-first)+")")
+			continue
+		}
+		drawn = append(drawn, l)
+	}
+	return drawn, even
 }
 
 // chartGrid is how charts and phases stand: side by side where the sections are
@@ -79,8 +107,8 @@ func (g chartGrid) cells(c draw.Canvas, i int) (chart, phase draw.Canvas) {
 	return draw.Crop(c, 0, 0, vg.Points(phaseHeight), 0), draw.Crop(c, 0, 0, 0, -vg.Points(g.height))
 }
 
-// reflectionRow draws one row of sections.
-func (d *document) reflectionRow(c *record.Case, row []*locus, g chartGrid, key []figure.Entry) {
+// row is the picture of one row of sections.
+func (g chartGrid) row(c *record.Case, row []*locus, key []figure.Entry) picture {
 	var charts []*figure.Chart
 	var phases []*phaseTrack
 	var findings []string
@@ -91,7 +119,7 @@ func (d *document) reflectionRow(c *record.Case, row []*locus, g chartGrid, key 
 		charts, phases, names = append(charts, chart), append(phases, t), append(names, l.section.Name)
 		findings = append(findings, finding+"; "+t.finding()+".")
 	}
-	d.show(picture{
+	return picture{
 		name: pictureName(c, names...), finding: strings.Join(findings, " "), height: g.total(), key: key,
 		paint: func(cv draw.Canvas) {
 			for i, chart := range charts {
@@ -100,7 +128,7 @@ func (d *document) reflectionRow(c *record.Case, row []*locus, g chartGrid, key 
 				phases[i].panel().Draw(lower)
 			}
 		},
-	})
+	}
 }
 
 // reflectionKey says what the lines of the charts are.
@@ -116,7 +144,7 @@ func reflectionKey(c *record.Case, list []*locus) []figure.Entry {
 		}
 	}
 	for _, l := range list {
-		if l.turns() > manyTurns {
+		if _, ring := l.lines(); l.shown() && ring[1]-ring[0] > figure.RingShows {
 			return append(key, figure.Entry{Style: ink.BandEdge, Band: true, Text: "turns left out"})
 		}
 	}

@@ -38,6 +38,9 @@ type ChartRim struct {
 	Label  string
 }
 
+// RingShows is the least width of a ring that shows, of the radius of the chart.
+const RingShows = 0.01
+
 // The measures of a chart, in points.
 const (
 	chartMargin = 9.0  // around the unit circle: values of reactance, the arrow
@@ -114,8 +117,7 @@ func (ch *Chart) title(c draw.Canvas) {
 // curves draws what is left out, the phasor's line and the points of the time
 // domain.
 func (ch *Chart) curves(p plane) {
-	const visible = 0.004 // of the radius; thinner rings do not show
-	if ch.Ring[1]-ch.Ring[0] > visible {
+	if ch.Ring[1]-ch.Ring[0] > RingShows {
 		p.c.SetColor(ink.Band)
 		p.c.Fill(append(p.circle(ch.Ring[1]), p.hole(ch.Ring[0])...))
 	}

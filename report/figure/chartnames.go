@@ -2,6 +2,7 @@ package figure
 
 import (
 	"math"
+	"math/cmplx"
 
 	"gonum.org/v1/plot/vg"
 	"linewitness/report/ink"
@@ -21,10 +22,12 @@ func (ch *Chart) names(p plane) {
 	}
 	rim := constant(func(t float64) complex128 { return complex(0, t) }, true)
 	taken.curve(len(ch.Lines), []vg.Path{p.path(rim)})
-	for _, e := range ch.Ends {
-		taken.block(around(p.at(e.At)))
+	for i, m := range ch.Rims {
+		taken.curve(len(ch.Lines)+1+i, []vg.Path{p.path(round(m.Radius))})
+		taken.curve(len(ch.Lines)+1+i, []vg.Path{p.path(round(m.Radius + 3/p.radius))})
 	}
 	for _, e := range ch.Ends {
+		taken.block(around(p.at(e.At)))
 		p.mark(e)
 	}
 	for _, e := range ch.Ends {
@@ -58,7 +61,7 @@ func (p plane) beside(taken *raster, at vg.Point, s string, st typeset.Style) {
 	s = st.Fit(s, longestTag)
 	w, h := st.Width(s), st.Size
 	least, best := math.Inf(1), vg.Rectangle{}
-	for _, gap := range []float64{4, 8, 13} {
+	for _, gap := range []float64{4, 8, 13, 22, 32} {
 		for k := range 12 {
 			a := float64(k) * math.Pi / 6
 			x := at.X.Points() + math.Cos(a)*(gap+w/2) - w/2
@@ -75,15 +78,30 @@ func (p plane) beside(taken *raster, at vg.Point, s string, st typeset.Style) {
 	p.write(taken, best, s, st, least)
 }
 
-// onRim writes the label of a limit on its circle, where it hides least.
+// round returns points on a circle around the middle.
+func round(radius float64) []complex128 {
+	const steps = 48
+	out := make([]complex128, steps+1)
+	for k := range out {
+		out[k] = cmplx.Rect(radius, 2*math.Pi*float64(k)/steps)
+	}
+	return out
+}
+
+// onRim writes the label of a limit on its circle, where it hides least, or
+// beside a circle that is too small for it.
 func (p plane) onRim(taken *raster, m ChartRim) {
 	st := tagStyle.Of(ink.Limit)
 	s := st.Fit(m.Label, longestTag)
 	w, h := st.Width(s), st.Size
+	small := m.Radius*p.radius < w
 	least, best := math.Inf(1), vg.Rectangle{}
 	for k := range 24 {
 		a := (-90 + float64(k)*15) * math.Pi / 180
 		r := m.Radius*p.radius - h*0.7
+		if small {
+			r = m.Radius*p.radius + 6 + math.Abs(math.Cos(a))*w/2 + math.Abs(math.Sin(a))*h/2
+		}
 		x, y := p.x+math.Cos(a)*r-w/2, p.y+math.Sin(a)*r-h/2
 		box := vg.Rectangle{Min: vg.Point{X: vg.Points(x), Y: vg.Points(y)}, Max: vg.Point{X: vg.Points(x + w), Y: vg.Points(y + h)}}
 		if !within(box, taken.area) {

@@ -207,5 +207,5 @@ func (m *Map) bar(c draw.Canvas, data vg.Rectangle, top float64, signed bool) {
 		c.StrokeLine2(ink.FrameLine, box.Max.X, at, box.Max.X+vg.Points(2.5), at)
 		tickStyle.Draw(c, box.Max.X.Points()+4.5, at.Points()-2.3, tick.Label, typeset.Left)
 	}
-	textStyle.Draw(c, box.Min.X.Points(), box.Max.Y.Points()+3.5, m.Symbol+format.Space+"("+s.unit()+")", typeset.Left)
+	textStyle.Draw(c, box.Min.X.Points(), box.Max.Y.Points()+3.5+m.headsHeight()/2, m.Symbol+format.Space+"("+s.unit()+")", typeset.Left)
 }
