@@ -15,6 +15,9 @@ type Settings struct {
 	// counts as at rest; 0 leaves that to Rest. Junctions with less than a tenth
 	// of the largest amplitude are not waited for.
 	Phasor float64
+	// Still is how many periods at least a stress run goes on at rest, where the
+	// source does not stop, for whoever wants to look at its end.
+	Still int
 	// Exactly, if not 0, is the length of a settling run in periods, whatever
 	// the rule says: runs on several grids compare the same moment.
 	Exactly int

@@ -80,7 +80,7 @@ type Peak struct {
 // each place and time: no phase is left out and none is scanned.
 //
 // The run ends when the waveform at every junction has kept to that of the
-// steady state, final, for a longest round trip, within Settings.Rest of the
+// steady state, final, for a longest round trip (or Settings.Still), within Settings.Rest of the
 // largest - or, after a stop, when it has kept to zero - and at
 // MaxPeriods at the latest.
 func StressRun(ctx context.Context, net *network.Network, final *Steady, set Settings) (*Stress, error) {
@@ -145,6 +145,10 @@ func (s *stresser) stress() error {
 		stop = periods(st.At+st.Fall, s.m.net.Period())
 	}
 	start := periods(s.m.net.Source.Start.Rise, s.m.net.Period())
+	still := trip + 1
+	if stop < 0 {
+		still = max(still, s.run.set.Still)
+	}
 	quiet := 0
 	for p := 1; p <= s.run.set.MaxPeriods; p++ {
 		s.follow.reserve()
@@ -157,7 +161,7 @@ func (s *stresser) stress() error {
 		if rest > s.run.set.Rest || stop < 0 && s.run.set.Phasor > 0 && phasor > s.run.set.Phasor {
 			quiet = 0
 		}
-		if quiet >= trip+1 && p >= max(start, stop)+trip+1 {
+		if quiet >= still && p >= max(start, stop)+trip+1 {
 			s.done = true
 			break
 		}

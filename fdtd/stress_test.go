@@ -4,6 +4,7 @@ import (
 	"context"
 	"math"
 	"math/cmplx"
+	"slices"
 	"testing"
 
 	"linewitness/sim/network"
@@ -241,5 +242,36 @@ func TestPeakCurrentAtTheEnds(t *testing.T) {
 				}
 			}
 		}
+	}
+}
+
+// TestStill: a run goes on at rest for as long as it is asked to, and its last
+// periods are kept: the tail is their end.
+func TestStill(t *testing.T) {
+	net := lossyCascade()
+	net.Source.Start = network.Start{Rise: 3 / testFrequency, Phase: 0.7}
+	g := fixedGrid(net, 60)
+	st := settled(t, net, g, 1e-8)
+	run := func(still int) *Stress {
+		s, err := StressRun(context.Background(), net, st, Settings{Still: still})
+		if err != nil {
+			t.Fatal(err)
+		}
+		return s
+	}
+	short, long := run(0), run(LatePeriods)
+	if d := (long.Duration - short.Duration) * testFrequency; d < 5 || d > LatePeriods {
+		t.Errorf("%.1f periods more", d)
+	}
+	for _, tr := range append(long.Traces.Junctions, long.Traces.Source) {
+		if n := len(tr.Late); n != LatePeriods*60 {
+			t.Fatalf("%d samples kept", n)
+		}
+		if !slices.Equal(tr.Late[len(tr.Late)-len(tr.Tail):], tr.Tail) || !slices.Equal(tr.A[len(tr.A)-len(tr.Late):], tr.Late) {
+			t.Error("the last periods are not the end of the whole")
+		}
+	}
+	if rows := ringRows(60, traceSamples); rows != TailPeriods*60 {
+		t.Errorf("%d rows of a run without room", rows)
 	}
 }

@@ -28,6 +28,7 @@ func averageGain(steps int) float64 { return 1 / math.Cos(math.Pi/float64(steps)
 type Trace struct {
 	A, B        []float64
 	Tail, TailB []float64 // the last periods, at most TailPeriods of them
+	Late, LateB []float64 // likewise, at most LatePeriods of them, or fewer where they would be too many samples
 	Early       float64   // steps by which a sample lies before its step
 }
 
@@ -43,13 +44,20 @@ func (t Trace) Plus(u Trace) Trace {
 		}
 		return out
 	}
-	return Trace{A: add(t.A, u.A), B: add(t.B, u.B), Tail: add(t.Tail, u.Tail), TailB: add(t.TailB, u.TailB), Early: t.Early}
+	return Trace{
+		A: add(t.A, u.A), B: add(t.B, u.B), Early: t.Early,
+		Tail: add(t.Tail, u.Tail), TailB: add(t.TailB, u.TailB),
+		Late: add(t.Late, u.Late), LateB: add(t.LateB, u.LateB),
+	}
 }
 
 // At gives the waveform for a start phase p: A cos p - B sin p.
 func (t Trace) At(p float64) (whole, tail []float64) {
 	return mix(t.A, t.B, p), mix(t.Tail, t.TailB, p)
 }
+
+// LateAt gives its last periods likewise.
+func (t Trace) LateAt(p float64) []float64 { return mix(t.Late, t.LateB, p) }
 
 func mix(a, b []float64, p float64) []float64 {
 	if b == nil {
@@ -65,6 +73,15 @@ func mix(a, b []float64, p float64) []float64 {
 
 // TailPeriods is how many last periods a trace keeps whatever its length.
 const TailPeriods = 3
+
+// LatePeriods is how many it keeps if all traces of a run have room for them.
+const LatePeriods = 16
+
+// ringRows is how many steps of the last periods are kept, for so many numbers a
+// step.
+func ringRows(steps, row int) int {
+	return steps * max(TailPeriods, min(LatePeriods, traceSamples/(steps*row)))
+}
 
 // traceSamples bounds the samples of all traces of a run: 16 MiB.
 const traceSamples = 2 << 20
@@ -86,7 +103,7 @@ type tracer struct {
 
 func newTracer(m *model, lanes int) *tracer {
 	t := &tracer{m: m, lanes: lanes, width: len(m.net.Junctions) + len(m.junction.branches)}
-	t.rows = TailPeriods * m.grid.StepsPerPeriod
+	t.rows = ringRows(m.grid.StepsPerPeriod, t.width*lanes)
 	t.limit = max(t.rows, traceSamples/(t.width*lanes))
 	t.ring = make([]float64, t.rows*t.width*lanes)
 	t.row = make([]float64, t.width*lanes)
@@ -169,20 +186,21 @@ func (t *tracer) column(c int, gain, early float64) Trace {
 		return gain * from[(row*t.lanes+lane)*t.width+c]
 	}
 	end := t.tailEnd()
-	tail := min(t.rows, end)
+	late := min(t.rows, end)
+	tail := min(late, TailPeriods*t.m.grid.StepsPerPeriod)
 	for lane := range t.lanes {
 		whole := make([]float64, steps)
 		for i := range whole {
 			whole[i] = pick(t.whole, i, lane)
 		}
-		last := make([]float64, tail)
+		last := make([]float64, late)
 		for i := range last {
-			last[i] = pick(t.ring, (end-tail+i)%t.rows, lane)
+			last[i] = pick(t.ring, (end-late+i)%t.rows, lane)
 		}
 		if lane == 0 {
-			out.A, out.Tail = whole, last
+			out.A, out.Late, out.Tail = whole, last, last[late-tail:]
 		} else {
-			out.B, out.TailB = whole, last
+			out.B, out.LateB, out.TailB = whole, last, last[late-tail:]
 		}
 	}
 	return out

@@ -3,7 +3,6 @@ package sim
 import (
 	"context"
 	"math"
-	"math/cmplx"
 	"slices"
 
 	"linewitness/fdtd"
@@ -216,100 +215,6 @@ func (s *solved) profiles() []record.Profile {
 			EV: c.Voltage.Allowed, EI: c.Current.Allowed,
 			PeakZV: p.ZV, PeakV: p.V, PeakZI: p.ZI, PeakI: p.I,
 		})
-	}
-	return out
-}
-
-// phase is the start phase that the waveforms are shown at: the design's own,
-// or that of the largest voltage.
-func (s *solved) phase() float64 {
-	if s.stress.Worst {
-		return s.stress.Voltage.Phase
-	}
-	return s.net.Source.Start.Phase
-}
-
-// A probe is a quantity whose waveform is kept.
-type probe struct {
-	trace             fdtd.Trace
-	phasor            complex128 // of the closed form
-	name, where, unit string
-}
-
-// probes are the source, the junctions and the loads.
-func (s *solved) probes() []probe {
-	t, src := s.stress.Traces, s.net.Source
-	name := s.net.Junctions[src.At]
-	out := []probe{
-		{t.Junctions[src.At], s.exact.junctions[src.At], "source voltage", name, "V"},
-		{t.Source, s.exact.source, "source current", name, "A"},
-	}
-	for j, n := range s.net.Junctions[:s.net.NamedJunctions()] {
-		if j != src.At {
-			out = append(out, probe{t.Junctions[j], s.exact.junctions[j], n + " voltage", n, "V"})
-		}
-	}
-	for p, part := range s.net.Parts {
-		if part.Kind == network.Load && !s.net.Branches[part.Branches[0]].Open {
-			out = append(out, probe{s.partTrace(p), s.exact.partCurrent(p), part.Name + " current", part.Name, "A"})
-		}
-	}
-	return out
-}
-
-func (s *solved) waveforms() []record.Waveform {
-	var out []record.Waveform
-	for _, p := range s.probes() {
-		out = append(out, s.waveform(p))
-	}
-	return out
-}
-
-// partTrace adds up the traces of the branches that leave a part's A.
-func (s *solved) partTrace(p int) fdtd.Trace {
-	branches := s.net.Parts[p].Branches
-	sum := s.stress.Traces.Branches[branches[0]]
-	for _, b := range branches[1:] {
-		sum = sum.Plus(s.stress.Traces.Branches[b])
-	}
-	return sum
-}
-
-// shown is a trace at the start phase that is shown. At mixes the lanes; a fixed
-// start phase is in its one lane already.
-func (s *solved) shown(t fdtd.Trace) (whole, tail []float64) {
-	if !s.stress.Worst {
-		return t.A, t.Tail
-	}
-	return t.At(s.phase())
-}
-
-func (s *solved) waveform(p probe) record.Waveform {
-	t, dt := p.trace, s.stress.Traces.Step
-	whole, tail := s.shown(t)
-	quantity := "voltage"
-	if p.unit == "A" {
-		quantity = "current"
-	}
-	return record.Waveform{
-		Name: p.name, Where: p.where, Quantity: quantity, Unit: p.unit, Steady: cmplx.Abs(p.phasor),
-		Start: (float64(s.stress.Traces.First) - t.Early) * dt, Step: dt, Samples: whole,
-		Tail: record.Tail{
-			Start: s.tailStart(t), Step: dt, Samples: tail, Phasor: s.steadyWave(p.phasor, s.tailStart(t), len(tail)),
-		},
-	}
-}
-
-func (s *solved) tailStart(t fdtd.Trace) float64 {
-	return (float64(s.stress.Traces.TailEnd-len(t.Tail)+1) - t.Early) * s.stress.Traces.Step
-}
-
-// steadyWave is Re(p e^{j(wt + phase)}) at n samples from a start, s, on.
-func (s *solved) steadyWave(p complex128, start float64, n int) []float64 {
-	out := make([]float64, n)
-	for i := range out {
-		at := start + float64(i)*s.stress.Traces.Step
-		out[i] = real(p * cmplx.Rect(1, s.net.Omega()*at+s.phase()))
 	}
 	return out
 }

@@ -4,7 +4,10 @@ import (
 	"fmt"
 	"math"
 	"math/cmplx"
+	"slices"
 
+	"linewitness/fdtd"
+	"linewitness/sim/agree"
 	"linewitness/sim/fsv"
 	"linewitness/sim/record"
 )
@@ -22,8 +25,8 @@ func (s *solved) fidelity() []record.Fidelity {
 		c := s.compared.Sections[k]
 		name := s.net.Sections[k].Name
 		out = append(out,
-			along(name, "|V| along the section", w.ZV, sizes(w.V), sizes(c.Voltage.Exact)),
-			along(name, "|I| along the section", w.ZI, sizes(w.I), sizes(c.Current.Exact)))
+			along(name, "|V| along the section", w.ZV, w.V, &c.Voltage),
+			along(name, "|I| along the section", w.ZI, w.I, &c.Current))
 	}
 	for _, p := range s.probes() {
 		out = append(out, s.waveFidelity(p))
@@ -34,7 +37,7 @@ func (s *solved) fidelity() []record.Fidelity {
 // latePeriods is the length of waveform that is compared: with fewer than five
 // periods or so all of it would be in the bins that count as mean.
 const (
-	latePeriods  = 16
+	latePeriods  = fdtd.LatePeriods
 	leastPeriods = 8
 )
 
@@ -42,22 +45,40 @@ const (
 // the closed form.
 func (s *solved) waveFidelity(p probe) record.Fidelity {
 	const curve = "waveform, last periods"
-	traces := s.stress.Traces
-	whole, _ := s.shown(p.trace)
+	late := s.late(p.trace)
 	n := s.stress.Grid.StepsPerPeriod
-	count := min(latePeriods, len(whole)/n)
+	count := len(late) / n
 	switch {
 	case s.net.Source.Stop != nil:
 		return without(p.name, curve, "the source has stopped")
-	case !traces.Full:
-		return without(p.name, curve, "the end of the waveform was not kept")
+	case !s.stress.Complete:
+		return without(p.name, curve, "the run ended before the network was at rest")
 	case count < leastPeriods:
-		return without(p.name, curve, fmt.Sprintf("%d periods; a comparison needs at least %d", count, leastPeriods))
+		return without(p.name, curve, fmt.Sprintf("%d periods were kept; a comparison needs at least %d", count, leastPeriods))
 	}
-	from := len(whole) - count*n
-	start := (float64(traces.First+from) - p.trace.Early) * traces.Step
-	r, err := fsv.CurvesAbove(whole[from:], s.steadyWave(p.phasor, start, count*n), waveFloor)
+	late = late[len(late)-count*n:]
+	start := s.startOf(len(late), p.trace)
+	if d := departure(late, s.steadyWave(p.found, start, len(late))); !(d <= settledWave) {
+		return without(p.name, curve, fmt.Sprintf("%.2g %% of it is not the steady wave yet: the run ends when the largest voltages are at rest", 100*d))
+	}
+	r, err := fsv.CurvesAbove(late, s.steadyWave(p.phasor, start, len(late)), waveFloor)
 	return compared(p.name, curve, r, err)
+}
+
+// settledWave is the departure of a waveform from the steady one of its own
+// witness, relative to that, above which its features are those of what is left
+// of the start, as those of a small current can be.
+const settledWave = 5e-3
+
+// departure is the root mean square of the difference of a waveform from another,
+// relative to that of the other; NaN where both are nothing.
+func departure(wave, from []float64) float64 {
+	d, all := 0.0, 0.0
+	for i, v := range from {
+		d += (wave[i] - v) * (wave[i] - v)
+		all += v * v
+	}
+	return math.Sqrt(d / all)
 }
 
 // waveFloor is the part of the largest Fourier bin of a waveform below which
@@ -72,8 +93,12 @@ func choices() []string {
 }
 
 // along compares two curves along a section.
-func along(subject, curve string, z, found, exact []float64) record.Fidelity {
-	r, err := fsv.Compare(z, found, z, exact)
+func along(subject, curve string, z []float64, found []complex128, k *agree.Kind) record.Fidelity {
+	exact := sizes(k.Exact)
+	if slices.Max(exact) < k.Scale {
+		return without(subject, curve, "next to nothing beside the rest of the network")
+	}
+	r, err := fsv.Compare(z, sizes(found), z, exact)
 	return compared(subject, curve, r, err)
 }
 

@@ -177,18 +177,18 @@ func settlePeriods(net *network.Network, tolerance, rate, path float64) int {
 }
 
 // stressPeriods predicts the stress run: to rest within a thousandth, and a
-// round trip to see that it stays.
+// round trip, or what is shown of its end, to see that it stays.
 func (p *planned) stressPeriods(rate, path float64) int {
 	t, src := p.net.Period(), p.net.Source
 	decay := math.Log(1e3) / rate
 	if math.IsNaN(decay) {
 		decay = 20 * 2 * path
 	}
-	end := src.Start.Rise
+	end, quiet := src.Start.Rise, math.Max(2*path, latePeriods*t)
 	if src.Stop != nil {
-		end = src.Stop.At + src.Stop.Fall
+		end, quiet = src.Stop.At+src.Stop.Fall, 2*path
 	}
-	return clampInt(math.Ceil((end+path+decay+2*path)/t) + 2)
+	return clampInt(math.Ceil((end+path+decay+quiet)/t) + 2)
 }
 
 func clampInt(v float64) int {
@@ -214,7 +214,7 @@ func (p *planned) bytes(lanes float64) float64 {
 	const number = 8
 	state := cells*(4+4*lanes) + poles*lanes
 	recorder := (points+lumped)*steps + 10*points
-	ring := fdtd.TailPeriods * steps * lumped * lanes
+	ring := math.Max(fdtd.TailPeriods*steps*lumped*lanes, math.Min(2<<20, fdtd.LatePeriods*steps*lumped*lanes))
 	whole := math.Max(ring, math.Min(2<<20, float64(p.plan.StressPeriods)*steps*lumped*lanes))
 	watch := steps * float64(len(p.net.Junctions)) * (lanes + 2)
 	return number * (state + recorder + 2*(ring+whole) + watch + 3*math.Min(8*steps, 1<<18))

@@ -77,6 +77,9 @@ func (s *solved) stressRuns(ctx context.Context, g *errgroup.Group, second *grid
 	run := func(out **fdtd.Stress, steady *fdtd.Steady, sharp bool) {
 		set := set
 		set.Sharp, set.Map = sharp, out == &s.stress
+		if set.Map { // whose waveforms are shown, and compared: see waveFidelity
+			set.Still = latePeriods
+		}
 		g.Go(func() (err error) {
 			*out, err = fdtd.StressRun(ctx, s.net, steady, set)
 			return err
