@@ -121,13 +121,13 @@ func (d *comparison) most() rows {
 	return rows{min(page, len(d.changes)), min(page, len(d.effects)), min(page, len(d.figures))}
 }
 
-// less takes an eighth, and one row at least, from the longest table. Key figures go
-// first where two are as long, and the effects last.
+// less takes an eighth, and one row at least, from the table that is longest for
+// what it tells: a key figure tells half of what the others do.
 func (r rows) less() rows {
-	longest := &r.figures
+	longest, length := &r.figures, 2*r.figures
 	for _, n := range []*int{&r.changes, &r.effects} {
-		if *n > *longest {
-			longest = n
+		if *n > length {
+			longest, length = n, *n
 		}
 	}
 	*longest -= min(*longest, *longest/8+1)
