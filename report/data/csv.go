@@ -29,12 +29,14 @@ func CSV(r *record.Record) ([]CSVFile, error) {
 		name   string
 		header []string
 		rows   func(*table, *record.Case) error
+		size   int // about that of the file, if it is known
 	}{
-		{"waveforms", waves.header, waves.rows},
-		{"envelopes", envelopeHeader, envelopeRows},
-		{"error", errorHeader, errorRows},
+		{"waveforms", waves.header, waves.rows, waves.size(r)},
+		{"envelopes", envelopeHeader, envelopeRows, 0},
+		{"error", errorHeader, errorRows, 0},
 	} {
 		t := newTable(f.header)
+		t.buf.Grow(f.size)
 		for i := range r.Cases {
 			if err := f.rows(t, &r.Cases[i]); err != nil {
 				return nil, fmt.Errorf("data: %s of case %q: %w", f.name, r.Cases[i].Name, err)

@@ -40,6 +40,24 @@ func newWaveforms(r *record.Record) *waveforms {
 	return f
 }
 
+// size is about that of the file, in bytes: a buffer that gets its room at once
+// takes a third of one that grows by itself.
+func (f *waveforms) size(r *record.Record) (n int) {
+	const (
+		sample = 10 // with its comma
+		row    = 32 // before the samples, with the commas of empty fields
+	)
+	for i := range r.Cases {
+		longest := 0
+		for _, w := range r.Cases[i].Waveforms {
+			n += sample * (len(w.Samples) + len(w.Tail.Samples) + len(w.Tail.Phasor))
+			longest = max(longest, len(w.Samples)+len(w.Tail.Samples)+len(w.Tail.Phasor))
+		}
+		n += 2 * row * longest
+	}
+	return n
+}
+
 // title is the head of a column: the waveform's name with its unit in place of
 // its quantity, and where that is taken with its place too.
 func title(w *record.Waveform, taken map[string]bool) string {

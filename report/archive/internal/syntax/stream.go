@@ -5,6 +5,7 @@ import (
 	"compress/zlib"
 	"io"
 	"strconv"
+	"sync"
 )
 
 // stream reads the data of a stream (7.3.8) after its keyword.
@@ -137,12 +138,26 @@ func newStream(d Dict, compressed []byte) *Stream {
 	return &Stream{d, compressed}
 }
 
-func deflate(data []byte, level int) []byte {
-	var b bytes.Buffer
-	z, err := zlib.NewWriterLevel(&b, level)
+// writers are compressors to be used again: each takes most of a MiB.
+var writers = map[int]*sync.Pool{
+	zlib.DefaultCompression: {New: func() any { return newWriter(zlib.DefaultCompression) }},
+	fast:                    {New: func() any { return newWriter(fast) }},
+}
+
+func newWriter(level int) *zlib.Writer {
+	z, err := zlib.NewWriterLevel(io.Discard, level)
 	if err != nil {
 		panic("syntax: unknown level of compression")
 	}
+	return z
+}
+
+func deflate(data []byte, level int) []byte {
+	pool := writers[level]
+	z := pool.Get().(*zlib.Writer)
+	defer pool.Put(z)
+	var b bytes.Buffer
+	z.Reset(&b)
 	_, _ = z.Write(data) // a bytes.Buffer takes everything
 	_ = z.Close()
 	return b.Bytes()

@@ -3,6 +3,7 @@ package syntax
 import (
 	"bytes"
 	"errors"
+	"fmt"
 	"strings"
 	"testing"
 )
@@ -110,8 +111,11 @@ func nearest(left, above, corner byte) byte {
 func distance(a, b int) int { return max(a-b, b-a) }
 
 func TestRepack(t *testing.T) {
-	data := []byte(strings.Repeat("1 0 0 1 re f\n", 500))
-	s := &Stream{Dict{"Filter": Name("FlateDecode")}, deflate(data, 1)}
+	var data []byte
+	for i := range 500 {
+		data = fmt.Appendf(data, "%d 0 %d 1 re f\n", i, i*i)
+	}
+	s := &Stream{Dict{"Filter": Name("FlateDecode")}, deflate(data, fast)}
 	before := len(s.Data)
 	f := decoder(1 << 20)
 	if err := f.Repack(s); err != nil || len(s.Data) >= before {
