@@ -19,7 +19,7 @@ const chartColumns = 4
 
 // The measures of the figures of reflection and phase.
 const (
-	chartLines  = 2    // of text below a chart
+	chartLines  = 3    // of text below a chart
 	chartShare  = 0.45 // of the width, of a chart with its phase beside it
 	phaseHeight = 84.0 // of the phase below a chart
 )
@@ -153,7 +153,7 @@ func reflectionKey(c *record.Case, list []*locus) []figure.Entry {
 
 // chart draws one section up and says what it shows.
 func (l *locus) chart(c *record.Case) (*figure.Chart, string) {
-	ch := &figure.Chart{Name: l.section.Name, Quantity: z0 + " = " + format.Complex(l.section.Z0, "Ω")}
+	ch := &figure.Chart{Name: l.section.Name, Quantity: "Γ", Foot: []string{"reference " + z0 + " = " + format.Complex(l.section.Z0, "Ω")}}
 	limits := reflectionLimits(c, l)
 	for _, m := range limits {
 		ch.Rims = append(ch.Rims, figure.ChartRim{Radius: m.radius, Inside: m.least, Label: m.label()})
@@ -169,7 +169,7 @@ func (l *locus) chart(c *record.Case) (*figure.Chart, string) {
 	if cmplx.Abs(l.near-l.far) < 0.02 { // one place on the page
 		ch.Ends = []figure.ChartEnd{{Name: l.nearAt + ", " + l.fars, At: l.far, Far: true}}
 	}
-	ch.Foot = []string{"VSWR at " + l.nearAt + " " + format.VSWR(vswr(l.near)), "VSWR at " + l.fars + " " + format.VSWR(vswr(l.far))}
+	ch.Foot = append(ch.Foot, "VSWR at "+l.nearAt+" "+format.VSWR(vswr(l.near)), "VSWR at "+l.fars+" "+format.VSWR(vswr(l.far)))
 	return ch, l.finding(limits, apart)
 }
 
