@@ -15,8 +15,9 @@ type keyFigure struct {
 	quantity            quantity
 }
 
-// keyFigures are the figures of the summary of every case.
-func keyFigures(net *network.Network) []keyFigure {
+// keyFigures are the figures of the summary of every case; powered names the
+// loads that take up power in any case.
+func keyFigures(net *network.Network, powered map[string]bool) []keyFigure {
 	f := finder{net}
 	at := net.Source.At
 	seen := func(s *state) complex128 { return ratio(s.junctions[at], s.source) }
@@ -33,28 +34,28 @@ func keyFigures(net *network.Network) []keyFigure {
 		{"steady_voltage", "whole network", "V peak", voltage, f.steady(voltage)},
 		{"steady_current", "whole network", "A peak", current, f.steady(current)},
 	}
-	if loads := loadsOf(net); len(loads) > 0 {
-		out = append(out, keyFigure{"efficiency", "all loads", "%", efficiency, f.steady(efficiency)})
-		for _, p := range loads {
-			power := design.Requirement{Quantity: design.LoadPower, Load: net.Parts[p].Name}
-			out = append(out, keyFigure{"load_power", power.Load, "W", power, f.steady(power)})
+	var loads []keyFigure
+	for _, part := range net.Parts {
+		if part.Kind == network.Load && powered[part.Name] {
+			power := design.Requirement{Quantity: design.LoadPower, Load: part.Name}
+			loads = append(loads, keyFigure{"load_power", power.Load, "W", power, f.steady(power)})
 		}
 	}
-	return out
+	if len(loads) > 0 {
+		out = append(out, keyFigure{"efficiency", "all loads", "%", efficiency, f.steady(efficiency)})
+	}
+	return append(out, loads...)
 }
 
-// loadsOf are the loads that power can go into: not the open, nor those without
-// a resistance.
-func loadsOf(net *network.Network) []int {
-	var out []int
-	for p, part := range net.Parts {
-		if part.Kind != network.Load {
-			continue
-		}
+// powered are the names of the loads that power can go into in any of the
+// networks: a load that is shorted in one case takes none there, which is a
+// figure too, and one that is nothing but a short has none to tell.
+func powered(nets ...*network.Network) map[string]bool {
+	out := map[string]bool{}
+	for _, net := range nets {
 		for _, b := range net.Branches {
-			if b.Name == part.Name && b.Kind == part.Kind && !b.Open && b.R > 0 {
-				out = append(out, p)
-				break
+			if b.Kind == network.Load && !b.Open && b.R > 0 {
+				out[b.Name] = true
 			}
 		}
 	}
@@ -65,7 +66,7 @@ func loadsOf(net *network.Network) []int {
 func (s *solved) keyStudies() []studied {
 	var out []studied
 	whole := cmplx.Abs(ratio(s.exact.junctions[s.net.Source.At], s.exact.source))
-	for _, k := range keyFigures(s.net) {
+	for _, k := range keyFigures(s.net, s.powered) {
 		f := studied{
 			quantity: k.name, subject: k.subject, scale: scaleFor(k.unit), figure: s.measure(k.of, k.quantity),
 		}

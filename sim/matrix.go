@@ -1,14 +1,16 @@
 package sim
 
 import (
+	"cmp"
 	"math"
+	"slices"
 
 	"linewitness/sim/record"
 )
 
-// matrix sets the cases of a record side by side: a row for every requirement
-// and for every key figure.
-func matrix(cases []record.Case) record.Matrix {
+// matrix sets the cases of a record side by side: a row for every requirement,
+// in the order of ids, and for every key figure.
+func matrix(cases []record.Case, ids []string) record.Matrix {
 	var out record.Matrix
 	rows := newRowSet()
 	for i, c := range cases {
@@ -20,6 +22,7 @@ func matrix(cases []record.Case) record.Matrix {
 			row.fill(i, record.MatrixCell{Present: true, Value: r.Value, Verdict: r.Verdict}, r.Margin)
 		}
 	}
+	slices.SortStableFunc(rows.all, func(a, b *row) int { return cmp.Compare(slices.Index(ids, a.ID), slices.Index(ids, b.ID)) })
 	for i, c := range cases {
 		for _, s := range c.Convergence.Studies {
 			if s.ID != "" {

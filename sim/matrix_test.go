@@ -20,11 +20,11 @@ func TestMatrix(t *testing.T) {
 		{Name: "nominal", Requirements: []record.Requirement{req("R1", "deg", 170, 5)}, Convergence: key(10)},
 		{Name: "iced", Requirements: []record.Requirement{req("R1", "deg", -170, 3), req("R2", "V peak", 5, -1)}, Convergence: key(12)},
 		{Name: "arc", Requirements: []record.Requirement{req("R1", "deg", 171, 9)}, Convergence: key(9)},
-	})
+	}, []string{"R2", "R1"})
 	if len(m.Rows) != 3 || len(m.Cases) != 3 {
 		t.Fatalf("%d rows, %d cases", len(m.Rows), len(m.Cases))
 	}
-	r1, r2, power := m.Rows[0], m.Rows[1], m.Rows[2]
+	r2, r1, power := m.Rows[0], m.Rows[1], m.Rows[2] // in the order of the file
 	if d := r1.Cells[1].Difference; math.Abs(d-20) > 1e-9 {
 		t.Errorf("from 170 to -170 deg: %.3g", d)
 	}

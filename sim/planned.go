@@ -13,12 +13,13 @@ import (
 
 // A planned case is ready to be solved.
 type planned struct {
-	name   string
-	design *design.Design
-	net    *network.Network
-	grids  ladder // finest first
-	study  bool   // the settling solution runs on all of them, not only on the first
-	plan   PlanCase
+	name    string
+	design  *design.Design
+	net     *network.Network
+	grids   ladder          // finest first
+	powered map[string]bool // names of the loads that take up power in any case
+	study   bool            // the settling solution runs on all of them, not only on the first
+	plan    PlanCase
 }
 
 // Nominal is the name of the design as it stands, beside its cases.
@@ -41,11 +42,19 @@ func planAll(ctx context.Context, f *design.File, grids int) ([]*planned, error)
 		}
 		all = append(all, p)
 	}
+	var nets []*network.Network
+	for _, p := range all {
+		nets = append(nets, p.net)
+	}
+	for _, p := range all {
+		p.powered = powered(nets...)
+	}
 	return all, nil
 }
 
 func newPlanned(ctx context.Context, name string, d *design.Design, grids int) (*planned, error) {
 	p := &planned{name: name, design: d, net: Network(d), study: grids > 1}
+	p.powered = powered(p.net)
 	// The stress run needs a second grid in any case.
 	var err error
 	if p.grids, err = chooseGrids(ctx, p.net, max(2, grids), d.Grid.CellsPerWavelength, d.Grid.Agreement); err != nil {

@@ -23,6 +23,7 @@ type solved struct {
 	grid    *gridding
 	phasor  *phasor.Solution
 	plan    *PlanCase
+	powered map[string]bool // see planned
 	steady  *fdtd.Steady
 	coarser []*fdtd.Steady // the settling solution on the other grids of the study, finest first
 
@@ -45,7 +46,7 @@ func (p *planned) solve(ctx context.Context, progress func(float64)) (*solved, e
 		MaxPeriods: p.design.Grid.MaxPeriods,
 		Progress:   progress,
 	}
-	s := &solved{name: p.name, design: p.design, net: p.net, grid: p.grids[0], phasor: p.grids[0].exact, plan: &p.plan}
+	s := &solved{name: p.name, design: p.design, net: p.net, grid: p.grids[0], phasor: p.grids[0].exact, plan: &p.plan, powered: p.powered}
 	var err error
 	if s.steady, err = fdtd.Settle(ctx, p.net, s.grid.grid, set); err != nil {
 		return nil, err

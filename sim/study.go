@@ -137,7 +137,11 @@ func (s *solved) studyRun(out *record.Study, f studied) {
 	for _, run := range []*fdtd.Stress{last, s.second} {
 		out.Values = append(out.Values, f.scale.from(f.figure.pick(run)))
 	}
-	s.index(out, f, 0)
+	floor := 0.0
+	if f.scale.unit == "s" { // a time is found to a step
+		floor = s.second.Grid.Step
+	}
+	s.index(out, f, floor)
 	out.Error = math.NaN()
 	out.Uncertainty = f.scale.from(f.spread) - f.scale.from(0)
 	out.Settling = atRest * math.Abs(out.Values[0])

@@ -26,7 +26,7 @@ func settled(t interface{ Fatal(...any) }, net *network.Network, cells float64) 
 		t.Fatal(err)
 	}
 	s := &solved{
-		name: Nominal, net: net, grid: grids[0], phasor: grids[0].exact,
+		name: Nominal, net: net, grid: grids[0], phasor: grids[0].exact, powered: powered(net),
 		design: &design.Design{Grid: design.Grid{Agreement: 0.005, SettleTolerance: 1e-4}},
 	}
 	set := fdtd.Settings{MaxPeriods: 20000}

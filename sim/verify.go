@@ -121,7 +121,11 @@ func newRecord(ctx context.Context, f *design.File, cases []*solved, opt Options
 		}
 		out.Cases = append(out.Cases, rc)
 	}
-	out.Matrix = matrix(out.Cases)
+	var ids []string
+	for _, r := range f.Nominal.Requirements {
+		ids = append(ids, r.ID)
+	}
+	out.Matrix = matrix(out.Cases, ids)
 	return out
 }
 
