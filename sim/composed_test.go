@@ -212,3 +212,19 @@ grid: {max_periods: 65}
 `)).Cases[0]
 	judged(t, c, record.NotShown, map[string]record.RequirementVerdict{"S": record.NotShownReq})
 }
+
+// TestSettlingOfABareJump: where the ripple of a bare jump keeps a coarse grid from
+// settling, the time has no uncertainty, and the record says why it is not shown.
+func TestSettlingOfABareJump(t *testing.T) {
+	c := verified(t, text(t, `
+source: {at: a, frequency: 10 MHz, emf: 100 V peak, impedance: 0 ohm, start: {profile: abrupt, phase: worst}, stop: {at: 2.5 us}}
+lines: {k: {z0: 50 ohm, velocity_factor: 0.66}}
+sections: {m: {from: a, to: b, length: 1.3 m, line: k}}
+loads: {l: {at: b, r: 500 ohm, l: 3 uH}}
+requirements:
+  - {id: S, quantity: settle_time, max: 2.5 us}
+`)).Cases[0]
+	if r := requirement(t, c, "S"); r.Verdict != record.NotShownReq || math.IsNaN(r.Value) || r.Note == "" {
+		t.Errorf("%g s: %s (%s)", r.Value, r.Verdict, r.Note)
+	}
+}

@@ -226,6 +226,8 @@ func (s *solved) settleTime(j *judgement) {
 		j.note = fmt.Sprintf("not within %.3g %% when the run ended after %.3g us", j.req.Settled*100, s.stress.Duration*1e6)
 	} else if j.unfinished {
 		j.note = "the run ended before the network was at rest"
+	} else if math.IsNaN(settled.spread) {
+		j.note = "the source jumps, and with the bare jump it is not reached on every grid; give the real rise or fall"
 	}
 }
 
