@@ -59,6 +59,11 @@ func TestWriteFigures(t *testing.T) {
 			t.Errorf("%s: %v dots for %v by %v points", stem, b, w, h)
 		}
 	}
+	for _, want := range []string{`<image preserveAspectRatio="none" x=`, "data:image/png;"} {
+		if got := strings.Count(string(files["nominal-spacetime.svg"]), want); got != 2 { // the map and its scale
+			t.Errorf("the map has %d times %q", got, want)
+		}
+	}
 	text := string(files["nominal-envelopes-main.svg"])
 	for _, want := range []string{"<title>nominal-envelopes-main</title>", "<desc>main: |V| up to", ">distance (m)</text>", "Arial,Helvetica,sans-serif", ">phasor; expected error</text>"} {
 		if !strings.Contains(text, want) {
