@@ -173,7 +173,15 @@ func (d *document) coverClaims() {
 		worst, word = record.ClaimOpen, "Claims not shown: "+among(claimsOf(all, record.ClaimOpen), mostNames)+"."
 	}
 	d.b.Space(5)
-	d.b.Verdict(markOfClaim(worst), colorOfClaim(worst), word, claimTally(all)+" The chapter Claims has the figures"+explained+".")
+	d.b.Verdict(markOfClaim(worst), colorOfClaim(worst), word, claimTally(all)+d.claimsElsewhere(explained))
+}
+
+// claimsElsewhere says where the claims are, in a document that has them.
+func (d *document) claimsElsewhere(explained string) string {
+	if d.opt.Summary {
+		return ""
+	}
+	return " The chapter Claims has the figures" + explained + "."
 }
 
 // claimsOf returns the ids of the claims of a verdict.

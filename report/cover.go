@@ -46,6 +46,9 @@ func (d *document) cover(room coverRoom) {
 	d.history(room)
 	d.signatures()
 	d.fingerprint(room)
+	if d.opt.Summary {
+		d.b.Note("A summary: every figure is in the attached result, and a record made without --summary shows them.")
+	}
 }
 
 // summary writes the cover on one page, with as much as finds room there.

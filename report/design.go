@@ -195,25 +195,6 @@ func available(w float64) string {
 	return format.SI(w, "W")
 }
 
-// conventions writes what the numbers mean.
-func (d *document) conventions() {
-	d.b.Subheading("Conventions", 70)
-	given := "The design file gives complex numbers with j, for e" + sup("+jωt") + "."
-	if d.r.Design.Convention == "physics" {
-		given = "The design file gives complex numbers with i, for e" + sup("−iωt") + "; they were conjugated on reading."
-	}
-	for _, s := range []string{
-		given + " This document uses j and e" + sup("+jωt") + " throughout.",
-		"Amplitudes are peak values unless rms is said. Phases are in degrees, relative to the EMF of the source as a cosine.",
-		"Current along a section is positive from its From end to its To end, and the distance z is measured from the From end. An impedance at an end is V/I there.",
-		"The reflection coefficient is taken against the section's own " + z0 + ": Γ = (Z − " + z0 + ")/(Z + " + z0 + "). VSWR = (1 + |Γ|)/(1 − |Γ|), infinite if |Γ| is 1 or more.",
-		"Voltage and current levels are 20 log" + sub("10") + " of a ratio, powers 10 log" + sub("10") + ". One way loss is that of the matched section.",
-		"A dash (–) stands for what does not apply.",
-	} {
-		d.b.Item(s)
-	}
-}
-
 // z0 is the sign of a characteristic impedance.
 var z0 = "Z" + sub("0")
 

@@ -48,7 +48,7 @@ func TestText(t *testing.T) {
 	for _, s := range []string{
 		"Hilltop FM feeder, main line and tuning stub", "DR-0042, revision B", "Requirement missed",
 		"R1 is missed in iced, arc, stub_missing.", strings.Repeat("0123456789abcdef", 4),
-		"50.01 − j0.03 Ω", "393.7 ft", "42.64 λ", "181.1 nH/m", "1.950 kV", "γ = √(Z′ Y′)",
+		"50.01 − j0.03 Ω", "393.7 ft", "42.64 λ", "181.1 nH/m", "1.950 kV", "obey the telegrapher's",
 		"load antenna: 14 ohm + 68.14 nH at flange instead of 28 ohm + 29.2 nH at flange",
 		"section stub is absent", "infinite", "attenuation: 0.70 dB/100m", "IEEE Std C95.1", "multipactor",
 	} {

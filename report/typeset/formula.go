@@ -8,13 +8,19 @@ import (
 )
 
 // The markup of formulas, beside that of package format: a fraction is
-// over, numerator, under, denominator, closed; a root is root, radicand, closed.
+// over, numerator, under, denominator, closed; a root is root, radicand, closed;
+// what stands between brackets or bars is round or bars, content, closed.
 const (
 	over   = '\ue003'
 	under  = '\ue004'
 	root   = '\ue005'
 	closed = '\ue006'
+	round  = '\ue007'
+	bars   = '\ue008'
 )
+
+// marks are all runes that are not text.
+var marks = string([]rune{format.Sup, format.Sub, format.End, over, under, root, closed, round, bars})
 
 // Frac marks up a fraction with a bar for [Style.Formula].
 func Frac(numerator, denominator string) string {
@@ -23,6 +29,12 @@ func Frac(numerator, denominator string) string {
 
 // Sqrt marks up a square root with a bar over its radicand.
 func Sqrt(radicand string) string { return string(root) + radicand + string(closed) }
+
+// Round puts brackets of the height of x around it.
+func Round(x string) string { return string(round) + x + string(closed) }
+
+// Bars puts bars of the height of x around it, for its magnitude.
+func Bars(x string) string { return string(bars) + x + string(closed) }
 
 // The measures of formulas, as parts of the size of their text.
 const (
@@ -49,7 +61,7 @@ func (b Box) Draw(c vg.Canvas, x, y float64) { b.draw(c, x, y) }
 
 // Formula sets a formula: single letters are italic, as signs of quantities;
 // digits, words and names of functions are upright (ISO 80000-2). The markup is
-// that of package format, of [Frac] and of [Sqrt], nested as needed.
+// that of package format, of [Frac], [Sqrt], [Round] and [Bars], nested as needed.
 func (st Style) Formula(s string) Box {
 	p := parser{in: []rune(s), st: st}
 	parts := []Box{p.row(st.Size)}
@@ -76,12 +88,14 @@ func (p *parser) row(size float64) Box {
 		case format.End, under, closed:
 			return beside(parts)
 		case format.Sup, format.Sub:
-			parts = append(parts, p.script(r, size))
+			parts = append(parts, p.script(r, size, parts))
 		case over:
 			n, d := p.row(size*partSize), p.row(size*partSize)
 			parts = append(parts, p.fraction(n, d, size))
 		case root:
 			parts = append(parts, p.root(p.row(size), size))
+		case round, bars:
+			parts = append(parts, p.fence(r, p.row(size), size))
 		default:
 			p.at--
 			parts = append(parts, p.text(size)...)
@@ -90,11 +104,14 @@ func (p *parser) row(size float64) Box {
 	return beside(parts)
 }
 
-// script sets a superscript or a subscript.
-func (p *parser) script(kind rune, size float64) Box {
+// script sets a superscript or a subscript; what is raised stands at the top of
+// what it belongs to, where that is high.
+func (p *parser) script(kind rune, size float64, before []Box) Box {
 	rise := size * supRise
 	if kind == format.Sub {
 		rise = size * subDrop
+	} else if n := len(before); n > 0 {
+		rise = max(rise, before[n-1].Above-size*ascent+size*supRise)
 	}
 	b := p.row(size * scriptSize)
 	return Box{b.Width + scriptRow*size*scriptSize, b.Above + rise, b.Below - rise, func(c vg.Canvas, x, y float64) { b.draw(c, x, y+rise) }}
@@ -103,7 +120,7 @@ func (p *parser) script(kind rune, size float64) Box {
 // text sets characters up to the next markup, letters and the rest apart.
 func (p *parser) text(size float64) []Box {
 	from := p.at
-	for p.at < len(p.in) && !strings.ContainsRune(string([]rune{format.Sup, format.Sub, format.End, over, under, root, closed}), p.in[p.at]) {
+	for p.at < len(p.in) && !strings.ContainsRune(marks, p.in[p.at]) {
 		p.at++
 	}
 	var out []Box
@@ -128,43 +145,4 @@ func beside(parts []Box) Box {
 		}
 	}
 	return b
-}
-
-// fraction sets a numerator over a denominator.
-func (p *parser) fraction(n, d Box, size float64) Box {
-	width := max(n.Width, d.Width) + 2*overhang*size
-	mid, gap := axis*size, barGap*size
-	return Box{width + 2*overhang*size, mid + gap + n.Below + n.Above, gap + d.Above + d.Below - mid, func(c vg.Canvas, x, y float64) {
-		x += overhang * size
-		n.draw(c, x+(width-n.Width)/2, y+mid+gap+n.Below)
-		d.draw(c, x+(width-d.Width)/2, y+mid-gap-d.Above)
-		p.stroke(c, size, x, y+mid, x+width, y+mid)
-	}}
-}
-
-// root sets a radicand under its sign.
-func (p *parser) root(r Box, size float64) Box {
-	top, foot, lead := r.Above+barGap*size, -r.Below*0.8, tick*size
-	return Box{lead + r.Width + overhang*size, top + barGap*size, r.Below, func(c vg.Canvas, x, y float64) {
-		p.stroke(c, size, x+0.04*size, y+foot+0.36*size, x+0.12*size, y+foot+0.42*size, x+0.24*size, y+foot,
-			x+0.38*size, y+top, x+lead+r.Width, y+top)
-		r.draw(c, x+lead, y)
-	}}
-}
-
-// stroke draws a line through points.
-func (p *parser) stroke(c vg.Canvas, size float64, xy ...float64) {
-	c.SetColor(p.st.Color)
-	c.SetLineWidth(vg.Points(barWidth * size))
-	c.SetLineDash(nil, 0)
-	var path vg.Path
-	for i := 0; i+1 < len(xy); i += 2 {
-		at := vg.Point{X: vg.Points(xy[i]), Y: vg.Points(xy[i+1])}
-		if i == 0 {
-			path.Move(at)
-		} else {
-			path.Line(at)
-		}
-	}
-	c.Stroke(path)
 }

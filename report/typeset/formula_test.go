@@ -83,7 +83,7 @@ func TestFraction(t *testing.T) {
 // Nothing of a formula is lost, whatever its markup, also where that is not
 // closed or closed too often.
 func TestFormulaKeepsText(t *testing.T) {
-	marks := []string{"a", "V", "12", "ln", " ", "γ", string(format.Sup), string(format.Sub), string(format.End), string(over), string(under), string(root), string(closed)}
+	marks := []string{"a", "V", "12", "ln", " ", "γ", string(format.Sup), string(format.Sub), string(format.End), string(over), string(under), string(root), string(closed), string(round), string(bars)}
 	rapid.Check(t, func(t *rapid.T) {
 		s := strings.Join(rapid.SliceOfN(rapid.SampledFrom(marks), 0, 30).Draw(t, "parts"), "")
 		want := ""

@@ -46,7 +46,7 @@ func asciiLetter(r rune) bool { return r < unicode.MaxASCII && unicode.IsLetter(
 
 // short are words and names of two letters; longer ones are told by their
 // length from products of quantities, which have two letters at most.
-const short = " ln lg lb if at or as of Re Im is in "
+const short = " ln lg lb if at or as of Re Im is in Lo Hi DC "
 
 // letters puts a word or a name of a function upright, quantities italic, and
 // upright the d of a differential and the j of the imaginary unit.
