@@ -1,7 +1,6 @@
 package report
 
 import (
-	"fmt"
 	"strings"
 
 	"linewitness/report/format"
@@ -144,7 +143,7 @@ func claimTally(all []record.Claim) string {
 		word string
 	}{{confirmed, "confirmed"}, {contradicted, "contradicted"}, {open, "not shown"}} {
 		if p.n > 0 {
-			parts = append(parts, fmt.Sprintf("%d%s%s", p.n, format.Space, p.word))
+			parts = append(parts, format.Count(int64(p.n))+format.Space+p.word)
 		}
 	}
 	return "Claims: " + strings.Join(parts, ", ") + "."

@@ -12,6 +12,7 @@ import (
 
 	"linewitness/report/archive"
 	"linewitness/report/canvas"
+	"linewitness/report/format"
 	"linewitness/report/sheet"
 	"linewitness/sim/record"
 )
@@ -111,7 +112,7 @@ type document struct {
 // figure returns the label of the next figure.
 func (d *document) figure() string {
 	d.figures++
-	return fmt.Sprintf("Figure %d", d.figures)
+	return "Figure " + format.Count(int64(d.figures))
 }
 
 // nominal returns the first case, or nil if there is none.

@@ -2,7 +2,6 @@ package report
 
 import (
 	"cmp"
-	"fmt"
 	"slices"
 	"strings"
 
@@ -43,13 +42,13 @@ func (d *document) ratings() {
 	}
 	title := "Ratings, worst first"
 	if len(all) > coverRatings {
-		title = fmt.Sprintf("Ratings: the %d worst of %d", coverRatings, len(all))
+		title = "Ratings: the " + format.Count(coverRatings) + " worst of " + format.Count(int64(len(all)))
 	}
 	d.b.Subheading(title, 80)
 	d.b.Table(ratingTable(all[:min(len(all), coverRatings)], true, fielded(all)))
 	note := ""
 	if len(all) > coverRatings {
-		note = fmt.Sprintf("All %d ratings stand with their cases. ", len(all))
+		note = "All " + format.Count(int64(len(all))) + " ratings stand with their cases. "
 	}
 	d.b.Note(note + ratingNote(all))
 }

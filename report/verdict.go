@@ -1,7 +1,6 @@
 package report
 
 import (
-	"fmt"
 	"image/color"
 	"slices"
 	"strings"
@@ -98,7 +97,7 @@ func (t tally) String() string {
 		word string
 	}{{t.met, "met"}, {t.missed, "missed"}, {t.open, "not shown"}} {
 		if p.n > 0 {
-			parts = append(parts, fmt.Sprintf("%d%s%s", p.n, format.Space, p.word))
+			parts = append(parts, format.Count(int64(p.n))+format.Space+p.word)
 		}
 	}
 	return strings.Join(parts, ", ")
@@ -210,7 +209,7 @@ func (l *casesOf) sentences(further string) []string {
 	var parts []string
 	for i, s := range l.statements {
 		if i == most {
-			parts = append(parts, fmt.Sprintf("%d %s.", len(l.statements)-most, further))
+			parts = append(parts, format.Count(int64(len(l.statements)-most))+" "+further+".")
 			break
 		}
 		parts = append(parts, s+" in "+among(l.cases[s], most)+".")
@@ -221,7 +220,7 @@ func (l *casesOf) sentences(further string) []string {
 // among joins names, naming at most n.
 func among(names []string, n int) string {
 	if len(names) > n {
-		return strings.Join(names[:n], ", ") + fmt.Sprintf(" and %d more", len(names)-n)
+		return strings.Join(names[:n], ", ") + " and " + format.Count(int64(len(names)-n)) + " more"
 	}
 	return strings.Join(names, ", ")
 }
