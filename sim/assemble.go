@@ -63,7 +63,7 @@ func (s *solved) verdict(c *record.Case) record.Verdict {
 	switch {
 	case !s.steady.Settling.Settled:
 		return record.Unsettle
-	case !(s.compared.Found() <= s.design.Grid.Agreement) || !s.compared.Explained() || unexplained(c.Convergence.Studies) > 0, open(c.Power):
+	case !(s.compared.Found() <= s.design.Grid.Agreement) || !s.compared.Explained(s.tail()) || unexplained(c.Convergence.Studies) > 0, open(c.Power):
 		return record.Disagree
 	}
 	var all []record.RequirementVerdict

@@ -15,7 +15,7 @@ type measured struct {
 	spread   func() float64             // how far it is likely off, see likely
 	moved    func(e float64) float64    // how far it moves for errors of all phasors of e, relative to the largest of their kind
 	study    func() record.Study        // on the grids, in SI units
-	residual float64                    // of the settling run
+	residual float64                    // what the settling run leaves of it at most, see leftover
 	levels   int                        // how many grids have it
 	composed *composed                  // what it is made of, if its uncertainty is that of its parts
 	pick     func(*fdtd.Stress) float64 // of the time domain only: then the fields above are not there
@@ -32,7 +32,7 @@ func (s *solved) measure(r design.Requirement, q quantity) *measured {
 		at:       func(v view) float64 { return q(s.view(v)) },
 		spread:   func() float64 { return s.spreadOf(r, q, s.likely()) },
 		moved:    func(e float64) float64 { return s.spreadOf(r, q, s.budget(e)) },
-		residual: s.steady.Settling.Residual,
+		residual: s.leftover(),
 		levels:   len(s.levels),
 	})
 }

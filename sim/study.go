@@ -21,6 +21,23 @@ type studied struct {
 // leaves may be: as of package agree.
 const residualSlack = 3
 
+// trusted is the part of the settling tolerance below which the estimate is not
+// believed: a slow tail can hide behind faster modes.
+const trusted = 0.01
+
+// leftover is how far the settling run may be from steady state, relative to the
+// largest of each section: its estimate with the slack, and what its mean and its
+// harmonics show of a tail that the estimate does not see.
+func (s *solved) leftover() float64 {
+	return residualSlack*s.steady.Settling.Residual + s.tail()
+}
+
+// tail is the part of that which the estimate may not have seen.
+func (s *solved) tail() float64 {
+	g := s.steady.Settling
+	return trusted*s.design.Grid.SettleTolerance + g.Mean + g.Harmonic
+}
+
 // arithmetic is the relative error that rounding may leave in a phasor, and
 // what the crest of a wave through the points of a grid may miss.
 const arithmetic = 1e-9
@@ -45,8 +62,7 @@ func (s *solved) study(f studied) record.Study {
 	at := func(v view) float64 { return f.scale.from(f.figure.at(v)) }
 	finest := at(fdtdView(0))
 	per := s.sensitivity(f, at)
-	residual := residualSlack * f.figure.residual
-	out.Settling, out.Rounding = per*residual, arithmetic*(per+math.Abs(finest))
+	out.Settling, out.Rounding = per*f.figure.residual, arithmetic*(per+math.Abs(finest))
 	for level := range f.figure.levels {
 		out.Values = append(out.Values, at(fdtdView(level)))
 	}
@@ -159,7 +175,7 @@ func (s *solved) agreementFigure() *measured {
 	}
 	return s.studying(&measured{
 		difference: true,
-		residual:   s.steady.Settling.Residual,
+		residual:   s.leftover(),
 		levels:     len(found),
 		at: func(v view) float64 {
 			if v < 0 {

@@ -16,7 +16,7 @@ func (s *solved) warnings(c *record.Case) []string {
 	if !s.steady.Settling.Settled {
 		say("steady state was not reached: %s", s.decayText())
 	}
-	if !s.compared.Explained() {
+	if !s.compared.Explained(s.tail()) {
 		say("the methods differ by more than the grid and the settling residual explain")
 	}
 	if n := unexplained(c.Convergence.Studies); n > 0 {

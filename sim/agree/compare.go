@@ -139,10 +139,11 @@ func (r *Result) take(k int, s *Section) {
 func (r *Result) Found() float64 { return math.Max(r.Voltage, r.Current) }
 
 // Explained reports whether the difference is what the grid and the settling
-// residual must cause, within slack, on every section.
-func (r *Result) Explained() bool {
+// residual must cause, within slack and tail, on every section. The tail is what
+// the estimate of the residual may not have seen, relative to the section's largest.
+func (r *Result) Explained(tail float64) bool {
 	for _, s := range r.Sections {
-		if !s.Voltage.explained() || !s.Current.explained() {
+		if !s.Voltage.explained(tail) || !s.Current.explained(tail) {
 			return false
 		}
 	}
@@ -150,7 +151,7 @@ func (r *Result) Explained() bool {
 }
 
 // explained is false for a difference that is not a number.
-func (k *Kind) explained() bool { return k.Found <= slack*k.Expected }
+func (k *Kind) explained(tail float64) bool { return k.Found <= slack*k.Expected+tail }
 
 func at(z []float64, k int, f func(int, float64) complex128) []complex128 {
 	out := make([]complex128, len(z))
