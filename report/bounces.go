@@ -38,8 +38,10 @@ func bounceCoefficients(b record.Bounces) sheet.Table {
 	for i, q := range b.Coefficients {
 		row := []sheet.Cell{
 			{Text: q.Junction, Bold: true},
-			{Text: format.Number(q.FromLeft)}, {Text: format.Number(q.ThroughRight)},
-			{Text: format.Number(q.FromRight)}, {Text: format.Number(q.ThroughLeft)},
+			{Text: format.Number(q.FromLeft)},
+			{Text: format.Number(q.ThroughRight)},
+			{Text: format.Number(q.FromRight)},
+			{Text: format.Number(q.ThroughLeft)},
 		}
 		if i < len(b.Sections) {
 			s := b.Sections[i]

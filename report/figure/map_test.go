@@ -85,8 +85,15 @@ func TestShade(t *testing.T) {
 		lined bool
 		want  uint8
 	}{
-		{math.NaN(), false, shadeNone}, {math.Inf(1), true, shadeNone}, {0, true, shadeZero}, {1e-9, false, shadeZero},
-		{1, true, shadeNegative - 1}, {1, false, shadeNegative - 1}, {-1, false, shadeLined - 1}, {-1, true, shadeLined + mapLevels - 1}, {2, false, shadeNegative - 1},
+		{math.NaN(), false, shadeNone},
+		{math.Inf(1), true, shadeNone},
+		{0, true, shadeZero},
+		{1e-9, false, shadeZero},
+		{1, true, shadeNegative - 1},
+		{1, false, shadeNegative - 1},
+		{-1, false, shadeLined - 1},
+		{-1, true, shadeLined + mapLevels - 1},
+		{2, false, shadeNegative - 1},
 	} {
 		if got := shade(c.v, c.lined); got != c.want {
 			t.Errorf("shade(%v, %v) = %d, want %d", c.v, c.lined, got, c.want)
