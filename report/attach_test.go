@@ -16,7 +16,7 @@ import (
 func TestAttachments(t *testing.T) {
 	r := reporttest.Feeder()
 	r.Attachments = []record.Attachment{{Name: "data/antenna.s1p", Data: []byte("# MHz S MA R 50\r\n100 0.5 -20\r\n")}, {Name: "spot.CSV", Data: []byte("1,2")}}
-	f, err := archive.Open(write(t, r, Options{}))
+	f, err := archive.Open(written(t, r, Options{}))
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -8,5 +8,6 @@
 //
 // The parts: package format makes text of numbers, typeset sets text, ink
 // holds colours and line styles, sheet lays out pages, figure draws panels,
-// drawing draws the network, and canvas puts it all on gofpdf's pages.
+// drawing draws the network, canvas puts it all on gofpdf's pages, and archive gives
+// the file the form in which it is kept and attaches the design and the outcome.
 package report

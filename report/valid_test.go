@@ -15,7 +15,7 @@ import (
 // Other programs read the file: it is valid, all its fonts are embedded and
 // its outline names the cases.
 func TestFileIsValid(t *testing.T) {
-	file := write(t, reporttest.Feeder(), Options{})
+	file := written(t, reporttest.Feeder(), Options{})
 	api.DisableConfigDir()
 	conf := model.NewDefaultConfiguration()
 	conf.ValidationMode = model.ValidationRelaxed
