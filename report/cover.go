@@ -69,10 +69,10 @@ type field struct{ label, value string }
 func (d *document) identity(room coverRoom) {
 	g := d.r.Design
 	d.b.Fields([]sheet.Field{
-		{Label: "Document number", Value: orElse(g.Number, "none")},
-		{Label: "Revision", Value: orElse(g.Revision, "none")},
-		{Label: "Date", Value: dated(g)},
-		{Label: "Design file", Value: path.Base(g.File)},
+		{Label: "Document number", Value: orElse(g.Number, "none"), Lines: room.prose},
+		{Label: "Revision", Value: orElse(g.Revision, "none"), Lines: room.prose},
+		{Label: "Date", Value: dated(g), Lines: room.prose},
+		{Label: "Design file", Value: path.Base(g.File), Lines: room.prose},
 		{Label: "Purpose", Value: orElse(g.Purpose, "not stated"), Wide: true, Lines: room.prose},
 	})
 	if g.Notes != "" {

@@ -22,8 +22,8 @@ func (d *document) fingerprint(room coverRoom) {
 	}
 	made := "linewitness " + strings.TrimSpace(d.r.Tool.Version+" ("+d.r.Tool.Go+")") + "; written to PDF/A-3b (ISO 19005-3)"
 	fields = append(fields,
-		sheet.Field{Label: "Made by", Value: made, Wide: true},
-		sheet.Field{Label: "Attached", Value: attached(d.files), Wide: true})
+		sheet.Field{Label: "Made by", Value: made, Wide: true, Lines: room.prose},
+		sheet.Field{Label: "Attached", Value: attached(d.files), Wide: true, Lines: room.prose})
 	d.b.Fields(fields)
 }
 

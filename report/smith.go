@@ -51,7 +51,13 @@ func (d *document) reflections(c *record.Case) {
 		rows = append(rows, g.row(c, list[i:min(i+g.columns, len(list))], key))
 	}
 	const note = 45 // of the text and the key
-	d.b.Subheading("Reflection and phase along the sections", note+g.total()+d.b.CaptionHeight("Figure 00", rows[0].finding))
+	need := note + g.total() + d.b.CaptionHeight("Figure 00", rows[0].finding)
+	d.b.Float(headingRoom+need, func() { d.reflectionRows(need, rows, key, even) })
+}
+
+// reflectionRows writes the rows of charts.
+func (d *document) reflectionRows(need float64, rows []picture, key []figure.Entry, even []string) {
+	d.b.Subheading("Reflection and phase along the sections", need)
 	d.b.Note("Reflection coefficient Γ in its plane (chart after P. H. Smith), in each section against its own " + z0 + " and looking away from the generator. " +
 		"Circles: resistance and reactance in units of that " + z0 + ". A turn is half a wavelength. Phase of V relative to the EMF of the source, unwrapped.")
 	d.key(key)

@@ -25,15 +25,22 @@ func (d *document) spaceTime(c *record.Case) {
 		d.bounces(c)
 		return
 	}
+	const need = mapHeight + figure.KeyHeight + 40
+	d.b.Float(headingRoom+need, func() { d.spaceTimeFigure(c, need) })
+	d.bounces(c)
+}
+
+// spaceTimeFigure draws the map.
+func (d *document) spaceTimeFigure(c *record.Case, need float64) {
+	m := c.SpaceTime
 	key := mapKey(m)
-	d.b.Subheading("Place and time: the first echoes", mapHeight+figure.KeyHeight+40)
+	d.b.Subheading("Place and time: the first echoes", need)
 	d.b.Note(mapNote(m))
 	d.key(key)
 	d.show(picture{
 		name: pictureName(c, "spacetime"), finding: mapFinding(c), height: mapHeight, key: key,
 		paint: func(cv draw.Canvas) { spaceTimeMap(c).Draw(cv) },
 	})
-	d.bounces(c)
 }
 
 // leaveMap notes that the map and the bounce table are left out.

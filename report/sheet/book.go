@@ -32,6 +32,8 @@ type Book struct {
 	contents    int     // the page for the list of them; 0 if there is none
 	contentsTop float64 // the upper edge of its room
 	feet        []Foot
+	floats      []floated
+	landing     bool // a piece that waited is being drawn
 	headed      bool // the last block on the page is a heading
 
 	// Overfull counts the pieces of text that are wider than the room given

@@ -35,6 +35,7 @@ func (b *Book) Contents() {
 		b.NewPage()
 	}
 	b.Heading("Contents", 0)
+	b.headed = false // the list comes below it
 	b.contents, b.contentsTop = b.pdf.PageCount(), b.y-b.gap
 	b.NewPage()
 }

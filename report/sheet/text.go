@@ -64,6 +64,7 @@ func (b *Book) Label(s string, keep float64) {
 
 // outline makes room for a heading and enters it in the outline.
 func (b *Book) outline(s string, level int, room float64) {
+	b.land(level, room)
 	b.Need(room)
 	b.began(s)
 	b.pdf.Bookmark(s, level, b.paper.Height-b.y)
