@@ -4,6 +4,8 @@ import (
 	"math"
 	"testing"
 
+	"linewitness/sim/line"
+	"linewitness/sim/network"
 	"linewitness/sim/record"
 )
 
@@ -226,5 +228,30 @@ requirements:
 `)).Cases[0]
 	if r := requirement(t, c, "S"); r.Verdict != record.NotShownReq || math.IsNaN(r.Value) || r.Note == "" {
 		t.Errorf("%g s: %s (%s)", r.Value, r.Verdict, r.Note)
+	}
+}
+
+// TestSourceOfAResonantBranch: most of the current of the source goes past the
+// section, and what is left of its start rings in the reactances of the source.
+// Drawn at random, where it was not explained.
+func TestSourceOfAResonantBranch(t *testing.T) {
+	const f = 100e6
+	reactance := func(ohm float64) float64 { return ohm / (2 * math.Pi * f) }
+	k := line.Constants{L: 20 / line.C0, C: 1 / (20 * line.C0), G: 2 * 0.1 * f / line.C0 / 20} // 0.1 Np per wavelength
+	net := &network.Network{
+		Frequency: f, Junctions: []string{"a", "b", "c"},
+		Sections: []network.Section{{Name: "s", From: 0, To: 1, Length: 0.0625 * line.C0 / f, Line: k}},
+		Branches: []network.Branch{
+			{Name: "load", A: 1, B: network.Ground, Series: network.Series{R: 10}},
+			{Name: "choke", Kind: network.Element, A: 0, B: 2, Series: network.Series{R: 1, L: reactance(1)}},
+			{Name: "hanging", A: 2, B: network.Ground, Series: network.Series{R: 10}},
+		},
+		Source: network.Source{EMF: 1, Series: network.Series{R: 10, L: reactance(30.875), C: 1 / (2 * math.Pi * f)}},
+	}
+	s := settled(t, net, 40)
+	for _, k := range s.keyStudies() {
+		if st := s.study(k); !st.Explained {
+			t.Errorf("%s %s: error %.3g, uncertainty %.3g", st.Quantity, st.Subject, st.Error, st.Uncertainty)
+		}
 	}
 }

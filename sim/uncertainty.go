@@ -98,13 +98,19 @@ func (s *solved) budget(e float64) *budget {
 
 // within is how far the current of a series part between two junctions may be
 // off: by that of all branches, or by what its voltage is off over its impedance.
+// What is left of a start rings at another frequency than that of the source,
+// where a reactance is another, and that of a resonant circuit is anything.
 func (b *budget) within(part network.Series, from, to int, all, omega float64) float64 {
 	v := b.junctions[from]
 	if to != network.Ground {
 		v += b.junctions[to]
 	}
-	if part.Ideal() {
+	const other = 2 // how much less a reactance may be there
+	switch {
+	case part.Ideal(), part.L > 0 && part.C > 0:
 		return all
+	case part.L > 0, part.C > 0:
+		v *= other
 	}
 	return math.Min(all, v/cmplx.Abs(part.Impedance(omega)))
 }
