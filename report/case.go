@@ -91,7 +91,7 @@ func (d *document) sections(c *record.Case) {
 	if len(t.Rows) == 0 {
 		return
 	}
-	d.b.Subheading("Sections: steady state (phasor) and peaks (time domain)", d.b.Kept(t))
+	d.b.Subheading("Sections: steady state (phasor) and peaks", d.b.Kept(t))
 	d.b.Table(t)
 }
 

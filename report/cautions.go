@@ -2,7 +2,7 @@ package report
 
 // cautions writes what a reader must know before touching the plant.
 func (d *document) cautions() {
-	d.b.Heading("Cautions", 60)
+	d.b.Heading("Cautions", 170) // they stand together
 	for _, c := range []struct{ term, text string }{
 		{"RF burns", "Contact with a conductor at radio frequency burns deeply, often without a warning shock, and at levels far below those in this record. Switch off, isolate, lock out and earth before touching any conductor, the outer one included."},
 		{"High voltage", "Standing waves and switching put voltages on lines, open ends and stubs that exceed the source's own; this record shows where. Long lines keep a charge after they are disconnected: discharge and earth them."},

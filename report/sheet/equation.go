@@ -9,44 +9,58 @@ import (
 const (
 	equationIndent = 16
 	equationSize   = 9.2
-	equationGap    = 22 // between two on a line
+	equationGap    = 22.0 // between two on a line
+	equationAir    = 2.5  // above and below a line
 )
 
-// Equation writes equations side by side, as many on a line as find room,
-// indented. Their markup is that of [typeset.Style.Formula].
-func (b *Book) Equation(formulas ...string) {
-	st := BodyStyle.At(equationSize)
+// Equation writes a paragraph and below it equations side by side, as many on a
+// line as find room, indented. Their markup is that of [typeset.Style.Formula]. The
+// end of the paragraph stays with the first line of equations.
+func (b *Book) Equation(s string, formulas ...string) {
+	lines := b.equationLines(formulas)
+	above, below, _ := extent(lines[0])
 	b.Space(4)
-	var line []typeset.Box
+	b.linesBefore(BodyStyle, s, above+below+2*equationAir+4)
+	b.Space(4)
+	for _, line := range lines {
+		b.equationLine(line)
+	}
+	b.Space(6)
+}
+
+// equationLines sets formulas and puts them into lines.
+func (b *Book) equationLines(formulas []string) (lines [][]typeset.Box) {
 	width := 0.0
 	for _, f := range formulas {
-		box := st.Formula(f)
-		if len(line) > 0 && width+equationGap+box.Width > b.Width()-equationIndent {
-			b.equationLine(line)
-			line, width = nil, 0
+		box := BodyStyle.At(equationSize).Formula(f)
+		if len(lines) == 0 || width+equationGap+box.Width > b.Width()-equationIndent {
+			lines, width = append(lines, nil), -equationGap
 		}
-		if len(line) > 0 {
-			width += equationGap
-		}
-		line, width = append(line, box), width+box.Width
+		last := len(lines) - 1
+		lines[last], width = append(lines[last], box), width+equationGap+box.Width
 	}
-	b.equationLine(line)
-	b.Space(6)
+	return lines
+}
+
+// extent returns the height of a line of equations above and below its baseline,
+// and its width.
+func extent(line []typeset.Box) (above, below, width float64) {
+	width = -equationGap
+	for _, f := range line {
+		above, below = max(above, f.Above), max(below, f.Below)
+		width += equationGap + f.Width
+	}
+	return above, below, width
 }
 
 // equationLine writes one line of equations.
 func (b *Book) equationLine(line []typeset.Box) {
-	const air = 2.5 // above and below, points
-	var above, below, width float64
-	for _, f := range line {
-		above, below = max(above, f.Above), max(below, f.Below)
-		width += f.Width + equationGap
-	}
-	if width-equationGap > b.Width()-equationIndent {
+	above, below, width := extent(line)
+	if width > b.Width()-equationIndent {
 		b.Overfull++
 	}
-	b.Block(above+below+2*air, func(c draw.Canvas) {
-		x, y := c.Min.X.Points()+equationIndent, c.Max.Y.Points()-air-above
+	b.Block(above+below+2*equationAir, func(c draw.Canvas) {
+		x, y := c.Min.X.Points()+equationIndent, c.Max.Y.Points()-equationAir-above
 		for _, f := range line {
 			f.Draw(c, x, y)
 			x += f.Width + equationGap

@@ -174,10 +174,17 @@ func (b *Book) labelled(st typeset.Style, label, s string) {
 
 // lines writes wrapped text. No line of it stands alone at the foot or at the
 // head of a page.
-func (b *Book) lines(st typeset.Style, s string) {
+func (b *Book) lines(st typeset.Style, s string) { b.linesBefore(st, s, 0) }
+
+// linesBefore is lines before something of height h that stays with the end of
+// the text.
+func (b *Book) linesBefore(st typeset.Style, s string, h float64) {
 	lines := st.Wrap(s, b.Width())
 	for i, line := range lines {
 		b.keep(i, len(lines), leadingOf(st))
+		if h > 0 && i >= len(lines)-2 {
+			b.Need(float64(len(lines)-i)*leadingOf(st) + h)
+		}
 		b.Block(leadingOf(st), func(c draw.Canvas) {
 			b.Draw(c, st, c.Min.X.Points(), c.Max.Y.Points()-st.Size*ascender, b.Width(), line)
 		})
