@@ -28,9 +28,10 @@ type Book struct {
 	gap   float64 // room to leave before the next block on the page
 	err   error
 
-	entries     []entry // the headings so far
-	contents    int     // the page for the list of them; 0 if there is none
-	contentsTop float64 // the upper edge of its room
+	headings    []heading // that wait for the block below them
+	entries     []entry   // the headings so far
+	contents    int       // the page for the list of them; 0 if there is none
+	contentsTop float64   // the upper edge of its room
 	feet        []Foot
 	floats      []floated
 	landing     bool // a piece that waited is being drawn
@@ -67,6 +68,15 @@ func (b *Book) NewPage() {
 	b.y, b.gap = b.paper.Height-marginTop, 0
 }
 
+// close ends the last page.
+func (b *Book) close() {
+	if len(b.headings) > 0 {
+		b.put(0)
+	}
+	b.land(0, 0)
+	b.endPage()
+}
+
 func (b *Book) endPage() {
 	if b.cv != nil {
 		b.feet = append(b.feet, Foot{Left: b.y - marginBottom, Headed: b.headed})
@@ -82,7 +92,7 @@ func (b *Book) Width() float64 { return b.paper.Width - marginLeft - marginRight
 func (b *Book) Body() float64 { return b.paper.Height - marginTop - marginBottom }
 
 // Room returns the height that is left on the page in work.
-func (b *Book) Room() float64 { return b.y - b.gap - marginBottom }
+func (b *Book) Room() float64 { return b.y - b.gap - b.waiting() - marginBottom }
 
 // Fresh reports whether nothing is on the page yet.
 func (b *Book) Fresh() bool { return b.y == b.paper.Height-marginTop }
@@ -90,6 +100,10 @@ func (b *Book) Fresh() bool { return b.y == b.paper.Height-marginTop }
 // Need begins a new page unless the page in work has room for a block of
 // height h.
 func (b *Book) Need(h float64) {
+	if len(b.headings) > 0 {
+		b.put(h)
+		return
+	}
 	if b.Room() < h && !b.Fresh() {
 		b.NewPage()
 	}
@@ -131,7 +145,7 @@ func (b *Book) Pages() int { return b.pdf.PageCount() }
 // properties: what it says about itself, and the form in which it is kept, are the
 // business of package archive. The book cannot be used after it.
 func (b *Book) Write(w io.Writer) error {
-	b.endPage()
+	b.close()
 	b.listContents()
 	total := b.pdf.PageCount()
 	for page := 1; page <= total; page++ {

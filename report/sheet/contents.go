@@ -35,6 +35,7 @@ func (b *Book) Contents() {
 		b.NewPage()
 	}
 	b.Heading("Contents", 0)
+	b.put(0)
 	b.headed = false // the list comes below it
 	b.contents, b.contentsTop = b.pdf.PageCount(), b.y-b.gap
 	b.NewPage()
@@ -102,7 +103,7 @@ func (b *Book) leader(from, to, y float64) {
 const (
 	contentsIndent = 12.0
 	contentsGutter = 22.0
-	loose, close   = 14.0, 9.0 // of the lines
+	loose, tight   = 14.0, 9.0 // of the lines
 )
 
 // arrangement is how the contents fill their page.
@@ -128,13 +129,13 @@ func (b *Book) arrange(room float64) arrangement {
 		l.unit = min(room/units, loose)
 		l.width = (b.Width() - contentsGutter*float64(try.columns-1)) / float64(try.columns)
 		l.size = min(BodyStyle.Size, l.unit*0.8)
-		if l.unit >= close {
+		if l.unit >= tight {
 			return l
 		}
 	}
-	l.unit, l.size = close, close*0.8
+	l.unit, l.size = tight, tight*0.8
 	for i, c := range l.columns {
-		l.columns[i] = c[:min(len(c), int(room/(close*entry{}.units())))]
+		l.columns[i] = c[:min(len(c), int(room/(tight*entry{}.units())))]
 	}
 	return l
 }

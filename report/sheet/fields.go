@@ -14,8 +14,8 @@ func (b *Book) Overline(s string) {
 
 // Title writes the title of the document.
 func (b *Book) Title(s string) {
-	b.outline("Summary", 0, 0) // an outline must begin with its first level
-	const most = 4             // lines; the listing of the design file has the rest
+	b.enter("Summary", 0) // an outline must begin with its first level
+	const most = 4        // lines; the listing of the design file has the rest
 	for _, line := range First(TitleStyle.Wrap(s, b.Width()), most) {
 		b.lines(TitleStyle, line)
 	}

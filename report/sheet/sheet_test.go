@@ -53,15 +53,93 @@ func TestBlocksBreakPages(t *testing.T) {
 	finish(t, b)
 }
 
-// A heading keeps room for what follows, so it is never alone at the foot.
+// A heading keeps room for what follows, and it goes to the next page with it.
 func TestHeadingIsNotLeftAlone(t *testing.T) {
 	b := book()
 	b.Block(b.Body()-60, func(draw.Canvas) {})
 	b.Heading("Heading", 80)
+	b.Paragraph("Text.")
 	if b.Pages() != 2 {
 		t.Errorf("the heading is on page %d, want 2", b.Pages())
 	}
 	finish(t, b)
+}
+
+// Whatever is written in whatever order, no heading is alone at the foot of a page,
+// no piece that waits is lost, and every heading is in the contents.
+func TestHeadingsGoWithWhatFollows(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		b := book()
+		drawn, floats, headings := 0, 0, 0
+		for range rapid.IntRange(1, 40).Draw(t, "parts") {
+			height := rapid.Float64Range(5, 500).Draw(t, "height")
+			switch rapid.IntRange(0, 4).Draw(t, "kind") {
+			case 0:
+				b.Heading("Heading", rapid.Float64Range(0, 200).Draw(t, "keep"))
+				headings++
+			case 1:
+				b.Subheading("Subheading", rapid.Float64Range(0, 200).Draw(t, "keep"))
+				headings++
+			case 2:
+				b.Table(rowsOf(rapid.IntRange(1, 40).Draw(t, "rows")))
+			case 3:
+				floats++
+				headings++
+				b.Float(height, func() {
+					b.Subheading("Float", height-20)
+					b.Block(height-20, func(draw.Canvas) { drawn++ })
+				})
+			default:
+				b.Block(height, func(draw.Canvas) {})
+			}
+		}
+		b.Block(10, func(draw.Canvas) {})
+		if err := b.Err(); err != nil {
+			t.Fatal(err)
+		}
+		for i, f := range b.Feet() {
+			if f.Headed {
+				t.Fatalf("page %d ends with a heading", i+1)
+			}
+			if f.Left < -1e-9 {
+				t.Fatalf("page %d is overfull by %v", i+1, -f.Left)
+			}
+		}
+		if drawn != floats || len(b.entries) != headings {
+			t.Fatalf("%d of %d pieces that waited, %d of %d headings", drawn, floats, len(b.entries), headings)
+		}
+	})
+}
+
+// The contents have every heading once with its page, whatever their number; where
+// they are too many those of the second level are left out.
+func TestContents(t *testing.T) {
+	for _, c := range []struct{ chapters, sections, listed int }{{2, 3, 9}, {9, 14, 136}, {60, 20, 61}} {
+		b := book()
+		b.Contents()
+		for range c.chapters {
+			b.Heading("Chapter", 0)
+			b.Paragraph("Text.")
+			for range c.sections {
+				b.Subheading("Section", 0)
+				b.Paragraph("Text.")
+			}
+		}
+		b.endPage()
+		l := b.arrange(b.contentsTop - marginBottom)
+		got := 0
+		for _, column := range l.columns {
+			got += len(column)
+		}
+		if got != c.listed || l.unit < tight {
+			t.Errorf("%d chapters of %d sections: %d listed, want %d, %v apart", c.chapters, c.sections, got, c.listed, l.unit)
+		}
+		b.cv = nil
+		file := finish(t, b)
+		if n := bytes.Count(file, []byte("/Subtype /Link")); n != c.listed {
+			t.Errorf("%d links, want %d", n, c.listed)
+		}
+	}
 }
 
 // No line of a paragraph stands alone at the foot or the head of a page.

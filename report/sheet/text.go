@@ -30,47 +30,6 @@ const (
 // leadingOf returns the distance of the baselines of a style.
 func leadingOf(st typeset.Style) float64 { return st.Size * leading }
 
-// Heading writes a heading of the first level, with an entry in the outline,
-// on a page that has room for it and for keep more below it.
-func (b *Book) Heading(s string, keep float64) {
-	b.Space(16)
-	b.outline(s, 0, leadingOf(HeadStyle)+9+keep)
-	b.lines(HeadStyle, s)
-	b.Block(3, func(c draw.Canvas) {
-		rule(c, c.Min.X.Points(), c.Max.X.Points(), c.Min.Y.Points()+1, 0.8)
-	})
-	b.headed = true
-	b.Space(6)
-}
-
-// Subheading is a heading of the second level.
-func (b *Book) Subheading(s string, keep float64) {
-	b.Space(11)
-	b.outline(s, 1, leadingOf(SubheadStyle)+4+keep)
-	b.lines(SubheadStyle, s)
-	b.headed = true
-	b.Space(4)
-}
-
-// Label is a heading of the second level that neither the outline nor the
-// contents have.
-func (b *Book) Label(s string, keep float64) {
-	b.Space(11)
-	b.Need(leadingOf(SubheadStyle) + 4 + keep)
-	b.lines(SubheadStyle, s)
-	b.headed = true
-	b.Space(4)
-}
-
-// outline makes room for a heading and enters it in the outline.
-func (b *Book) outline(s string, level int, room float64) {
-	b.land(level, room)
-	b.Need(room)
-	b.began(s)
-	b.pdf.Bookmark(s, level, b.paper.Height-b.y)
-	b.entries = append(b.entries, entry{s, level, b.pdf.PageCount(), b.paper.Height - b.y})
-}
-
 // Paragraph writes a paragraph of running text.
 func (b *Book) Paragraph(s string) {
 	b.Space(4)
