@@ -1,9 +1,7 @@
 package report
 
 import (
-	"cmp"
 	"slices"
-	"strconv"
 	"strings"
 
 	"linewitness/report/format"
@@ -110,40 +108,24 @@ func complianceRow(q *record.Requirement, name string, first, sourced bool) []sh
 	return row
 }
 
-// requirementIDs are the ids of all cases, each once: by their numbers where they
-// are numbered, else those of the nominal case first.
+// requirementIDs are the ids of all cases, each once, in the order of the design
+// file, which the table of the cases side by side has.
 func (d *document) requirementIDs() []string {
 	var ids []string
+	add := func(id string) {
+		if id != "" && !slices.Contains(ids, id) {
+			ids = append(ids, id)
+		}
+	}
+	for _, r := range d.r.Matrix.Rows {
+		add(r.ID)
+	}
 	for _, c := range d.r.Cases {
 		for _, q := range c.Requirements {
-			if !slices.Contains(ids, q.ID) {
-				ids = append(ids, q.ID)
-			}
+			add(q.ID)
 		}
 	}
-	prefix, _ := numbered(strings.Join(ids[:min(1, len(ids))], ""))
-	for _, id := range ids {
-		if p, n := numbered(id); p != prefix || n < 0 {
-			return ids
-		}
-	}
-	slices.SortStableFunc(ids, func(a, b string) int {
-		_, na := numbered(a)
-		_, nb := numbered(b)
-		return cmp.Compare(na, nb)
-	})
 	return ids
-}
-
-// numbered parts an id into its beginning and the number at its end; the number
-// is negative if there is none.
-func numbered(id string) (prefix string, n int) {
-	prefix = strings.TrimRight(id, "0123456789")
-	n, err := strconv.Atoi(id[len(prefix):])
-	if err != nil {
-		return prefix, -1
-	}
-	return prefix, n
 }
 
 // sourced reports whether any requirement says where it is from.

@@ -104,6 +104,7 @@ const (
 	contentsIndent = 12.0
 	contentsGutter = 22.0
 	loose, tight   = 14.0, 9.0 // of the lines
+	easy           = 11.0      // of those of one column, which are long
 )
 
 // arrangement is how the contents fill their page.
@@ -117,7 +118,10 @@ type arrangement struct {
 // hold; the outline of the document has them all.
 func (b *Book) arrange(room float64) arrangement {
 	var l arrangement
-	for _, try := range []struct{ levels, columns int }{{2, 1}, {2, 2}, {2, 3}, {1, 1}, {1, 2}, {1, 3}} {
+	for _, try := range []struct {
+		levels, columns int
+		least           float64
+	}{{2, 1, easy}, {2, 2, tight}, {2, 3, tight}, {1, 1, tight}, {1, 2, tight}, {1, 3, tight}} {
 		var list []entry
 		for _, e := range b.entries {
 			if e.level < try.levels {
@@ -129,7 +133,7 @@ func (b *Book) arrange(room float64) arrangement {
 		l.unit = min(room/units, loose)
 		l.width = (b.Width() - contentsGutter*float64(try.columns-1)) / float64(try.columns)
 		l.size = min(BodyStyle.Size, l.unit*0.8)
-		if l.unit >= tight {
+		if l.unit >= try.least {
 			return l
 		}
 	}
