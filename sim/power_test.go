@@ -27,7 +27,11 @@ func auditNetwork(t fataler, net *network.Network, cells float64) *solved {
 	if s.steady, err = fdtd.Settle(context.Background(), net, g, fdtd.Settings{}); err != nil {
 		t.Fatalf("settle: %v", err)
 	}
-	s.found = fdtdState(net, s.steady)
+	grid, err := newGridding(net, g, s.phasor)
+	if err != nil {
+		t.Fatalf("gridding: %v", err)
+	}
+	s.found = fdtdState(net, s.steady, grid.waves)
 	return s
 }
 

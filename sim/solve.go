@@ -140,10 +140,10 @@ func compareOn(g *gridding, found *fdtd.Steady, residual float64) agree.Result {
 func (s *solved) compare() {
 	s.compared = compareOn(s.grid, s.steady, s.steady.Settling.Residual)
 	s.exact = phasorState(s.net, s.phasor)
-	s.found = fdtdState(s.net, s.steady)
+	s.found = fdtdState(s.net, s.steady, s.grid.waves)
 	s.levels = []*state{s.found}
-	for _, c := range s.coarser {
-		s.levels = append(s.levels, fdtdState(s.net, c))
+	for i, c := range s.coarser {
+		s.levels = append(s.levels, fdtdState(s.net, c, s.coarseGrids[i].waves))
 	}
 	s.views()
 }

@@ -6,6 +6,7 @@ import (
 
 	"linewitness/fdtd"
 	"linewitness/phasor"
+	"linewitness/sim/agree"
 	"linewitness/sim/network"
 )
 
@@ -57,18 +58,19 @@ func closedExtremes(largest, smallest phasor.Extreme) extremes {
 	return extremes{extreme(extreme{largest.Value, largest.At}), extreme{smallest.Value, smallest.At}}
 }
 
-// fdtdState takes the time-domain steady state.
-func fdtdState(net *network.Network, s *fdtd.Steady) *state {
+// fdtdState takes the time-domain steady state; waves are how sinusoids travel
+// on its grid.
+func fdtdState(net *network.Network, s *fdtd.Steady, waves []agree.Wave) *state {
 	out := &state{net: net, junctions: s.Junctions, branches: s.Branches, source: s.Source}
 	for _, w := range s.Sections {
 		out.ends = append(out.ends, endPair{{w.VFrom, w.IFrom}, {w.VTo, w.ITo}})
 		k := len(out.ends) - 1
 		l := net.Sections[k].Length
-		beta := imag(net.Sections[k].At(net.Omega()).Propagation(net.Omega()))
-		out.voltage = append(out.voltage, gridExtremes(w.ZV, w.V, beta, l))
+		gamma := waves[k].Exponent / complex(l, 0)
+		out.voltage = append(out.voltage, gridExtremes(w.ZV, w.V, gamma, l))
 		// The ends carry the current of the half cells too: another wave than
 		// that between the centres, which goes on up to them.
-		i := gridExtremes(w.ZI, w.I, beta, l)
+		i := gridExtremes(w.ZI, w.I, gamma, l)
 		i.take(extreme{cmplx.Abs(w.IFrom), 0})
 		i.take(extreme{cmplx.Abs(w.ITo), l})
 		out.current = append(out.current, i)
@@ -125,89 +127,6 @@ func ratio(v, i complex128) complex128 {
 		return cmplx.Inf()
 	}
 	return cmplx.NaN()
-}
-
-// gridExtremes finds the extremes of |p| between the points of a grid. The
-// square of a standing wave with the phase constant beta is A + B cos 2 beta x +
-// C sin 2 beta x (times what the loss does, which is little from point to
-// point), so three points of it tell the rest.
-func gridExtremes(z []float64, p []complex128, beta, length float64) extremes {
-	sq := make([]float64, len(p))
-	for i, v := range p {
-		sq[i] = real(v)*real(v) + imag(v)*imag(v)
-	}
-	// Loss, or the place of the points between the crests, decides which crest
-	// is the largest: all are looked at.
-	out := extremes{extreme{-1, 0}, extreme{math.Inf(1), 0}}
-	for i := range sq {
-		if turns(sq, i, 1) {
-			out.take(crest(z, sq, i, 2*beta, length, 1))
-		}
-		if turns(sq, i, -1) {
-			out.take(crest(z, sq, i, 2*beta, length, -1))
-		}
-	}
-	return out
-}
-
-// take takes in a value.
-func (e *extremes) take(v extreme) {
-	if v.value > e.largest.value {
-		e.largest = v
-	}
-	if v.value < e.smallest.value {
-		e.smallest = v
-	}
-}
-
-// turns reports whether point i is not below (sign 1), or not above (sign -1),
-// its neighbours.
-func turns(sq []float64, i int, sign float64) bool {
-	return (i == 0 || sign*sq[i] >= sign*sq[i-1]) && (i == len(sq)-1 || sign*sq[i] >= sign*sq[i+1])
-}
-
-// widest is the phase of the squared wave, rad, that three points may span for
-// it to be drawn through them.
-const widest = 2.5
-
-// crest is the largest (sign 1) or smallest (sign -1) value of the wave through
-// three points, next to point i: between its neighbours, of the first and the
-// last point between the other neighbour and the end of the section. On a record that was thinned too
-// far, or that has fewer points, it is point i itself.
-func crest(z, sq []float64, i int, kappa, length, sign float64) extreme {
-	at := extreme{math.Sqrt(sq[i]), z[i]}
-	if len(sq) < 3 {
-		return at
-	}
-	m := min(max(i, 1), len(sq)-2) // the middle of the three
-	x0, x1 := z[m-1]-z[m], z[m+1]-z[m]
-	if kappa*(x1-x0) > widest {
-		return at
-	}
-	// sq - sq[m] = B (cos kx - 1) + C sin kx at the two neighbours.
-	s0, c0 := math.Sincos(kappa * x0)
-	s1, c1 := math.Sincos(kappa * x1)
-	d0, d1 := sq[m-1]-sq[m], sq[m+1]-sq[m]
-	det := (c0-1)*s1 - (c1-1)*s0
-	if det == 0 {
-		return at
-	}
-	b, c := (d0*s1-d1*s0)/det, ((c0-1)*d1-(c1-1)*d0)/det
-	lo, hi := x0, x1
-	switch i {
-	case 0:
-		lo, hi = -z[m], 0
-	case len(sq) - 1:
-		lo, hi = 0, length-z[m]
-	}
-	x := math.Atan2(sign*c, sign*b) / kappa
-	x = math.Max(lo, math.Min(hi, x))
-	sin, cos := math.Sincos(kappa * x)
-	v := sq[m] + b*(cos-1) + c*sin
-	if !(sign*v > sign*sq[i]) {
-		return at
-	}
-	return extreme{math.Sqrt(math.Max(0, v)), z[m] + x}
 }
 
 // partVoltage is VA - VB of a part.

@@ -23,7 +23,7 @@ const residualSlack = 3
 
 // trusted is the part of the settling tolerance below which the estimate is not
 // believed: a slow tail can hide behind faster modes.
-const trusted = 0.01
+const trusted = 0.001
 
 // leftover is how far the settling run may be from steady state, relative to the
 // largest of each section: its estimate with the slack, and what its mean and its
