@@ -130,9 +130,12 @@ func (n Network) waveforms(c record.Case, opt Options) []record.Waveform {
 	return out
 }
 
+// perPeriod is how many samples a period of a waveform has.
+const perPeriod = 16
+
 // waveform builds up in steps of a round trip, as echoes do.
 func (n Network) waveform(name, where, quantity, unit string, p complex128, c record.Case, opt Options) record.Waveform {
-	step := 1 / (36 * n.Frequency)
+	step := 1 / (perPeriod * n.Frequency)
 	duration := c.Stress.Duration
 	w := record.Waveform{Name: name, Where: where, Quantity: quantity, Unit: unit, Step: step}
 	value := func(t float64) float64 {
@@ -146,7 +149,7 @@ func (n Network) waveform(name, where, quantity, unit string, p complex128, c re
 		w.Samples = append(w.Samples, value(t))
 	}
 	w.Tail = record.Tail{Start: duration - 3/n.Frequency, Step: step}
-	for k := range 3 * 36 {
+	for k := range 3 * perPeriod {
 		t := w.Tail.Start + float64(k)*step
 		w.Tail.Phasor = append(w.Tail.Phasor, real(p*cmplx.Rect(1, n.omega()*t)))
 		w.Tail.Samples = append(w.Tail.Samples, w.Tail.Phasor[k]*(1+opt.Error))

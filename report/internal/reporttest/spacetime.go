@@ -11,7 +11,7 @@ import (
 // spaceTime makes up a map of the voltage along the first way from the source:
 // the steady wave behind a front, and an echo from the end.
 func (n Network) spaceTime(v map[string]complex128, periods float64) (m record.SpaceTime) {
-	const places, times = 300, 240
+	const places, times = 120, 90
 	var sections []Section
 	at, z, delay := n.At, 0.0, 0.0
 	starts := []float64{0}
