@@ -61,7 +61,7 @@ func TestReasonOfUnexplained(t *testing.T) {
 func TestConfirmedClaims(t *testing.T) {
 	r := reporttest.One("One", reporttest.Single(1), reporttest.Options{Loop: 0.5})
 	r.Cases[0].Claims = []record.Claim{{ID: "C1", Quantity: "vswr", Unit: "1", Claimed: 1.5, Phasor: 1.5, FDTD: 1.5, Verdict: record.Confirmed}}
-	all := readable(strings.Join(pages(t, write(t, r, Options{})), "\n"))
+	all := readable(strings.Join(text(t, r, Options{}), "\n"))
 	for _, s := range []string{"Claims confirmed.", "Claims: 1 confirmed."} {
 		if !strings.Contains(all, s) {
 			t.Errorf("the text lacks %q", s)

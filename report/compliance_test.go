@@ -82,7 +82,7 @@ func TestCover(t *testing.T) {
 	g.DateFrom, g.ApprovedBy = "environment", "H. Brandt"
 	g.History = []record.Revision{{Revision: "A", Date: "2026-01-10", By: "M. Okafor", Text: "First issue"}, {Revision: "B", Date: "2026-05-14", Text: "Longer trap"}}
 	r.Attachments = []record.Attachment{{Name: "antenna.s1p", Data: []byte("! empty\n"), SHA256: strings.Repeat("ab", 32)}}
-	cover := readable(pages(t, write(t, r, Options{}))[0])
+	cover := readable(text(t, r, Options{})[0])
 	for _, s := range []string{
 		"SOURCE_DATE_EPOCH", "First issue", "Longer trap", "Prepared", "Checked", "Approved", "H. Brandt", "signature",
 		"assumptions to confirm:", "From the cable table", "Assumed by the program", strings.Repeat("ab", 32), strings.Repeat("0123456789abcdef", 4),

@@ -12,7 +12,7 @@ import (
 
 // What the record says of the grids, the curves, the claims and the cases.
 func TestEvidenceInText(t *testing.T) {
-	all := squeezed(strings.Join(pages(t, write(t, reporttest.Feeder(), Options{})), ""))
+	all := squeezed(strings.Join(text(t, reporttest.Feeder(), Options{}), ""))
 	for _, s := range []string{
 		"Of 13 figures 7 converge with an observed order of 1.96 to 2.03, near the formal 2, 1 does not depend on the grid, 1 oscillates, 1 diverges and 3 are of the stress run",
 		"The largest grid convergence index is 0.059 %, of R2, peak voltage, main.",
@@ -43,7 +43,7 @@ func squeezed(s string) string { return strings.ReplaceAll(readable(s), " ", "")
 func TestWithoutEvidence(t *testing.T) {
 	r := reporttest.One("One", reporttest.Single(1), reporttest.Options{Loop: 0.5})
 	r.Cases[0].Convergence, r.Cases[0].Fidelity, r.Design.FSVChoices = record.Convergence{}, nil, nil
-	all := strings.Join(pages(t, write(t, r, Options{})), "\n")
+	all := strings.Join(text(t, r, Options{}), "\n")
 	for _, s := range []string{"Cases side by side", "Claims", "|E|/u", "Grade, spread", "The standard leaves choices open"} {
 		if strings.Contains(all, s) {
 			t.Errorf("the text has %q", s)
@@ -60,7 +60,7 @@ func TestSkippedStudy(t *testing.T) {
 		s := &v.Studies[i]
 		s.Behaviour, s.Values, s.Factor, s.GCI, s.GCIPercent, s.Order, s.Extrapolated = record.OneGrid, s.Values[:1], 0, 0, math.NaN(), math.NaN(), math.NaN()
 	}
-	all := readable(strings.Join(pages(t, write(t, r, Options{})), "\n"))
+	all := readable(strings.Join(text(t, r, Options{}), "\n"))
 	if s := "The study on three grids was left out: --grids 1 was given. Only the predicted error of the grid stands behind the figures."; !strings.Contains(all, s) {
 		t.Errorf("the text lacks %q", s)
 	}
@@ -93,7 +93,7 @@ func TestHollowEvidence(t *testing.T) {
 	r.Matrix.Cases = append(r.Matrix.Cases, "short of cells", strings.Repeat("W", 60))
 	r.Matrix.Rows[0].Cells[1] = record.MatrixCell{Present: true, Value: nan, Difference: inf, Worst: true}
 	r.Matrix.Rows = append(r.Matrix.Rows, record.MatrixRow{})
-	all := readable(strings.Join(pages(t, write(t, r, Options{})), "\n"))
+	all := readable(strings.Join(text(t, r, Options{}), "\n"))
 	for _, s := range []string{"Not explained by its uncertainty is the error of ", "(|E|/u infinite)", "Claims contradicted: H.", "worst +infinite"} {
 		if !strings.Contains(all, s) {
 			t.Errorf("the text lacks %q", s)

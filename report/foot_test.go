@@ -5,6 +5,7 @@ import (
 	"testing"
 
 	"linewitness/report/internal/reporttest"
+	"linewitness/report/sheet"
 	"linewitness/sim/record"
 )
 
@@ -24,6 +25,16 @@ var leavesRoom = map[string]string{
 	"Compliance": "the contents are a sheet of their own",
 }
 
+// lonely returns the first page that ends with a heading, 0 if none does.
+func lonely(b *sheet.Book) int {
+	for i, f := range b.Feet() {
+		if f.Headed {
+			return i + 1
+		}
+	}
+	return 0
+}
+
 // sampleRecords are records like the three demos, and one of six cases.
 func sampleRecords() map[string]*record.Record {
 	tree := reporttest.One("Reference tree", reporttest.Star(4), reporttest.Options{Error: 2e-4, Loop: 0.4})
@@ -35,8 +46,9 @@ func sampleRecords() map[string]*record.Record {
 // No heading stands alone at the foot of a page, and no page is left half empty
 // without a reason.
 func TestFeet(t *testing.T) {
+	options := map[string][]Options{"feeder": {{}, {Paper: "letter"}}, "receiving": {{}}, "tree": {{}}, "six cases": {{}, {Full: true}}}
 	for name, r := range sampleRecords() {
-		for _, opt := range []Options{{}, {Full: true}, {Paper: "letter"}} {
+		for _, opt := range options[name] {
 			d, err := build(r, opt)
 			if err != nil {
 				t.Fatal(err)
@@ -44,11 +56,11 @@ func TestFeet(t *testing.T) {
 			if err := d.b.Err(); err != nil { // ends the last page too
 				t.Fatal(err)
 			}
+			if page := lonely(d.b); page > 0 {
+				t.Errorf("%s, %+v: page %d ends with a heading", name, opt, page)
+			}
 			feet := d.b.Feet()
 			for i, f := range feet {
-				if f.Headed {
-					t.Errorf("%s, %+v: page %d ends with a heading", name, opt, i+1)
-				}
 				last := i == len(feet)-1
 				most := mostLeft
 				if f.Next == "" {
@@ -69,7 +81,7 @@ const mostPages = 40
 // the other leaves out, the other says.
 func TestSixCases(t *testing.T) {
 	r := reporttest.SixCases()
-	some, all := pages(t, write(t, r, Options{})), pages(t, write(t, r, Options{Full: true}))
+	some, all := text(t, r, Options{}), text(t, r, Options{Full: true})
 	if len(some) >= mostPages || len(all) <= len(some) {
 		t.Errorf("%d pages, %d of a full record", len(some), len(all))
 	}
@@ -94,17 +106,24 @@ func TestSummary(t *testing.T) {
 		"six cases": reporttest.SixCases(), "receiving": reporttest.Receiving(), "empty": {},
 		"long texts": named(strings.Repeat("a_very_long_name_", 12), reporttest.Options{Error: 1e-4, Loop: 0.5}), "fifty": demanding(50, reporttest.Options{Error: 1e-4, Loop: 0.5}),
 	} {
-		if n := len(pages(t, write(t, r, Options{Summary: true}))); n != 1 {
-			t.Errorf("%s: %d pages", name, n)
+		all := text(t, r, Options{Summary: true})
+		if len(all) != 1 {
+			t.Errorf("%s: %d pages", name, len(all))
 		}
+		if name != "six cases" {
+			continue
+		}
+		checkSummary(t, readable(all[0]))
 	}
-	text := readable(pages(t, write(t, reporttest.SixCases(), Options{Summary: true}))[0])
+	if _, err := build(reporttest.Feeder(), Options{Full: true, Summary: true}); err == nil {
+		t.Error("a full summary is no error")
+	}
+}
+
+func checkSummary(t *testing.T, text string) {
 	for _, s := range []string{"Requirement missed", "The 3 worst of", "stub_long", "feeder.json", "PDF/A-3b", "signature", "made without --summary"} {
 		if !strings.Contains(text, s) {
 			t.Errorf("the summary lacks %q", s)
 		}
-	}
-	if _, err := build(reporttest.Feeder(), Options{Full: true, Summary: true}); err == nil {
-		t.Error("a full summary is no error")
 	}
 }

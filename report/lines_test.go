@@ -11,7 +11,7 @@ import (
 
 // What the record says of lines, of ratings, and of where its data come from.
 func TestLinesAndRatingsInText(t *testing.T) {
-	text := pages(t, write(t, reporttest.Receiving(), Options{}))
+	text := text(t, reporttest.Receiving(), Options{})
 	all := readable(strings.Join(text, "\n"))
 	for _, s := range []string{
 		"Ratings: the 12 worst of 18", "All 18 ratings stand with their cases.", "250 V rms", "6 A peak", "missed",
@@ -36,11 +36,11 @@ func TestLinesAndRatingsInText(t *testing.T) {
 func TestFewRatings(t *testing.T) {
 	r := reporttest.Receiving()
 	r.Cases = r.Cases[:1]
-	if n := strings.Count(afterContents(pages(t, write(t, r, Options{}))), "Ratings, worst first"); n != 1 {
+	if n := strings.Count(afterContents(text(t, r, Options{})), "Ratings, worst first"); n != 1 {
 		t.Errorf("%d tables of ratings, want 1", n)
 	}
 	r.Cases[0].Ratings, r.Cases[0].Model.Lines = nil, nil
-	all := strings.Join(pages(t, write(t, r, Options{})), "\n")
+	all := strings.Join(text(t, r, Options{}), "\n")
 	for _, s := range []string{"Kinds of line", "needs confirmation", "worst first"} {
 		if strings.Contains(all, s) {
 			t.Errorf("a record without lines and ratings has %q", s)

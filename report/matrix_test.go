@@ -92,7 +92,7 @@ func TestManyCases(t *testing.T) {
 			m.Rows[i].Cells = append(m.Rows[i].Cells, record.MatrixCell{Present: true, Value: float64(k), Difference: 1, Verdict: record.Met})
 		}
 	}
-	all := strings.Join(pages(t, write(t, r, Options{})), "\n")
+	all := strings.Join(text(t, r, Options{}), "\n")
 	if got := strings.Count(all, "Requirement or key figure"); got != 3 {
 		t.Errorf("%d tables, want 3", got)
 	}

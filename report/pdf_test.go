@@ -2,7 +2,6 @@ package report
 
 import (
 	"bytes"
-	"flag"
 	"fmt"
 	"math"
 	"regexp"
@@ -13,7 +12,6 @@ import (
 	"linewitness/report/archive"
 	"linewitness/report/internal/reporttest"
 	"linewitness/sim/record"
-	"pgregory.net/rapid"
 )
 
 // written returns the document of a record as it is.
@@ -48,16 +46,45 @@ func write(t interface {
 	if err != nil {
 		t.Fatalf("write: %v", explain(err))
 	}
+	sound(t, d)
+	return file
+}
+
+// text lays a record out and returns the text of its pages, without the work of
+// making it a file to keep.
+func text(t *testing.T, r *record.Record, opt Options) []string {
+	t.Helper()
+	d, err := build(r, opt)
+	if err != nil {
+		t.Fatalf("build: %v", err)
+	}
+	var b bytes.Buffer
+	if err := d.b.Write(&b); err != nil {
+		t.Fatalf("write: %v", explain(err))
+	}
+	sound(t, d)
+	return pages(t, b.Bytes())
+}
+
+// sound fails on text that is wider than its room and on lone headings.
+func sound(t interface {
+	Helper()
+	Fatalf(string, ...any)
+}, d *document,
+) {
+	t.Helper()
 	if d.b.Overfull > 0 {
 		t.Fatalf("%d texts are wider than their room", d.b.Overfull)
 	}
-	return file
+	if page := lonely(d.b); page > 0 {
+		t.Fatalf("page %d ends with a heading", page)
+	}
 }
 
 // The text of the document: title block, verdict, numbers with their units,
 // conventions, differences between cases, listing, page numbers.
 func TestText(t *testing.T) {
-	text := pages(t, write(t, reporttest.Feeder(), Options{}))
+	text := text(t, reporttest.Feeder(), Options{})
 	if len(text) < 10 || len(text) > 34 {
 		t.Errorf("%d pages", len(text))
 	}
@@ -169,7 +196,7 @@ func TestMissingGlyph(t *testing.T) {
 	}
 	r.Design.Title = "Title"
 	r.Design.Source = []byte("# 漢\tΩ\xff\n")
-	all := strings.Join(pages(t, write(t, r, Options{})), "")
+	all := strings.Join(text(t, r, Options{}), "")
 	if want := "# <U+6F22>"; !strings.Contains(all, want) {
 		t.Errorf("the listing lacks %q", want)
 	}
@@ -205,7 +232,7 @@ func TestExtremes(t *testing.T) {
 		"fifty":             {demanding(50, opt), []string{"Q50"}},
 		"nothing is finite": {hollow(opt), []string{"–", "infinite", nothingFinite}},
 	} {
-		all := strings.Join(pages(t, write(t, c.r, Options{})), "\n")
+		all := strings.Join(text(t, c.r, Options{}), "\n")
 		for _, s := range c.want {
 			if !strings.Contains(all, s) {
 				t.Errorf("%s: the text lacks %q", name, s)
@@ -277,29 +304,4 @@ func hollow(opt reporttest.Options) *record.Record {
 	c.Settling.Curve[0].Change, c.Settling.Curve[1].Change = nan, 0
 	c.Model.Source.Available = inf
 	return r
-}
-
-// randomRecords is how many records TestRandomRecords writes: each is a whole
-// document of some 60 ms.
-const randomRecords = "20"
-
-func TestMain(m *testing.M) {
-	if err := flag.Set("rapid.checks", randomRecords); err != nil {
-		panic(err)
-	}
-	m.Run()
-}
-
-// Any plausible record can be written, and no text in it is too wide.
-func TestRandomRecords(t *testing.T) {
-	rapid.Check(t, func(t *rapid.T) {
-		n := reporttest.Random(t, 5)
-		opt := reporttest.Options{
-			Error: math.Pow(10, rapid.Float64Range(-12, -1).Draw(t, "error")), Loop: rapid.Float64Range(0, 0.99).Draw(t, "loop"),
-			Unsettled: rapid.Bool().Draw(t, "unsettled"), MaxPoints: 30,
-		}
-		r := reporttest.One("Random", n, opt)
-		paper := rapid.SampledFrom([]string{"a4", "letter"}).Draw(t, "paper")
-		write(t, r, Options{Paper: paper})
-	})
 }

@@ -16,7 +16,7 @@ import (
 // is broken none is left.
 func textOf(t *testing.T, r *record.Record) string {
 	t.Helper()
-	return squeezed(strings.Join(pages(t, write(t, r, Options{})), "\n"))
+	return squeezed(strings.Join(text(t, r, Options{}), "\n"))
 }
 
 // The proof of settling is on paper: the rule with its windows, the times of
@@ -40,7 +40,7 @@ func TestSettlingText(t *testing.T) {
 	if s := "From the stop"; strings.Contains(all, squeezed(s)) {
 		t.Errorf("a source that stays on has %q", s)
 	}
-	after := squeezed(afterContents(pages(t, write(t, reporttest.Feeder(), Options{}))))
+	after := squeezed(afterContents(text(t, reporttest.Feeder(), Options{})))
 	if n := strings.Count(after, squeezed("Proof of settling")); n != len(reporttest.Feeder().Cases) {
 		t.Errorf("%d proofs, want one a case", n)
 	}

@@ -76,7 +76,7 @@ func TestBounceTable(t *testing.T) {
 		n    reporttest.Network
 		want bool
 	}{{reporttest.Cascade(3), true}, {reporttest.FeederNetwork(), false}} {
-		text := strings.Join(pages(t, write(t, reporttest.One("One", c.n, opt), Options{})), "\n")
+		text := strings.Join(text(t, reporttest.One("One", c.n, opt), Options{}), "\n")
 		if got := strings.Contains(text, "Bounce table"); got != c.want {
 			t.Errorf("table %v, want %v", got, c.want)
 		}

@@ -12,7 +12,7 @@ import (
 )
 
 var (
-	streams = regexp.MustCompile(`(?s)<</Filter /FlateDecode\n/Length \d+\n>>\nstream\n(.*?)\nendstream`)
+	streams = regexp.MustCompile(`(?s)<</Filter /FlateDecode\s/Length \d+\s?>>\nstream\n(.*?)\nendstream`)
 	shown   = regexp.MustCompile(`\[(<[^\]]*>)\] TJ`)
 	pieces  = regexp.MustCompile(`<([0-9a-f]*)>`)
 )

@@ -9,7 +9,11 @@ import (
 )
 
 // Feeder is an FM broadcast feeder with a shorted stub, in four cases.
-func Feeder() *record.Record {
+func Feeder() *record.Record { return feeder() }
+
+var feeder = made(newFeeder)
+
+func newFeeder() *record.Record {
 	nominal := FeederNetwork()
 	r := newRecord("Hilltop FM feeder, main line and tuning stub", nominal)
 	variant := func(change func(*Network)) Network {

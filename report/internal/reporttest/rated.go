@@ -9,7 +9,11 @@ import (
 
 // Receiving is a receiving site in three cases, with lines of every origin, a
 // fit, ratings of every verdict, a transformer and a combination.
-func Receiving() *record.Record {
+func Receiving() *record.Record { return receiving() }
+
+var receiving = made(newReceiving)
+
+func newReceiving() *record.Record {
 	r := newRecord("Receiving site, aerial to rack", ReceivingNetwork())
 	opt := Options{Error: 3e-4, Loop: 0.4}
 	for _, name := range []string{"nominal", "wet", "no_trap"} {

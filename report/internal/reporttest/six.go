@@ -4,7 +4,11 @@ import "linewitness/sim/record"
 
 // SixCases is the feeder in two cases more: its flange open, and its stub cut too
 // long.
-func SixCases() *record.Record {
+func SixCases() *record.Record { return sixCases() }
+
+var sixCases = made(newSixCases)
+
+func newSixCases() *record.Record {
 	r := Feeder()
 	opt := Options{Error: 2e-4, Loop: 0.35}
 	open, long := FeederNetwork(), FeederNetwork()
