@@ -58,7 +58,10 @@ func (s *solved) waveFidelity(p probe) record.Fidelity {
 	}
 	late = late[len(late)-count*n:]
 	start := s.startOf(len(late), p.trace)
-	if d := departure(late, s.steadyWave(p.found, start, len(late))); !(d <= settledWave) {
+	switch d := departure(late, s.steadyWave(p.found, start, len(late))); {
+	case math.IsNaN(d):
+		return without(p.name, curve, "zero throughout")
+	case d > settledWave:
 		return without(p.name, curve, fmt.Sprintf("%.2g %% of it is not the steady wave yet: the run ends when the largest voltages are at rest", 100*d))
 	}
 	r, err := fsv.CurvesAbove(late, s.steadyWave(p.phasor, start, len(late)), waveFloor)
