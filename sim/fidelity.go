@@ -59,7 +59,7 @@ func (s *solved) waveFidelity(p probe) record.Fidelity {
 	late = late[len(late)-count*n:]
 	start := s.startOf(len(late), p.trace)
 	switch d := departure(late, s.steadyWave(p.found, start, len(late))); {
-	case math.IsNaN(d):
+	case math.IsNaN(d), math.IsInf(d, 1):
 		return without(p.name, curve, "zero throughout")
 	case d > settledWave:
 		return without(p.name, curve, fmt.Sprintf("%.2g %% of it is not the steady wave yet: the run ends when the largest voltages are at rest", 100*d))
@@ -74,7 +74,7 @@ func (s *solved) waveFidelity(p probe) record.Fidelity {
 const settledWave = 5e-3
 
 // departure is the root mean square of the difference of a waveform from another,
-// relative to that of the other; NaN where both are nothing.
+// relative to that of the other; NaN or infinite where the other is nothing.
 func departure(wave, from []float64) float64 {
 	d, all := 0.0, 0.0
 	for i, v := range from {
