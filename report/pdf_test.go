@@ -50,22 +50,6 @@ func write(t interface {
 	return file
 }
 
-// text lays a record out and returns the text of its pages, without the work of
-// making it a file to keep.
-func text(t *testing.T, r *record.Record, opt Options) []string {
-	t.Helper()
-	d, err := build(r, opt)
-	if err != nil {
-		t.Fatalf("build: %v", err)
-	}
-	var b bytes.Buffer
-	if err := d.b.Write(&b); err != nil {
-		t.Fatalf("write: %v", explain(err))
-	}
-	sound(t, d)
-	return pages(t, b.Bytes())
-}
-
 // sound fails on text that is wider than its room and on lone headings.
 func sound(t interface {
 	Helper()

@@ -9,6 +9,8 @@ import (
 	"strings"
 	"testing"
 	"unicode/utf16"
+
+	"linewitness/sim/record"
 )
 
 var (
@@ -36,6 +38,22 @@ func pages(t *testing.T, file []byte) []string {
 		}
 	}
 	return out
+}
+
+// text lays a record out and returns the text of its pages, without the work of
+// making it a file to keep.
+func text(t *testing.T, r *record.Record, opt Options) []string {
+	t.Helper()
+	d, err := build(r, opt)
+	if err != nil {
+		t.Fatalf("build: %v", err)
+	}
+	var b bytes.Buffer
+	if err := d.b.Write(&b); err != nil {
+		t.Fatalf("write: %v", explain(err))
+	}
+	sound(t, d)
+	return pages(t, b.Bytes())
 }
 
 // afterContents is the text without the cover and the contents.
