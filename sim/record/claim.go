@@ -26,7 +26,7 @@ type Claim struct {
 	Uncertainty       float64    // in Unit
 	Verdict           ClaimVerdict
 	Slips             []Slip // of a contradicted claim, most likely first
-	Finding           string // a sentence: what was found; empty for a confirmed claim
+	Finding           string // a sentence: what was found; of a confirmed claim only where a phase is right but for whole turns
 }
 
 // A Slip is a single mistake that would give the claimed figure.
