@@ -139,7 +139,7 @@ func (d *comparison) title() string {
 }
 
 func (d *comparison) properties() archive.Meta {
-	creator := "linewitness " + d.c.New.Version
+	creator := archive.ComparisonCreator + " " + d.c.New.Version
 	return archive.Meta{
 		Title: d.title() + ", comparison", Subject: "What changed from " + d.c.Old.File + " to " + d.c.New.File,
 		Creator: creator, Producer: creator, Version: d.c.New.Version, Lang: "en-GB",

@@ -161,12 +161,22 @@ func date(s string) time.Time {
 	return time.Time{}
 }
 
-// explain says how to mend a record that cannot be printed.
+// A SignError is a text of the design that the document's fonts cannot print. It
+// is a fault of the design file, not of the file to be written.
+type SignError struct {
+	Sign rune
+	Text string // that has it
+}
+
+func (e *SignError) Error() string {
+	return fmt.Errorf("report: the document's fonts have no sign for %q (%U), in %q", e.Sign, e.Sign, e.Text).Error()
+}
+
+// explain says why a record cannot be printed.
 func explain(err error) error {
 	var glyph *canvas.GlyphError
 	if errors.As(err, &glyph) {
-		return fmt.Errorf("report: the document's fonts have no sign for %q (%U), in %q; write it with Latin, Greek or Cyrillic letters in the design file",
-			glyph.Rune, glyph.Rune, glyph.Text)
+		return &SignError{Sign: glyph.Rune, Text: glyph.Text}
 	}
 	if err != nil {
 		return fmt.Errorf("report: %w", err)

@@ -2,6 +2,7 @@ package report
 
 import (
 	"bytes"
+	"errors"
 	"fmt"
 	"math"
 	"regexp"
@@ -177,6 +178,10 @@ func TestMissingGlyph(t *testing.T) {
 	err := WritePDF(new(bytes.Buffer), r, Options{})
 	if err == nil || !strings.Contains(err.Error(), `no sign for '漢' (U+6F22), in "漢字"`) {
 		t.Errorf("error %v", err)
+	}
+	var sign *SignError
+	if !errors.As(err, &sign) || sign.Sign != '漢' || sign.Text != "漢字" {
+		t.Errorf("error %#v", err)
 	}
 	r.Design.Title = "Title"
 	r.Design.Source = []byte("# 漢\tΩ\xff\n")

@@ -13,6 +13,10 @@ const (
 	program        = "linewitness"
 )
 
+// ComparisonCreator begins the Creator of the page of a comparison: a document of
+// this program, but no record.
+const ComparisonCreator = program + " compare"
+
 // manifest is the attached list of the attached files. It marks a document as a
 // record of this program.
 type manifest struct {

@@ -96,6 +96,8 @@ func (r *reader) record() (*File, error) {
 func (r *reader) manifest(creator string) (*manifest, error) {
 	s := r.embedded[manifestName]
 	switch {
+	case s == nil && strings.HasPrefix(creator, ComparisonCreator+" "):
+		return nil, because(ErrNotRecord, "it is the page of a comparison, which holds no design")
 	case s == nil && strings.HasPrefix(creator, program+" "):
 		return nil, because(ErrMissing, "%q", manifestName)
 	case s == nil:

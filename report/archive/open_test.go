@@ -122,6 +122,11 @@ func anonymous(_ testing.TB, f *syntax.File, catalog syntax.Dict) {
 	f.Trailer["Info"] = f.Add(syntax.Dict{"Creator": syntax.String("writer")})
 }
 
+func compared(_ testing.TB, f *syntax.File, catalog syntax.Dict) {
+	delete(catalog, "Names")
+	f.Trailer["Info"] = f.Add(syntax.Dict{"Creator": syntax.String(ComparisonCreator + " v1")})
+}
+
 // Each thing that can be wrong is called by its name.
 func TestOpenRefuses(t *testing.T) {
 	const manifestOf = `{"program": "linewitness", "format": 1, "files": [`
@@ -149,6 +154,7 @@ func TestOpenRefuses(t *testing.T) {
 		{"manifest missing", renamed(manifestName), ErrMissing, manifestName},
 		{"no names", func(_ testing.TB, _ *syntax.File, c syntax.Dict) { delete(c, "Names") }, ErrMissing, manifestName},
 		{"other program", anonymous, ErrNotRecord, "no manifest.json is attached"},
+		{"comparison", compared, ErrNotRecord, "the page of a comparison"},
 		{"other manifest", replaced(manifestName, `{"program": "packer", "format": 1}`, true), ErrNotRecord, "another program"},
 		{"no JSON", replaced(manifestName, `[`, true), ErrNotRecord, "unexpected end"},
 		{"newer", replaced(manifestName, `{"program": "linewitness", "format": 2}`, true), ErrNewer, "format 2, this program reads up to 1"},

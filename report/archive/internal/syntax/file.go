@@ -99,7 +99,7 @@ func (f *File) indirect(r Ref, at int) (Value, error) {
 	n, ok := l.integer()
 	g, ok2 := l.integer()
 	if !ok || !ok2 || !l.keyword("obj") || g != 0 || r != 0 && Ref(n) != r {
-		return nil, damaged("it is not at its offset")
+		return nil, damaged("no such object at offset %d", at)
 	}
 	v, err := l.value()
 	if err != nil {
