@@ -6,6 +6,7 @@ import (
 	"errors"
 	"io"
 	"os"
+	"path/filepath"
 
 	"github.com/spf13/cobra"
 
@@ -117,9 +118,18 @@ func (opt *compareOptions) check(paths []string) error {
 	if paths[0] == standardInput && paths[1] == standardInput {
 		return usageError("compare: only one of the two can be standard input", "save one of them to a file")
 	}
+	if opt.output == "" {
+		return nil
+	}
+	if _, err := os.Stat(filepath.Dir(opt.output)); err != nil {
+		return notWritten(opt.output, err) // before the work, not after it
+	}
 	out, err := os.Stat(opt.output)
 	if err != nil {
 		return nil
+	}
+	if out.IsDir() {
+		return fileError("write "+opt.output+": is a directory", "name the file in it: -o FILE.pdf")
 	}
 	for _, path := range paths {
 		if in, err := os.Stat(path); err == nil && os.SameFile(in, out) {
@@ -156,7 +166,7 @@ func (a *app) deliver(ctx context.Context, c *record.Comparison, opt *compareOpt
 			return err
 		}
 		if err != nil {
-			return fileError(err.Error(), "")
+			return documentError("", err)
 		}
 		files = []product{{opt.output, page}}
 	}

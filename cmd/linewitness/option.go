@@ -51,6 +51,9 @@ func (c *choices) Set(s string) error {
 		return nil
 	}
 	for word := range strings.SplitSeq(s, ",") {
+		if word == noChoice {
+			return &choiceError{s, append(slices.Clip(c.of), noChoice+" alone")}
+		}
 		if !slices.Contains(c.of, word) {
 			return &choiceError{word, append(slices.Clip(c.of), noChoice)}
 		}

@@ -86,7 +86,7 @@ func writeProducts(ctx context.Context, files []product) error {
 		}
 		name, err := writeTemporary(f)
 		if err != nil {
-			return fileError(err.Error(), "")
+			return notWritten(f.path, err)
 		}
 		temporary[i] = name
 	}
@@ -95,11 +95,27 @@ func writeProducts(ctx context.Context, files []product) error {
 	}
 	for i, f := range files {
 		if err := os.Rename(temporary[i], f.path); err != nil {
-			return fileError(err.Error(), "")
+			return notWritten(f.path, err)
 		}
 		temporary[i] = ""
 	}
 	return nil
+}
+
+// notWritten names the file that could not be written by its own name: the
+// temporary one in err says nothing to the user.
+func notWritten(path string, err error) error {
+	var (
+		at   *os.PathError
+		link *os.LinkError
+	)
+	switch {
+	case errors.As(err, &at):
+		err = at.Err
+	case errors.As(err, &link):
+		err = link.Err
+	}
+	return fileError(fmt.Sprintf("write %s: %s", path, err), "")
 }
 
 // wrote says which files were written, unless what is on stdout is JSON.

@@ -5,6 +5,7 @@ import (
 	"context"
 	"errors"
 	"path/filepath"
+	"strings"
 
 	"linewitness/report/archive"
 	"linewitness/report/result"
@@ -28,7 +29,7 @@ const (
 )
 
 // readSide reads a design file, a result or a record: what it is, the first bytes
-// tell.
+// tell. A file that is named as a PDF is one, or damaged.
 func (a *app) readSide(ctx context.Context, path string) (*side, error) {
 	text, err := await(ctx, func() ([]byte, error) { return a.readUpTo(path, max(archive.MaxSize, result.MaxBytes)+1) })
 	if errors.Is(err, context.Canceled) {
@@ -39,7 +40,7 @@ func (a *app) readSide(ctx context.Context, path string) (*side, error) {
 	}
 	s := &side{side: record.Side{File: filepath.Base(displayName(path))}}
 	switch {
-	case bytes.HasPrefix(text, []byte("%PDF-")):
+	case bytes.HasPrefix(text, pdfMark), strings.EqualFold(filepath.Ext(path), ".pdf"):
 		s.side.Kind = recordKind
 		return s, a.readRecord(ctx, path, text, s)
 	case result.Recognised(text):

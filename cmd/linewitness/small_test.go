@@ -1,6 +1,7 @@
 package main
 
 import (
+	"errors"
 	"math"
 	"math/cmplx"
 	"runtime/debug"
@@ -56,7 +57,7 @@ func TestChoices(t *testing.T) {
 		{"csv,pdf", "csv,pdf", ""},
 		{"pdf,pdf", "pdf", ""},
 		{"none", "none", ""},
-		{"pdf,none", "", `unknown value "none"`},
+		{"pdf,none", "", `unknown value "pdf,none"`},
 		{"", "", `unknown value ""`},
 		{"pdf,", "", `unknown value ""`},
 		{"PDF", "", `unknown value "PDF"`},
@@ -69,6 +70,18 @@ func TestChoices(t *testing.T) {
 		case tt.err != "" && (err == nil || err.Error() != tt.err):
 			t.Errorf("Set(%q) gives error %v, want %s", tt.in, err, tt.err)
 		}
+	}
+}
+
+// What was given is never its own remedy.
+func TestChoicesNone(t *testing.T) {
+	c := choices{of: []string{"pdf", "json"}}
+	var got *choiceError
+	if err := c.Set("none,pdf"); !errors.As(err, &got) {
+		t.Fatalf("error %v", err)
+	}
+	if want := "the values are pdf, json, none alone"; got.hint() != want {
+		t.Errorf("hint %q, want %q", got.hint(), want)
 	}
 }
 

@@ -1,6 +1,7 @@
 package main
 
 import (
+	"bytes"
 	"context"
 	"errors"
 	"io"
@@ -8,6 +9,7 @@ import (
 	"path/filepath"
 	"strings"
 
+	"linewitness/report/result"
 	"linewitness/sim/design"
 )
 
@@ -28,7 +30,25 @@ func (a *app) load(ctx context.Context, path string) (*design.File, error) {
 	if err != nil {
 		return nil, fileError(err.Error(), "")
 	}
+	if err := notDesign(displayName(path), source); err != nil {
+		return nil, err
+	}
 	return a.loadFrom(ctx, displayName(path), source, besides(path))
+}
+
+// pdfMark is how every PDF file begins.
+var pdfMark = []byte("%PDF-")
+
+// notDesign refuses what verify wrote where a design file is due. What a reader of
+// designs would say of it, key by key, is of no help.
+func notDesign(name string, source []byte) error {
+	switch {
+	case bytes.HasPrefix(source, pdfMark):
+		return usageError(name+": a PDF file, not a design file", `"linewitness recheck" solves the design in a record again`)
+	case result.Recognised(source):
+		return usageError(name+": a result, not a design file", "give the design file that it was made from")
+	}
+	return nil
 }
 
 // loadFrom checks a design file that is in memory; open gives the files that it

@@ -158,7 +158,7 @@ func (a *app) verifyOne(ctx context.Context, j job, designs []string, opt *verif
 		return statusVerified, err
 	}
 	if err != nil {
-		return statusVerified, fileError(j.file.Name+": "+err.Error(), "")
+		return statusVerified, documentError(j.file.Name+": ", err)
 	}
 	bar.stop()
 	status := statusOf(r.Verdict)
@@ -186,6 +186,17 @@ func verifyError(name string, err error) error {
 		return usageError(name+": "+err.Error(), `"linewitness plan" shows what it takes; --grids 1 takes less; --no-bound runs it all the same`)
 	}
 	return usageError(name+": "+err.Error(), "")
+}
+
+// documentError says why a document could not be made: as a rule the design file
+// has a text that cannot be printed.
+func documentError(where string, err error) error {
+	var sign *report.SignError
+	if errors.As(err, &sign) {
+		return usageError(fmt.Sprintf("%sthe fonts of the PDF have no sign for %q (%U), in %q", where, sign.Sign, sign.Sign, sign.Text),
+			"write it with Latin, Greek or Cyrillic letters, in the design file or in its name")
+	}
+	return fileError(where+err.Error(), "")
 }
 
 // tell prints the result.
