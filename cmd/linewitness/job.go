@@ -6,6 +6,7 @@ import (
 	"path/filepath"
 	"strings"
 
+	"linewitness/report"
 	"linewitness/sim/design"
 )
 
@@ -55,6 +56,20 @@ func (opt *verifyOptions) spare(j job, designs []string) error {
 				}
 			}
 		}
+	}
+	return nil
+}
+
+// printable refuses a design whose first page could not be printed, before the
+// work starts. Of the other texts the writer of the PDF says so.
+func (opt *verifyOptions) printable(j job) error {
+	if !opt.formats.has(formatPDF) {
+		return nil
+	}
+	r := j.file.Nominal.Record
+	err := report.Printable(filepath.Base(j.file.Name), r.Title, r.Number, r.Revision, r.Purpose, r.PreparedBy, r.CheckedBy, r.ApprovedBy)
+	if err != nil {
+		return documentError(j.file.Name+": ", err)
 	}
 	return nil
 }

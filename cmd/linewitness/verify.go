@@ -135,6 +135,9 @@ func (a *app) verifyAll(ctx context.Context, paths []string, opt *verifyOptions)
 
 // verifyOne verifies one design and returns the status of its verdict.
 func (a *app) verifyOne(ctx context.Context, j job, designs []string, opt *verifyOptions) (int, error) {
+	if err := opt.printable(j); err != nil {
+		return statusVerified, err
+	}
 	how := sim.Options{NoBound: opt.noBound, Grids: gridCount(opt.grids), Version: version()}
 	if j.file.Nominal.Record.Date == "" {
 		var err error
