@@ -66,9 +66,9 @@ type edge struct {
 
 func newTree(net *network.Network) *tree {
 	t := &tree{next: make([][]edge, len(net.Junctions))}
-	sets := newSets(len(net.Junctions))
+	sets := network.NewSets(len(net.Junctions))
 	join := func(a, b int, d float64, section int) bool {
-		if !sets.join(a, b) {
+		if !sets.Join(a, b) {
 			return false
 		}
 		t.next[a] = append(t.next[a], edge{b, d, section})
@@ -94,32 +94,6 @@ func newTree(net *network.Network) *tree {
 		}
 	}
 	return t
-}
-
-// sets are disjoint sets of junctions, each known by a member.
-type sets []int
-
-func newSets(n int) sets {
-	s := make(sets, n)
-	for j := range s {
-		s[j] = j
-	}
-	return s
-}
-
-func (s sets) root(j int) int {
-	for s[j] != j {
-		s[j] = s[s[j]]
-		j = s[j]
-	}
-	return j
-}
-
-// join puts the sets of a and b together; it reports whether they were two.
-func (s sets) join(a, b int) bool {
-	a, b = s.root(a), s.root(b)
-	s[a] = b
-	return a != b
 }
 
 // farthest is the junction farthest from start and its delay.

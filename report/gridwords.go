@@ -143,7 +143,7 @@ func further(n int) string {
 func validationNote(v *record.Convergence, columns bool) string {
 	s := ""
 	if columns {
-		s = "E: finest grid less closed form. u: its uncertainty, the sum of those of the grid (the larger of the index and of what the dispersion formulas predict), of what is left of the settling, of the rational form of dispersive lines, and of rounding."
+		s = "E: finest grid less closed form. u: its uncertainty, the sum of those of the grid (the larger of the index and of 1.25 times what the dispersion formulas predict), of what is left of the settling, of the rational form of dispersive lines, and of rounding."
 	}
 	var only []string
 	for i := range v.Studies {

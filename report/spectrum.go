@@ -55,7 +55,7 @@ func spectrumPanel(c *record.Case) *figure.Panel {
 	s := c.Spectrum
 	f := c.Model.Frequency
 	last := min(s.Frequency[len(s.Frequency)-1], (harmonics+0.4)*f)
-	p := figure.New("Spectrum", "at "+s.Where+", dB to the fundamental",
+	p := figure.New("Spectrum, dB", "at "+s.Where,
 		figure.Axis{Label: "frequency", Unit: "Hz", Max: last}, figure.Axis{Min: spectrumFloor, Max: spectrumHead})
 	p.Marks(harmonicMarks(f, last), ink.MarkLine)
 	xs, ys := span{0, last}.in(s.Frequency, levels(s, at))
@@ -68,7 +68,8 @@ func spectrumPanel(c *record.Case) *figure.Panel {
 			p.Line([]float64{xs[i], xs[i]}, []float64{spectrumFloor, ys[i]}, ink.TraceLine)
 		}
 	}
-	p.Spot(s.Frequency[at], 0, format.SI(s.Amplitude[at], "V")+" at "+format.SI(s.Frequency[at], "Hz"))
+	// The caption says the frequency: a label with it would cross the harmonics.
+	p.Spot(s.Frequency[at], 0, format.SI(s.Amplitude[at], "V"))
 	return p
 }
 

@@ -21,8 +21,9 @@ type studied struct {
 // leaves may be: as of package agree.
 const residualSlack = 3
 
-// trusted is the part of the settling tolerance below which the estimate is not
-// believed: a slow tail can hide behind faster modes.
+// trusted is the part of the settling tolerance that is added to the estimate: below
+// it a slow tail can hide behind faster modes. Without it one random network in some
+// hundreds passed its uncertainty, by 2 %.
 const trusted = 0.001
 
 // leftover is how far the settling run may be from steady state, relative to the
@@ -51,8 +52,9 @@ const settlingFloor = 0.1
 // uncertainty that grid, settling, rational forms and rounding give it.
 //
 // The part of the grid is the larger of the index and of what the dispersion
-// formulas predict. That is exact for the phasors at the points of the grid, but a
-// crest is taken through three of them: it gets the factor of safety of an index.
+// formulas predict, with the factor of safety of an index. The prediction was never
+// passed at the points of a grid (see package agree); the factor is for crests,
+// which lie between them.
 func (s *solved) study(f studied) record.Study {
 	out := record.Study{ID: f.id, Quantity: f.quantity, Subject: f.subject, Unit: f.scale.unit, Phasor: math.NaN()}
 	if f.figure.pick != nil {

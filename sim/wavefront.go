@@ -61,10 +61,10 @@ type cluster struct {
 
 // clusters are the sets of junctions that have parts.
 func (f *frontView) clusters() []*cluster {
-	sets := newMerger(len(f.net.Junctions))
+	sets := network.NewSets(len(f.net.Junctions))
 	for _, b := range f.net.Branches {
 		if !b.Open && b.B != network.Ground {
-			sets.merge(b.A, b.B)
+			sets.Join(b.A, b.B)
 		}
 	}
 	of := map[int]*cluster{}
@@ -73,7 +73,7 @@ func (f *frontView) clusters() []*cluster {
 		if b.Open {
 			continue
 		}
-		root := sets.root(b.A)
+		root := sets.Root(b.A)
 		if of[root] == nil {
 			of[root] = &cluster{}
 			all = append(all, of[root])
@@ -81,7 +81,7 @@ func (f *frontView) clusters() []*cluster {
 		of[root].branches = append(of[root].branches, b)
 	}
 	for j := range f.net.Junctions {
-		if c := of[sets.root(j)]; c != nil {
+		if c := of[sets.Root(j)]; c != nil {
 			c.junctions = append(c.junctions, j)
 		}
 	}
@@ -123,29 +123,29 @@ func (c *cluster) conductance(from int) float64 {
 			index[j] = len(index)
 		}
 	}
-	sets := newMerger(len(index))
+	sets := network.NewSets(len(index))
 	for _, b := range c.branches {
 		if b.Ratio == 0 && math.IsInf(jump(b.Series), 1) {
-			sets.merge(index[b.A], index[b.B])
+			sets.Join(index[b.A], index[b.B])
 		}
 	}
-	if sets.root(0) == sets.root(1) {
+	if sets.Root(0) == sets.Root(1) {
 		return math.Inf(1)
 	}
 	n := len(index)
 	g := make([]float64, n*n)
 	plus := func(a, b int, y float64) { g[a*n+b] += y; g[b*n+a] += y }
 	for _, b := range c.branches {
-		if y, p, q := jump(b.Series), sets.root(index[b.A]), sets.root(index[b.B]); b.Ratio == 0 && p != q {
+		if y, p, q := jump(b.Series), sets.Root(index[b.A]), sets.Root(index[b.B]); b.Ratio == 0 && p != q {
 			plus(p, q, y)
 		}
 	}
 	for r := range n {
-		if r != sets.root(0) && r != sets.root(1) {
+		if r != sets.Root(0) && r != sets.Root(1) {
 			dissolve(g, n, r)
 		}
 	}
-	return g[sets.root(1)*n+sets.root(0)]
+	return g[sets.Root(1)*n+sets.Root(0)]
 }
 
 // dissolve replaces node r of a network of n conductances g[a n + b] by the mesh
@@ -222,24 +222,3 @@ func (f *frontView) launch() float64 {
 	}
 	return f.source / (f.source + other)
 }
-
-// A merger keeps disjoint sets of indices, each known by a member.
-type merger []int
-
-func newMerger(n int) merger {
-	m := make(merger, n)
-	for i := range m {
-		m[i] = i
-	}
-	return m
-}
-
-func (m merger) root(i int) int {
-	for m[i] != i {
-		m[i] = m[m[i]]
-		i = m[i]
-	}
-	return i
-}
-
-func (m merger) merge(a, b int) { m[m.root(a)] = m.root(b) }

@@ -77,12 +77,3 @@ func (pn *Panel) Trace(xs, ys []float64, cycles float64) {
 	}
 	pn.Line(xs, ys, ink.TraceLine)
 }
-
-// Every returns every k-th point so that about n are left.
-func Every(xs, ys []float64, n int) (x, y []float64) {
-	step := max(1, min(len(xs), len(ys))/max(n, 1))
-	for i := step / 2; i < min(len(xs), len(ys)); i += step {
-		x, y = append(x, xs[i]), append(y, ys[i])
-	}
-	return x, y
-}

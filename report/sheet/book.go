@@ -129,9 +129,6 @@ func (b *Book) Block(h float64, paint func(draw.Canvas)) {
 	b.y -= h
 }
 
-// Fail records an error, to be returned by Write.
-func (b *Book) Fail(err error) { b.fail(err) }
-
 func (b *Book) fail(err error) {
 	if b.err == nil && err != nil {
 		b.err = err

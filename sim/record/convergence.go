@@ -61,7 +61,7 @@ type Study struct {
 	// that only the time domain has, and then Explained is true.
 	Phasor      float64
 	Error       float64 // finest grid less closed form
-	Grid        float64 // the larger of GCI and what the dispersion formulas predict
+	Grid        float64 // the larger of GCI and 1.25 times what the dispersion formulas predict
 	Settling    float64 // what is left of the settling
 	Form        float64 // what the rational forms of dispersive lines make of it
 	Rounding    float64

@@ -26,9 +26,6 @@ func (f *File) Each(visit func(Ref, Value) error) error {
 	return nil
 }
 
-// Set puts v in the place of an indirect object.
-func (f *File) Set(r Ref, v Value) { f.objects[r] = v }
-
 // Bytes writes the file as version 1.7 with one cross-reference table: the
 // objects that the catalog and the information dictionary lead to, numbered in
 // the order in which they are first referred to, level by level. The bytes depend
